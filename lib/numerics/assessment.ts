@@ -1,0 +1,86 @@
+/** The shapes that an assessment is computed from and answered in. Grids run from the finest to the coarsest. */
+
+export type Norm = 'L1' | 'L2' | 'Linf';
+export type SeriesNorm = Norm | 'value';
+export type Outcome = 'pass' | 'fail' | 'inconclusive' | 'meets-target' | 'misses-target';
+
+export const reasonCodes = [
+  'exact', 'exact-not-declared', 'not-exact', 'too-few-grids', 'above-formal', 'errors-rise', 'departing', 'in-band',
+  'one-pair-only', 'limit-below-formal', 'climbing', 'below-formal', 'left-band', 'scatter', 'within-uncertainty',
+  'order-out-of-range', 'sampling-not-stated', 'not-similar', 'nothing-counts', 'no-target', 'not-monotone',
+  'order-off-formal', 'order-not-observed', 'within-target', 'above-target',
+] as const;
+export type ReasonCode = (typeof reasonCodes)[number];
+
+export interface Position { x: number; y?: number; z?: number }
+
+export interface ErrorSeries {
+  field: string;
+  norm: SeriesNorm;
+  /** `exactNorm` is the same norm of the exact field, null where unknown; `knownError` is δ in the unit of the error. */
+  grids: { label: string; h: number; error: number; knownError: number; exactNorm: number | null; at: Position | null }[];
+  formalOrder: number | null;
+  /** A higher order derived and declared; replaces the formal order in every step. */
+  derivedOrder: number | null;
+  /** Null takes the default: max(0.1, 0.05·pf), for L∞ max(0.2, 0.1·pf). */
+  tolerance: number | null;
+  counts: boolean;
+  expectExact: boolean;
+  exactLimit: number | null;
+  /** The larger of the exact field's L∞ and a stated reference; null where neither is known (read as 1). */
+  scale: number | null;
+  precision: 'double' | 'single';
+  minimumGrids: number;
+  /** False where a formal order of 3 or more is claimed and nobody said where values live. */
+  samplingStated: boolean;
+}
+
+export interface QuantitySeries {
+  name: string;
+  unit: string | null;
+  /** `resolution` is one unit of the last digit stated, null where it is to be read off the value. */
+  grids: { label: string; h: number; value: number; resolution: number | null }[];
+  formalOrder: number | null;
+  /** Largest acceptable GCI as a fraction. */
+  target: number | null;
+  minimumGrids: number;
+}
+
+export interface FieldGrid {
+  label: string; h: number; error: number; relativeError: number | null; knownError: number;
+  used: boolean; unusedReason?: 'round-off' | 'known-error'; at?: Position;
+}
+export interface PairOrder { coarse: string; fine: string; ratio: number; order: number | null; uncertainty: number | null }
+export interface OrderFit { order: number; low: number | null; high: number | null }
+
+export interface FieldAssessment {
+  field: string; norm: SeriesNorm; region: 'all';
+  formalOrder: number | null; derivedOrder: number | null; tolerance: number | null; counts: boolean;
+  grids: FieldGrid[]; orders: PairOrder[]; fit: OrderFit | null;
+  /** Null where there is no formal order to judge by. */
+  outcome: Outcome | null; reasons: ReasonCode[];
+}
+
+export type Convergence = 'monotone' | 'oscillatory' | 'divergent' | 'oscillatory-divergent' | 'unchanged';
+/** `grids` are labels, finest first. */
+export interface Triple { grids: string[]; order: number | null; convergence: Convergence }
+
+export interface QuantityAssessment {
+  name: string; unit: string | null;
+  values: { label: string; h: number; value: number }[];
+  convergence: Convergence | null;
+  orderObserved: number | null; orderRange: [number, number] | null; formulaValue: number | null; orderUsed: number | null;
+  extrapolated: number | null; relativeChange: number | null; extrapolatedError: number | null;
+  safetyFactor: number | null; gci: number | null; gciAbsolute: number | null; gciCoarse: number | null; asymptoticRatio: number | null;
+  /** Half the range of the three values, given instead of a GCI where the order is not positive or the values oscillate. */
+  halfRange: number | null;
+  procedure: 'three-grid'; branch: 'observed' | 'formal-two-grids' | 'none';
+  triples: Triple[];
+  outcome: Outcome | null; reasons: ReasonCode[];
+}
+
+export interface SeriesAssessment {
+  outcome: Outcome | null; reasons: ReasonCode[];
+  fields: FieldAssessment[]; quantities: QuantityAssessment[];
+  numericsVersion: string;
+}
