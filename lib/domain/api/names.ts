@@ -1,0 +1,18 @@
+import { z } from 'zod';
+
+export const nameSchema = z.string().trim().min(1).max(120).meta({ description: 'A name, 1 to 120 characters.' });
+export const slugSchema = z
+  .string()
+  .regex(/^[a-z0-9](?:[a-z0-9-]{0,58}[a-z0-9])?$/, 'Expected lower-case letters, digits and hyphens, such as heat-2d.')
+  .meta({ description: 'Lower-case letters, digits and hyphens; unique in the organisation.' });
+export const labelSchema = z
+  .string()
+  .regex(/^[A-Za-z0-9][A-Za-z0-9._-]{0,39}$/, 'Expected letters, digits, point, underscore or hyphen, at most 40, such as n64.')
+  .meta({ description: 'A label in paths: letters, digits, point, underscore, hyphen.' });
+export const timestampSchema = z.iso.datetime().meta({ description: 'ISO 8601, UTC.' });
+
+/** What a slug is made from where none is given. */
+export function slugFrom(name: string): string {
+  const plain = name.normalize('NFKD').replace(/[\u0300-\u036f]/g, '').toLowerCase();
+  return plain.replace(/[^a-z0-9]+/g, '-').replace(/^-+|-+$/g, '').slice(0, 50).replace(/-+$/, '') || 'unnamed';
+}

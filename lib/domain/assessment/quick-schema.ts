@@ -1,0 +1,30 @@
+import { z } from 'zod';
+import { contract } from '../api/contract';
+import { labelSchema } from '../api/names';
+import { cellsPerDirectionSchema, normNameSchema } from '../cases/definition';
+import { dimensionSchema } from '../problems/schema';
+import { assessmentSchema } from './schema';
+
+const positive = z.number().positive();
+const perNorm = z.partialRecord(normNameSchema, z.number().nonnegative());
+const numberOrPerNorm = z.union([positive, z.partialRecord(normNameSchema, positive)]);
+
+export const quickCheckSchema = z.strictObject({
+  dimension: dimensionSchema.default(1),
+  grids: z.array(z.strictObject({
+    label: labelSchema.optional(), h: positive.optional(), cells: positive.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
+    value: z.number().optional(), resolution: positive.optional(), errors: perNorm.optional(), iterativeError: perNorm.optional(),
+  })).min(2).max(50),
+  formalOrder: numberOrPerNorm.optional(),
+  tolerance: numberOrPerNorm.optional(),
+  minimumGrids: z.number().int().min(3).max(20).optional(),
+  procedure: z.enum(['three-grid', 'guarded-order', 'least-squares', 'correction-factor']).optional(),
+  expectExact: z.boolean().optional(), exactLimit: positive.optional(), reference: positive.optional(), derivedOrder: positive.optional(),
+  knownValue: z.number().optional(), target: positive.optional(),
+}).meta({ description: 'One quantity (every grid has a value) or one field (every grid has errors).' });
+export type QuickCheckInput = z.infer<typeof quickCheckSchema>;
+
+export const assessContract = contract({
+  method: 'POST', path: '/assess', summary: 'Assess a small table; nothing is kept', access: 'public', status: 200,
+  body: quickCheckSchema, response: assessmentSchema,
+});

@@ -1,0 +1,43 @@
+import { z } from 'zod';
+import { reasonCodes } from '@/lib/numerics/assessment';
+
+const nullableNumber = z.number().nullable();
+const pointSchema = z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() });
+export const outcomeSchema = z.enum(['pass', 'fail', 'inconclusive', 'meets-target', 'misses-target']);
+export const reasonCodeSchema = z.enum(reasonCodes);
+const convergenceSchema = z.enum(['monotone', 'oscillatory', 'divergent', 'oscillatory-divergent', 'unchanged']);
+
+const fieldGridSchema = z.strictObject({
+  label: z.string(), h: z.number(), error: z.number(), relativeError: nullableNumber, knownError: z.number(), used: z.boolean(),
+  unusedReason: z.enum(['round-off', 'known-error']).optional(), at: pointSchema.optional(),
+});
+const fieldAssessmentSchema = z.strictObject({
+  field: z.string(), norm: z.enum(['L1', 'L2', 'Linf', 'value']), region: z.literal('all'),
+  formalOrder: nullableNumber, derivedOrder: nullableNumber, tolerance: nullableNumber, counts: z.boolean(),
+  grids: z.array(fieldGridSchema),
+  orders: z.array(z.strictObject({ coarse: z.string(), fine: z.string(), ratio: z.number(), order: nullableNumber, uncertainty: nullableNumber })),
+  fit: z.strictObject({ order: z.number(), low: nullableNumber, high: nullableNumber }).nullable(),
+  outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
+});
+const quantityAssessmentSchema = z.strictObject({
+  name: z.string(), unit: z.string().nullable(),
+  values: z.array(z.strictObject({ label: z.string(), h: z.number(), value: z.number() })),
+  convergence: convergenceSchema.nullable(),
+  orderObserved: nullableNumber, orderRange: z.tuple([z.number(), z.number()]).nullable(), formulaValue: nullableNumber, orderUsed: nullableNumber,
+  extrapolated: nullableNumber, relativeChange: nullableNumber, extrapolatedError: nullableNumber,
+  safetyFactor: nullableNumber, gci: nullableNumber, gciAbsolute: nullableNumber, gciCoarse: nullableNumber, asymptoticRatio: nullableNumber,
+  halfRange: nullableNumber,
+  procedure: z.literal('three-grid'), branch: z.enum(['observed', 'formal-two-grids', 'none']),
+  triples: z.array(z.strictObject({ grids: z.array(z.string()), order: nullableNumber, convergence: convergenceSchema })),
+  outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
+});
+
+/** What was computed for one revision of a study; it never changes. */
+export const assessmentSchema = z.strictObject({
+  outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
+  fields: z.array(fieldAssessmentSchema), quantities: z.array(quantityAssessmentSchema),
+  patterns: z.array(z.strictObject({ code: z.string() })).meta({ description: 'Hints, never an outcome; empty until pattern hints are available.' }),
+  inputs: z.array(z.strictObject({ label: z.string(), sha256: z.string(), bytes: z.number(), rows: z.number() })),
+  inputsSha256: z.string(), numericsVersion: z.string(),
+});
+export type Assessment = z.infer<typeof assessmentSchema>;

@@ -1,0 +1,72 @@
+import { z } from 'zod';
+import { contract } from '../api/contract';
+import { timestampSchema } from '../api/names';
+import { columnMappingSchema } from '../columns/column-mapping';
+
+export const rejectionReasonSchema = z.strictObject({
+  code: z.string(), count: z.number().int(), line: z.number().int().nullable(), column: z.number().int().nullable(),
+  found: z.string(), expected: z.string(),
+});
+
+export const uploadStateSchema = z.enum(['receiving', 'stored', 'needs-columns', 'reading', 'read', 'rejected']);
+export type UploadState = z.infer<typeof uploadStateSchema>;
+
+const filenameSchema = z.string().min(1).max(255);
+const sha256Schema = z.string().regex(/^[0-9a-f]{64}$/, 'Expected 64 hexadecimal digits.');
+
+export const uploadSchema = z.strictObject({
+  id: z.string(), study: z.string(), grid: z.string(), filename: z.string(), bytes: z.number().int(), sha256: z.string().nullable(),
+  state: uploadStateSchema, partSize: z.number().int().nullable(),
+  parts: z.array(z.strictObject({ number: z.number().int(), etag: z.string(), bytes: z.number().int() })).meta({ description: 'Parts stored so far.' }),
+  rowsRead: z.number().int().nullable(), reasons: z.array(rejectionReasonSchema), createdAt: timestampSchema,
+});
+export type Upload = z.infer<typeof uploadSchema>;
+
+export const startUploadSchema = z.strictObject({ filename: filenameSchema, bytes: z.number().int().min(0).max(50e9), sha256: sha256Schema.optional() });
+export type StartUploadInput = z.infer<typeof startUploadSchema>;
+const startedUploadSchema = z.strictObject({ upload: z.string(), partSize: z.number().int() });
+
+export const signPartsSchema = z.strictObject({ numbers: z.array(z.number().int().min(1).max(1000)).min(1).max(100) });
+export type SignPartsInput = z.infer<typeof signPartsSchema>;
+const signedPartsSchema = z.strictObject({
+  parts: z.array(z.strictObject({ number: z.number().int(), url: z.string(), expiresAt: timestampSchema })),
+});
+export const completeUploadSchema = z.strictObject({ parts: z.array(z.strictObject({ number: z.number().int(), etag: z.string() })).min(1).max(1000) });
+export type CompleteUploadInput = z.infer<typeof completeUploadSchema>;
+
+export const previewSchema = z.strictObject({
+  format: z.string(), dialect: z.string().meta({ description: 'What was recognised, in words.' }),
+  header: z.array(z.string()), firstRows: z.array(z.array(z.string())),
+  mapping: columnMappingSchema.nullable().meta({ description: 'The mapping in force for the case, if any.' }),
+  proposal: columnMappingSchema.partial().meta({ description: 'What matching names propose.' }),
+  missing: z.array(z.string()).meta({ description: 'Coordinates, weight and fields that no column answers to.' }),
+});
+export type UploadPreview = z.infer<typeof previewSchema>;
+
+export const putDataQuerySchema = z.strictObject({ filename: filenameSchema.optional() });
+
+export const putDataContract = contract({
+  method: 'PUT', path: '/studies/{id}/grids/{label}/data', summary: 'Upload one file in one call', access: 'organisation', status: 202,
+  query: putDataQuerySchema, response: uploadSchema, rawBody: true,
+});
+export const startUploadContract = contract({
+  method: 'POST', path: '/studies/{id}/grids/{label}/upload', summary: 'Start an upload in parts', access: 'organisation', status: 201,
+  body: startUploadSchema, response: startedUploadSchema,
+});
+export const getUploadContract = contract({
+  method: 'GET', path: '/uploads/{id}', summary: 'State of an upload', access: 'organisation', status: 200, response: uploadSchema,
+});
+export const deleteUploadContract = contract({
+  method: 'DELETE', path: '/uploads/{id}', summary: 'Give up an upload that is not complete', access: 'organisation', status: 204,
+});
+export const signPartsContract = contract({
+  method: 'POST', path: '/uploads/{id}/parts', summary: 'Addresses for parts', access: 'organisation', status: 200,
+  body: signPartsSchema, response: signedPartsSchema, secret: true,
+});
+export const completeUploadContract = contract({
+  method: 'POST', path: '/uploads/{id}/complete', summary: 'Close an upload', access: 'organisation', status: 200,
+  body: completeUploadSchema, response: uploadSchema,
+});
+export const previewContract = contract({
+  method: 'GET', path: '/uploads/{id}/preview', summary: 'Header and first rows', access: 'organisation', status: 200, response: previewSchema,
+});

@@ -1,0 +1,27 @@
+import type { Position } from '../assessment';
+
+/** Norms of one field on one grid: e is the value of the file minus the exact one, each norm divided by the sum of weights. */
+export interface FieldNorms {
+  field: string;
+  L1: number;
+  L2: number;
+  Linf: number;
+  /** Where the largest error lies, the first such row of the file. */
+  at: Position;
+  /** Weighted mean of e with its sign. */
+  mean: number;
+  exact: { L1: number; L2: number; Linf: number };
+  min: number;
+  max: number;
+  maxAbs: number;
+  count: number;
+  /** Most significant digits seen in the column, null where the source does not print digits. */
+  significantDigits: number | null;
+}
+
+export interface GridNorms {
+  rows: number;
+  weightSum: number;
+  equalWeights: boolean;
+  fields: FieldNorms[];
+}
