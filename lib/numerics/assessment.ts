@@ -67,6 +67,8 @@ export interface Triple { grids: string[]; order: number | null; convergence: Co
 
 export interface QuantityAssessment {
   name: string; unit: string | null;
+  /** As declared: what the orders and the GCI are judged by. */
+  formalOrder: number | null; target: number | null;
   values: { label: string; h: number; value: number }[];
   convergence: Convergence | null;
   orderObserved: number | null; orderRange: [number, number] | null; formulaValue: number | null; orderUsed: number | null;
