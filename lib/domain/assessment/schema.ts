@@ -20,7 +20,7 @@ const fieldAssessmentSchema = z.strictObject({
   outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
 });
 const quantityAssessmentSchema = z.strictObject({
-  name: z.string(), unit: z.string().nullable(),
+  name: z.string(), unit: z.string().nullable(), formalOrder: nullableNumber, target: nullableNumber,
   values: z.array(z.strictObject({ label: z.string(), h: z.number(), value: z.number() })),
   convergence: convergenceSchema.nullable(),
   orderObserved: nullableNumber, orderRange: z.tuple([z.number(), z.number()]).nullable(), formulaValue: nullableNumber, orderUsed: nullableNumber,
