@@ -1,0 +1,27 @@
+import type { ReactNode } from 'react';
+import type { SeriesNorm } from '@/lib/numerics/assessment';
+
+/** A variable: serif italic, with an upright index where it has one. */
+export function Sym({ children, index }: { children: ReactNode; index?: ReactNode }) {
+  return (
+    <span className="whitespace-nowrap font-serif">
+      <i>{children}</i>
+      {index !== undefined && <sub>{index}</sub>}
+    </span>
+  );
+}
+
+const indices = { L1: '1', L2: '2', Linf: '∞' };
+
+export function NormSymbol({ norm }: { norm: SeriesNorm }) {
+  return norm === 'value' ? <span>value</span> : <Sym index={indices[norm]}>L</Sym>;
+}
+
+/** An error as `2.20 × 10⁻⁴`, kept on one line. */
+export function Sci({ mantissa, exponent }: { mantissa: string; exponent: number }) {
+  return (
+    <span className="whitespace-nowrap">
+      {mantissa}{'\u00a0×\u00a0'}10<sup>{exponent < 0 ? `−${-exponent}` : exponent}</sup>
+    </span>
+  );
+}
