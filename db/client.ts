@@ -1,0 +1,13 @@
+import { Kysely, PostgresDialect } from 'kysely';
+import { Pool } from 'pg';
+import type { DB } from './schema.generated';
+
+export type Database = Kysely<DB>;
+
+/** A pool and its query builder; the URL is handed in, so that nothing here reads the environment. */
+export function openDatabase(url: string, onError: (error: Error) => void): { pool: Pool; db: Database } {
+  const pool = new Pool({ connectionString: url, max: 10 });
+  // An idle connection that breaks would otherwise end the process.
+  pool.on('error', onError);
+  return { pool, db: new Kysely<DB>({ dialect: new PostgresDialect({ pool }) }) };
+}

@@ -1,0 +1,123 @@
+import { buildNode, type Scope } from './build-node';
+import { ExpressionProblem } from './expression-problem';
+import { isFunctionName } from './functions';
+import { createGraph, type Graph, type Node, type Variable } from './graph';
+
+export interface ExpressionSet {
+  /** Numbers, or expressions of other constants and of the coordinates. */
+  constants: Readonly<Record<string, number | string>>;
+  /** The exact fields. */
+  fields: Readonly<Record<string, string>>;
+  /** More expressions of constants and fields, such as what a column of a file is compared with. */
+  compared?: Readonly<Record<string, string>>;
+  variables: readonly Variable[];
+}
+
+export interface ExpressionError {
+  /** The constant, field or comparison it stands in. */
+  name: string;
+  /** The character, counted from 1. */
+  position: number;
+  message: string;
+}
+
+export interface CompiledExpressions {
+  graph: Graph;
+  variables: readonly Variable[];
+  /** Null prototype: any field name is a plain key. */
+  fields: Record<string, Node>;
+  compared: Record<string, Node>;
+}
+
+export type CompileResult = { ok: true; compiled: CompiledExpressions } | { ok: false; errors: ExpressionError[] };
+
+/**
+ * Reads constants, exact fields and comparisons into one shared graph, or says for each what is wrong and at which
+ * character. Names stand for a constant, else an exact field, else a coordinate or pi; circles are refused.
+ */
+export function compileExpressions(set: ExpressionSet): CompileResult {
+  const graph = createGraph();
+  const sources = new Map<string, string>();
+  for (const [name, source] of Object.entries(set.fields)) sources.set(name, source);
+  for (const [name, value] of Object.entries(set.constants)) sources.set(name, typeof value === 'number' ? literal(value) : value);
+
+  const errors: ExpressionError[] = [];
+  const attempt = (name: string, run: () => Node): Node | null => {
+    try {
+      return run();
+    } catch (problem) {
+      if (!(problem instanceof ExpressionProblem)) throw problem;
+      errors.push({ name, position: problem.position, message: problem.message });
+      return null;
+    }
+  };
+
+  const built = new Map<string, Node | null>();
+  const underWay: string[] = [];
+  const buildNamed = (name: string, source: string): Node | null => {
+    const known = built.get(name);
+    if (known !== undefined) return known;
+    underWay.push(name);
+    const node = attempt(name, () => {
+      checkName(name, set);
+      return buildNode(graph, source, scope);
+    });
+    underWay.pop();
+    built.set(name, node);
+    return node;
+  };
+
+  const scope: Scope = {
+    variables: set.variables,
+    isField: (name) => Object.hasOwn(set.fields, name) && !Object.hasOwn(set.constants, name),
+    names: () => [...sources.keys(), ...set.variables, 'pi'],
+    find(name, position) {
+      const source = sources.get(name);
+      if (source === undefined) return findOwn(graph, name, set.variables);
+      if (underWay.includes(name)) {
+        const circle = [...underWay.slice(underWay.indexOf(name)), name].join(' → ');
+        throw new ExpressionProblem(position, `This goes round in a circle: ${circle}.`);
+      }
+      const node = buildNamed(name, source);
+      if (node === null) throw new ExpressionProblem(position, `${name} has an error of its own.`);
+      return node;
+    },
+  };
+
+  for (const [name, source] of sources) buildNamed(name, source);
+  const compared = Object.create(null) as Record<string, Node>;
+  for (const [name, source] of Object.entries(set.compared ?? {})) {
+    const node = attempt(name, () => buildNode(graph, source, scope));
+    if (node !== null) compared[name] = node;
+  }
+  if (errors.length > 0) return { ok: false, errors };
+
+  const fields = Object.create(null) as Record<string, Node>;
+  for (const name of Object.keys(set.fields)) {
+    const node = built.get(name);
+    if (node) fields[name] = node;
+  }
+  return { ok: true, compiled: { graph, variables: set.variables, fields, compared } };
+}
+
+function findOwn(graph: Graph, name: string, variables: readonly Variable[]): Node | null {
+  const variable = variables.find((each) => each === name);
+  if (variable !== undefined) return graph.variable(variable);
+  return name === 'pi' ? graph.number(Math.PI) : null;
+}
+
+function literal(value: number): string {
+  if (!Number.isFinite(value)) throw new RangeError(`compileExpressions: a constant is ${value}`);
+  return String(value);
+}
+
+function checkName(name: string, set: ExpressionSet): void {
+  if (!Object.hasOwn(set.constants, name)) return;
+  if (!/^[A-Za-z_][A-Za-z0-9_]*$/.test(name)) {
+    throw new ExpressionProblem(1, `“${name}” cannot be the name of a constant: letters, digits and _ only, a letter first.`);
+  }
+  if (isFunctionName(name) || ['x', 'y', 'z', 't', 'd'].includes(name)) {
+    throw new ExpressionProblem(1, `“${name}” has a meaning of its own; give the constant another name.`);
+  }
+  if (Object.hasOwn(set.fields, name)) throw new ExpressionProblem(1, `“${name}” is a field and a constant; rename one of them.`);
+}

@@ -1,0 +1,41 @@
+const twoOverRootPi = 2 / Math.sqrt(Math.PI);
+const seriesEnd = 2.25;
+const continuedFractionTerms = 60;
+
+/**
+ * The error function 2/√π ∫₀ˣ exp(−s²) ds, to double precision for every x.
+ *
+ * Below 2.25 the series exp(−x²)·2/√π·Σ 2ⁿx²ⁿ⁺¹/(1·3·…·(2n+1)), whose terms are all of one sign (Abramowitz and
+ * Stegun, Handbook of Mathematical Functions, 7.1.6); above, one minus the continued fraction of erfc (7.1.14).
+ * Not a number where x is not a number.
+ */
+export function erf(x: number): number {
+  const size = Math.abs(x);
+  if (size < seriesEnd) return series(x);
+  if (size > 6) return Math.sign(x);
+  if (Number.isNaN(x)) return NaN;
+  return Math.sign(x) * (1 - complement(size));
+}
+
+function series(x: number): number {
+  const square = x * x;
+  let term = x;
+  let sum = x;
+  for (let n = 1; Math.abs(term) > 1e-18 * Math.abs(sum); n += 1) {
+    term *= (2 * square) / (2 * n + 1);
+    sum += term;
+  }
+  return twoOverRootPi * gauss(x) * sum;
+}
+
+function complement(x: number): number {
+  let tail = x;
+  for (let n = continuedFractionTerms; n >= 1; n -= 1) tail = x + n / 2 / tail;
+  return gauss(x) / (Math.sqrt(Math.PI) * tail);
+}
+
+/** exp(−x²) without the rounding of x²: the square of the nearest single is exact. */
+function gauss(x: number): number {
+  const near = Math.fround(x);
+  return Math.exp(-near * near) * Math.exp((near - x) * (near + x));
+}

@@ -1,0 +1,90 @@
+import { Readable } from 'node:stream';
+import {
+  AbortMultipartUploadCommand, CompleteMultipartUploadCommand, CreateMultipartUploadCommand, DeleteObjectCommand, GetObjectCommand,
+  HeadBucketCommand, HeadObjectCommand, ListPartsCommand, S3Client, UploadPartCommand,
+} from '@aws-sdk/client-s3';
+import { Upload } from '@aws-sdk/lib-storage';
+import { getSignedUrl } from '@aws-sdk/s3-request-presigner';
+
+export interface StoredPart { number: number; etag: string; bytes: number }
+
+interface StorageOptions { endpoint: string; publicUrl: string; bucket: string; region: string; accessKeyId: string; secretAccessKey: string }
+
+const partLifetimeSeconds = 3600;
+
+export type Storage = ReturnType<typeof createStorage>;
+
+/** Files in an S3-compatible bucket. Part addresses are signed for the URL at which browsers reach storage. */
+export function createStorage(options: StorageOptions) {
+  const { bucket, region, accessKeyId, secretAccessKey } = options;
+  const clientAt = (endpoint: string) => new S3Client({
+    endpoint, region, forcePathStyle: true, credentials: { accessKeyId, secretAccessKey },
+    requestChecksumCalculation: 'WHEN_REQUIRED', responseChecksumValidation: 'WHEN_REQUIRED',
+  });
+  const client = clientAt(options.endpoint);
+  const publicClient = clientAt(options.publicUrl);
+
+  return {
+    async startMultipart(key: string): Promise<string> {
+      const answer = await client.send(new CreateMultipartUploadCommand({ Bucket: bucket, Key: key }));
+      if (!answer.UploadId) throw new Error(`Storage gave no upload id for ${key}.`);
+      return answer.UploadId;
+    },
+
+    async signPart(key: string, multipartId: string, number: number): Promise<string> {
+      const command = new UploadPartCommand({ Bucket: bucket, Key: key, UploadId: multipartId, PartNumber: number });
+      return getSignedUrl(publicClient, command, { expiresIn: partLifetimeSeconds });
+    },
+
+    partLifetimeSeconds,
+
+    async listParts(key: string, multipartId: string): Promise<StoredPart[]> {
+      const answer = await client.send(new ListPartsCommand({ Bucket: bucket, Key: key, UploadId: multipartId, MaxParts: 1000 }));
+      return (answer.Parts ?? []).map((part) => ({ number: part.PartNumber ?? 0, etag: part.ETag ?? '', bytes: part.Size ?? 0 }));
+    },
+
+    async completeMultipart(key: string, multipartId: string, parts: { number: number; etag: string }[]): Promise<void> {
+      const sorted = [...parts].sort((a, b) => a.number - b.number).map((part) => ({ PartNumber: part.number, ETag: part.etag }));
+      await client.send(new CompleteMultipartUploadCommand({ Bucket: bucket, Key: key, UploadId: multipartId, MultipartUpload: { Parts: sorted } }));
+    },
+
+    async abortMultipart(key: string, multipartId: string): Promise<void> {
+      await client.send(new AbortMultipartUploadCommand({ Bucket: bucket, Key: key, UploadId: multipartId }));
+    },
+
+    /** Streams a body of unknown length in parts of 8 MiB. */
+    async put(key: string, body: Readable): Promise<void> {
+      await new Upload({ client, params: { Bucket: bucket, Key: key, Body: body }, partSize: 8 * 1024 * 1024, queueSize: 2 }).done();
+    },
+
+    /** Size in bytes, or null where there is no such object. */
+    async sizeOf(key: string): Promise<number | null> {
+      try {
+        const answer = await client.send(new HeadObjectCommand({ Bucket: bucket, Key: key }));
+        return answer.ContentLength ?? null;
+      } catch (error) {
+        if (error instanceof Error && (error.name === 'NotFound' || error.name === 'NoSuchKey')) return null;
+        throw error;
+      }
+    },
+
+    async read(key: string, signal?: AbortSignal): Promise<Readable> {
+      const answer = await client.send(new GetObjectCommand({ Bucket: bucket, Key: key }), { abortSignal: signal });
+      if (!(answer.Body instanceof Readable)) throw new Error(`Storage gave no body for ${key}.`);
+      return answer.Body;
+    },
+
+    async remove(key: string): Promise<void> {
+      await client.send(new DeleteObjectCommand({ Bucket: bucket, Key: key }));
+    },
+
+    async isReachable(): Promise<boolean> {
+      try {
+        await client.send(new HeadBucketCommand({ Bucket: bucket }));
+        return true;
+      } catch {
+        return false;
+      }
+    },
+  };
+}

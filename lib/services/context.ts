@@ -1,0 +1,32 @@
+import type { Database } from '@/db/client';
+import type { Role } from '@/lib/domain/people/roles';
+import type { TokenScope } from '@/lib/domain/tokens/scopes';
+import type { Logger } from '@/lib/platform/logger';
+import type { RateLimits } from '@/lib/platform/rate-limits';
+import type { Storage } from '@/lib/platform/storage';
+import type { StudyEvents } from '@/lib/platform/study-events';
+
+/** What every service is handed; tests hand in a fixed clock. */
+export interface Context {
+  db: Database;
+  storage: Storage;
+  events: StudyEvents;
+  limits: RateLimits;
+  clock: () => Date;
+  log: Logger;
+}
+
+export interface TokenActor { id: string; name: string; scopes: TokenScope[]; codeId: string | null }
+
+/** Somebody signed in, by session or by a token of theirs. */
+export interface UserContext extends Context {
+  userId: string;
+  email: string;
+  token: TokenActor | null;
+}
+
+/** Somebody acting in one organisation. */
+export interface MemberContext extends UserContext {
+  organisation: { id: string; slug: string; name: string };
+  roles: Role[];
+}

@@ -1,0 +1,20 @@
+import { AppError } from '@/lib/errors';
+import { rolesCarry, type Permission } from '@/lib/domain/people/roles';
+import type { MemberContext } from './context';
+
+/** Refuses what the caller's roles or token do not carry; to an auditor everything unsigned is simply not there. */
+export function permit(ctx: MemberContext, permission: Permission): void {
+  if (ctx.roles.includes('auditor')) throw new AppError('not-found', 'There is nothing here, or not for you.');
+  if (ctx.token && permission === 'tokens.manage') throw new AppError('not-allowed', 'A token cannot manage tokens. Sign in.');
+  if (ctx.token && permission === 'work.write' && !ctx.token.scopes.includes('write')) {
+    throw new AppError('not-allowed', `The token “${ctx.token.name}” may only read. Make one with the scope write.`);
+  }
+  if (!rolesCarry(ctx.roles, permission)) {
+    throw new AppError('not-allowed', `This needs the role engineer. You are ${ctx.roles.join(' and ')} in ${ctx.organisation.name}.`);
+  }
+}
+
+/** A token limited to a code sees nothing of any other. */
+export function permitCode(ctx: MemberContext, codeId: string): void {
+  if (ctx.token?.codeId && ctx.token.codeId !== codeId) throw new AppError('not-found', 'There is nothing here, or not for this token.');
+}

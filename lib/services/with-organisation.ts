@@ -1,0 +1,21 @@
+import { sql, type Transaction } from 'kysely';
+import type { Database } from '@/db/client';
+import type { DB } from '@/db/schema.generated';
+
+export type Trx = Transaction<DB>;
+
+/** A transaction in which row-level security lets through the rows of one organisation. */
+export function withOrganisation<T>(ctx: { db: Database; organisation: { id: string } }, work: (trx: Trx) => Promise<T>): Promise<T> {
+  return ctx.db.transaction().execute(async (trx) => {
+    await sql`select set_config('app.organisation_id', ${ctx.organisation.id}, true)`.execute(trx);
+    return work(trx);
+  });
+}
+
+/** A transaction in which a person sees their own memberships, before an organisation is chosen. */
+export function withUser<T>(ctx: { db: Database }, userId: string, work: (trx: Trx) => Promise<T>): Promise<T> {
+  return ctx.db.transaction().execute(async (trx) => {
+    await sql`select set_config('app.user_id', ${userId}, true)`.execute(trx);
+    return work(trx);
+  });
+}
