@@ -25,9 +25,9 @@ const config: Config = {
       band: { DEFAULT: token('band'), outer: token('band2') },
     },
     fontFamily: {
-      serif: ['STIX Two Text', 'Fourfold Signs Serif', 'Georgia', 'serif'],
-      sans: ['Source Sans 3', 'Fourfold Signs Sans', 'Helvetica Neue', 'Arial', 'sans-serif'],
-      mono: ['Source Code Pro', 'Menlo', 'Consolas', 'monospace'],
+      serif: token('face-serif'),
+      sans: token('face-sans'),
+      mono: token('face-mono'),
     },
     fontSize: {
       front: ['44px', { lineHeight: '52px', letterSpacing: '-0.012em' }],

@@ -20,13 +20,15 @@ export function ProblemNotice({ problem, shownAtField = [], actions }: ProblemNo
   const faults = (problem.errors ?? []).filter(({ path }) => !shownAtField.includes(path));
   const title = /[.?]$/.test(problem.title) ? problem.title : `${problem.title}.`;
   return (
-    <Notice title={title} actions={actions}>
-      {problem.detail}
-      {faults.map(({ path, message }) => (
-        <span key={`${path} ${message}`} className="block">
-          {path && <code className="font-mono text-code">{path}</code>} {message}
-        </span>
-      ))}
-    </Notice>
+    <div className="mt-4">
+      <Notice title={title} actions={actions}>
+        {problem.detail}
+        {faults.map(({ path, message }) => (
+          <span key={`${path} ${message}`} className="block">
+            {path && <code className="font-mono text-code">{path}</code>} {message}
+          </span>
+        ))}
+      </Notice>
+    </div>
   );
 }

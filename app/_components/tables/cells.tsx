@@ -49,7 +49,7 @@ export function ReasonRow({ before = 0, columns, children }: { before?: number; 
     <tr>
       {before > 0 && <td colSpan={before} />}
       <td colSpan={columns - before} className="pb-2 text-reason text-graphite">
-        <span className="sticky left-0 block max-w-[calc(100vw-40px)]">{children}</span>
+        <span className="sticky left-0 block max-tablet:max-w-[calc(100vw-112px)]">{children}</span>
       </td>
     </tr>
   );
