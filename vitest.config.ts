@@ -10,14 +10,23 @@ const project = (name: string, extra: object = {}) => ({
   test: { name, include: [`tests/${name}/**/*.test.ts`], ...extra },
 });
 
+// These share one running product: one file at a time, one project after the other.
+const shared = (groupOrder: number, testTimeout: number) => ({
+  testTimeout,
+  hookTimeout: 60_000,
+  fileParallelism: false,
+  sequence: { groupOrder },
+});
+
 export default defineConfig({
   test: {
+    maxWorkers: 2,
     projects: [
       project('unit'),
       project('checks'),
-      project('integration', { testTimeout: 60_000, hookTimeout: 60_000, fileParallelism: false }),
-      project('browser', { testTimeout: 120_000, hookTimeout: 60_000, fileParallelism: false }),
-      project('faults', { testTimeout: 120_000, hookTimeout: 60_000, fileParallelism: false }),
+      project('integration', shared(1, 60_000)),
+      project('browser', shared(2, 120_000)),
+      project('faults', shared(3, 120_000)),
     ],
   },
 });

@@ -1,0 +1,100 @@
+import fs from 'node:fs';
+import path from 'node:path';
+import { ensureBuild } from './build.mjs';
+import { productEnvironment, testEnvironment } from './environment.mjs';
+import { install } from './install.mjs';
+import { onInterruption } from './interruption.mjs';
+import { acquireLock } from './lock.mjs';
+import { logToFolder } from './logs.mjs';
+import { npmBinary, root } from './places.mjs';
+import { assertPortsFree, portsOf } from './ports.mjs';
+import { migrate, webService, workerService } from './product.mjs';
+import { run, stopRunning } from './processes.mjs';
+import { runFolder, startServices } from './services.mjs';
+import { awaitEarlierProcesses, createSupervisor } from './supervisor.mjs';
+import { readCounts } from './test-counts.mjs';
+import { needsProduct } from './test-selection.mjs';
+
+const NAME = 'test';
+const folder = runFolder(NAME);
+const pidFolder = path.join(folder, 'pids');
+const logFolder = path.join(folder, 'logs');
+const reportFolder = path.join(folder, 'reports');
+const supervisor = createSupervisor({ pidFolder, log: logToFolder(logFolder) });
+
+/** @returns {Promise<Record<string, string>>} what the tests need to know */
+async function startProduct() {
+  const ports = portsOf(NAME);
+  await acquireLock(NAME, {
+    wait: true,
+    whenBusy: (holder) => `Waiting for another test run in this folder (process ${holder}) …`,
+  });
+  await awaitEarlierProcesses(pidFolder);
+  await assertPortsFree(NAME, ports);
+  for (const name of ['postgres', 'redis', 'storage', 'mail', 'logs']) {
+    fs.rmSync(path.join(folder, name), { recursive: true, force: true });
+  }
+  fs.mkdirSync(logFolder, { recursive: true });
+  const env = productEnvironment(ports, { LOG_LEVEL: process.env.LOG_LEVEL });
+  const [build] = await Promise.all([ensureBuild(), startServices(NAME, supervisor, ports, env)]);
+  await migrate(env);
+  await supervisor.start(workerService(build, env));
+  await supervisor.start(webService(build, ports.web, env));
+  console.log(`The product runs for the tests on port ${ports.web} after ${performance.now().toFixed(0)} ms.`);
+  return { ...env, ...testEnvironment(ports), TEST_BUILD_FOLDER: build, TEST_PID_FOLDER: pidFolder };
+}
+
+/** @param {string[]} args @param {Record<string, string>} env */
+async function runVitest(args, env) {
+  const report = path.join(reportFolder, `${process.pid}.json`);
+  fs.rmSync(report, { force: true });
+  const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${report}`];
+  let endedWell = true;
+  try {
+    await run({
+      command: npmBinary('vitest'),
+      args: ['run', ...reporters, ...args],
+      cwd: root,
+      env: { ...process.env, ...env, ...(process.stdout.isTTY ? { FORCE_COLOR: '1' } : {}) },
+      onOutput: (text) => process.stdout.write(text),
+    });
+  } catch (error) {
+    endedWell = false;
+    console.log(error instanceof Error ? error.message : error);
+  }
+  const counts = readCounts(report, endedWell);
+  fs.rmSync(report, { force: true });
+  return counts;
+}
+
+function printLogs() {
+  for (const name of fs.existsSync(logFolder) ? fs.readdirSync(logFolder) : []) {
+    const lines = fs.readFileSync(path.join(logFolder, name), 'utf8').trim().split('\n').slice(-20);
+    if (lines.join('') !== '') console.log(`The last lines of ${name}:\n${lines.join('\n')}`);
+  }
+}
+
+async function test() {
+  const args = process.argv.slice(2);
+  try {
+    await install(needsProduct(args) ? NAME : null);
+    const env = needsProduct(args) ? await startProduct() : {};
+    return await runVitest(args, env);
+  } catch (error) {
+    printLogs();
+    console.log(error instanceof Error ? error.message : error);
+    return { passed: 0, failed: 1 };
+  } finally {
+    await supervisor.stop();
+    await stopRunning();
+  }
+}
+
+onInterruption(async (reason) => {
+  console.log(`Stopping after ${reason} …`);
+  await supervisor.stop();
+}, null);
+
+const { passed, failed } = await test();
+console.log(`${passed} passed, ${failed} failed`);
+process.exit(failed === 0 ? 0 : 1);
