@@ -1,4 +1,5 @@
 import { ExpressionProblem } from './expression-problem';
+import { isFunctionName } from './functions';
 import type { Token } from './tokenize';
 
 const deepest = 100;
@@ -13,7 +14,7 @@ export function checkOrder(tokens: readonly Token[], length: number): void {
   let before: Token | null = null;
   let signed = false;
   for (const token of tokens) {
-    if (endsOperand(before)) {
+    if (before !== null && endsOperand(before)) {
       checkAfterOperand(before, token, open);
       signed = false;
     } else {
@@ -27,7 +28,7 @@ export function checkOrder(tokens: readonly Token[], length: number): void {
     before = token;
   }
   if (!endsOperand(before)) {
-    throw new ExpressionProblem(length + 1, `The expression ends after “${before?.text}”; expected a number, a name or “(”.`);
+    throw new ExpressionProblem(length + 1, `The expression ends after “${before?.text ?? ''}”; expected a number, a name or “(”.`);
   }
   const unclosed = open.pop();
   if (unclosed) throw new ExpressionProblem(unclosed.position, 'This “(” is not closed; expected “)”.');
@@ -37,7 +38,7 @@ function is(token: Token | null, sign: string): boolean {
   return token?.kind === 'sign' && token.text === sign;
 }
 
-function endsOperand(token: Token | null): token is Token {
+function endsOperand(token: Token | null): boolean {
   return token !== null && (token.kind !== 'sign' || token.text === ')');
 }
 
@@ -47,6 +48,9 @@ function checkAfterOperand(before: Token, token: Token, open: { call: boolean }[
     throw new ExpressionProblem(token.position, `Found “(” after “${before.text}”; multiplication is written out: ${before.text}*( …`);
   }
   if (token.kind !== 'sign') {
+    if (isFunctionName(before.text)) {
+      throw new ExpressionProblem(token.position, `Found “${token.text}” after “${before.text}”; write ${before.text}(${token.text}).`);
+    }
     throw new ExpressionProblem(token.position, `Found “${token.text}” after “${before.text}”; expected an operator. Multiplication is written out: ${before.text}*${token.text}.`);
   }
   if (token.text === ')' && open.length === 0) {

@@ -112,6 +112,9 @@ function literal(value: number): string {
 }
 
 function checkName(name: string, set: ExpressionSet): void {
+  if (set.variables.some((variable) => variable === name)) {
+    throw new ExpressionProblem(1, `“${name}” is a coordinate; give the field or constant another name.`);
+  }
   if (!Object.hasOwn(set.constants, name)) return;
   if (!/^[A-Za-z_][A-Za-z0-9_]*$/.test(name)) {
     throw new ExpressionProblem(1, `“${name}” cannot be the name of a constant: letters, digits and _ only, a letter first.`);

@@ -3,7 +3,7 @@ import { ExpressionProblem } from './expression-problem';
 import { checkOrder } from './check-order';
 import { tokenize, type Token } from './tokenize';
 
-const { parse } = create(parseDependencies);
+const { parse } = create(parseDependencies ?? {});
 type Leaf = Exclude<Token, { kind: 'sign' }>;
 
 /** The shape of an expression as written, every leaf with its place in the text. */
