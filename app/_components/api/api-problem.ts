@@ -1,0 +1,20 @@
+import type { FieldProblem } from '@/lib/errors';
+
+interface ProblemBody { title: string; status: number; detail: string; errors: FieldProblem[] }
+
+/** What the server answered instead of a result (RFC 9457). */
+export class ApiProblem extends Error {
+  constructor(readonly problem: ProblemBody) {
+    super(problem.detail);
+    this.name = 'ApiProblem';
+  }
+
+  static async from(response: Response): Promise<ApiProblem> {
+    const isProblem = response.headers.get('content-type')?.startsWith('application/problem+json') ?? false;
+    if (isProblem) return new ApiProblem((await response.json()) as ProblemBody);
+    return new ApiProblem({
+      title: 'No readable answer', status: response.status, errors: [],
+      detail: `The server answered ${response.status} without saying why. Try again in a moment.`,
+    });
+  }
+}

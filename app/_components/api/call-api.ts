@@ -1,0 +1,37 @@
+import type { BodyOf, ContractShape, PathParameters, QueryOf, ResponseOf } from '@/lib/domain/api/contract';
+import { ApiProblem } from './api-problem';
+
+interface CallOptions<C extends ContractShape> {
+  /** Slug of the organisation, on calls that belong to one. */
+  organisation?: string;
+  params?: PathParameters<C['path']>;
+  query?: QueryOf<C>;
+  body?: BodyOf<C>;
+  /** The revision that was read, on conditional writes. */
+  revision?: number;
+  signal?: AbortSignal;
+}
+
+/** The address of a call with its parameters filled in. */
+export function apiAddress<C extends ContractShape>(contract: C, options: CallOptions<C>): string {
+  const params = (options.params ?? {}) as Record<string, string>;
+  const path = contract.path.replace(/\{(\w+)\}/g, (_, name: string) => encodeURIComponent(params[name] ?? ''));
+  const search = new URLSearchParams();
+  if (options.organisation) search.set('organisation', options.organisation);
+  for (const [name, value] of Object.entries(options.query ?? {})) if (typeof value === 'string' || typeof value === 'number') search.set(name, String(value));
+  const text = search.toString();
+  return `/api/v1${path}${text === '' ? '' : `?${text}`}`;
+}
+
+/** Calls the API from the browser; throws `ApiProblem` with what the server said. */
+export async function callApi<C extends ContractShape>(contract: C, options: CallOptions<C>): Promise<ResponseOf<C>> {
+  const headers: Record<string, string> = { accept: 'application/json' };
+  if (options.body !== undefined) headers['content-type'] = 'application/json';
+  if (options.revision !== undefined) headers['if-match'] = `"${options.revision}"`;
+  const response = await fetch(apiAddress(contract, options), {
+    method: contract.method, headers, signal: options.signal,
+    body: options.body === undefined ? undefined : JSON.stringify(options.body),
+  });
+  if (!response.ok) throw await ApiProblem.from(response);
+  return (response.status === 204 ? undefined : await response.json()) as ResponseOf<C>;
+}

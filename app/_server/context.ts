@@ -1,0 +1,44 @@
+import 'server-only';
+import type { Redis } from 'ioredis';
+import type { Pool } from 'pg';
+import { openDatabase } from '@/db/client';
+import { readEnv, type Env } from '@/lib/env';
+import { createLogger } from '@/lib/platform/logger';
+import { createRateLimits } from '@/lib/platform/rate-limits';
+import { openRedis } from '@/lib/platform/redis';
+import { createSessions, type Sessions } from '@/lib/platform/sessions';
+import { createStorage } from '@/lib/platform/storage';
+import { createStudyEvents } from '@/lib/platform/study-events';
+import type { Context } from '@/lib/services/context';
+
+interface Server { env: Env; context: Context; sessions: Sessions; pool: Pool; redis: Redis }
+
+function openServer(): Server {
+  const env = readEnv(process.env);
+  const log = createLogger('web', env.LOG_LEVEL);
+  const { pool, db } = openDatabase(env.DATABASE_URL, (error) => log.warn({ fault: error.message }, 'database connection'));
+  // Answers fail at once when Redis is away; the outbox keeps the work.
+  const redis = openRedis(env.REDIS_URL, log, { maxRetriesPerRequest: 1, enableOfflineQueue: false });
+  const subscriber = openRedis(env.REDIS_URL, log, { maxRetriesPerRequest: null });
+  const context: Context = {
+    db,
+    storage: createStorage({
+      endpoint: env.STORAGE_ENDPOINT, publicUrl: env.STORAGE_PUBLIC_URL, bucket: env.STORAGE_BUCKET, region: env.STORAGE_REGION,
+      accessKeyId: env.STORAGE_ACCESS_KEY, secretAccessKey: env.STORAGE_SECRET_KEY,
+    }),
+    events: createStudyEvents(redis, subscriber),
+    limits: createRateLimits(redis),
+    clock: () => new Date(),
+    log,
+  };
+  return { env, context, sessions: createSessions(pool, env.PUBLIC_URL.startsWith('https:')), pool, redis };
+}
+
+// Kept on globalThis so that a reload in development does not open the connections again.
+const held = globalThis as typeof globalThis & { fourfoldServer?: Server };
+
+/** The connections of this web process, opened at the first request. */
+export function getServer(): Server {
+  held.fourfoldServer ??= openServer();
+  return held.fourfoldServer;
+}

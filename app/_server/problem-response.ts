@@ -1,0 +1,29 @@
+import 'server-only';
+import { AppError } from '@/lib/errors';
+import type { Logger } from '@/lib/platform/logger';
+
+const unreachableCodes = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'ENOTFOUND', 'EPIPE', '57P01', '57P03']);
+
+function isServiceFault(error: unknown): boolean {
+  if (!(error instanceof Error)) return false;
+  const code = (error as Error & { code?: unknown }).code;
+  if (typeof code === 'string' && unreachableCodes.has(code)) return true;
+  return error.message.includes("Stream isn't writeable") || error.name === 'MaxRetriesPerRequestError';
+}
+
+function toAppError(error: unknown, log: Logger, requestId: string): AppError {
+  if (error instanceof AppError) return error;
+  log.error({ requestId, err: error }, 'request failed');
+  if (isServiceFault(error)) return new AppError('unavailable', 'A service behind Fourfold is not reachable. Nothing was changed; try again in a moment.');
+  return new AppError('unexpected', `The fault is in Fourfold and has been logged as ${requestId}. Try again; if it stays, report that number.`);
+}
+
+/** An error as application/problem+json (RFC 9457); what nobody foresaw is logged and told without its inner message. */
+export function problemResponse(error: unknown, log: Logger, requestId: string): Response {
+  const fault = toAppError(error, log, requestId);
+  const headers = new Headers({ 'content-type': 'application/problem+json', 'x-request-id': requestId, 'cache-control': 'no-store' });
+  if (fault.retryAfter !== undefined) headers.set('retry-after', String(fault.retryAfter));
+  if (fault.code === 'not-signed-in') headers.set('www-authenticate', 'Bearer');
+  const body = { type: `/docs/problems#${fault.code}`, title: fault.title, status: fault.status, detail: fault.message, errors: fault.fields };
+  return new Response(JSON.stringify(body), { status: fault.status, headers });
+}

@@ -1,0 +1,34 @@
+import 'server-only';
+import type { z } from 'zod';
+import { AppError, type FieldProblem } from '@/lib/errors';
+
+const jsonLimit = 1024 * 1024;
+
+async function readText(request: Request): Promise<string> {
+  if (!request.body) return '';
+  const chunks: Uint8Array[] = [];
+  let bytes = 0;
+  for await (const chunk of request.body as unknown as AsyncIterable<Uint8Array>) {
+    bytes += chunk.length;
+    if (bytes > jsonLimit) throw new AppError('too-large', 'The body is over 1 MiB. Send files to the data or upload call of a grid.');
+    chunks.push(chunk);
+  }
+  return Buffer.concat(chunks).toString('utf8');
+}
+
+/** What zod found, each with the path of the member it is about. */
+export function invalid(error: z.ZodError): AppError {
+  const fields: FieldProblem[] = error.issues.map((issue) => ({ path: issue.path.join('.'), message: issue.message }));
+  const first = fields[0];
+  return new AppError('invalid', first ? `${first.path === '' ? 'The body' : first.path}: ${first.message}` : 'The request is not valid.', { fields });
+}
+
+export async function readJson(request: Request): Promise<{ text: string; value: unknown }> {
+  const text = await readText(request);
+  if (text === '') return { text, value: undefined };
+  try {
+    return { text, value: JSON.parse(text) as unknown };
+  } catch (cause) {
+    throw new AppError('bad-request', `The body is not JSON: ${cause instanceof Error ? cause.message : 'unreadable'}.`, { cause });
+  }
+}
