@@ -53,11 +53,10 @@ async function contextFor(contract: ContractShape, caller: Caller | null, url: U
   return contract.access === 'signed-in' ? caller.user : enter(caller, url.searchParams.get('organisation'));
 }
 
-function toResponse(contract: ContractShape, status: number, body: unknown, headers: Headers): Response {
+function toResponse(status: number, body: unknown, headers: Headers): Response {
   if (status === 204 || body === undefined) return new Response(null, { status, headers });
   headers.set('content-type', 'application/json');
-  const revision = (body)?.revision;
-  if (typeof revision === 'number' && contract.status !== 202) headers.set('etag', `"${revision}"`);
+  if (typeof body === 'object' && body !== null && 'revision' in body) headers.set('etag', `"${String(body.revision)}"`);
   return new Response(JSON.stringify(body), { status, headers });
 }
 
@@ -90,7 +89,7 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
   const key = request.headers.get('idempotency-key');
   if (key === null || contract.method !== 'POST' || contract.access !== 'organisation' || contract.secret) {
     const result = await handler(call);
-    return result instanceof Response ? result : toResponse(contract, contract.status, result, headers);
+    return result instanceof Response ? result : toResponse(contract.status, result, headers);
   }
   const requestSha256 = createHash('sha256').update(`${contract.method} ${url.pathname}\n${text}`).digest('hex');
   const kept = await answerOnce(ctx as MemberContext, key, requestSha256, async () => {
@@ -98,7 +97,7 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
     if (result instanceof Response) throw new Error(`${contract.path} answers with a stream and cannot be kept.`);
     return { status: contract.status, body: result };
   });
-  return toResponse(contract, kept.status, kept.body, headers);
+  return toResponse(kept.status, kept.body, headers);
 }
 
 /** A route handler of a contract: session or token, organisation, origin, schemas, idempotency, and errors as problems. */

@@ -3,13 +3,13 @@ import { Lucia, TimeSpan } from 'lucia';
 import type { Pool } from 'pg';
 
 export interface SessionUser { userId: string; email: string }
-export interface SessionCookie { name: string; value: string; attributes: Record<string, unknown> }
 
+/** Cookies are values of a Set-Cookie header. */
 export interface Sessions {
-  create(userId: string): Promise<SessionCookie>;
+  create(userId: string): Promise<string>;
   /** `renewed` is set where the cookie's life was prolonged and must be sent again. */
-  validate(sessionId: string): Promise<{ user: SessionUser; renewed: SessionCookie | null } | null>;
-  end(sessionId: string): Promise<SessionCookie>;
+  validate(sessionId: string): Promise<{ user: SessionUser; renewed: string | null } | null>;
+  end(sessionId: string): Promise<string>;
   readCookie(header: string): string | null;
 }
 
@@ -24,17 +24,17 @@ export function createSessions(pool: Pool, secure: boolean): Sessions {
   return {
     async create(userId) {
       const session = await lucia.createSession(userId, {});
-      return lucia.createSessionCookie(session.id);
+      return lucia.createSessionCookie(session.id).serialize();
     },
     async validate(sessionId) {
       const { session, user } = await lucia.validateSession(sessionId);
       if (!session) return null;
       const email = (user as typeof user & { email: string }).email;
-      return { user: { userId: user.id, email }, renewed: session.fresh ? lucia.createSessionCookie(session.id) : null };
+      return { user: { userId: user.id, email }, renewed: session.fresh ? lucia.createSessionCookie(session.id).serialize() : null };
     },
     async end(sessionId) {
       await lucia.invalidateSession(sessionId);
-      return lucia.createBlankSessionCookie();
+      return lucia.createBlankSessionCookie().serialize();
     },
     readCookie: (header) => lucia.readSessionCookie(header),
   };
