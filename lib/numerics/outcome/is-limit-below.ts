@@ -1,10 +1,12 @@
+import { aitkenLimit } from './aitken-limit';
+
 interface Limits { formalOrder: number; tolerance: number }
 
 /**
  * Whether orders that climb by shrinking steps are heading for a limit below the band: the last three steps up shrink,
  * and the last two Aitken limits z − (z−y)²/(z−2y+x) both lie below pf − tol and within tol of each other.
  *
- * `orders`: coarse to fine. False with fewer than four, and where a step goes down: that is no climb. A. C. Aitken, Proc. R. Soc. Edinburgh 46 (1926) 289.
+ * `orders`: coarse to fine. False with fewer than four, and where a step goes down: that is no climb.
  */
 export function isLimitBelow(orders: readonly number[], { formalOrder, tolerance }: Limits): boolean {
   const [w, x, y, z] = orders.slice(-4);
@@ -14,9 +16,6 @@ export function isLimitBelow(orders: readonly number[], { formalOrder, tolerance
   const before = aitkenLimit(w, x, y);
   const last = aitkenLimit(x, y, z);
   const lowest = formalOrder - tolerance;
+  if (before === null || last === null) return false;
   return before < lowest && last < lowest && Math.abs(last - before) <= tolerance;
-}
-
-function aitkenLimit(x: number, y: number, z: number): number {
-  return z - (z - y) ** 2 / (z - 2 * y + x);
 }

@@ -1,5 +1,5 @@
 import type { Outcome, ReasonCode } from '../assessment';
-import { isLimitBelow } from './climbing-limit';
+import { isLimitBelow } from './is-limit-below';
 import { isDeparting } from './is-departing';
 
 interface Observed {

@@ -1,4 +1,4 @@
-import type { ResolvedSpacing, SpacingProblem, StatedSpacing } from './spacing-types';
+import type { ResolvedSpacing, SpacingProblem, KnownSpacing } from './spacing-types';
 
 /** Two spacings closer than this are the same grid refined by nothing. */
 const sameWithin = 1e-9;
@@ -7,7 +7,7 @@ const sameWithin = 1e-9;
  * What contradicts itself over a series: lengths beside bare counts, two grids of one spacing, or a finer grid with
  * fewer cells. `resolved` is sorted, the finest first; `stated` is the request.
  */
-export function checkSeriesSpacing(resolved: readonly ResolvedSpacing[], stated: readonly StatedSpacing[], volumeKnown: boolean): SpacingProblem[] {
+export function checkSeriesSpacing(resolved: readonly ResolvedSpacing[], stated: readonly KnownSpacing[], volumeKnown: boolean): SpacingProblem[] {
   const problems: SpacingProblem[] = [];
   const lengths = resolved.find((grid) => grid.basis === 'h' || grid.basis === 'weights');
   const counts = resolved.find((grid) => grid.basis === 'cells' || grid.basis === 'cells-per-direction');
@@ -27,7 +27,7 @@ export function checkSeriesSpacing(resolved: readonly ResolvedSpacing[], stated:
       continue;
     }
     const [fineCells, coarseCells] = [stated[fine.index]?.cells, stated[coarse.index]?.cells];
-    if (fine.basis !== 'time-step' && fineCells != null && coarseCells != null && fineCells < coarseCells) {
+    if (fine.basis !== 'time-step' && fineCells !== undefined && coarseCells !== undefined && fineCells < coarseCells) {
       problems.push({
         code: 'order-contradicts', label: fine.label,
         found: `smaller spacing than grid ${coarse.label} (${fine.h} against ${coarse.h}) with fewer cells (${fineCells} against ${coarseCells})`,

@@ -1,6 +1,6 @@
 import { checkSeriesSpacing } from './check-series-spacing';
 import { gridSpacing } from './grid-spacing';
-import type { ResolvedSpacing, SpacingNote, SpacingProblem, StatedSpacing } from './spacing-types';
+import type { KnownSpacing, ResolvedSpacing, SpacingNote, SpacingProblem, StatedSpacing } from './spacing-types';
 import { noteSpacing } from './note-spacing';
 
 interface SpacingRequest {
@@ -24,7 +24,8 @@ type SpacingResult =
  * Returns problems instead of spacings where something is missing, not positive or contradicts itself.
  */
 export function resolveSpacing(request: SpacingRequest): SpacingResult {
-  const { grids, refinement = 'space', dimension = null, volume = null } = request;
+  const { refinement = 'space', dimension = null, volume = null } = request;
+  const grids = request.grids.map(dropNulls);
   const problems: SpacingProblem[] = [];
   const resolved: ResolvedSpacing[] = [];
   grids.forEach((grid, index) => {
@@ -37,4 +38,11 @@ export function resolveSpacing(request: SpacingRequest): SpacingResult {
   const contradictions = checkSeriesSpacing(resolved, grids, volume !== null);
   if (contradictions.length > 0) return { ok: false, problems: contradictions };
   return { ok: true, grids: resolved, notes: refinement === 'space' ? noteSpacing(grids) : [] };
+}
+
+function dropNulls({ label, h, cells, cellsPerDirection, weightSum, rows, dt }: StatedSpacing): KnownSpacing {
+  return {
+    label, h: h ?? undefined, cells: cells ?? undefined, cellsPerDirection: cellsPerDirection ?? undefined,
+    weightSum: weightSum ?? undefined, rows: rows ?? undefined, dt: dt ?? undefined,
+  };
 }

@@ -1,15 +1,18 @@
 /** What is known about the spacing of one grid. Σ weights and rows come from its file. */
-export interface StatedSpacing {
+export interface KnownSpacing {
   label: string;
-  h?: number | null;
+  h?: number;
   /** All cells of the grid. */
-  cells?: number | null;
-  cellsPerDirection?: number | null;
-  weightSum?: number | null;
-  rows?: number | null;
+  cells?: number;
+  cellsPerDirection?: number;
+  weightSum?: number;
+  rows?: number;
   /** Time step, the spacing of a study refined in time. */
-  dt?: number | null;
+  dt?: number;
 }
+
+/** The same as it comes from forms and tables, where null means not stated. */
+export type StatedSpacing = { label: string } & { [Key in Exclude<keyof KnownSpacing, 'label'>]?: number | null };
 
 export type SpacingBasis = 'h' | 'cells' | 'cells-per-direction' | 'weights' | 'time-step';
 

@@ -1,0 +1,90 @@
+import type { QuantityAssessment, ReasonCode } from '@/lib/numerics/assessment';
+import { spansRatio } from '@/lib/numerics/spacing/spans-ratio';
+import { formatMeasure } from '../numbers/format-measure';
+import { formatOrder } from '../numbers/format-order';
+import { formatPercent } from '../numbers/format-percent';
+import { formatRatio } from '../numbers/format-ratio';
+import type { Explanation } from './explanation';
+import { gciWithFormalOrder } from './gci-with-formal-order';
+import { joinWords } from './series-name';
+
+type QuantityText = (quantity: QuantityAssessment) => Explanation;
+
+const behaviour = {
+  monotone: 'converge monotonically', oscillatory: 'oscillate, with a shrinking step', divergent: 'diverge',
+  'oscillatory-divergent': 'oscillate, with a growing step', unchanged: 'differ by no more than their printed digits',
+} as const;
+
+export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
+  'within-target': (quantity) => ({
+    sentence: `The GCI of the finest grid is ${percent(quantity.gci)}, within the target of ${percent(quantity.target)}; ${ordersSeen(quantity)}.${caution(quantity)}`,
+    nextStep: quantity.triples.length > 1 ? 'Nothing more is needed.' : 'Nothing more is needed; a fourth grid would confirm the order.',
+  }),
+  'above-target': (quantity) => ({
+    sentence: `The GCI of the finest grid is ${percent(quantity.gci)}, above the target of ${percent(quantity.target)}; ${ordersSeen(quantity)}.${caution(quantity)}`,
+    nextStep: 'Add a finer grid, or state the target the value is really needed to.',
+  }),
+  'not-monotone': (quantity) => {
+    const triple = quantity.triples.find(({ convergence }) => convergence !== 'monotone');
+    return {
+      sentence: `On grids ${joinWords(triple?.grids ?? [])} the values ${behaviour[triple?.convergence ?? 'unchanged']}${rangeSeen(quantity)}.`,
+      nextStep: triple?.convergence === 'unchanged'
+        ? 'Give the values with more digits, or leave grids further apart.'
+        : 'Check iteration and similarity of the grids, then add a finer one.',
+    };
+  },
+  'order-off-formal': (quantity) => ({
+    sentence: `${ordersSeen(quantity).replace(/^t/, 'T')}, where formal order ${quantity.formalOrder ?? '–'} is declared: the GCI of ${percent(quantity.gci)} is not held against the target.`,
+    nextStep: 'Add a finer grid, or check the declared order for this quantity: singular points and limiters lower it.',
+  }),
+  'order-not-observed': (quantity) => ({
+    sentence: `Two grids show no order: a GCI of ${percent(quantity.gci)} assumes formal order ${quantity.formalOrder ?? '–'} and takes a safety factor of ${quantity.safetyFactor ?? '–'}.`,
+    nextStep: 'Add a third grid, finer by a ratio of 1.3 or more.',
+  }),
+  'order-out-of-range': (quantity) => ({
+    sentence: `The values of grids ${joinWords(quantity.triples.find(({ order }) => order === null)?.grids ?? [])} fit no order between −10 and 20.`,
+    nextStep: 'Check the values and spacings for a slip, then add a grid.',
+  }),
+  'too-few-grids': (quantity) => {
+    const spacings = quantity.values.map(({ h }) => h);
+    const span = (spacings.at(-1) ?? 1) / (spacings[0] ?? 1);
+    const counted = quantity.values.length === 1 ? 'There is 1 grid' : `There are ${quantity.values.length} grids, spanning a ratio of ${formatRatio(span)}`;
+    return {
+      sentence: `${counted}; ${spansRatio(spacings) ? 'more are asked for, each at a ratio of 1.3 or more to the next' : 'a ratio of 2 is needed, in steps of 1.3 or more'}.`,
+      nextStep: 'Add a grid, finer than the finest by a ratio of 1.3 or more.',
+    };
+  },
+  'no-target': (quantity) => explainNoTarget(quantity),
+};
+
+function explainNoTarget({ name, formalOrder, target, gciAbsolute, unit, orderObserved }: QuantityAssessment): Explanation {
+  if (formalOrder !== null && target !== null) {
+    return {
+      sentence: `${name} is smaller than ten times its last change, so a GCI in percent of it says nothing; it is ${gciAbsolute === null ? '–' : formatMeasure(gciAbsolute, unit)} in the quantity's unit.`,
+      nextStep: 'Judge the uncertainty in the unit of the quantity, or take a quantity that is not near zero.',
+    };
+  }
+  const missing = joinWords([...(formalOrder === null ? ['formal order'] : []), ...(target === null ? ['target'] : [])]);
+  return {
+    sentence: `No ${missing} is declared for ${name}, so it is not judged${orderObserved === null ? '' : `; order ${formatOrder(orderObserved)} is observed`}.`,
+    nextStep: `Declare a ${missing} to have it judged.`,
+  };
+}
+
+function percent(fraction: number | null): string {
+  return fraction === null ? '–' : formatPercent(fraction);
+}
+
+function ordersSeen({ triples }: QuantityAssessment): string {
+  const orders = triples.slice(0, 2).map(({ order }) => (order === null ? '–' : formatOrder(order)));
+  return orders.length > 1 ? `the last two triples show orders ${joinWords(orders)}` : `the three grids show order ${orders.join('')}`;
+}
+
+function rangeSeen({ halfRange, unit }: QuantityAssessment): string {
+  return halfRange === null ? '' : `; half the range of the finest three is ${formatMeasure(halfRange, unit)}`;
+}
+
+function caution(quantity: QuantityAssessment): string {
+  const withFormal = gciWithFormalOrder(quantity);
+  return withFormal === null ? '' : ` An order above the formal one shrinks the GCI: with order ${quantity.formalOrder ?? '–'} it would be ${formatPercent(withFormal)}.`;
+}
