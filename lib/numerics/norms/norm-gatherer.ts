@@ -68,7 +68,7 @@ export function createNormGatherer(fields: readonly string[]): NormGatherer {
         if (part === undefined) throw new TypeError(`createNormGatherer: the block has no values of ${sum.field}`);
         for (let from = 0; from < block.rows; from += run) {
           const bad = addRun(sum, part.values, part.exact, block, from, Math.min(from + run, block.rows));
-          if (bad) findBad(part, from, Math.min(from + run, block.rows), (code, i, value) => report(code, sum.field, rows + i, value));
+          if (bad) findBad(part, weights, from, Math.min(from + run, block.rows), (code, i, value) => report(code, sum.field, rows + i, value));
         }
       }
       rows += block.rows;
@@ -143,22 +143,24 @@ function addRun(sum: FieldSums, values: Float64Array, exact: Float64Array, block
 }
 
 function findBad(
-  part: { values: Float64Array; exact: Float64Array }, from: number, to: number,
+  part: { values: Float64Array; exact: Float64Array }, weights: Float64Array | null, from: number, to: number,
   report: (code: NormProblem['code'], i: number, value: number) => void,
 ): void {
   for (let i = from; i < to; i += 1) {
     const value = part.values[i] as number;
     const known = part.exact[i] as number;
-    // A square beyond the largest double has no norm either.
-    if (!Number.isFinite(value * value)) report('value-not-finite', i, value);
-    if (!Number.isFinite(known * known)) report('exact-not-finite', i, known);
+    // A value whose weighted squared error would pass the largest double has no norm either.
+    const room = 4 * (weights === null ? 1 : (weights[i] as number));
+    if (!Number.isFinite(room)) continue;
+    if (!Number.isFinite(room * value * value)) report('value-not-finite', i, value);
+    if (!Number.isFinite(room * known * known)) report('exact-not-finite', i, known);
   }
 }
 
 function positionAt(block: NormBlock, i: number): Position {
   const at: Position = { x: block.x[i] as number };
-  if (block.y !== null) at.y = block.y[i] as number;
-  if (block.z !== null) at.z = block.z[i] as number;
+  if (block.y !== null) at.y = block.y[i];
+  if (block.z !== null) at.z = block.z[i];
   return at;
 }
 

@@ -1,0 +1,14 @@
+import type { ColumnMapping } from '../domain/columns/column-mapping';
+
+export interface GridReading {
+  mapping: ColumnMapping;
+  problem: {
+    dimension: 1 | 2 | 3;
+    exact: Readonly<Record<string, string>>;
+    constants: Readonly<Record<string, number | string>>;
+  };
+  /** What each field of the file is compared with: an expression of the exact fields, or the exact field of its name. */
+  fields: readonly { field: string; compare?: string }[];
+  /** The time of the grid, where the file has no column of times. */
+  t?: number;
+}

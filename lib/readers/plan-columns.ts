@@ -1,0 +1,34 @@
+import type { GridReading } from './grid-reading';
+
+/** Which columns to read, each once, and where among them everything stands. */
+export interface ColumnPlan {
+  names: string[];
+  x: number;
+  y: number | null;
+  z: number | null;
+  t: number | null;
+  weight: number | null;
+  fields: number[];
+}
+
+/** Lays out what a grid needs of its file. Throws TypeError where the mapping leaves something needed without a column. */
+export function planColumns({ mapping, problem, fields }: GridReading): ColumnPlan {
+  const names: string[] = [];
+  const place = (name: string): number => {
+    const at = names.indexOf(name);
+    return at >= 0 ? at : names.push(name) - 1;
+  };
+  const need = (what: string, name: string | undefined): number => {
+    if (name === undefined) throw new TypeError(`readGrid: the mapping has no column for ${what}`);
+    return place(name);
+  };
+  return {
+    names,
+    x: place(mapping.x),
+    y: problem.dimension >= 2 ? need('y', mapping.y) : null,
+    z: problem.dimension === 3 ? need('z', mapping.z) : null,
+    t: mapping.t === undefined ? null : place(mapping.t),
+    weight: mapping.weight === null ? null : place(mapping.weight),
+    fields: fields.map(({ field }) => need(field, mapping.fields[field])),
+  };
+}

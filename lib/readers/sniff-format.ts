@@ -1,0 +1,37 @@
+import type { RejectionCode } from '../domain/uploads/rejection';
+import type { Head } from './read-head';
+import { RejectedFile } from './rejected-file';
+import type { SourceFormat } from './source';
+
+const readable = 'a text table, or JSON with one array of numbers per column';
+
+const signatures: readonly { bytes: string; name: string }[] = [
+  { bytes: '\x89HDF\r\n\x1a\n', name: 'HDF5' },
+  { bytes: 'CDF', name: 'netCDF' },
+  { bytes: '\x93NUMPY', name: 'a numpy array' },
+  { bytes: 'PK\x03\x04', name: 'a ZIP archive or a spreadsheet' },
+  { bytes: 'BZh', name: 'bzip2' },
+  { bytes: '\xfd7zXZ', name: 'xz' },
+  { bytes: '\x28\xb5\x2f\xfd', name: 'Zstandard' },
+  { bytes: '%PDF', name: 'PDF' },
+  { bytes: '# vtk DataFile', name: 'legacy VTK' },
+  { bytes: '\xff\xfe', name: 'UTF-16 text' },
+  { bytes: '\xfe\xff', name: 'UTF-16 text' },
+];
+
+/** Tells by the content what a file is. Throws RejectedFile for what is empty, binary or in a format that is not read. */
+export function sniffFormat(head: Head): SourceFormat {
+  const text = head.bytes.toString('latin1', 0, 4096);
+  const signature = signatures.find(({ bytes }) => text.startsWith(bytes));
+  if (signature !== undefined) throw rejected('unsupported-format', signature.name);
+
+  const content = text.replace(/^\xef\xbb\xbf/, '').trimStart();
+  if (content === '' && head.complete && head.bytes.toString('latin1').trim() === '') throw rejected('empty-file', `${head.bytes.length} bytes`);
+  if (head.bytes.includes(0)) throw rejected('binary-content', 'zero bytes');
+  if (/^<(?:\?xml|VTKFile|!)/i.test(content)) throw rejected('unsupported-format', /<VTKFile/i.test(content) ? 'VTK XML' : 'XML or HTML');
+  return content.startsWith('{') || content.startsWith('[') ? 'json' : 'table';
+}
+
+function rejected(code: RejectionCode, found: string): RejectedFile {
+  return new RejectedFile([{ code, count: 1, line: null, column: null, found, expected: readable }]);
+}

@@ -1,0 +1,91 @@
+import { parseNumber, type NumberReading } from './parse-number';
+import type { Head } from './read-head';
+import { RejectedFile } from './rejected-file';
+import { splitFields } from './split-fields';
+import type { Delimiter } from './source';
+
+export interface TableDialect {
+  delimiter: Delimiter;
+  hasHeader: boolean;
+  header: string[];
+  /** The line that names the columns, or the first row where none does. */
+  headerLine: number;
+  /** Lines before the first row of numbers. */
+  linesBefore: number;
+  /** The first rows as text. */
+  firstRows: string[][];
+}
+
+const shownRows = 10;
+const triedLines = 50;
+const comment = /^\s*(?:#|%|!|\/\/)/;
+
+interface NumberedLine { text: string; number: number }
+
+/** Finds out how a text table is written: what parts its columns, what they are called, where the numbers begin. */
+export function detectTableDialect(head: Head): TableDialect {
+  const { content, lastComment } = readFirstLines(head);
+  const [first, second] = content;
+  if (first === undefined) {
+    throw new RejectedFile([{
+      code: 'empty-file', count: 1, line: null, column: null, found: 'no line with values', expected: 'a header and rows of numbers',
+    }]);
+  }
+  const delimiter = detectDelimiter(content);
+  const fields = splitFields(first.text, delimiter);
+  const rows = (lines: NumberedLine[]) => lines.slice(0, shownRows).map((line) => splitFields(line.text, delimiter));
+  if (!fields.some(isNumeric) && fields.some((field) => field !== '')) {
+    return {
+      delimiter, hasHeader: true, header: nameColumns(fields), headerLine: first.number,
+      linesBefore: second === undefined ? first.number : second.number - 1, firstRows: rows(content.slice(1)),
+    };
+  }
+  // A comment just above the numbers that names as many columns as there are is their header.
+  const named = lastComment === null ? [] : splitFields(lastComment.text.replace(comment, ''), delimiter);
+  const isNamed = named.length === fields.length && new Set(named).size === named.length && named.every((name) => name !== '' && !isNumeric(name));
+  return {
+    delimiter, hasHeader: isNamed, header: isNamed ? named : fields.map((_, index) => `c${index + 1}`),
+    headerLine: isNamed && lastComment !== null ? lastComment.number : first.number,
+    linesBefore: first.number - 1, firstRows: rows(content),
+  };
+}
+
+function readFirstLines(head: Head): { content: NumberedLine[]; lastComment: NumberedLine | null } {
+  const lines = head.bytes.toString('utf8').replace(/^\uFEFF/, '').split('\n');
+  // The last line of an incomplete head may be cut.
+  if (!head.complete && lines.length > 1) lines.pop();
+  const content: NumberedLine[] = [];
+  let lastComment: NumberedLine | null = null;
+  for (const [index, text] of lines.entries()) {
+    const line = { text: text.replace(/\r$/, ''), number: index + 1 };
+    if (line.text.trim() === '') continue;
+    if (comment.test(line.text)) {
+      if (content.length === 0) lastComment = line;
+    } else if (content.push(line) === triedLines) break;
+  }
+  return { content, lastComment };
+}
+
+function detectDelimiter(lines: readonly NumberedLine[]): Delimiter {
+  const isIn = (character: string) => lines.filter((line) => line.text.trim().includes(character)).length * 2 > lines.length;
+  if (isIn('\t') && lines.every((line) => !line.text.includes(';'))) return 'tab';
+  if (isIn(';')) return 'semicolon';
+  if (!isIn(',')) return 'white space';
+  // “0,5 1,25” is two numbers with a decimal comma: a comma that parts columns leaves no white space inside of one.
+  const rows = lines.length > 1 ? lines.slice(1) : lines;
+  const hasInnerSpace = (line: NumberedLine) => splitFields(line.text, 'comma').some((field) => /\d\s+[-+.\d]/.test(field));
+  return rows.filter(hasInnerSpace).length * 2 > rows.length ? 'white space' : 'comma';
+}
+
+function nameColumns(fields: readonly string[]): string[] {
+  const names = fields.map((field, index) => (field === '' ? `c${index + 1}` : field));
+  // A separator at the end of the header is one column too many.
+  return fields.length > 1 && fields.at(-1) === '' ? names.slice(0, -1) : names;
+}
+
+function isNumeric(field: string): boolean {
+  const bytes = Buffer.from(field, 'latin1');
+  const reading: NumberReading = { status: 'number', digits: 0, mark: 'none' };
+  parseNumber(bytes, 0, bytes.length, true, reading);
+  return reading.status !== 'not-a-number';
+}
