@@ -1,0 +1,19 @@
+import type { ReactNode } from 'react';
+import { QueryProvider } from '@/app/_components/api/query-provider';
+import { OrganisationProvider } from '@/app/_components/organisation/organisation-context';
+import { requireMember } from '@/app/_server/visit';
+import { getMe } from '@/lib/services/people/get-me';
+
+interface OrganisationLayoutProps { params: Promise<{ org: string }>; children: ReactNode }
+
+export default async function OrganisationLayout({ params, children }: OrganisationLayoutProps) {
+  const { org } = await params;
+  const member = await requireMember(org);
+  const { email, organisations } = await getMe(member);
+  const scope = { email, organisations, organisation: { ...member.organisation, roles: member.roles } };
+  return (
+    <QueryProvider>
+      <OrganisationProvider scope={scope}>{children}</OrganisationProvider>
+    </QueryProvider>
+  );
+}

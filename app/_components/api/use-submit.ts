@@ -1,0 +1,47 @@
+'use client';
+
+import { useState } from 'react';
+import type { FieldPath, FieldValues, UseFormReturn } from 'react-hook-form';
+import type { FieldProblem } from '@/lib/errors';
+import { ApiProblem } from './api-problem';
+
+interface SubmitProblem { title: string; detail: string; errors: FieldProblem[] }
+
+const unreachable: SubmitProblem = { title: 'Not sent', detail: 'The server did not answer. What you typed is still here; try again in a moment.', errors: [] };
+
+interface SubmitOptions<Input extends FieldValues, Typed, Answer> {
+  form: UseFormReturn<Input, unknown, Typed>;
+  send: (typed: Typed) => Promise<Answer>;
+  onDone: (answer: Answer) => void;
+  /** The paths that have a field to show a fault at. */
+  fields: readonly string[];
+  /** The field of a path of the API, where they are not the same. */
+  fieldOf?: (path: string) => string;
+}
+
+/** Sends a form; what the server refuses stands at its field, or above all fields where it has none. */
+export function useSubmit<Input extends FieldValues, Typed, Answer>({ form, send, onDone, fields, fieldOf = (path) => path }: SubmitOptions<Input, Typed, Answer>) {
+  const [problem, setProblem] = useState<SubmitProblem | null>(null);
+  const isAtField = ({ path }: FieldProblem) => fields.includes(fieldOf(path));
+
+  const showProblem = (refused: SubmitProblem) => {
+    const atFields = refused.errors.filter(isAtField);
+    for (const { path, message } of atFields) form.setError(fieldOf(path) as FieldPath<Input>, { type: 'server', message });
+    const first = atFields[0];
+    if (first) form.setFocus(fieldOf(first.path) as FieldPath<Input>);
+    const isToldAtFields = atFields.length > 0 && atFields.length === refused.errors.length;
+    setProblem(isToldAtFields ? null : { ...refused, errors: refused.errors.filter((fault) => !isAtField(fault)) });
+  };
+
+  const onSubmit = form.handleSubmit(async (typed) => {
+    setProblem(null);
+    try {
+      onDone(await send(typed));
+    } catch (error) {
+      if (error instanceof ApiProblem) showProblem(error.problem);
+      else if (error instanceof TypeError) setProblem(unreachable);
+      else throw error;
+    }
+  });
+  return { onSubmit, problem };
+}
