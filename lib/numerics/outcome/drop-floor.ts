@@ -1,4 +1,5 @@
 import type { ErrorSeries, FieldGrid } from '../assessment';
+import { relativeSize } from '../uncertainty/relative-size';
 import { roundOff } from './round-off';
 
 /** An error of less than twenty known errors says more about the floor than about the scheme. */
@@ -17,7 +18,7 @@ export function dropFloor(series: ErrorSeries): FieldGrid[] {
     const unusedReason = error <= floor ? 'round-off' : error <= knownErrors * knownError ? 'known-error' : undefined;
     trailing &&= unusedReason !== undefined;
     return {
-      label, h, error, knownError, relativeError: exactNorm ? error / exactNorm : null, used: !trailing,
+      label, h, error, knownError, relativeError: exactNorm === null ? null : relativeSize(error, exactNorm), used: !trailing,
       ...(trailing && { unusedReason }), ...(at && { at }),
     };
   });

@@ -1,6 +1,7 @@
 import type { QuantityAssessment, QuantitySeries, Triple } from '../assessment';
 import { orderRange } from '../order/order-range';
 import { oscillatingFormula } from '../order/oscillating-formula';
+import { relativeSize } from '../uncertainty/relative-size';
 import { threeGridFigures } from '../uncertainty/three-grid-figures';
 import { quantityRule } from './quantity-rule';
 import { quantityTriples, type PrintedGrid, type QuantityTriple } from './quantity-triples';
@@ -47,14 +48,14 @@ function figuresOf({ grids: [fine, middle, coarse], convergence, order }: Quanti
   const values = [fine.value, middle.value, coarse.value];
   return {
     ...noFigures, halfRange: (Math.max(...values) - Math.min(...values)) / 2,
-    relativeChange: fine.value === 0 ? null : Math.abs((middle.value - fine.value) / fine.value),
+    relativeChange: relativeSize(middle.value - fine.value, fine.value),
   };
 }
 
 function formalFigures([fine, coarse]: readonly PrintedGrid[], formalOrder: number | null): Figures {
   if (!fine || !coarse) return noFigures;
   if (formalOrder === null) {
-    return { ...noFigures, relativeChange: fine.value === 0 ? null : Math.abs((coarse.value - fine.value) / fine.value) };
+    return { ...noFigures, relativeChange: relativeSize(coarse.value - fine.value, fine.value) };
   }
   return { ...noFigures, ...threeGridFigures(fine, coarse, null, formalOrder), orderUsed: formalOrder, branch: 'formal-two-grids' };
 }

@@ -1,3 +1,5 @@
+import { relativeSize } from './relative-size';
+
 interface GridValue { h: number; value: number }
 
 /**
@@ -12,5 +14,5 @@ export function gridConvergenceIndex(
   if (!(order > 0)) throw new RangeError(`order must be above 0, got ${order}`);
   const growth = Math.expm1(order * Math.log(coarse.h / fine.h));
   const absolute = (safetyFactor * Math.abs(coarse.value - fine.value)) / growth;
-  return { fraction: fine.value === 0 ? null : absolute / Math.abs(fine.value), absolute };
+  return { fraction: relativeSize(absolute, fine.value), absolute };
 }

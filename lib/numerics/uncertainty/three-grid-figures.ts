@@ -1,4 +1,5 @@
 import { gridConvergenceIndex } from './grid-convergence-index';
+import { relativeSize } from './relative-size';
 import { richardson } from './richardson';
 
 interface GridValue { h: number; value: number }
@@ -33,13 +34,9 @@ export function threeGridFigures(fine: GridValue, middle: GridValue, coarse: Gri
   const gciCoarse = coarse ? gridConvergenceIndex({ fine: middle, coarse }, order, safetyFactor).fraction : null;
   return {
     extrapolated,
-    relativeChange: fraction(middle.value - fine.value, fine.value),
-    extrapolatedError: fraction(extrapolated - fine.value, extrapolated),
+    relativeChange: relativeSize(middle.value - fine.value, fine.value),
+    extrapolatedError: relativeSize(extrapolated - fine.value, extrapolated),
     safetyFactor, gci, gciAbsolute, gciCoarse,
-    asymptoticRatio: gci && gciCoarse !== null ? gciCoarse / ((middle.h / fine.h) ** order * gci) : null,
+    asymptoticRatio: gci === null || gciCoarse === null ? null : relativeSize(gciCoarse, (middle.h / fine.h) ** order * gci),
   };
-}
-
-function fraction(difference: number, of: number): number | null {
-  return of === 0 ? null : Math.abs(difference / of);
 }
