@@ -42,14 +42,18 @@ export function parseNumber(bytes: Buffer, from: number, to: number, allowComma:
   }
   reading.digits = digits;
   reading.status = 'number';
-  if (written === 0 || digits > 16 || mantissa >= largestExact) return convertText(bytes, from, to, allowComma, reading);
+  if (written === 0) return convertText(bytes, from, to, allowComma, reading);
   let power = places > 0 ? -places : 0;
   if (at < to) {
     const exponent = readExponent(bytes, at, to);
     if (exponent === null) return convertText(bytes, from, to, allowComma, reading);
     power += exponent;
   }
-  if (power < -22 || power > 22) return convertText(bytes, from, to, allowComma, reading);
+  if (digits > 16 || mantissa >= largestExact || power < -22 || power > 22) {
+    const value = Number(bytes.toString('latin1', from, to));
+    // Not what the language writes (a comma, a D), or beyond the largest double.
+    return Number.isFinite(value) ? value : convertText(bytes, from, to, allowComma, reading);
+  }
   const size = power < 0 ? mantissa / (exactPowers[-power] as number) : mantissa * (exactPowers[power] as number);
   return sign === 45 ? -size : size;
 }
@@ -71,11 +75,9 @@ function readExponent(bytes: Buffer, start: number, to: number): number | null {
   return sign === 45 ? -exponent : exponent;
 }
 
+/** What is not plainly digits, a mark and an exponent, or not finite: Fortran's spellings, NaN, text. */
 function convertText(bytes: Buffer, from: number, to: number, allowComma: boolean, reading: NumberReading): number {
   const text = bytes.toString('latin1', from, to);
-  const value = Number(text);
-  const isPlain = text !== '' && !Number.isNaN(value) && !/^\s|\s$|[xXbBoO]/.test(text);
-  if (isPlain && Number.isFinite(value)) return value;
   if (decimal.test(text) && (allowComma || !text.includes(','))) {
     const spelled = text.replace(',', '.').replace(/[dDqQ]/, 'e').replace(/(\d\.?)([+-]\d{3})$/, '$1e$2');
     const converted = Number(spelled);

@@ -109,7 +109,8 @@ export function createTableParser({ dialect, wanted, reasons, onBatch }: TablePa
       let at = 0;
       if (carried > 0) {
         const stop = chunk.indexOf(newline);
-        carry.push(stop < 0 ? chunk : chunk.subarray(0, stop));
+        // Copies here and below: the source may use its buffer again.
+        carry.push(Buffer.from(stop < 0 ? chunk : chunk.subarray(0, stop)));
         carried += stop < 0 ? chunk.length : stop;
         checkLength(carried, line, reasons);
         if (stop < 0) return;
@@ -126,7 +127,6 @@ export function createTableParser({ dialect, wanted, reasons, onBatch }: TablePa
       if (at < chunk.length) {
         carried = chunk.length - at;
         checkLength(carried, line, reasons);
-        // A copy: the source may use its buffer again.
         carry.push(Buffer.from(chunk.subarray(at)));
       }
     },

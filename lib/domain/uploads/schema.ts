@@ -2,11 +2,7 @@ import { z } from 'zod';
 import { contract } from '../api/contract';
 import { timestampSchema } from '../api/names';
 import { columnMappingSchema } from '../columns/column-mapping';
-
-export const rejectionReasonSchema = z.strictObject({
-  code: z.string(), count: z.number().int(), line: z.number().int().nullable(), column: z.number().int().nullable(),
-  found: z.string(), expected: z.string(),
-});
+import { rejectionReasonSchema } from './rejection';
 
 export const uploadStateSchema = z.enum(['receiving', 'stored', 'needs-columns', 'reading', 'read', 'rejected']);
 export type UploadState = z.infer<typeof uploadStateSchema>;

@@ -1,0 +1,72 @@
+import type { RejectionReason } from './rejection';
+
+export interface RejectionText {
+  sentence: string;
+  nextStep: string;
+}
+
+/** What is wrong with a file and what to do about it, with the place, the values and the count of one reason. */
+export function describeRejection(reason: RejectionReason): RejectionText {
+  const { sentence, nextStep } = describeCode(reason);
+  const more = reason.count - 1;
+  const others = more > 0 && isCounted(reason) ? ` ${more === 1 ? 'One more place has' : `${more} more places have`} the same.` : '';
+  return { sentence: `${sentence}${others}`, nextStep };
+}
+
+/** Whether the count is of places in the file and not of the names in the sentence. */
+function isCounted({ code }: RejectionReason): boolean {
+  return code !== 'column-missing';
+}
+
+function describeCode(reason: RejectionReason): RejectionText {
+  const found = reason.found ?? 'nothing';
+  const expected = reason.expected ?? 'something else';
+  const place = describePlace(reason);
+  const text = (sentence: string, nextStep: string): RejectionText => ({ sentence, nextStep });
+  switch (reason.code) {
+    case 'empty-file':
+      return text(`The file is empty: ${found}.`, 'Check that the solver had finished writing, and upload the file again.');
+    case 'unsupported-format':
+      return text(`The file is ${found}, which is not read.`, `Write ${expected}.`);
+    case 'binary-content':
+      return text(`The file is not text: it contains ${found}.`, `Write ${expected}.`);
+    case 'damaged-gzip':
+      return text(`The compressed file cannot be unpacked: ${found}.`, 'Test it with gzip -t, compress it anew, and upload it again.');
+    case 'malformed-json':
+      return text(`${place}: found ${found} where the JSON should have ${expected}.`, 'Write the file with a JSON library, or as a text table.');
+    case 'line-too-long':
+      return text(`${place}: ${found}.`, 'Write one row per line.');
+    case 'too-many-values':
+      return text(`The file holds ${found} in the columns that are read.`, `Write ${expected}.`);
+    case 'column-missing':
+      return text(`${place}: ${reason.count === 1 ? 'the column' : 'the columns'} ${expected} ${reason.count === 1 ? 'is' : 'are'} not in the file. Found: ${found}.`,
+        'Name the column in the file, or change the mapping of the case.');
+    case 'duplicate-column':
+      return text(`${place}: expected ${expected}, found several in ${found}.`, 'Give every column a name of its own, or map the full path.');
+    case 'too-few-rows':
+      return text(`The file has ${found}; expected ${expected}.`, 'Check that the solver wrote its values.');
+    case 'short-row':
+      return text(`${place}: the row has ${found}; the file has ${expected}.`, 'The file may have been cut off while it was copied. Upload it again, or write the missing values.');
+    case 'long-row':
+      return text(`${place}: the row has ${found}; the file has ${expected}.`, 'Name every column in the header, or remove what is extra.');
+    case 'column-length':
+      return text(`${place}: the column has ${found}; expected ${expected}.`, 'Give every column one value per row.');
+    case 'missing-value':
+      return text(`${place}: found ${found}; expected ${expected}.`, 'Write a value in every row of the columns that are read.');
+    case 'not-a-number':
+      return text(`${place}: found “${found}”; expected ${expected}.`, 'Correct the value, or leave the row out when it is not part of the solution.');
+    case 'not-finite':
+      return text(`${place}: found ${found}; expected ${expected}.`, 'The run has diverged or divided by zero there. Mend the run, and upload its file again.');
+    case 'mixed-decimal':
+      return text(`${place}: found “${found}”; expected ${expected}. With both marks in one file a number can be read in two ways.`, 'Write all numbers with one decimal mark.');
+    case 'weight-not-positive':
+      return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights.');
+    case 'exact-not-finite':
+      return text(`${place}: the exact solution is ${found}; expected ${expected}.`, 'Check the expression of the problem, its constants and the time of the grid.');
+  }
+}
+
+function describePlace({ line, column }: RejectionReason): string {
+  if (line !== null) return column === null ? `Line ${line}` : `Line ${line}, column ${column}`;
+  return column === null ? 'The file' : `Column ${column}`;
+}

@@ -1,0 +1,33 @@
+import { readColumns } from '@/lib/readers/read-columns';
+import { createReasonCollector } from '@/lib/readers/reason-collector';
+import { RejectedFile } from '@/lib/readers/rejected-file';
+import { byteSource } from './byte-source';
+
+export interface ReadTable { columns: number[][]; lines: (number | null)[]; digits: number[] }
+
+/** Reads whole columns, as nobody but a test should. */
+export async function readTable(content: string | Uint8Array, names: string[], cuts: readonly number[] = []): Promise<ReadTable> {
+  const columns: number[][] = names.map(() => []);
+  const lines: (number | null)[] = [];
+  const reasons = createReasonCollector();
+  const result = await readColumns(byteSource(content, cuts), {
+    columns: names, reasons,
+    onBatch(batch) {
+      for (let i = 0; i < batch.rows; i += 1) lines.push(batch.lines?.[i] ?? null);
+      for (const [slot, column] of batch.columns.entries()) columns[slot]?.push(...column.subarray(0, batch.rows));
+    },
+  });
+  reasons.throwIfAny();
+  return { columns, lines, digits: result.columns.map(({ significantDigits }) => significantDigits) };
+}
+
+/** The reasons for which a file is rejected; empty where it is taken. */
+export async function readReasons(content: string | Uint8Array, names: string[], cuts: readonly number[] = []) {
+  try {
+    await readTable(content, names, cuts);
+    return [];
+  } catch (error) {
+    if (error instanceof RejectedFile) return error.reasons;
+    throw error;
+  }
+}
