@@ -1,5 +1,5 @@
 /** Every error the product answers with: its HTTP status and the title a person reads. */
-const errorTable = {
+export const errorTable = {
   'bad-request': { status: 400, title: 'The request cannot be read' },
   'organisation-needed': { status: 400, title: 'Name the organisation' },
   'not-signed-in': { status: 401, title: 'Not signed in' },

@@ -1,0 +1,55 @@
+import type { Metadata } from 'next';
+import { PublicPage } from '@/app/_components/public/public-page';
+import { Cell, HeadCell, RowHead } from '@/app/_components/tables/cells';
+import { Head, Row, Table } from '@/app/_components/tables/table';
+import { PageTitle } from '@/app/_components/ui/page-title';
+import { Section } from '@/app/_components/ui/section';
+import { errorTable, type ErrorCode } from '@/lib/errors';
+
+export const metadata: Metadata = { title: 'Answers that refuse' };
+
+const wayOn: Record<ErrorCode, string> = {
+  'bad-request': 'Send JSON, and headers and query members in the form the API document gives.',
+  'organisation-needed': 'You belong to several organisations: add ?organisation= with the short name of one.',
+  'not-signed-in': 'Sign in, or send a token that has neither ended nor been withdrawn.',
+  'wrong-credentials': 'Type e-mail and password again.',
+  'not-allowed': 'Your roles, or the token, do not carry this. The answer names what is needed.',
+  'foreign-origin': 'Write from a page of this site; scripts use a token instead of a cookie.',
+  'not-found': 'Check the address. What belongs to others is answered the same way.',
+  'wrong-state': 'Read the study again: its state says what is possible now.',
+  'already-exists': 'Choose another name, or use the one that is there.',
+  'request-in-flight': 'Wait for the first answer; the same key then gives it again.',
+  'stale-revision': 'Read it again, look at what changed, and send the change with the new revision.',
+  'too-large': 'Send the file in parts.',
+  invalid: 'Mend the members named under errors; nothing was changed.',
+  'not-available': 'Leave out the member named under errors.',
+  'key-reused': 'Use a new key for a request with another body.',
+  'revision-needed': 'Send If-Match with the revision you read.',
+  'too-many-requests': 'Wait for the seconds in Retry-After.',
+  unexpected: 'Try again; if it stays, report the number in the answer.',
+  unavailable: 'Try again in a moment; nothing was changed.',
+};
+
+export default function ProblemsPage() {
+  return (
+    <PublicPage title="Answers that refuse">
+      <Section note={<p>Every refusal is a problem document (RFC 9457): type, title, status, detail, and under errors the path and fault of each member concerned.</p>}>
+        <PageTitle under="What the API says when it cannot do what was asked, and the way on.">Answers that refuse</PageTitle>
+        <div className="mt-6">
+          <Table caption="Every kind of refusal, by its type." hideCaption>
+            <Head><tr><HeadCell num>Status</HeadCell><HeadCell afterNumber>Title</HeadCell><HeadCell>Way on</HeadCell></tr></Head>
+            <tbody>
+              {(Object.keys(errorTable) as ErrorCode[]).map((code) => (
+                <Row key={code} id={code} className="target:bg-wash">
+                  <Cell num>{errorTable[code].status}</Cell>
+                  <RowHead className="min-w-44 pl-[14px]">{errorTable[code].title}<code className="block font-mono text-code text-graphite">{code}</code></RowHead>
+                  <Cell className="min-w-60">{wayOn[code]}</Cell>
+                </Row>
+              ))}
+            </tbody>
+          </Table>
+        </div>
+      </Section>
+    </PublicPage>
+  );
+}
