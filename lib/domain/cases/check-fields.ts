@@ -1,0 +1,52 @@
+import type { FieldProblem } from '@/lib/errors';
+import { defaultTolerance } from '@/lib/numerics/outcome/default-tolerance';
+import type { ProblemDefinition } from '../problems/schema';
+import type { DeclaredField, DeclaredNorm } from './definition';
+import { repeated } from './repeated';
+
+/** Fields must be in the exact solution, where the problem has one; where it has none, their errors are typed. */
+export function checkFields(fields: readonly DeclaredField[], problem: ProblemDefinition): FieldProblem[] {
+  const known = Object.keys(problem.exact ?? {});
+  return [
+    ...repeated(fields.map((field) => field.field), (index) => `fields.${index}.field`, 'Field'),
+    ...fields.flatMap((field, index): FieldProblem[] => {
+      const path = `fields.${index}`;
+      const isUnknown = known.length > 0 && !known.includes(field.field);
+      return [
+        ...(isUnknown ? [{ path: `${path}.field`, message: `Found ${field.field}. The problem’s exact solution has ${known.join(', ')}.` }] : []),
+        ...repeated(field.norms.map((norm) => norm.norm), (at) => `${path}.norms.${at}.norm`, 'Norm'),
+        ...checkCounting(field.norms, `${path}.norms`),
+        ...field.norms.flatMap((norm, at) => checkNorm(norm, `${path}.norms.${at}`)),
+      ];
+    }),
+  ];
+}
+
+/** A band of one cell with error h leaves L1 at its order: L1 proves nothing alone. */
+function checkCounting(norms: readonly DeclaredNorm[], path: string): FieldProblem[] {
+  const counting = norms.filter((norm) => norm.counts && (norm.formalOrder !== undefined || norm.derivedOrder !== undefined || norm.expectExact));
+  const lone = norms.findIndex((norm) => norm.norm === 'L1' && counting.includes(norm));
+  if (lone === -1 || counting.some((norm) => norm.norm !== 'L1')) return [];
+  return [{ path: `${path}.${lone}.counts`, message: 'L1 may not count alone. Let L2 or L∞ count beside it.' }];
+}
+
+function checkNorm({ norm, formalOrder, derivedOrder, tolerance }: DeclaredNorm, path: string): FieldProblem[] {
+  const faults: FieldProblem[] = [];
+  if (formalOrder === undefined && derivedOrder !== undefined) {
+    faults.push({ path: `${path}.derivedOrder`, message: 'A derived order stands beside a formal order. State the formal order too.' });
+  }
+  if (formalOrder !== undefined && derivedOrder !== undefined && derivedOrder <= formalOrder) {
+    faults.push({ path: `${path}.derivedOrder`, message: `Found ${derivedOrder}. Expected more than the formal order ${formalOrder}.` });
+  }
+  if (tolerance === undefined) return faults;
+  const judgedOrder = derivedOrder ?? formalOrder;
+  if (judgedOrder === undefined) {
+    faults.push({ path: `${path}.tolerance`, message: 'A tolerance needs a formal order to stand about.' });
+    return faults;
+  }
+  const largest = defaultTolerance(norm === 'Linf' ? 'Linf' : 'L2', judgedOrder);
+  if (tolerance > largest) {
+    faults.push({ path: `${path}.tolerance`, message: `Found ${tolerance}. A case may only tighten the rule, which allows ${Number(largest.toPrecision(12))} here.` });
+  }
+  return faults;
+}

@@ -1,0 +1,45 @@
+import type { NotAvailableYet } from '../api/not-yet';
+import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from './definition';
+
+type Asked = NotAvailableYet | false;
+
+/** The first member that asks for what is not available yet. */
+export function notYetOfCase(definition: CaseDefinition): NotAvailableYet | null {
+  const { fields, quantities, sampling, sourceSampling, boundaryBand } = definition;
+  const asked: Asked[] = [
+    isAveraged(sampling) && { path: 'sampling', what: `Sampling by ${sampling}` },
+    isAveraged(sourceSampling) && { path: 'sourceSampling', what: `Source sampling by ${sourceSampling}` },
+    boundaryBand !== undefined && { path: 'boundaryBand', what: 'A boundary band' },
+    ...fields.flatMap((field, index) => askedByField(field, `fields.${index}`)),
+    ...quantities.flatMap((quantity, index) => askedByQuantity(quantity, `quantities.${index}`)),
+  ];
+  return asked.find((each) => each !== false) ?? null;
+}
+
+function isAveraged(sampling: CaseDefinition['sampling']): boolean {
+  return sampling === 'average' || sampling === 'quadrature';
+}
+
+function askedByField({ compare, datum, norms }: DeclaredField, path: string): Asked[] {
+  return [
+    compare !== undefined && { path: `${path}.compare`, what: 'Comparing with another expression than the field' },
+    datum !== 'none' && { path: `${path}.datum`, what: `Removing the datum (${datum})` },
+    ...norms.flatMap((norm, index) => askedByNorm(norm, `${path}.norms.${index}`)),
+  ];
+}
+
+function askedByNorm({ norm, logFactor, regularity, backing }: DeclaredNorm, path: string): Asked[] {
+  return [
+    (norm === 'H1' || norm === 'energy') && { path: `${path}.norm`, what: `The ${norm} norm` },
+    logFactor !== undefined && { path: `${path}.logFactor`, what: 'A log factor' },
+    regularity !== undefined && { path: `${path}.regularity`, what: 'A regularity' },
+    backing !== undefined && 'scheme' in backing && { path: `${path}.backing.scheme`, what: 'Backing by a scheme' },
+  ];
+}
+
+function askedByQuantity({ procedure, uNumFactor }: DeclaredQuantity, path: string): Asked[] {
+  return [
+    procedure !== 'three-grid' && { path: `${path}.procedure`, what: `The procedure ${procedure}` },
+    uNumFactor !== undefined && { path: `${path}.uNumFactor`, what: 'A factor for u_num' },
+  ];
+}
