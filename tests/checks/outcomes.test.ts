@@ -1,4 +1,6 @@
 import { describe, expect, it } from 'vitest';
+import { explainField } from '@/lib/domain/assessment/reason-text';
+import { stateOutcome } from '@/lib/domain/assessment/state-outcome';
 import type { Norm } from '@/lib/numerics/assessment';
 import { assessSeries } from '@/lib/numerics/assess-series';
 import { errorSeries } from '../support/series';
@@ -20,5 +22,8 @@ describe('assessSeries judges the reference sequences', () => {
     const assessment = assessSeries({ errors: [series], quantities: [] });
     expect(assessment.fields[0]).toMatchObject({ outcome: row.outcome, reasons: [row.reason] });
     expect(assessment).toMatchObject({ outcome: row.outcome, reasons: [row.reason] });
+    // What a reader is told names the numbers and leaves no blank.
+    const told = [stateOutcome(assessment).sentence, ...assessment.fields.flatMap(explainField).map(({ sentence }) => sentence)];
+    for (const sentence of told) expect(sentence).toMatch(/^[^–]*\d[^–]*\.$/);
   });
 });

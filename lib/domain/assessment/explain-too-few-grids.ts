@@ -10,7 +10,7 @@ const floors = { 'round-off': 'round-off', 'known-error': 'no more than 20 times
 /** Why the grids do not suffice: some lie on the floor, the span or the pairs are short, or the case asks for more. */
 export function explainTooFewGrids({ name, used, unused }: FieldFacts, { grids, orders }: FieldAssessment): Explanation {
   const floor = joinWords([...new Set(unused.flatMap((grid) => grid.unusedReason ?? []))].map((reason) => {
-    const labels = unused.filter((grid) => grid.unusedReason === reason).map((grid) => grid.label);
+    const labels = unused.filter((grid) => grid.unusedReason === reason).map((grid) => grid.label).reverse();
     return `${name} is ${floors[reason]} on ${joinWords(labels)}`;
   }));
   const counted = floor

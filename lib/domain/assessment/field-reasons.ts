@@ -55,8 +55,8 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
     sentence: `The orders still climb towards ${formal}: ${before}, then ${last}; the band begins at ${lowest}.`,
     nextStep: addFiner,
   }),
-  'below-formal': ({ last, before, lowest, lastOrder }) => ({
-    sentence: `The last two pairs show orders ${before} and ${last}, below ${lowest}, and are not closing in.`,
+  'below-formal': ({ last, before, lowest, lastOrder, formal, gap, orders }) => ({
+    sentence: `The last two pairs show orders ${before} and ${last}, below ${lowest}; their distance from ${formal} goes from ${gap(orders.at(-2))} to ${gap(orders.at(-1))} and does not close.`,
     nextStep: lastOrder !== null && lastOrder < standsStill
       ? 'The error hardly falls. Compare source term, boundary values, constants, units and time of the run with the exact solution, and state the iterative error.'
       : lowerOrderPart,

@@ -29,7 +29,7 @@ export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
     return {
       sentence: `On grids ${joinWords(triple?.grids ?? [])} the values ${behaviour[triple?.convergence ?? 'unchanged']}${rangeSeen(quantity)}.`,
       nextStep: triple?.convergence === 'unchanged'
-        ? 'Give the values with more digits, or leave grids further apart.'
+        ? 'Give the values with more digits, or take grids further apart.'
         : 'Check iteration and similarity of the grids, then add a finer one.',
     };
   },
@@ -60,14 +60,14 @@ export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
 function explainNoTarget({ name, formalOrder, target, gciAbsolute, unit, orderObserved }: QuantityAssessment): Explanation {
   if (formalOrder !== null && target !== null) {
     return {
-      sentence: `${name} is smaller than ten times its last change, so a GCI in percent of it says nothing; it is ${gciAbsolute === null ? '–' : formatMeasure(gciAbsolute, unit)} in the quantity's unit.`,
+      sentence: `The value of ${name} is smaller than ten times its last change, so a GCI in percent of it says nothing; it is ${gciAbsolute === null ? '–' : formatMeasure(gciAbsolute, unit)} in the quantity's unit.`,
       nextStep: 'Judge the uncertainty in the unit of the quantity, or take a quantity that is not near zero.',
     };
   }
-  const missing = joinWords([...(formalOrder === null ? ['formal order'] : []), ...(target === null ? ['target'] : [])]);
+  const missing = [...(formalOrder === null ? ['formal order'] : []), ...(target === null ? ['target'] : [])];
   return {
-    sentence: `No ${missing} is declared for ${name}, so it is not judged${orderObserved === null ? '' : `; order ${formatOrder(orderObserved)} is observed`}.`,
-    nextStep: `Declare a ${missing} to have it judged.`,
+    sentence: `No ${missing.join(' and no ')} is declared for ${name}, so it is not judged${orderObserved === null ? '' : `; order ${formatOrder(orderObserved)} is observed`}.`,
+    nextStep: `Declare a ${missing.join(' and a ')} to have it judged.`,
   };
 }
 
@@ -86,5 +86,5 @@ function rangeSeen({ halfRange, unit }: QuantityAssessment): string {
 
 function caution(quantity: QuantityAssessment): string {
   const withFormal = gciWithFormalOrder(quantity);
-  return withFormal === null ? '' : ` An order above the formal one shrinks the GCI: with order ${quantity.formalOrder ?? '–'} it would be ${formatPercent(withFormal)}.`;
+  return withFormal === null || formatPercent(withFormal) === percent(quantity.gci) ? '' : ` An order above the formal one shrinks the GCI: with order ${quantity.formalOrder ?? '–'} it would be ${formatPercent(withFormal)}.`;
 }

@@ -6,7 +6,7 @@ import { stateQuantity } from './state-quantity';
 import { stateRatio, type Refinement } from './state-ratio';
 
 /** Reasons under which the ratio of the last errors says nothing, or not the thing that matters. */
-const besideRatio = new Set<string>(['exact', 'exact-not-declared', 'not-exact', 'too-few-grids', 'scatter', 'sampling-not-stated']);
+const besideRatio = new Set<string>(['exact', 'exact-not-declared', 'not-exact', 'too-few-grids', 'scatter', 'errors-rise', 'sampling-not-stated']);
 
 /**
  * The study in one sentence with its numbers: what refining did to the counting norm farthest from its formal order,

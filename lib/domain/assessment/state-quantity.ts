@@ -4,16 +4,20 @@ import { formatOrder } from '../numbers/format-order';
 import { formatPercent } from '../numbers/format-percent';
 import { formatValue } from '../numbers/format-value';
 
+/** A value under ten of its last changes is near zero: its GCI is stated in the unit alone. */
+const largestChange = 0.1;
+
 /**
  * How a quantity converges, in words: order, extrapolated value and GCI of the finest grid. Half the range where there is
  * no order. Null where too little is known for a sentence of its own.
  */
 export function stateQuantity(quantity: QuantityAssessment): string | null {
-  const { convergence, orderUsed, extrapolated, gci, gciAbsolute, halfRange, unit, branch } = quantity;
+  const { convergence, orderUsed, extrapolated, gci, gciAbsolute, halfRange, relativeChange, unit, branch } = quantity;
   const values = `The values of ${quantity.name}`;
   if (orderUsed !== null && extrapolated !== null && gciAbsolute !== null) {
     const towards = `${formatValue(extrapolated, gciAbsolute, 1)}${unit ? ` ${unit}` : ''}`;
-    const index = gci === null ? formatMeasure(gciAbsolute, unit) : formatPercent(gci);
+    const isNearZero = relativeChange === null || relativeChange > largestChange;
+    const index = gci === null || isNearZero ? formatMeasure(gciAbsolute, unit) : formatPercent(gci);
     const how = branch === 'observed'
       ? `${values} converge monotonically with order ${formatOrder(orderUsed)} towards ${towards}.`
       : `Two grids show no order; with the formal order ${orderUsed} ${values.replace('The', 'the')} head for ${towards}.`;

@@ -19,7 +19,7 @@ export function stateRatio(field: FieldAssessment, refinement: Refinement): stri
   const [coarse, fine] = [errorOn(pair?.coarse), errorOn(pair?.fine)];
   if (!pair || !coarse || !fine) return null;
   const isHalving = Math.abs(pair.ratio - 2) <= halving;
-  const refining = isHalving ? `Halving ${spacingWords[refinement]}` : `Dividing ${spacingWords[refinement]} by ${formatRatio(pair.ratio)}`;
+  const refining = isHalving ? `Halving ${spacingWords[refinement]}` : `Refining ${spacingWords[refinement]} by a ratio of ${formatRatio(pair.ratio)}`;
   const change = coarse / fine;
   const verb = change >= 0.995 ? 'divides' : 'multiplies';
   const seen = `${refining} ${verb} ${nameErrors(field)} by ${formatRatio(change >= 0.995 ? change : 1 / change)}`;
