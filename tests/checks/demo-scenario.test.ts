@@ -16,15 +16,16 @@ interface Read { label: string; h: number; norms: GridNorms | null; values: Reco
 async function readStudy(theCase: ScenarioCase, study: ScenarioStudy, problem: ReturnType<typeof createProblemSchema.parse>): Promise<Read[]> {
   const definition = createCaseSchema.parse({ code: 'brack', ...theCase.definition });
   const fields = definition.fields.map(({ field }) => field);
-  return Promise.all(study.grids.map(async ({ label, cells, cellsPerDirection, run }) => {
+  return Promise.all(study.grids.map(async (grid) => {
+    const { label, cells, cellsPerDirection } = grid;
     const h = 1 / Number(cells ?? cellsPerDirection);
-    const output = run();
-    if ('values' in output) return { label, h, norms: null, values: output.values };
-    const header = output.file.slice(0, output.file.indexOf('\n')).split(',');
+    if ('runToValues' in grid) return { label, h, norms: null, values: grid.runToValues() };
+    const file = grid.runToFile();
+    const header = file.slice(0, file.indexOf('\n')).split(',');
     const mapping = definition.columns ?? matchColumns(header, { dimension: problem.dimension, fields }).mapping;
     if (mapping === null) throw new Error(`${definition.slug}: the columns ${header.join(', ')} do not map themselves`);
     const reading = { mapping, problem: { dimension: problem.dimension, exact: problem.exact ?? {}, constants: problem.constants }, fields: definition.fields };
-    const { norms } = await readGrid(Readable.from([Buffer.from(output.file)]), reading);
+    const { norms } = await readGrid(Readable.from([Buffer.from(file)]), reading);
     return { label, h, norms, values: {} };
   }));
 }
