@@ -70,16 +70,25 @@ export function stopRunning() {
   return Promise.all([...running].map((child) => stopChild(child, 'SIGTERM', 5000)));
 }
 
-/** The moment a process began, in the kernel's ticks: with the id it names one process for good. @param {number} pid */
-export function beginningOf(pid) {
+/** State, parent and beginning of a process, as the kernel tells them. @param {number} pid */
+function statOf(pid) {
   try {
     const stat = fs.readFileSync(`/proc/${pid}/stat`, 'utf8');
     const fields = stat.slice(stat.lastIndexOf(')') + 2).split(' ');
-    return fields[0] === 'Z' ? null : (fields[19] ?? null);
+    return { isZombie: fields[0] === 'Z', parent: Number(fields[1]), beginning: fields[19] ?? null };
   } catch {
     return null;
   }
 }
+
+/** The moment a process began, in the kernel's ticks: with the id it names one process for good. @param {number} pid */
+export function beginningOf(pid) {
+  const stat = statOf(pid);
+  return stat === null || stat.isZombie ? null : stat.beginning;
+}
+
+/** @param {number} pid @returns {number | null} */
+export const parentOf = (pid) => statOf(pid)?.parent ?? null;
 
 /** @param {number} milliseconds */
 export const pause = (milliseconds) => new Promise((resolve) => setTimeout(resolve, milliseconds));
