@@ -2,8 +2,10 @@ import { Readable } from 'node:stream';
 import { describe, expect, it } from 'vitest';
 import { scenarios } from '@/fixtures/demo/scenario';
 import type { ScenarioCase, ScenarioStudy } from '@/fixtures/demo/scenario-types';
+import { checkCase } from '@/lib/domain/cases/check-case';
 import { matchColumns } from '@/lib/domain/columns/match-columns';
 import { createCaseSchema } from '@/lib/domain/cases/schema';
+import { checkProblem } from '@/lib/domain/problems/check-problem';
 import { createProblemSchema } from '@/lib/domain/problems/schema';
 import { builtInRule } from '@/lib/domain/rules/built-in-rule';
 import { assessSeries } from '@/lib/numerics/assess-series';
@@ -62,6 +64,11 @@ describe('the demo: what the solvers wrote comes out as the scenario says', () =
   it.each(studies)('$title is $study.expected.outcome', { timeout: 30_000 }, async ({ theCase, study, problem }) => {
     const { outcome, reasons } = assess(theCase, await readStudy(theCase, study, problem));
     expect({ outcome, reasons }).toEqual(study.expected);
+  });
+
+  it.each(studies)('$title stands on a problem and a case the product takes', ({ theCase, problem }) => {
+    const definition = createCaseSchema.parse({ code: 'brack', ...theCase.definition });
+    expect([...checkProblem(problem), ...checkCase(definition, problem, definition.kind)]).toEqual([]);
   });
 
   it('has passing, failing and inconclusive studies, and a case that got worse', () => {
