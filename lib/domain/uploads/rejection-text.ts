@@ -32,6 +32,8 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`The file is not text: it contains ${found}.`, `Write ${expected}.`);
     case 'damaged-gzip':
       return text(`The compressed file cannot be unpacked: ${found}.`, 'Test it with gzip -t, compress it anew, and upload it again.');
+    case 'checksum-differs':
+      return text(`The bytes that arrived have the SHA-256 ${found}; announced was ${expected}.`, 'The file changed on its way. Upload it again.');
     case 'malformed-json':
       return text(`${place}: found ${found} where the JSON should have ${expected}.`, 'Write the file with a JSON library, or as a text table.');
     case 'line-too-long':
@@ -63,6 +65,8 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights.');
     case 'exact-not-finite':
       return text(`${place}: the exact solution is ${found}; expected ${expected}.`, 'Check the expression of the problem, its constants and the time of the grid.');
+    case 'checksum-differs':
+      return text(`The file arrived with SHA-256 ${found}; ${expected} was stated.`, 'It was changed or damaged on its way. Upload it again.');
   }
 }
 

@@ -1,11 +1,11 @@
 const twoOverRootPi = 2 / Math.sqrt(Math.PI);
-const seriesEnd = 2.25;
-const continuedFractionTerms = 60;
+const seriesEnd = 1.5;
+const seriesTerms = 34;
 
 /**
- * The error function 2/√π ∫₀ˣ exp(−s²) ds, to double precision for every x.
+ * The error function 2/√π ∫₀ˣ exp(−s²) ds, for every x to 6e-16 of its value.
  *
- * Below 2.25 the series exp(−x²)·2/√π·Σ 2ⁿx²ⁿ⁺¹/(1·3·…·(2n+1)), whose terms are all of one sign (Abramowitz and
+ * Below 1.5 the series exp(−x²)·2/√π·Σ 2ⁿx²ⁿ⁺¹/(1·3·…·(2n+1)), whose terms are all of one sign (Abramowitz and
  * Stegun, Handbook of Mathematical Functions, 7.1.6); above, one minus the continued fraction of erfc (7.1.14).
  * Not a number where x is not a number.
  */
@@ -17,20 +17,18 @@ export function erf(x: number): number {
   return Math.sign(x) * (1 - complement(size));
 }
 
+/** From the smallest term inwards, so that roundings shrink on the way. */
 function series(x: number): number {
   const square = x * x;
-  let term = x;
-  let sum = x;
-  for (let n = 1; Math.abs(term) > 1e-18 * Math.abs(sum); n += 1) {
-    term *= (2 * square) / (2 * n + 1);
-    sum += term;
-  }
-  return twoOverRootPi * gauss(x) * sum;
+  let sum = 1;
+  for (let n = seriesTerms; n >= 1; n -= 1) sum = 1 + (sum * 2 * square) / (2 * n + 1);
+  return twoOverRootPi * gauss(x) * x * sum;
 }
 
 function complement(x: number): number {
+  // Enough for 17 digits: 100 terms at 1.5, ever fewer above (found by trial against 30 digits).
   let tail = x;
-  for (let n = continuedFractionTerms; n >= 1; n -= 1) tail = x + n / 2 / tail;
+  for (let n = Math.ceil(20 + 180 / (x * x)); n >= 1; n -= 1) tail = x + n / 2 / tail;
   return gauss(x) / (Math.sqrt(Math.PI) * tail);
 }
 

@@ -1,0 +1,36 @@
+import { describe, expect, it } from 'vitest';
+import { columnMappingSchema } from '@/lib/domain/columns/column-mapping';
+import { matchColumns } from '@/lib/domain/columns/match-columns';
+
+describe('matchColumns(header, needs)', () => {
+  it('maps names that match by themselves', () => {
+    const { mapping, missing } = matchColumns(['x', 'y', 'vol', 'T', 'dx'], { dimension: 2, fields: ['T'] });
+    expect(missing).toEqual([]);
+    expect(mapping).toEqual({ x: 'x', y: 'y', weight: 'vol', dx: 'dx', fields: { T: 'T' } });
+    expect(columnMappingSchema.parse(mapping)).toEqual(mapping);
+  });
+
+  it.each(['w', 'weight', 'vol', 'volume', 'area'])('takes the weight from %s', (name) => {
+    expect(matchColumns(['x', name, 'u'], { dimension: 1, fields: ['u'] }).mapping?.weight).toBe(name);
+  });
+
+  it('tells t from T', () => {
+    expect(matchColumns(['x', 't', 'w'], { dimension: 1, fields: ['T'] })).toMatchObject({ mapping: null, missing: ['T'], found: { t: 't' } });
+  });
+
+  it('says what is missing, equal weights never being assumed', () => {
+    expect(matchColumns(['X', 'u'], { dimension: 2, fields: ['u', 'v'] })).toEqual({ found: { fields: { u: 'u' } }, missing: ['v', 'x', 'y', 'weight'], mapping: null });
+  });
+
+  it('leaves the choice where two columns could be the weight, and w to a field of that name', () => {
+    expect(matchColumns(['x', 'w', 'vol', 'u'], { dimension: 1, fields: ['u'] }).missing).toEqual(['weight']);
+    expect(matchColumns(['x', 'w', 'vol', 'u'], { dimension: 1, fields: ['u', 'w'] }).mapping).toMatchObject({ weight: 'vol', fields: { u: 'u', w: 'w' } });
+  });
+
+  it('takes the last part of a path where it is unique', () => {
+    const { mapping } = matchColumns(['mesh/x', 'mesh/vol', 'flow.u'], { dimension: 1, fields: ['u'] });
+    expect(mapping).toEqual({ x: 'mesh/x', weight: 'mesh/vol', fields: { u: 'flow.u' } });
+    expect(matchColumns(['x', 'w', 'a/u', 'b/u'], { dimension: 1, fields: ['u'] }).missing).toEqual(['u']);
+    expect(matchColumns(['x', 'w', 'u', 'b/u'], { dimension: 1, fields: ['u'] }).mapping?.fields).toEqual({ u: 'u' });
+  });
+});
