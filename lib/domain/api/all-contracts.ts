@@ -1,0 +1,32 @@
+import { assessContract } from '../assessment/quick-schema';
+import { createCaseContract, getCaseContract, listCasesContract, putColumnsContract, updateCaseContract } from '../cases/schema';
+import {
+  createCodeContract, createReleaseContract, getCodeContract, listCodesContract, listReleasesContract, updateReleaseContract,
+} from '../codes/schema';
+import { getMatrixContract } from '../matrix/schema';
+import { meContract, signInContract, signOutContract, signUpContract } from '../people/schema';
+import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '../problems/schema';
+import {
+  addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
+  getStudyContract, listStudiesContract, reviseStudyContract, updateGridContract,
+} from '../studies/schema';
+import { createTokenContract, deleteTokenContract, listTokensContract } from '../tokens/schema';
+import {
+  completeUploadContract, deleteUploadContract, getUploadContract, previewContract, putDataContract, signPartsContract, startUploadContract,
+} from '../uploads/schema';
+import type { ContractShape } from './contract';
+import { healthContract, openApiContract, readyContract } from './service-schema';
+
+/** Every call there is, in the order they are told. */
+export const allContracts: readonly ContractShape[] = [
+  signUpContract, signInContract, signOutContract, meContract,
+  createTokenContract, listTokensContract, deleteTokenContract,
+  createCodeContract, listCodesContract, getCodeContract,
+  createReleaseContract, listReleasesContract, updateReleaseContract, getMatrixContract,
+  createProblemContract, listProblemsContract, getProblemContract, updateProblemContract,
+  createCaseContract, listCasesContract, getCaseContract, updateCaseContract, putColumnsContract,
+  createStudyContract, listStudiesContract, getStudyContract, addGridContract, updateGridContract, reviseStudyContract, assessStudyContract,
+  getOutcomeContract, getOutcomeXmlContract, getEventsContract, getGridResultContract,
+  putDataContract, startUploadContract, signPartsContract, completeUploadContract, getUploadContract, deleteUploadContract, previewContract,
+  assessContract, healthContract, readyContract, openApiContract,
+];
