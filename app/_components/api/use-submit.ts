@@ -1,28 +1,34 @@
 'use client';
 
-import { useState } from 'react';
+import { useState, type BaseSyntheticEvent } from 'react';
 import type { FieldPath, FieldValues, UseFormReturn } from 'react-hook-form';
 import type { FieldProblem } from '@/lib/errors';
 import { ApiProblem } from './api-problem';
 
-interface SubmitProblem { title: string; detail: string; errors: FieldProblem[] }
+interface SubmitProblem { title: string; status: number; detail: string; errors: FieldProblem[] }
 
-const unreachable: SubmitProblem = { title: 'Not sent', detail: 'The server did not answer. What you typed is still here; try again in a moment.', errors: [] };
+export interface Submit { onSubmit: (event?: BaseSyntheticEvent) => Promise<void>; problem: SubmitProblem | null }
+
+const unreachable: SubmitProblem = { title: 'Not sent', status: 0, detail: 'The server did not answer. What you typed is still here; try again in a moment.', errors: [] };
+
+function hasField(values: unknown, path: string): boolean {
+  const [head = '', ...rest] = path.split('.');
+  if (typeof values !== 'object' || values === null || !(head in values)) return false;
+  return rest.length === 0 || hasField((values as Record<string, unknown>)[head], rest.join('.'));
+}
 
 interface SubmitOptions<Input extends FieldValues, Typed, Answer> {
   form: UseFormReturn<Input, unknown, Typed>;
   send: (typed: Typed) => Promise<Answer>;
   onDone: (answer: Answer) => void;
-  /** The paths that have a field to show a fault at. */
-  fields: readonly string[];
   /** The field of a path of the API, where they are not the same. */
   fieldOf?: (path: string) => string;
 }
 
 /** Sends a form; what the server refuses stands at its field, or above all fields where it has none. */
-export function useSubmit<Input extends FieldValues, Typed, Answer>({ form, send, onDone, fields, fieldOf = (path) => path }: SubmitOptions<Input, Typed, Answer>) {
+export function useSubmit<Input extends FieldValues, Typed, Answer>({ form, send, onDone, fieldOf = (path) => path }: SubmitOptions<Input, Typed, Answer>): Submit {
   const [problem, setProblem] = useState<SubmitProblem | null>(null);
-  const isAtField = ({ path }: FieldProblem) => fields.includes(fieldOf(path));
+  const isAtField = ({ path }: FieldProblem) => hasField(form.getValues(), fieldOf(path));
 
   const showProblem = (refused: SubmitProblem) => {
     const atFields = refused.errors.filter(isAtField);

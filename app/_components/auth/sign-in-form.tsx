@@ -16,7 +16,7 @@ export function SignInForm({ next }: { next: string | null }) {
   const form = useForm({ resolver: zodResolver(signInSchema), defaultValues: { email: '', password: '' } });
   const { errors, isSubmitting } = form.formState;
   const { onSubmit, problem } = useSubmit({
-    form, fields: ['email', 'password'],
+    form,
     send: (typed) => callApi(signInContract, { body: typed }),
     onDone: (me) => window.location.assign(arrivalAddress(me, next)),
   });

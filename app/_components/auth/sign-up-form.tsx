@@ -16,7 +16,7 @@ export function SignUpForm() {
   const form = useForm({ resolver: zodResolver(signUpSchema), mode: 'onTouched', defaultValues: { email: '', password: '', organisation: '' } });
   const { errors, isSubmitting } = form.formState;
   const { onSubmit, problem } = useSubmit({
-    form, fields: ['email', 'password', 'organisation'],
+    form,
     send: (typed) => callApi(signUpContract, { body: typed }),
     onDone: (me) => window.location.assign(arrivalAddress(me, null)),
   });

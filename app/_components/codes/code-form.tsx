@@ -19,10 +19,10 @@ export function CodeForm() {
   const { slug } = useOrganisation();
   const router = useRouter();
   const queries = useQueryClient();
-  const form = useForm({ resolver: zodResolver(createCodeSchema), mode: 'onTouched', defaultValues: { name: '' } });
+  const form = useForm({ resolver: zodResolver(createCodeSchema), mode: 'onTouched', defaultValues: { name: '', slug: undefined } });
   const { errors, isSubmitting } = form.formState;
   const { onSubmit, problem } = useSubmit({
-    form, fields: ['name', 'slug'],
+    form,
     send: (typed) => callApi(createCodeContract, { organisation: slug, body: typed }),
     onDone: (code) => {
       void queries.invalidateQueries({ queryKey: apiKey(listCodesContract) });

@@ -18,10 +18,10 @@ import { Button } from '../ui/button';
 export function ReleaseForm({ code }: { code: string }) {
   const { slug } = useOrganisation();
   const queries = useQueryClient();
-  const form = useForm({ resolver: zodResolver(createReleaseSchema), mode: 'onTouched', defaultValues: { version: '' } });
+  const form = useForm({ resolver: zodResolver(createReleaseSchema), mode: 'onTouched', defaultValues: { version: '', commit: undefined } });
   const { errors, isSubmitting, isSubmitSuccessful } = form.formState;
   const { onSubmit, problem } = useSubmit({
-    form, fields: ['version', 'commit'],
+    form,
     send: (typed) => callApi(createReleaseContract, { organisation: slug, params: { code }, body: typed }),
     onDone: () => {
       form.reset({ version: '', commit: '' }, { keepIsSubmitSuccessful: true });

@@ -1,0 +1,43 @@
+'use client';
+
+import { useQueryClient } from '@tanstack/react-query';
+import { useForm } from 'react-hook-form';
+import { getProblemContract, listProblemsContract, updateProblemContract, type Problem } from '@/lib/domain/problems/schema';
+import { apiKey } from '../api/api-key';
+import { callApi } from '../api/call-api';
+import { useSubmit } from '../api/use-submit';
+import { checkedResolver } from '../forms/checked-resolver';
+import { useOrganisation } from '../organisation/organisation-context';
+import { Button } from '../ui/button';
+import { PageTitle } from '../ui/page-title';
+import { Section } from '../ui/section';
+import { ProblemForm } from './problem-form';
+import { checkProblemValues, problemField, valuesOfProblem } from './problem-values';
+
+/** Changing a problem makes a new revision; studies keep the one they ran with. */
+export function ProblemEdit({ problem, onClose }: { problem: Problem; onClose: () => void }) {
+  const { slug } = useOrganisation();
+  const queries = useQueryClient();
+  const form = useForm({ resolver: checkedResolver(checkProblemValues, problemField), mode: 'onTouched', defaultValues: valuesOfProblem(problem) });
+  const refresh = () => Promise.all([
+    queries.invalidateQueries({ queryKey: apiKey(getProblemContract) }), queries.invalidateQueries({ queryKey: apiKey(listProblemsContract) }),
+  ]);
+  const submit = useSubmit({
+    form, fieldOf: (path) => problemField(path, form.getValues()),
+    send: ({ slug: ownSlug, ...changes }) => callApi(updateProblemContract, { organisation: slug, params: { problem: ownSlug ?? problem.slug }, revision: problem.revision, body: changes }),
+    onDone: () => { void refresh().then(onClose); },
+  });
+  const isStale = submit.problem?.status === 412;
+  return (
+    <>
+      <Section note={<p>Saving makes <b>revision {problem.revision + 1}</b>. Studies stay with the revision they ran with.</p>}>
+        <PageTitle>{problem.name}</PageTitle>
+      </Section>
+      <ProblemForm
+        form={form} submit={submit} isNew={false} action="Save as a new revision"
+        others={<Button onClick={onClose}>Leave it as it was</Button>}
+        wayOn={isStale ? <Button onClick={() => void refresh()}>Show the revision that is there now</Button> : undefined}
+      />
+    </>
+  );
+}
