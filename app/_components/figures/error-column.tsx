@@ -28,11 +28,14 @@ export function ErrorColumn({ field, layout, scales, isFirst, readH, onPoint }: 
     <div className="relative">
       <PlotCanvas drawing={errors} onPoint={onPoint} />
       <PlotCanvas drawing={orders} onPoint={onPoint} />
-      <div
-        aria-hidden
-        className="pointer-events-none absolute w-px bg-graphite opacity-60 print:hidden"
-        style={{ left: Math.floor(left), top: box.top, height: errors.height - box.top + orders.box.top + orders.box.height }}
-      />
+      {[{ top: box.top, height: box.height }, { top: errors.height + orders.box.top, height: orders.box.height }].map((span) => (
+        <div
+          key={span.top}
+          aria-hidden
+          className="pointer-events-none absolute w-px bg-graphite opacity-60 print:hidden"
+          style={{ left: Math.floor(left), ...span }}
+        />
+      ))}
     </div>
   );
 }

@@ -53,7 +53,7 @@ export function ErrorFigure({ fields: assessments, number = 1, caption = usualCa
   };
   const norms = [...new Set(fields.flatMap((field) => field.norms.map(({ norm }) => norm)))];
   return (
-    <figure>
+    <figure className="figure-block">
       {fields.length > 1 && (
         <div className="figure-stage">
           <FieldSwitch fields={fields.map(({ field }) => field)} shown={shown.field} onShow={setShownField} onlyNarrow={fields.length <= mostColumns} />

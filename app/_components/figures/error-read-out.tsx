@@ -27,10 +27,10 @@ export function ErrorReadOut({ fields, grid }: { fields: readonly FigureField[];
   const first = fields[0];
   const orders = fields.length === 1 && first ? errorsAt(first, grid.label).filter(({ order }) => order !== null) : [];
   return (
-    <p className="mt-1 min-h-5 text-note text-graphite">
-      Grid {grid.label}, <Sym>h</Sym> {spacingLabel(grid.h)}:
+    <p className="mt-1 flex min-h-5 flex-wrap gap-x-3 text-note text-graphite">
+      <span>Grid {grid.label}, <Sym>h</Sym> {spacingLabel(grid.h)}:</span>
       {fields.map((field) => (
-        <span key={field.field} className="ml-3 inline-block">
+        <span key={field.field}>
           <Sym>{field.field}</Sym>
           {errorsAt(field, grid.label).map(({ norm, error, used }) => (
             <Fragment key={norm}>
@@ -40,7 +40,7 @@ export function ErrorReadOut({ fields, grid }: { fields: readonly FigureField[];
         </span>
       ))}
       {orders.length > 0 && (
-        <span className="ml-3 inline-block">
+        <span>
           order <span className="text-ink">{orders.map(({ order }) => formatOrder(order ?? 0)).join(', ')}</span>
         </span>
       )}

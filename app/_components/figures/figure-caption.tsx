@@ -14,7 +14,7 @@ export function FigureCaption({ number, children, pointKey, numbersId, areNumber
   return (
     <figcaption className="mt-3 font-serif text-caption">
       <b>Figure {number}.</b> {children} {pointKey}{' '}
-      <TextButton aria-expanded={areNumbersShown} aria-controls={numbersId} onClick={onToggleNumbers} className="screen-only ml-1 font-sans max-tablet:min-h-11">
+      <TextButton aria-expanded={areNumbersShown} aria-controls={numbersId} onClick={onToggleNumbers} className="screen-only ml-1 font-sans max-tablet:-my-3 max-tablet:py-3">
         Numbers
       </TextButton>
     </figcaption>

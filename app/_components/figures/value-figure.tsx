@@ -6,6 +6,7 @@ import { spacingLabel } from '@/lib/figures/spacing-label';
 import { uncertaintyBars } from '@/lib/figures/value-figure/uncertainty-bars';
 import { valuePanel, valueRoom } from '@/lib/figures/value-figure/value-panel';
 import type { QuantityAssessment } from '@/lib/numerics/assessment';
+import { FormulaText } from '../ui/formula-text';
 import { FigureCaption } from './figure-caption';
 import { FigureStage } from './figure-stage';
 import { PlotCanvas } from './plot-canvas';
@@ -43,7 +44,7 @@ export function ValueFigure({ quantity, number = 1, caption = usualCaption(quant
     setPlace(values.reduce((best, _, at) => (far(at) < far(best) ? at : best), 0));
   };
   return (
-    <figure>
+    <figure className="figure-block">
       <FigureStage
         ref={stageRef}
         name={`Figure ${number}, grid read out`}
@@ -63,7 +64,7 @@ export function ValueFigure({ quantity, number = 1, caption = usualCaption(quant
       >
         {caption}
       </FigureCaption>
-      <p className="mt-1 min-h-5 text-note text-graphite">{words}</p>
+      <p className="mt-1 min-h-5 text-note text-graphite"><FormulaText text={words} symbols={['h']} /></p>
       <div id={numbersId} hidden={!areNumbersShown}>{areNumbersShown && <ValueNumbers number={number} quantity={quantity} />}</div>
     </figure>
   );

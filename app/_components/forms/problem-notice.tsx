@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { Notice } from '../ui/notice';
 
 /** An answer of the API that refused something, as RFC 9457 shapes it. */
-export interface ProblemAnswer {
+interface ProblemAnswer {
   title: string;
   detail?: string;
   errors?: readonly { path: string; message: string }[];

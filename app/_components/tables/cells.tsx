@@ -22,7 +22,7 @@ export function HeadCell({ num, afterNumber, ofGroup, className = '', scope, chi
     <th
       {...cell}
       scope={scope ?? (ofGroup ? 'colgroup' : 'col')}
-      className={`${sides} pt-2 pb-1.5 align-bottom font-normal ${num ? 'text-right' : 'text-left'} ${afterNumber || ofGroup ? 'pl-[14px]' : ''} ${className}`}
+      className={`${sides} pt-1.5 align-bottom font-normal ${ofGroup ? 'pb-0' : 'pb-1.5'} ${num ? 'text-right' : 'text-left'} ${afterNumber || ofGroup ? 'pl-[14px]' : ''} ${className}`}
     >
       {ofGroup ? <span className="block border-b border-hairline pb-1">{children}</span> : children}
     </th>
@@ -31,6 +31,8 @@ export function HeadCell({ num, afterNumber, ofGroup, className = '', scope, chi
 
 /** The name that a row is about. */
 export function RowHead({ className = '', ...cell }: ComponentProps<'th'>) {
+  // A head without text is announced as an empty one; where the row above already named the group it is a plain cell.
+  if (cell.children === undefined || cell.children === null) return <td />;
   return <th scope="row" {...cell} className={`${sides} pt-1 pb-[3px] text-left align-baseline font-normal ${className}`} />;
 }
 

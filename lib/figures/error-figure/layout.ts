@@ -1,14 +1,14 @@
 /** Distances of an error figure in pixels; the figure is drawn at the width it has, its text never scaled. */
-export interface FigureMetrics { left: number; gap: number; top: number; between: number; order: number; foot: number }
+interface FigureMetrics { left: number; gap: number; top: number; between: number; order: number; foot: number }
 
 const wideMetrics: FigureMetrics = { left: 58, gap: 34, top: 46, between: 34, order: 148, foot: 32 };
 const narrowMetrics: FigureMetrics = { left: 50, gap: 34, top: 46, between: 34, order: 128, foot: 46 };
 
 /** Below this width one field is shown at a time. */
-export const narrowBelow = 652;
+const narrowBelow = 652;
 export const mostColumns = 3;
 /** A panel on its own would grow past the height of a screen. */
-export const widestPanel = 520;
+const widestPanel = 520;
 
 export interface ErrorFigureLayout {
   isNarrow: boolean;

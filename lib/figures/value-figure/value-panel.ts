@@ -12,6 +12,8 @@ import { uncertaintyBars } from './uncertainty-bars';
 const metrics = { left: 62, right: 8, top: 30, foot: 46 };
 const nameRoom = 40;
 const curveSteps = 60;
+const roomAtEnds = 0.08;
+const roomForName = 0.2;
 
 /** Height of the panel in pixels for a width: a little over half, within what reads well. */
 function valuePanelHeight(width: number): number {
@@ -21,10 +23,10 @@ function valuePanelHeight(width: number): number {
 /** The same height as a CSS length of a size container, to keep free before the width is known. */
 export const valueRoom = `calc(${metrics.top + metrics.foot}px + clamp(170px, (100cqw - ${metrics.left + metrics.right}px) * 0.52, 300px))`;
 
-function valueRange(values: readonly number[]): { from: number; to: number } {
+function valueRange(values: readonly number[], nameSide: 'below' | 'above' | null): { from: number; to: number } {
   const [low, high] = [Math.min(...values), Math.max(...values)];
-  const room = high > low ? (high - low) * 0.08 : Math.max(Math.abs(high) * 0.1, 1e-12);
-  return { from: low - room, to: high + room };
+  const span = high > low ? high - low : Math.max(Math.abs(high) * 0.5, 1e-12);
+  return { from: low - span * (nameSide === 'below' ? roomForName : roomAtEnds), to: high + span * (nameSide === 'above' ? roomForName : roomAtEnds) };
 }
 
 /** A quantity against spacing, linear from h = 0, with its extrapolated value, the index as bars and the curve between. */
@@ -36,7 +38,10 @@ export function valuePanel(quantity: QuantityAssessment, width: number): PanelDr
   const curve = extrapolationCurve(quantity);
   const bars = uncertaintyBars(quantity);
   const shown = [...values.map(({ value }) => value), ...bars.flatMap(({ value, half }) => [value - half, value + half])];
-  const range = valueRange(extrapolated === null ? shown : [...shown, extrapolated]);
+  // The name of the extrapolated value stands on the side that the curve turns away from, clear of points and bars.
+  const nameSide = extrapolated === null ? null : (values[0]?.value ?? extrapolated) >= extrapolated ? 'below' : 'above';
+  const all = extrapolated === null ? shown : [...shown, extrapolated];
+  const range = valueRange(all, nameSide);
   const end = coarsest * 1.1;
   const x = linearMap(0, end, box.left, right);
   const y = linearMap(range.from, range.to, foot, box.top);
@@ -63,7 +68,7 @@ export function valuePanel(quantity: QuantityAssessment, width: number): PanelDr
     { kind: 'path', path: diamond, at: [x(0), y(extrapolated)], stroke: 'paper', width: 4 },
     { kind: 'path', path: diamond, at: [x(0), y(extrapolated)], fill: 'paper', stroke: 'ink', width: 1.5 },
     {
-      kind: 'text', x: x(0) + 12, y: limitNameHeight(y(extrapolated), box.top, foot), anchor: 'start', ink: 'ink',
+      kind: 'text', x: x(0) + 12, y: nameSide === 'below' ? Math.max(y(extrapolated) + 19, y(Math.min(...all)) + 16) : Math.min(y(extrapolated) - 11, y(Math.max(...all)) - 8), anchor: 'start', ink: 'ink',
       runs: [{ text: 'extrapolated ', face: 'sans' }, ...axisNumber(extrapolated, decimals + 1)],
     },
   ];
@@ -90,5 +95,3 @@ export function valuePanel(quantity: QuantityAssessment, width: number): PanelDr
     ],
   };
 }
-
-const limitNameHeight = (at: number, top: number, foot: number) => (at + 24 < foot ? at + 19 : Math.max(top + 12, at - 11));
