@@ -3,7 +3,7 @@ import type { ColumnPlan } from './plan-columns';
 import type { FoundProblem } from './reason-collector';
 
 interface Place { line: number | null; point: string }
-export interface BatchPlaces {
+interface BatchPlaces {
   /** Rows gathered before this batch. */
   before: number;
   lines: Float64Array | null;

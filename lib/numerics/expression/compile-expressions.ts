@@ -13,7 +13,7 @@ export interface ExpressionSet {
   variables: readonly Variable[];
 }
 
-export interface ExpressionError {
+interface ExpressionError {
   /** The constant, field or comparison it stands in. */
   name: string;
   /** The character, counted from 1. */
@@ -21,7 +21,7 @@ export interface ExpressionError {
   message: string;
 }
 
-export interface CompiledExpressions {
+interface CompiledExpressions {
   graph: Graph;
   variables: readonly Variable[];
   /** Null prototype: any field name is a plain key. */

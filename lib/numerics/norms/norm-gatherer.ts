@@ -2,7 +2,7 @@ import type { Position } from '../assessment';
 import { createCompensatedSum, type CompensatedSum } from './compensated-sum';
 import type { FieldNorms, GridNorms } from './grid-norms';
 
-export interface NormBlock {
+interface NormBlock {
   rows: number;
   x: Float64Array;
   y: Float64Array | null;
