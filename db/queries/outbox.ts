@@ -1,6 +1,42 @@
-import type { Insertable, Kysely } from 'kysely';
+import { sql, type Insertable, type Kysely, type Selectable, type Updateable } from 'kysely';
 import type { DB, Outbox } from '../schema.generated';
+
+export type OutboxRow = Selectable<Outbox>;
 
 export function insertOutboxRow(db: Kysely<DB>, row: Insertable<Outbox>) {
   return db.insertInto('outbox').values(row).execute();
+}
+
+/** Rows that want to be queued and are due, held until the transaction ends; what another process holds is passed over. */
+export function lockWaitingOutboxRows(db: Kysely<DB>, now: Date, limit: number) {
+  return db
+    .selectFrom('outbox')
+    .selectAll()
+    .where('state', 'in', ['waiting', 'failed'])
+    .where('due_at', '<=', now)
+    .orderBy('due_at')
+    .limit(limit)
+    .forUpdate()
+    .skipLocked()
+    .execute();
+}
+
+export function updateOutboxRow(db: Kysely<DB>, id: string, changes: Updateable<Outbox>) {
+  return db.updateTable('outbox').set(changes).where('id', '=', id).execute();
+}
+
+/** Rows queued before a moment and not done. */
+export function listQueuedOutboxRows(db: Kysely<DB>, before: Date) {
+  return db.selectFrom('outbox').selectAll().where('state', '=', 'queued').where('queued_at', '<', before).execute();
+}
+
+/** Back to waiting, unless the attempt has moved on meanwhile. */
+export function requeueOutboxRow(db: Kysely<DB>, id: string, attempt: number) {
+  return db
+    .updateTable('outbox')
+    .set({ state: 'waiting', due_at: sql<Date>`now()` })
+    .where('id', '=', id)
+    .where('attempt', '=', attempt)
+    .where('state', '=', 'queued')
+    .execute();
 }

@@ -54,3 +54,13 @@ export function updateReleaseState(db: Kysely<DB>, organisationId: string, at: {
     .returningAll()
     .executeTakeFirst();
 }
+
+/** By version or id over all codes: several codes may have a release of one version. */
+export function listReleasesNamed(db: Kysely<DB>, organisationId: string, key: { id: string | null; slug: string }) {
+  return db
+    .selectFrom('releases')
+    .select('id')
+    .where('organisation_id', '=', organisationId)
+    .where((eb) => eb.or([eb('version', '=', key.slug), ...(key.id === null ? [] : [eb('id', '=', key.id)])]))
+    .execute();
+}

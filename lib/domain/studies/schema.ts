@@ -6,7 +6,8 @@ import { assessmentSchema, outcomeSchema, reasonCodeSchema } from '../assessment
 import { caseDefinitionSchema, caseKindSchema } from '../cases/definition';
 import { columnMappingSchema } from '../columns/column-mapping';
 import { dimensionSchema, problemDefinitionSchema } from '../problems/schema';
-import { rejectionReasonSchema, uploadStateSchema } from '../uploads/schema';
+import { rejectionReasonSchema } from '../uploads/rejection';
+import { uploadStateSchema } from '../uploads/schema';
 import { createStudySchema, gridInputSchema, refinementSchema, updateGridSchema } from './input';
 
 export const studyStateSchema = z.enum([
@@ -74,7 +75,7 @@ const fieldResultSchema = z.strictObject({
   field: z.string(), L1: z.number(), L2: z.number(), Linf: z.number(),
   at: z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() }),
   signedMean: z.number(), exact: z.strictObject({ L1: z.number(), L2: z.number(), Linf: z.number() }),
-  minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().int(),
+  minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().int().nullable(),
 });
 const gridResultSchema = z.strictObject({
   label: z.string(), upload: z.string(), sha256: z.string(), rows: z.number().int(), weightSum: z.number(), equalWeights: z.boolean(),

@@ -4,12 +4,12 @@ import { checkColumns } from '@/lib/domain/cases/check-columns';
 import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import type { Case } from '@/lib/domain/cases/schema';
 import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
-import type { StudyEvent } from '@/lib/domain/events/schema';
 import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import type { MemberContext } from '../context';
 import { enqueueJob } from '../outbox/enqueue-job';
 import { permit } from '../permit';
 import { refuseFaults } from '../refuse';
+import { announce } from '../studies/announce';
 import { withOrganisation } from '../with-organisation';
 import { mapCase } from './map-case';
 import { requireCase } from './require-case';
@@ -28,8 +28,7 @@ export async function putColumns(ctx: MemberContext, key: string, mapping: Colum
     return { updated: mapCase(await requireCase(ctx, trx, row.id)), resumed: grids };
   });
   for (const { study_id, label } of resumed) {
-    const event: StudyEvent = { event: 'state', state: 'collecting', grid: label, gridState: 'stored' };
-    await ctx.events.publish(study_id, JSON.stringify(event));
+    await announce(ctx, study_id, { event: 'state', state: 'collecting', grid: label, gridState: 'stored' });
   }
   return updated;
 }

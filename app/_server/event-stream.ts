@@ -1,0 +1,49 @@
+import 'server-only';
+
+const heartbeatMilliseconds = 15_000;
+
+export interface EventSender { send(event: string, data: string): void }
+
+/**
+ * A stream of server-sent events: what was already known, then what is sent until the reader goes. A comment now and then
+ * keeps proxies from closing it; `stop` is called once, when it ends.
+ */
+export function eventStream(signal: AbortSignal, headers: Headers, begin: (sender: EventSender) => Promise<() => void>): Promise<Response> {
+  const encoder = new TextEncoder();
+  let stream: ReadableStreamDefaultController<Uint8Array> | null = null;
+  let early: Uint8Array[] = [];
+  const write = (text: string) => {
+    const bytes = encoder.encode(text);
+    if (stream) stream.enqueue(bytes);
+    else early.push(bytes);
+  };
+
+  return begin({ send: (event, data) => write(`event: ${event}\ndata: ${data}\n\n`) }).then((stop) => {
+    const heartbeat = setInterval(() => write(': still here\n\n'), heartbeatMilliseconds);
+    let isOver = false;
+    const end = () => {
+      if (isOver) return;
+      isOver = true;
+      clearInterval(heartbeat);
+      stream = null;
+      early = [];
+      stop();
+    };
+    const body = new ReadableStream<Uint8Array>({
+      start(controller) {
+        stream = controller;
+        for (const bytes of early.splice(0)) controller.enqueue(bytes);
+        signal.addEventListener('abort', () => {
+          if (isOver) return;
+          end();
+          controller.close();
+        });
+      },
+      cancel: end,
+    });
+    headers.set('content-type', 'text/event-stream; charset=utf-8');
+    headers.set('cache-control', 'no-store, no-transform');
+    headers.set('x-accel-buffering', 'no');
+    return new Response(body, { status: 200, headers });
+  });
+}

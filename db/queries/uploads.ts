@@ -1,0 +1,41 @@
+import type { Insertable, Kysely, Selectable, UpdateObject } from 'kysely';
+import type { DB, Uploads } from '../schema.generated';
+
+export type UploadRow = Selectable<Uploads>;
+
+export function insertUpload(db: Kysely<DB>, row: Insertable<Uploads>) {
+  return db.insertInto('uploads').values(row).returningAll().executeTakeFirstOrThrow();
+}
+
+export function findUpload(db: Kysely<DB>, organisationId: string, id: string) {
+  return db.selectFrom('uploads').selectAll().where('organisation_id', '=', organisationId).where('id', '=', id).executeTakeFirst();
+}
+
+/** The last whole file sent for a grid, other than one upload. */
+export function findStoredUpload(db: Kysely<DB>, organisationId: string, gridId: string, otherThan: string) {
+  return db
+    .selectFrom('uploads')
+    .selectAll()
+    .where('organisation_id', '=', organisationId)
+    .where('grid_id', '=', gridId)
+    .where('state', '=', 'stored')
+    .where('id', '!=', otherThan)
+    .orderBy('stored_at', 'desc')
+    .executeTakeFirst();
+}
+
+/** Only from the state named; whether it was so. */
+export async function updateUploadState(db: Kysely<DB>, organisationId: string, id: string, from: string, changes: UpdateObject<DB, 'uploads'>): Promise<boolean> {
+  const changed = await db
+    .updateTable('uploads')
+    .set(changes)
+    .where('organisation_id', '=', organisationId)
+    .where('id', '=', id)
+    .where('state', '=', from)
+    .executeTakeFirst();
+  return changed.numUpdatedRows > 0n;
+}
+
+export function updateUpload(db: Kysely<DB>, organisationId: string, id: string, changes: UpdateObject<DB, 'uploads'>) {
+  return db.updateTable('uploads').set(changes).where('organisation_id', '=', organisationId).where('id', '=', id).execute();
+}

@@ -1,0 +1,98 @@
+import type { ErrorSeries, Norm, QuantitySeries } from '@/lib/numerics/assessment';
+import type { GridNorms } from '@/lib/numerics/norms/grid-norms';
+import { knownError } from '@/lib/numerics/norms/known-error';
+import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
+import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
+import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
+import { builtInRule } from '../rules/built-in-rule';
+import type { GridInput } from '../studies/input';
+import { statedSpacing } from '../studies/stated-spacing';
+
+/** A grid as it takes part in the assessment: what its author stated and, where it has a file, the norms read from it. */
+export interface StudyGrid { grid: GridInput; norms: GridNorms | null }
+type PlacedGrid = StudyGrid & { h: number };
+
+interface StudyToAssess {
+  definition: CaseDefinition;
+  grids: readonly StudyGrid[];
+  refinement: 'space' | 'time';
+  dimension: number;
+  /** Of the domain's box, null where unknown. */
+  volume: number | null;
+}
+
+export type StudySeries = { ok: true; errors: ErrorSeries[]; quantities: QuantitySeries[] } | { ok: false; reason: string };
+
+/** Series of every declared field and norm and of every quantity; or in words why the grids cannot be put in a row. */
+export function studySeries({ definition, grids, ...around }: StudyToAssess): StudySeries {
+  const spacing = resolveSpacing({ grids: grids.map(({ grid, norms }) => statedSpacing(grid, norms)), ...around });
+  if (!spacing.ok) {
+    const told = spacing.problems.map(({ label, found, expected }) => `${label === null ? 'The grids' : `Grid ${label}`}: ${found}; expected ${expected}.`);
+    return { ok: false, reason: told.join(' ') };
+  }
+  const placed = spacing.grids.flatMap(({ index, h }) => {
+    const one = grids[index];
+    return one ? [{ ...one, h }] : [];
+  });
+  const known = definition.quantities.filter(({ knownValue }) => knownValue !== undefined);
+  const unknown = definition.quantities.filter(({ knownValue }) => knownValue === undefined);
+  return {
+    ok: true,
+    errors: [
+      ...definition.fields.flatMap((field) => field.norms.flatMap((norm) => fieldSeries(definition, { field, norm }, placed))),
+      ...known.map((quantity) => ({
+        ...errorSeriesOfQuantity(quantitySeries(quantity, placed, 0), quantity.knownValue ?? 0),
+        minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
+      })),
+    ],
+    quantities: unknown.map((quantity) => quantitySeries(quantity, placed, definition.minimumGrids ?? builtInRule.minimumGridsOfQuantity)),
+  };
+}
+
+function fieldSeries(definition: CaseDefinition, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {
+  const { norm: name } = norm;
+  if (name === 'H1' || name === 'energy') return [];
+  const columns = placed.flatMap(({ norms }) => norms?.fields.find((column) => column.field === field.field) ?? []);
+  const significantDigits = largestOf(columns.flatMap((column) => column.significantDigits ?? []));
+  const formalOrder = norm.formalOrder ?? null;
+  return [{
+    field: field.field, norm: name,
+    grids: placed.flatMap((one) => gridError(one, field.field, { norm: name, significantDigits }) ?? []),
+    formalOrder, derivedOrder: norm.derivedOrder ?? null, tolerance: norm.tolerance ?? null, counts: norm.counts,
+    expectExact: norm.expectExact, exactLimit: norm.exactLimit ?? null,
+    scale: largestOf([...columns.map((column) => column.exact.Linf), ...(norm.reference === undefined ? [] : [norm.reference])]),
+    precision: placed.some(({ grid }) => grid.run?.precision === 'single') ? 'single' : 'double',
+    minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
+    samplingStated: definition.sampling !== undefined,
+  }];
+}
+
+/** What was read from a file goes before what was typed. */
+function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm, significantDigits }: { norm: Norm; significantDigits: number | null }): ErrorSeries['grids'][number] | null {
+  const iterativeError = grid.iterativeError?.[field]?.[norm] ?? 0;
+  const column = norms?.fields.find((candidate) => candidate.field === field);
+  if (column) {
+    const stored = { largest: column.maxAbs, significantDigits, precision: grid.run?.precision };
+    return {
+      label: grid.label, h, error: column[norm], knownError: knownError(stored, iterativeError), exactNorm: column.exact[norm],
+      at: norm === 'Linf' ? column.at : null,
+    };
+  }
+  const error = grid.errors?.[field]?.[norm];
+  return error === undefined ? null : { label: grid.label, h, error, knownError: iterativeError, exactNorm: null, at: null };
+}
+
+function quantitySeries({ name, unit, formalOrder, target }: DeclaredQuantity, placed: readonly PlacedGrid[], minimumGrids: number): QuantitySeries {
+  return {
+    name, unit: unit ?? null, formalOrder: formalOrder ?? null, target: target ?? null, minimumGrids,
+    grids: placed.flatMap(({ grid: { label, values }, h }) => {
+      const stated = values?.[name];
+      if (stated === undefined) return [];
+      return [typeof stated === 'number' ? { label, h, value: stated, resolution: null } : { label, h, value: stated.value, resolution: stated.resolution ?? null }];
+    }),
+  };
+}
+
+function largestOf(numbers: readonly number[]): number | null {
+  return numbers.length === 0 ? null : Math.max(...numbers);
+}

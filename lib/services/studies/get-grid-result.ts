@@ -1,0 +1,25 @@
+import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
+import type { GridResult } from '@/lib/domain/studies/schema';
+import { AppError } from '@/lib/errors';
+import type { MemberContext } from '../context';
+import { permit } from '../permit';
+import { withOrganisation } from '../with-organisation';
+import { normsOf } from './grid-definition';
+import { requireGrid } from './require-grid';
+import { requireStudy } from './require-study';
+
+/** Norms and statistics of what was read from the file of a grid; 404 until it is read. */
+export async function getGridResult(ctx: MemberContext, key: { id: string; label: string }, revision?: number): Promise<GridResult> {
+  permit(ctx, 'work.read');
+  const row = await withOrganisation(ctx, async (trx) => requireGrid(trx, await requireStudy(ctx, trx, key.id, revision), key.label));
+  const norms = normsOf(row);
+  if (row.state !== 'read' || !norms) throw new AppError('not-found', `No file of grid ${row.label} has been read; it is ${row.state}.`);
+  return {
+    label: row.label, upload: row.upload_id ?? '', sha256: row.sha256 ?? '', rows: norms.rows, weightSum: norms.weightSum,
+    equalWeights: norms.equalWeights, mapping: row.mapping as unknown as ColumnMapping,
+    fields: norms.fields.map(({ field, L1, L2, Linf, at, mean, exact, min, max, count, significantDigits }) => ({
+      field, L1, L2, Linf, at, signedMean: mean, exact, minimum: min, maximum: max, count, significantDigits,
+    })),
+    numericsVersion: row.numerics_version ?? '',
+  };
+}

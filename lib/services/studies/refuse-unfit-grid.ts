@@ -1,0 +1,16 @@
+import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
+import { checkGrid } from '@/lib/domain/studies/check-grid';
+import type { GridInput } from '@/lib/domain/studies/input';
+import { AppError } from '@/lib/errors';
+import { refuseUnavailableNorms } from './refuse-unavailable-norms';
+import type { LoadedStudy } from './require-study';
+
+/** Refuses a grid that does not fit the case of its study. */
+export function refuseUnfitGrid({ head, bound }: LoadedStudy, grid: GridInput): void {
+  refuseUnavailableNorms(grid, '');
+  const definition = caseDefinitionSchema.parse(bound.case_definition);
+  const faults = checkGrid(grid, {
+    definition, refinement: head.refinement === 'time' ? 'time' : 'space', dimension: head.dimension, canHaveFile: definition.fields.length > 0,
+  });
+  if (faults.length > 0) throw new AppError('invalid', faults[0]?.message ?? 'The grid does not fit the case.', { fields: faults });
+}

@@ -1,0 +1,40 @@
+import { listGrids } from '@/db/queries/grids';
+import type { StudySnapshot } from '@/lib/domain/events/schema';
+import type { StudyState } from '@/lib/domain/studies/schema';
+import { AppError } from '@/lib/errors';
+import type { MemberContext } from '../context';
+import { permit } from '../permit';
+import { withOrganisation } from '../with-organisation';
+import { stateOf } from './grid-definition';
+import { requireStudy } from './require-study';
+
+const patienceMilliseconds = 3000;
+
+async function readSnapshot(ctx: MemberContext, id: string): Promise<StudySnapshot> {
+  return withOrganisation(ctx, async (trx) => {
+    const { bound, at } = await requireStudy(ctx, trx, id);
+    const grids = await listGrids(trx, at);
+    return {
+      state: bound.state as StudyState, revision: bound.revision,
+      grids: grids.map((row) => ({ label: row.label, state: stateOf(row), rowsRead: row.rows_read === null ? null : Number(row.rows_read) })),
+    };
+  });
+}
+
+/** Listens to a study first and then says how it stands, so that nothing falls between; `stop` ends the listening. */
+export async function watchStudy(ctx: MemberContext, id: string, listener: (message: string) => void): Promise<{ snapshot: StudySnapshot; stop: () => void }> {
+  permit(ctx, 'work.read');
+  await readSnapshot(ctx, id);
+  const subscription = ctx.events.subscribe(id, listener);
+  const stop = await Promise.race([subscription, new Promise<null>((resolve) => setTimeout(resolve, patienceMilliseconds, null))]);
+  if (stop === null) {
+    subscription.then((late) => late(), () => undefined);
+    throw new AppError('unavailable', 'Events cannot be told at the moment. Read the study again instead.');
+  }
+  try {
+    return { snapshot: await readSnapshot(ctx, id), stop };
+  } catch (error) {
+    stop();
+    throw error;
+  }
+}

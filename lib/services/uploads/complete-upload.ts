@@ -1,0 +1,60 @@
+import { updateUploadState } from '@/db/queries/uploads';
+import { partCountOf } from '@/lib/domain/uploads/part-size';
+import type { CompleteUploadInput, Upload } from '@/lib/domain/uploads/schema';
+import { AppError } from '@/lib/errors';
+import type { StoredPart } from '@/lib/platform/storage';
+import type { MemberContext } from '../context';
+import { permit } from '../permit';
+import { announce } from '../studies/announce';
+import { lockCollectingStudy } from '../studies/require-study';
+import { withOrganisation } from '../with-organisation';
+import { mapUpload } from './map-upload';
+import { receiveFile } from './receive-file';
+import { asReceiving, type ReceivingUpload } from './receiving-upload';
+import { requireUpload } from './require-upload';
+
+const bare = (etag: string) => etag.replace(/^W\//, '').replaceAll('"', '');
+
+function invalidParts(detail: string): AppError {
+  return new AppError('invalid', detail, { fields: [{ path: 'parts', message: detail }] });
+}
+
+/** The parts stored are those stated, none is missing and together they have the size stated at the start. */
+function checkParts({ bytes, partSize }: ReceivingUpload, stated: CompleteUploadInput['parts'], stored: StoredPart[]): void {
+  for (let number = 1; number <= partCountOf(bytes, partSize); number++) {
+    const part = stored.find((candidate) => candidate.number === number);
+    const claim = stated.find((candidate) => candidate.number === number);
+    if (!part) throw invalidParts(`Part ${number} is not stored. Send it, then complete the upload again.`);
+    if (!claim) throw invalidParts(`Part ${number} is not in the list.`);
+    if (bare(claim.etag) !== bare(part.etag)) throw invalidParts(`Part ${number} was stored with ETag ${part.etag}; ${claim.etag} is stated.`);
+  }
+  const total = stored.reduce((sum, part) => sum + part.bytes, 0);
+  if (total !== bytes) throw invalidParts(`${total} bytes are stored; ${bytes} were announced.`);
+}
+
+/** Joins the parts in storage. A call that was cut off after that finds the whole object and goes on from there. */
+async function joinParts(ctx: MemberContext, receiving: ReceivingUpload, stated: CompleteUploadInput['parts']): Promise<void> {
+  const { upload, multipartId, bytes } = receiving;
+  if (await ctx.storage.sizeOf(upload.storage_key) === bytes) return;
+  checkParts(receiving, stated, await ctx.storage.listParts(upload.storage_key, multipartId));
+  await ctx.storage.completeMultipart(upload.storage_key, multipartId, stated);
+  const size = await ctx.storage.sizeOf(upload.storage_key);
+  if (size !== bytes) throw invalidParts(`The stored file has ${size ?? 0} bytes; ${bytes} were announced.`);
+}
+
+/** Closes an upload: from here on it is kept, and read. Closing it again changes nothing. */
+export async function completeUpload(ctx: MemberContext, id: string, { parts }: CompleteUploadInput): Promise<Upload> {
+  permit(ctx, 'work.write');
+  const loaded = await withOrganisation(ctx, (trx) => requireUpload(ctx, trx, id));
+  if (loaded.upload.state === 'stored') return mapUpload(loaded, []);
+  await joinParts(ctx, asReceiving(loaded), parts);
+  const completed = await withOrganisation(ctx, async (trx) => {
+    await lockCollectingStudy(ctx, trx, loaded.grid.study_id);
+    const { grid, isCurrent } = await requireUpload(ctx, trx, id);
+    const isFirst = await updateUploadState(trx, ctx.organisation.id, id, 'receiving', { state: 'stored', stored_at: ctx.clock() });
+    if (isFirst && isCurrent) await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: id });
+    return requireUpload(ctx, trx, id);
+  });
+  await announce(ctx, completed.grid.study_id, { event: 'state', state: 'collecting', grid: completed.grid.label, gridState: 'stored' });
+  return mapUpload(completed, []);
+}

@@ -1,0 +1,92 @@
+import { createHash } from 'node:crypto';
+import { Readable } from 'node:stream';
+import { insertUpload } from '@/db/queries/uploads';
+import { readReprDigest } from '@/lib/domain/uploads/repr-digest';
+import type { Upload } from '@/lib/domain/uploads/schema';
+import { AppError } from '@/lib/errors';
+import type { MemberContext } from '../context';
+import { newId } from '../keys';
+import { permit } from '../permit';
+import { announce } from '../studies/announce';
+import { freezePlan } from '../studies/freeze-plan';
+import { requireGrid } from '../studies/require-grid';
+import { lockCollectingStudy } from '../studies/require-study';
+import { withOrganisation, type Trx } from '../with-organisation';
+import { mapUpload } from './map-upload';
+import { receiveFile } from './receive-file';
+import { requireFields } from './require-fields';
+import { requireUpload } from './require-upload';
+import { storageKey } from './storage-key';
+
+const mostBytes = 100e6;
+
+interface DataInput {
+  filename: string | undefined;
+  body: AsyncIterable<Uint8Array>;
+  /** As in the headers, null where there is none. */
+  contentLength: string | null;
+  reprDigest: string | null;
+}
+
+function tooLarge(): AppError {
+  return new AppError('too-large', 'The file is over 100 MB. Send it in parts: POST …/upload.');
+}
+
+function statedDigest(field: string | null): string | null {
+  if (field === null) return null;
+  try {
+    return readReprDigest(field);
+  } catch (cause) {
+    throw new AppError('bad-request', cause instanceof Error ? cause.message : 'Repr-Digest cannot be read.', { cause });
+  }
+}
+
+/** Streams the body into storage, counting and hashing; what is short, damaged or too large is not kept. */
+async function storeBody(ctx: MemberContext, key: string, { body, contentLength, reprDigest }: DataInput): Promise<{ bytes: number; sha256: string }> {
+  const stated = { bytes: contentLength === null ? null : Number(contentLength), sha256: statedDigest(reprDigest) };
+  if (stated.bytes !== null && stated.bytes > mostBytes) throw tooLarge();
+  const hash = createHash('sha256');
+  let bytes = 0;
+  async function* counted(): AsyncGenerator<Uint8Array> {
+    for await (const chunk of body) {
+      bytes += chunk.length;
+      if (bytes > mostBytes) throw tooLarge();
+      hash.update(chunk);
+      yield chunk;
+    }
+    if (stated.bytes !== null && bytes !== stated.bytes) {
+      throw new AppError('bad-request', `${bytes} bytes arrived; Content-Length says ${stated.bytes}. Nothing was kept; send the file again.`);
+    }
+  }
+  await ctx.storage.put(key, Readable.from(counted(), { objectMode: false }));
+  const sha256 = hash.digest('hex');
+  if (stated.sha256 === null || stated.sha256 === sha256) return { bytes, sha256 };
+  await ctx.storage.remove(key);
+  throw new AppError('bad-request', `The body has SHA-256 ${sha256}; Repr-Digest says ${stated.sha256}. Nothing was kept; send the file again.`);
+}
+
+/** Takes a file in one call. The grid keeps what it had until the whole file is there. */
+export async function putData(ctx: MemberContext, key: { id: string; label: string }, input: DataInput): Promise<Upload> {
+  permit(ctx, 'work.write');
+  const target = async (trx: Trx) => {
+    const study = await lockCollectingStudy(ctx, trx, key.id);
+    requireFields(study);
+    return { study, grid: await requireGrid(trx, study, key.label) };
+  };
+  const { study: { head } } = await withOrganisation(ctx, target);
+  const id = newId();
+  const storage_key = storageKey(ctx.organisation.id, head.id, id);
+  const { bytes, sha256 } = await storeBody(ctx, storage_key, input);
+  const loaded = await withOrganisation(ctx, async (trx) => {
+    const { study, grid } = await target(trx);
+    await insertUpload(trx, {
+      organisation_id: ctx.organisation.id, id, grid_id: grid.id, filename: input.filename ?? `${key.label}.csv`, bytes, sha256, storage_key,
+      state: 'stored', stored_at: ctx.clock(), created_by: ctx.userId, token_id: ctx.token?.id ?? null,
+    });
+    await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: id });
+    await freezePlan(trx, { ...study, now: ctx.clock() });
+    return requireUpload(ctx, trx, id);
+  });
+  await announce(ctx, head.id, { event: 'state', state: 'collecting', grid: key.label, gridState: 'stored' });
+  return mapUpload(loaded, []);
+}

@@ -1,0 +1,46 @@
+import { parentPort } from 'node:worker_threads';
+import { readEnv } from '@/lib/env';
+import { createStorage } from '@/lib/platform/storage';
+import { readGrid } from '@/lib/readers/read-grid';
+import { readPreview } from '@/lib/readers/read-preview';
+import { RejectedFile } from '@/lib/readers/rejected-file';
+import type { ReadProgress } from '@/lib/readers/source';
+import { storageOptionsOf } from '../storage-options';
+import type { ThreadMessage, ThreadResult, ThreadTask } from './thread-messages';
+
+const toldEveryMilliseconds = 200;
+
+if (!parentPort) throw new Error('read-grid-thread runs as a worker thread only.');
+const port = parentPort;
+const storage = createStorage(storageOptionsOf(readEnv(process.env)));
+const tell = (message: ThreadMessage) => port.postMessage(message);
+
+/** Passes progress on five times a second at most. */
+function sparingly(): (progress: ReadProgress) => void {
+  let toldAt = 0;
+  return (progress) => {
+    if (Date.now() - toldAt < toldEveryMilliseconds) return;
+    toldAt = Date.now();
+    tell({ type: 'progress', progress });
+  };
+}
+
+async function run(task: ThreadTask): Promise<ThreadResult> {
+  const source = await storage.read(task.storageKey);
+  try {
+    if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source) };
+    return { kind: 'read', result: await readGrid(source, task.reading, { onProgress: sparingly() }) };
+  } finally {
+    source.destroy();
+  }
+}
+
+port.on('message', (task: ThreadTask) => {
+  run(task).then(
+    (result) => tell({ type: 'done', result }),
+    (error: unknown) => {
+      if (error instanceof RejectedFile) tell({ type: 'rejected', reasons: error.reasons });
+      else tell({ type: 'failed', message: error instanceof Error ? error.message : String(error) });
+    },
+  );
+});

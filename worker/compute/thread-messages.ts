@@ -1,0 +1,16 @@
+import type { RejectionReason } from '@/lib/domain/uploads/rejection';
+import type { GridReading } from '@/lib/readers/grid-reading';
+import type { GridReadResult } from '@/lib/readers/read-grid';
+import type { ReadProgress, SourcePreview } from '@/lib/readers/source';
+
+/** What a thread is asked to do with one file in storage. */
+export type ThreadTask = { kind: 'preview'; storageKey: string } | { kind: 'read'; storageKey: string; reading: GridReading };
+
+export type ThreadResult = { kind: 'preview'; preview: SourcePreview } | { kind: 'read'; result: GridReadResult };
+
+/** What a thread says; every task ends in one message other than progress. */
+export type ThreadMessage =
+  | { type: 'progress'; progress: ReadProgress }
+  | { type: 'done'; result: ThreadResult }
+  | { type: 'rejected'; reasons: RejectionReason[] }
+  | { type: 'failed'; message: string };

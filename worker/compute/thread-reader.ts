@@ -1,0 +1,18 @@
+import type { GridReader } from '@/lib/services/reading/grid-reader';
+import type { ThreadPool } from './thread-pool';
+
+/** Reads files in the threads of the pool. */
+export function createThreadReader(pool: ThreadPool): GridReader {
+  return {
+    async preview(storageKey) {
+      const answer = await pool.run({ kind: 'preview', storageKey });
+      if (answer.kind !== 'preview') throw new Error(`A preview was asked for; the thread answered ${answer.kind}.`);
+      return answer.preview;
+    },
+    async read(storageKey, reading, onProgress) {
+      const answer = await pool.run({ kind: 'read', storageKey, reading }, onProgress);
+      if (answer.kind !== 'read') throw new Error(`A reading was asked for; the thread answered ${answer.kind}.`);
+      return answer.result;
+    },
+  };
+}

@@ -1,0 +1,53 @@
+import os from 'node:os';
+import { Queue } from 'bullmq';
+import { readEnv } from '@/lib/env';
+import { queueName, type JobPayload } from '@/lib/jobs/jobs';
+import { createThreadPool } from './compute/thread-pool';
+import { createThreadReader } from './compute/thread-reader';
+import { openWorkerContext } from './context';
+import { createDispatcher } from './outbox/dispatcher';
+import { listenToOutbox } from './outbox/listener';
+import { createQueueWorker } from './queue-worker';
+
+const sweepEveryMilliseconds = 60_000;
+/** The supervisor kills what has not ended ten seconds after it was asked to. */
+const finishWithinMilliseconds = 7000;
+
+const { context, log, redis, adding, openListener, close } = openWorkerContext(readEnv(process.env));
+const threads = os.availableParallelism();
+const pool = createThreadPool(threads);
+const queue = new Queue<JobPayload>(queueName, { connection: adding, skipWaitingForReady: true });
+queue.on('error', (error) => log.warn({ fault: error.message }, 'queue'));
+
+const dispatcher = createDispatcher(context, queue);
+// More jobs than threads, so that assessments pass by files that wait for one.
+const worker = createQueueWorker(context, redis, { reader: createThreadReader(pool), concurrency: threads + 2 });
+const stopListening = listenToOutbox(openListener, log, () => dispatcher.dispatch());
+adding.on('ready', () => dispatcher.sweep());
+const schedule = setInterval(() => dispatcher.sweep(), sweepEveryMilliseconds);
+log.info({ threads }, 'worker ready');
+
+let isStopping = false;
+
+/** Lets running jobs end; what takes longer is left to the next worker, which finds it unfinished within seconds. */
+async function stop(signal: string): Promise<void> {
+  if (isStopping) return;
+  isStopping = true;
+  log.info({ signal }, 'worker stopping');
+  clearInterval(schedule);
+  await Promise.all([stopListening(), dispatcher.close()]);
+  const late = new Promise<'late'>((resolve) => setTimeout(resolve, finishWithinMilliseconds, 'late'));
+  const ended = worker.close().then(() => 'ended' as const);
+  const isLate = (await Promise.race([ended, late])) === 'late';
+  if (isLate) {
+    log.warn({}, 'jobs left unfinished for the next worker');
+    process.exit(0);
+  }
+  await queue.close();
+  await pool.close();
+  await close();
+  process.exit(0);
+}
+
+process.on('SIGTERM', () => void stop('SIGTERM'));
+process.on('SIGINT', () => void stop('SIGINT'));

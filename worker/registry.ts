@@ -1,0 +1,10 @@
+import type { JobName } from '@/lib/jobs/jobs';
+import { handleGridRead } from './handlers/grid-read';
+import { handleStudyAssess } from './handlers/study-assess';
+import type { JobHandler } from './job-handler';
+
+/** Every job and what does it. */
+export const handlers: Record<JobName, JobHandler> = {
+  'grid.read': handleGridRead,
+  'study.assess': handleStudyAssess,
+};
