@@ -2,6 +2,7 @@ import { checkProblem } from '@/lib/domain/problems/check-problem';
 import { createProblemSchema, type CreateProblemInput, type Equation, type Problem } from '@/lib/domain/problems/schema';
 import type { FieldProblem } from '@/lib/errors';
 import { issuesOf, type Checked } from '../forms/checked-resolver';
+import { typedNumber } from '../forms/typed-number';
 
 interface NamedText { name: string; text: string }
 
@@ -34,12 +35,12 @@ export function valuesOfProblem(problem: Problem): ProblemValues {
 }
 
 const isBlank = ({ name, text }: NamedText) => name.trim() === '' && text.trim() === '';
-const numberOr = (text: string) => (text.trim() !== '' && Number.isFinite(Number(text)) ? Number(text) : text.trim() === '' ? undefined : text);
+
 const named = (rows: NamedText[]) => Object.fromEntries(rows.filter((row) => !isBlank(row)).map(({ name, text }) => [name.trim(), text.trim()]));
 
 function definitionOf(values: ProblemValues): unknown {
-  const domain = values.domain.slice(0, Number(values.dimension)).flatMap(({ from, to }, index) => (from.trim() === '' && to.trim() === '' ? [] : [[axes[index], [numberOr(from), numberOr(to)]]]));
-  const constants = Object.entries(named(values.constants)).map(([name, text]) => [name, text === '' ? text : numberOr(text)]);
+  const domain = values.domain.slice(0, Number(values.dimension)).flatMap(({ from, to }, index) => (from.trim() === '' && to.trim() === '' ? [] : [[axes[index], [typedNumber(from), typedNumber(to)]]]));
+  const constants = Object.entries(named(values.constants)).map(([name, text]) => [name, text === '' ? text : typedNumber(text)]);
   return {
     name: values.name, slug: values.slug.trim() === '' ? undefined : values.slug, equation: values.equation, form: values.form,
     dimension: Number(values.dimension), unsteady: values.unsteady, exact: named(values.exact),
