@@ -55,6 +55,7 @@ async function buildInto(folder) {
   if (fs.existsSync(path.join(root, 'public'))) {
     await run({ command: 'cp', args: ['-a', path.join(root, 'public'), path.join(web, 'public')] });
   }
+  fs.copyFileSync(path.join(root, 'docker/peer-address.mjs'), path.join(web, 'peer-address.mjs'));
   await bundleWorker(path.join(folder, 'worker'));
   fs.mkdirSync(path.join(folder, 'users'));
 }

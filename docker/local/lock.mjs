@@ -13,7 +13,7 @@ import { stateFolder } from './places.mjs';
 function hold(file, flags) {
   return new Promise((resolve, reject) => {
     const script = 'echo held; exec cat >/dev/null';
-    const child = spawn('flock', ['--exclusive', ...flags, file, 'sh', '-c', script], {
+    const child = spawn('/usr/bin/flock', ['--exclusive', ...flags, file, 'sh', '-c', script], {
       stdio: ['pipe', 'pipe', 'inherit'],
       detached: true,
     });

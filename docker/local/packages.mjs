@@ -15,6 +15,7 @@ const BROWSER = { chromium: '/usr/bin/chromium' };
 
 const NEEDS = { start: SERVICES, test: { ...SERVICES, ...BROWSER }, validate: DATABASE };
 
+const APT_GET = '/usr/bin/apt-get';
 const POLICY = '/usr/sbin/policy-rc.d';
 const CLUSTER_SETTINGS = '/etc/postgresql-common/createcluster.d';
 
@@ -22,7 +23,7 @@ const CLUSTER_SETTINGS = '/etc/postgresql-common/createcluster.d';
 function aptGet(args) {
   const env = { ...process.env, DEBIAN_FRONTEND: 'noninteractive' };
   const options = ['-o', 'DPkg::Lock::Timeout=600', '-o', 'Dpkg::Options::=--force-confold'];
-  const { status, error } = spawnSync('apt-get', [...options, ...args], { stdio: 'inherit', env });
+  const { status, error } = spawnSync(APT_GET, [...options, ...args], { stdio: 'inherit', env });
   if (error) throw error;
   if (status !== 0) throw new Error(`apt-get ${args.join(' ')} ended with status ${status}.`);
 }
@@ -58,7 +59,7 @@ export function ensurePackages(name) {
   );
   if (missing.length === 0) return;
   const install = ['install', '-y', '--no-install-recommends', ...missing];
-  if (process.getuid?.() !== 0 || !fs.existsSync('/usr/bin/apt-get')) {
+  if (process.getuid?.() !== 0 || !fs.existsSync(APT_GET)) {
     throw new Error(
       `These Debian packages are missing: ${missing.join(', ')}.\n` +
         `Install them with: sudo apt-get update && sudo apt-get ${install.join(' ')}`,

@@ -20,7 +20,9 @@ export function hashSources() {
     .readdirSync(root)
     .filter((name) => /\.(ts|mjs|json)$/.test(name) && !NOT_BUILT.has(name))
     .map((name) => path.join(root, name));
-  const builder = ['build.mjs', 'bundle-worker.mjs'].map((name) => path.join(root, 'docker/local', name));
+  const builder = ['peer-address.mjs', 'local/build.mjs', 'local/bundle-worker.mjs'].map((name) =>
+    path.join(root, 'docker', name),
+  );
   const files = [...atRoot, ...builder, ...FOLDERS.flatMap((name) => filesBelow(path.join(root, name)))];
   const hash = createHash('sha256');
   for (const file of files.sort()) {

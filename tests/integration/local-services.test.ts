@@ -12,8 +12,8 @@ import {
 import { getSignedUrl } from '@aws-sdk/s3-request-presigner';
 import { Redis } from 'ioredis';
 import nodemailer from 'nodemailer';
-import { Client } from 'pg';
 import { afterAll, describe, expect, it } from 'vitest';
+import { queryOnce } from '../support/query-once';
 
 function need(name: string): string {
   const value = process.env[name];
@@ -140,12 +140,10 @@ describe('the database roles', () => {
     ['MIGRATION_DATABASE_URL', 'fourfold_owner', false],
     ['MAINTENANCE_DATABASE_URL', 'fourfold_maintenance', true],
   ])('%s is %s, never a superuser', async (variable, role, bypassesPolicies) => {
-    const client = new Client({ connectionString: need(variable) });
-    await client.connect();
-    const { rows } = await client.query<Record<string, unknown>>(
+    const rows = await queryOnce(
+      need(variable),
       'select rolname, rolsuper, rolbypassrls from pg_roles where rolname = current_user',
     );
-    await client.end();
     expect(rows).toEqual([{ rolname: role, rolsuper: false, rolbypassrls: bypassesPolicies }]);
   });
 });
