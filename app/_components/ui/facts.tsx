@@ -14,7 +14,7 @@ export function Facts({ facts }: { facts: readonly { name: string; value: ReactN
   );
 }
 
-interface LifeStep { name: string; when?: ReactNode; isCurrent?: boolean }
+export interface LifeStep { name: string; when?: ReactNode; isCurrent?: boolean }
 
 /** The life of a study as ruled lines; the current one is bold behind a bar of ink. */
 export function LifeLines({ steps }: { steps: readonly LifeStep[] }) {

@@ -1,0 +1,32 @@
+import { Busy } from '@/app/_components/ui/busy';
+import { Notice } from '@/app/_components/ui/notice';
+import { Statement } from '@/app/_components/ui/page-title';
+import { formatCount } from '@/lib/domain/numbers/format-count';
+import type { Study } from '@/lib/domain/studies/schema';
+import type { Reading } from './use-study-events';
+
+interface StudyProgressProps { study: Study; readings: ReadonlyMap<string, Reading> }
+
+/** Where a study stands that has no outcome yet. */
+export function StudyProgress({ study, readings }: StudyProgressProps) {
+  const { state, failure, grids } = study;
+  if (state === 'assessment-failed') {
+    return <div className="mt-6"><Notice title="Not assessed.">{failure ?? 'The assessment could not be made.'} Mend what it names in a new revision, or run it again.</Notice></div>;
+  }
+  if (state === 'abandoned') {
+    return <Statement lead={failure ?? undefined}>This revision was left without an outcome.</Statement>;
+  }
+  const taking = grids.filter((grid) => grid.excluded === null);
+  const done = taking.filter((grid) => grid.state === 'read' || grid.state === 'typed');
+  const reading = taking.find((grid) => grid.state === 'reading');
+  if (state === 'assessing') {
+    return <div className="mt-6"><Busy label="Assessing">Assessing {taking.length} grids. You may leave this page; the outcome will stand here.</Busy></div>;
+  }
+  const now = reading && (readings.get(reading.label) ?? { rowsRead: reading.upload?.rowsRead ?? 0, share: null });
+  return (
+    <Statement lead="The outcome comes by itself once every grid is there or left out with a reason.">
+      {done.length} of {taking.length} grids {done.length === 1 ? 'is' : 'are'} there.
+      {reading && now && now.rowsRead > 0 && <span aria-live="polite"> Reading grid {reading.label}, {formatCount(now.rowsRead)} rows.</span>}
+    </Statement>
+  );
+}
