@@ -4,8 +4,8 @@ import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { getMatrixContract } from '@/lib/domain/matrix/schema';
 import { listReleasesContract, releaseStateSchema, updateReleaseContract, type Release, type ReleaseState } from '@/lib/domain/codes/schema';
 import { apiKey } from '../api/api-key';
-import { ApiProblem } from '../api/api-problem';
 import { callApi } from '../api/call-api';
+import { problemOf } from '../api/problem-of';
 import { ProblemNotice } from '../forms/problem-notice';
 import { useOrganisation } from '../organisation/organisation-context';
 import { Cell, HeadCell, Missing, RowHead } from '../tables/cells';
@@ -25,7 +25,6 @@ export function ReleaseTable({ code, releases, mayChange }: ReleaseTableProps) {
       queries.invalidateQueries({ queryKey: apiKey(getMatrixContract) }),
     ]),
   });
-  const refused = change.error && (change.error instanceof ApiProblem ? change.error.problem : { title: 'Not changed', detail: 'The server did not answer.' });
   return (
     <>
       <Table caption="Releases, newest first." hideCaption>
@@ -53,7 +52,7 @@ export function ReleaseTable({ code, releases, mayChange }: ReleaseTableProps) {
           ))}
         </tbody>
       </Table>
-      <ProblemNotice problem={refused} />
+      <ProblemNotice problem={problemOf(change.error, 'Not changed')} />
     </>
   );
 }

@@ -1,0 +1,43 @@
+import { defaultTolerance } from '@/lib/numerics/outcome/default-tolerance';
+import type { CaseDefinition, DeclaredNorm } from '@/lib/domain/cases/definition';
+import { Cell, HeadCell, Missing, RowHead } from '../tables/cells';
+import { Head, Row, Table } from '../tables/table';
+import { NormSymbol, Sym } from '../ui/symbols';
+
+function isShown(norm: DeclaredNorm): norm is DeclaredNorm & { norm: 'L1' | 'L2' | 'Linf' } {
+  return norm.norm !== 'H1' && norm.norm !== 'energy';
+}
+
+function OrderCell({ norm }: { norm: DeclaredNorm }) {
+  if (norm.expectExact) return <Cell num>exact</Cell>;
+  if (norm.formalOrder === undefined) return <Cell num><Missing reason="No formal order: shown, not judged" /></Cell>;
+  return <Cell num>{norm.derivedOrder === undefined ? norm.formalOrder : `${norm.derivedOrder} (formal ${norm.formalOrder})`}</Cell>;
+}
+
+function ToleranceCell({ norm }: { norm: DeclaredNorm & { norm: 'L1' | 'L2' | 'Linf' } }) {
+  const order = norm.derivedOrder ?? norm.formalOrder;
+  if (norm.expectExact || order === undefined) return <Cell num><Missing reason="No tolerance" /></Cell>;
+  const tolerance = norm.tolerance ?? defaultTolerance(norm.norm, order);
+  return <Cell num>{Number(tolerance.toPrecision(6))}{norm.tolerance === undefined && <span className="text-graphite"> (rule)</span>}</Cell>;
+}
+
+/** What a case declares for each field and norm, and where it comes from. */
+export function DeclaredTable({ fields }: { fields: CaseDefinition['fields'] }) {
+  return (
+    <Table caption="Formal orders and tolerances, by field and norm." hideCaption>
+      <Head><tr><HeadCell>Field</HeadCell><HeadCell>Norm</HeadCell><HeadCell num>Order</HeadCell><HeadCell num>Tolerance</HeadCell><HeadCell afterNumber>Counts</HeadCell><HeadCell>Comes from</HeadCell></tr></Head>
+      <tbody>
+        {fields.flatMap(({ field, norms }) => norms.filter(isShown).map((norm, index) => (
+          <Row key={`${field} ${norm.norm}`} startsGroup={index === 0}>
+            <RowHead>{index === 0 && <Sym>{field}</Sym>}</RowHead>
+            <Cell><NormSymbol norm={norm.norm} /></Cell>
+            <OrderCell norm={norm} />
+            <ToleranceCell norm={norm} />
+            <Cell afterNumber>{norm.counts ? 'yes' : 'no'}</Cell>
+            <Cell className="min-w-40">{norm.backing && 'citation' in norm.backing ? norm.backing.citation : <Missing reason="No source stated" />}</Cell>
+          </Row>
+        )))}
+      </tbody>
+    </Table>
+  );
+}
