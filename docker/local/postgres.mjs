@@ -64,6 +64,7 @@ export async function postgresService({ folder, port, isLasting }) {
   ];
   return {
     name: 'postgres',
+    isWorthShowing: (line) => !/the database system is starting up/.test(line),
     beforeStart: () => dropStaleProcessFile(folder),
     line: {
       before: asOrdinaryUser,

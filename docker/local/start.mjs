@@ -13,20 +13,26 @@ import { awaitEarlierProcesses, createSupervisor } from './supervisor.mjs';
 
 const NAME = 'start';
 const DEMO_ACCOUNTS = [
-  ['engineer@fourfold.test', 'engineer'],
+  ['owner@northmoor.example', 'owner'],
+  ['engineer@northmoor.example', 'engineer'],
+  ['reviewer@northmoor.example', 'reviewer'],
+  ['auditor@northmoor.example', 'auditor'],
+  ['engineer@southbank.example', 'another organisation, which sees nothing of the first'],
 ];
 
 const pidFolder = path.join(runFolder(NAME), 'pids');
 const supervisor = createSupervisor({ pidFolder, log: logToConsole });
 
-/** @param {Record<string, string>} env @param {import('./ports.mjs').Ports} ports */
-function announce(env, ports) {
-  const seconds = performance.now() / 1000;
+/**
+ * @param {Record<string, string>} env @param {import('./ports.mjs').Ports} ports
+ * @param {string} seconds from the command to the first page
+ */
+function announce(env, ports, seconds) {
   say('');
-  say(`Ready after ${seconds.toFixed(1)} s: ${env.PUBLIC_URL}`);
+  say(`Ready after ${seconds} s: ${env.PUBLIC_URL}`);
   if (env.FOURFOLD_MODE === 'demo') {
     say(`Demo accounts, password ${env.DEMO_PASSWORD}:`);
-    for (const [email, what] of DEMO_ACCOUNTS) say(`  ${email}  ${what}`);
+    for (const [email, what] of DEMO_ACCOUNTS) say(`  ${email.padEnd(28)}${what}`);
   }
   say(`Mail inbox: http://127.0.0.1:${ports.inbox}`);
   say('Ctrl-C stops everything.');
@@ -47,14 +53,16 @@ async function start() {
   await migrate(env);
   await supervisor.start(workerService(build, env));
   await supervisor.start(webService(build, ports.web, env));
+  const seconds = (performance.now() / 1000).toFixed(1);
   if (env.FOURFOLD_MODE === 'demo') {
+    say(`Serving ${env.PUBLIC_URL} after ${seconds} s; the demo is looked after next.`);
     try {
       await seedDemo(build, ports.web, env, logToConsole);
     } catch (error) {
       say(`The demo could not be filled in; the product runs without it.\n${error instanceof Error ? error.message : error}`);
     }
   }
-  announce(env, ports);
+  announce(env, ports, seconds);
 }
 
 onInterruption(async (reason) => {
