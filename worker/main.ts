@@ -16,7 +16,9 @@ const finishWithinMilliseconds = 7000;
 const { context, log, redis, adding, openListener, close } = openWorkerContext(readEnv(process.env));
 const threads = os.availableParallelism();
 const pool = createThreadPool(threads);
-const queue = new Queue<JobPayload>(queueName, { connection: adding, skipWaitingForReady: true });
+// The queue sends its first command as it is made; on a connection that is not ready that fails for good.
+if (adding.status !== 'ready') await new Promise<void>((resolve) => adding.once('ready', resolve));
+const queue = new Queue<JobPayload>(queueName, { connection: adding });
 queue.on('error', (error) => log.warn({ fault: error.message }, 'queue'));
 
 const dispatcher = createDispatcher(context, queue);
@@ -24,6 +26,7 @@ const dispatcher = createDispatcher(context, queue);
 const worker = createQueueWorker(context, redis, { reader: createThreadReader(pool), concurrency: threads + 2 });
 const stopListening = listenToOutbox(openListener, log, () => dispatcher.dispatch());
 adding.on('ready', () => dispatcher.sweep());
+dispatcher.sweep();
 const schedule = setInterval(() => dispatcher.sweep(), sweepEveryMilliseconds);
 log.info({ threads }, 'worker ready');
 
