@@ -1,6 +1,7 @@
 import fs from 'node:fs';
 import path from 'node:path';
 import { createInterface } from 'node:readline';
+import { prettyLine } from './pretty-line.mjs';
 
 const COLOURS = { fourfold: 1, web: 36, worker: 35, postgres: 34, redis: 31, mail: 32, storage: 33 };
 const isColoured = Boolean(process.stdout.isTTY) && !process.env.NO_COLOR;
@@ -22,7 +23,7 @@ export function say(text) {
 /** Lines on the console behind the name of the process that wrote them. @type {LogSink} */
 export function logToConsole(name, stream, isWorthShowing = () => true) {
   createInterface({ input: stream }).on('line', (line) => {
-    if (isWorthShowing(line)) console.log(prefixOf(name) + line);
+    if (isWorthShowing(line)) console.log(prefixOf(name) + prettyLine(line));
   });
 }
 
