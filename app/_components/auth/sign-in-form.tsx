@@ -11,6 +11,7 @@ import { ProblemNotice } from '../forms/problem-notice';
 import { TextField } from '../forms/text-field';
 import { Button } from '../ui/button';
 import { arrivalAddress } from './arrive';
+import { goAfresh } from './go-afresh';
 
 export function SignInForm({ next }: { next: string | null }) {
   const form = useForm({ resolver: zodResolver(signInSchema), defaultValues: { email: '', password: '' } });
@@ -18,7 +19,7 @@ export function SignInForm({ next }: { next: string | null }) {
   const { onSubmit, problem } = useSubmit({
     form,
     send: (typed) => callApi(signInContract, { body: typed }),
-    onDone: (me) => window.location.assign(arrivalAddress(me, next)),
+    onDone: (me) => goAfresh(arrivalAddress(me, next)),
   });
   return (
     <form onSubmit={onSubmit} noValidate className="max-w-80">

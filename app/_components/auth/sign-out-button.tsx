@@ -5,13 +5,14 @@ import { signOutContract } from '@/lib/domain/people/schema';
 import { callApi } from '../api/call-api';
 import { FormActions } from '../forms/form-actions';
 import { Button } from '../ui/button';
+import { goAfresh } from './go-afresh';
 
 export function SignOutButton() {
   const [answer, setAnswer] = useState('');
   const signOut = async () => {
     try {
       await callApi(signOutContract, {});
-      window.location.assign('/');
+      goAfresh('/');
     } catch {
       setAnswer('Not signed out. The server did not answer; try again.');
     }

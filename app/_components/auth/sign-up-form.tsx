@@ -11,6 +11,7 @@ import { ProblemNotice } from '../forms/problem-notice';
 import { TextField } from '../forms/text-field';
 import { Button } from '../ui/button';
 import { arrivalAddress } from './arrive';
+import { goAfresh } from './go-afresh';
 
 export function SignUpForm() {
   const form = useForm({ resolver: zodResolver(signUpSchema), mode: 'onTouched', defaultValues: { email: '', password: '', organisation: '' } });
@@ -18,7 +19,7 @@ export function SignUpForm() {
   const { onSubmit, problem } = useSubmit({
     form,
     send: (typed) => callApi(signUpContract, { body: typed }),
-    onDone: (me) => window.location.assign(arrivalAddress(me, null)),
+    onDone: (me) => goAfresh(arrivalAddress(me, null)),
   });
   return (
     <form onSubmit={onSubmit} noValidate className="max-w-80">

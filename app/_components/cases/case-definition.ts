@@ -35,10 +35,10 @@ export const isBlankGrid = ({ label, spacing, dt }: GridValues) => `${label}${sp
 
 /** What the form would send, not yet checked. */
 function typedCase(values: CaseValues): unknown {
-  const options = values.options.filter(({ name, text }) => `${name}${text}`.trim() !== '').map(({ name, text }) => [name.trim(), text.trim()]);
+  const options = values.options.filter(({ name, text }) => `${name}${text}`.trim() !== '').map(({ name, text }) => [name.trim(), text.trim()] as const);
   return {
     code: values.code, problem: values.problem, name: values.name, slug: someText(values.slug), kind: values.kind,
-    options: Object.fromEntries(options),
+    options: Object.fromEntries(options) as Record<string, string>,
     fields: values.kind === 'solution' ? [] : values.fields.map((field) => ({
       ...field.kept, field: field.field.trim(),
       norms: field.norms.filter(isDeclared).map((norm) => declaredNorm(norm, field, values.kind === 'exactness')),

@@ -1,12 +1,13 @@
 'use client';
 
+import type { CaseKind } from '@/lib/domain/cases/definition';
 import type { Case } from '@/lib/domain/cases/schema';
 import { listReleasesContract } from '@/lib/domain/codes/schema';
 import { listStudiesContract, type StudySummary } from '@/lib/domain/studies/schema';
-import { markOfOutcome } from '@/lib/figures/mark-of-outcome';
 import { Answered } from '../api/answered';
 import { useApi } from '../api/use-api';
 import { useOrganisation } from '../organisation/organisation-context';
+import { markOfOutcome } from '../studies/mark-of-outcome';
 import { Cell, HeadCell, RowHead } from '../tables/cells';
 import { Head, Row, Table } from '../tables/table';
 import { DateTime } from '../ui/date-time';
@@ -16,9 +17,9 @@ import { ButtonLink } from '../ui/button-link';
 import { NameLink } from '../ui/text-link';
 import { StartStudy } from './start-study';
 
-function StudyOutcome({ study, isSolution }: { study: StudySummary; isSolution: boolean }) {
-  if (study.outcome === null) return <span className="text-graphite">{study.state.replace('-', ' ')}</span>;
-  return <OutcomeWord mark={markOfOutcome(study.outcome, { reasons: study.reasons, isSolution })} lineStart />;
+function StudyOutcome({ study, kind }: { study: StudySummary; kind: CaseKind }) {
+  const mark = markOfOutcome(study.outcome, { kind, reasons: study.reasons });
+  return mark === null ? <span className="text-graphite">{study.state.replace('-', ' ')}</span> : <OutcomeWord mark={mark} lineStart />;
 }
 
 /** The studies of a case, release by release; where a release has none, the way to start one. */
@@ -51,7 +52,7 @@ export function ReleaseStudies({ found }: { found: Case }) {
                     return own.map((study, index) => (
                       <Row key={study.id} startsGroup={index === 0} isLinked>
                         <RowHead>{index === 0 && version}</RowHead>
-                        <Cell><StudyOutcome study={study} isSolution={found.kind === 'solution'} /></Cell>
+                        <Cell><StudyOutcome study={study} kind={found.kind} /></Cell>
                         <Cell num>{study.revision}</Cell>
                         <Cell afterNumber><DateTime value={study.stateSince} /></Cell>
                         <Cell><NameLink href={`/${slug}/studies/${study.id}`} className="underline">Open the study</NameLink></Cell>

@@ -13,7 +13,7 @@ export function issuesOf(error: z.ZodError): FieldProblem[] {
 export function checkedResolver<Values extends FieldValues, Typed>(check: (values: Values) => Checked<Typed>, fieldOf: (path: string, values: Values) => string): Resolver<Values, unknown, Typed> {
   return (values) => {
     const checked = check(values);
-    if (checked.ok) return { values: checked.typed, errors: {} } as Awaited<ReturnType<Resolver<Values, unknown, Typed>>>;
+    if (checked.ok) return { values: checked.typed, errors: {} };
     const errors: FieldErrors<Values> = {};
     const seen = new Set<string>();
     for (const { path, message } of checked.faults) {

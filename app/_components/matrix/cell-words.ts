@@ -1,7 +1,7 @@
 import type { Matrix, MatrixCell } from '@/lib/domain/matrix/schema';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
-import { markOfOutcome } from '@/lib/figures/mark-of-outcome';
 import type { MarkName } from '@/lib/figures/outcome-marks';
+import { markOfOutcome } from '../studies/mark-of-outcome';
 
 export type MatrixCase = Matrix['cases'][number];
 
@@ -13,7 +13,7 @@ const words: Record<MarkName, string> = {
 /** The mark of a cell; null where no outcome is there, nor missing. */
 export function markOfCell(row: MatrixCase, cell: MatrixCell): MarkName | null {
   if (cell.outcome !== null) {
-    return cell.exact ? 'exact' : markOfOutcome(cell.outcome, { reasons: [], isSolution: row.kind === 'solution' });
+    return cell.exact ? 'exact' : markOfOutcome(cell.outcome, { kind: row.kind });
   }
   return cell.state === 'not-run' ? 'not-run' : null;
 }

@@ -5,6 +5,7 @@ import { DropdownMenu } from 'radix-ui';
 import { useState } from 'react';
 import { signOutContract } from '@/lib/domain/people/schema';
 import { callApi } from '../api/call-api';
+import { goAfresh } from '../auth/go-afresh';
 import { useOrganisation } from './organisation-context';
 import { sectionLinks } from './section-links';
 
@@ -18,7 +19,7 @@ export function AccountMenu() {
   const signOut = async () => {
     try {
       await callApi(signOutContract, {});
-      window.location.assign('/');
+      goAfresh('/');
     } catch {
       setFault(true);
     }

@@ -44,7 +44,7 @@ function definitionOf(values: ProblemValues): unknown {
   return {
     name: values.name, slug: values.slug.trim() === '' ? undefined : values.slug, equation: values.equation, form: values.form,
     dimension: Number(values.dimension), unsteady: values.unsteady, exact: named(values.exact),
-    constants: Object.fromEntries(constants), domain: Object.fromEntries(domain),
+    constants: Object.fromEntries(constants) as Record<string, unknown>, domain: Object.fromEntries(domain) as Record<string, unknown>,
   };
 }
 

@@ -4,6 +4,7 @@ import { PublicPage } from '@/app/_components/public/public-page';
 import { Formula } from '@/app/_components/ui/formula';
 import { OutcomeWord } from '@/app/_components/ui/outcome-word';
 import { PageTitle } from '@/app/_components/ui/page-title';
+import { findHome } from '@/app/_server/visit';
 import { Section } from '@/app/_components/ui/section';
 import { NormSymbol, Sym } from '@/app/_components/ui/symbols';
 
@@ -11,9 +12,9 @@ export const metadata: Metadata = { title: 'Methods and sources' };
 
 const prose = 'flex max-w-[46em] flex-col gap-3';
 
-export default function MethodsPage() {
+export default async function MethodsPage() {
   return (
-    <PublicPage title="Methods">
+    <PublicPage title="Methods" home={await findHome()}>
       <Section>
         <PageTitle under="What is computed, from which published procedure, and how an outcome is reached.">Methods and sources</PageTitle>
         <p className="mt-4 max-w-[46em]">Grid 1 is the finest. The browser, the server and the tests compute with the same code.</p>

@@ -3,6 +3,7 @@ import { PublicPage } from '@/app/_components/public/public-page';
 import { Cell, HeadCell, RowHead } from '@/app/_components/tables/cells';
 import { Head, Row, Table } from '@/app/_components/tables/table';
 import { PageTitle } from '@/app/_components/ui/page-title';
+import { findHome } from '@/app/_server/visit';
 import { Section } from '@/app/_components/ui/section';
 import { errorTable, type ErrorCode } from '@/lib/errors';
 
@@ -30,9 +31,9 @@ const wayOn: Record<ErrorCode, string> = {
   unavailable: 'Try again in a moment; nothing was changed.',
 };
 
-export default function ProblemsPage() {
+export default async function ProblemsPage() {
   return (
-    <PublicPage title="Answers that refuse">
+    <PublicPage title="Answers that refuse" home={await findHome()}>
       <Section note={<p>Every refusal is a problem document (RFC 9457): type, title, status, detail, and under errors the path and fault of each member concerned.</p>}>
         <PageTitle under="What the API says when it cannot do what was asked, and the way on.">Answers that refuse</PageTitle>
         <div className="mt-6">

@@ -1,0 +1,49 @@
+'use client';
+
+import { explainField, explainQuantity } from '@/lib/domain/assessment/reason-text';
+import { stateOutcome } from '@/lib/domain/assessment/state-outcome';
+import type { QuickCheckInput } from '@/lib/domain/assessment/quick-schema';
+import type { SeriesAssessment } from '@/lib/numerics/assessment';
+import { markOfOutcome } from '../studies/mark-of-outcome';
+import { FormulaText } from '../ui/formula-text';
+import { OutcomeWord } from '../ui/outcome-word';
+import { Statement } from '../ui/page-title';
+import { Section } from '../ui/section';
+import { NormTable } from './norm-table';
+import { ValueTable } from './value-table';
+
+/** The result in a sentence. */
+export function QuickStatement({ assessment }: { assessment: SeriesAssessment }) {
+  const { outcome, sentence } = stateOutcome(assessment, 'space');
+  const mark = markOfOutcome(outcome, { reasons: assessment.fields.length > 0 && assessment.fields.every(({ reasons }) => reasons.includes('exact')) ? ['exact'] : [] });
+  return (
+    <Statement>
+      {mark && <><OutcomeWord large lineStart mark={mark} /> </>}
+      <FormulaText text={sentence} symbols={assessment.fields.map(({ field }) => field)} />
+    </Statement>
+  );
+}
+
+interface QuickResultProps { input: QuickCheckInput; assessment: SeriesAssessment }
+
+/** The numbers behind the sentence, why the outcome is what it is, and what to do next. */
+export function QuickResult({ input, assessment }: QuickResultProps) {
+  const { fields, quantities } = assessment;
+  const symbols = fields.map(({ field }) => field);
+  const explained = [...fields.flatMap(explainField), ...quantities.flatMap(explainQuantity)];
+  const explanations = explained.filter(({ sentence }, index) => explained.findIndex((other) => other.sentence === sentence) === index);
+  const note = quantities.length > 0
+    ? <><p><b>Three-grid procedure</b>: Celik, Ghia, Roache, Freitas and others, J. Fluids Eng. 130, 078001, 2008. Safety factor 1.25.</p><p>The grid convergence index covers the error in about 95 % of cases by experience. It is no bound.</p></>
+    : <p>The <b>band</b> reaches from the tolerance below the formal order to twice the tolerance above it; the last two orders must lie in it.</p>;
+  return (
+    <Section heading="Result" note={note}>
+      {quantities.map((quantity) => <ValueTable key={quantity.name} input={input} quantity={quantity} />)}
+      {fields.length > 0 && <NormTable fields={fields} />}
+      {explanations.length > 0 && (
+        <ul className="mt-4 flex max-w-[46em] flex-col gap-2 font-serif text-[16px] leading-6">
+          {explanations.map(({ sentence, nextStep }) => <li key={sentence}><FormulaText text={sentence} symbols={symbols} /> <FormulaText text={nextStep} symbols={symbols} /></li>)}
+        </ul>
+      )}
+    </Section>
+  );
+}
