@@ -14,7 +14,7 @@ export interface Sent {
   headers?: Record<string, string>;
 }
 
-export type SentTo<C extends ContractShape> = Sent & (keyof PathParameters<C['path']> extends never ? unknown : { params: PathParameters<C['path']> });
+export type SentTo<C extends ContractShape> = Omit<Sent, 'params'> & (keyof PathParameters<C['path']> extends never ? unknown : { params: PathParameters<C['path']> });
 
 export interface Problem { type: string; title: string; status: number; detail: string; errors: { path: string; message: string }[] }
 
