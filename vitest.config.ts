@@ -7,7 +7,7 @@ const alias = {
 
 const project = (name: string, extra: object = {}) => ({
   resolve: { alias },
-  test: { name, include: [`tests/${name}/**/*.test.ts`], ...extra },
+  test: { name, include: [`tests/${name}/**/*.test.ts`], testTimeout: 30_000, ...extra },
 });
 
 // These share one running product: one file at a time, one project after the other.
