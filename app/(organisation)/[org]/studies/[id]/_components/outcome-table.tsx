@@ -59,7 +59,7 @@ export function OutcomeTable({ study, fields, number }: OutcomeTableProps) {
           <HeadCell rowSpan={2}>Field</HeadCell><HeadCell rowSpan={2}>Norm</HeadCell><HeadCell rowSpan={2}>Outcome</HeadCell>
           <HeadCell rowSpan={2}>Counts</HeadCell><HeadCell rowSpan={2} num>Formal</HeadCell><HeadCell rowSpan={2} num>Band</HeadCell>
           {pairs.length > 0 && <HeadCell ofGroup colSpan={pairs.length}>{areWhole ? <>Observed between 1/<Sym>h</Sym> of</> : 'Observed between grids'}</HeadCell>}
-          <HeadCell rowSpan={2} num>Last ratio</HeadCell>
+          <HeadCell rowSpan={2} num className="w-16">Last ratio</HeadCell>
         </tr>
         <tr>{pairs.map((pair) => <HeadCell key={pairName(pair)} num>{pairName(pair)}</HeadCell>)}</tr>
       </Head>

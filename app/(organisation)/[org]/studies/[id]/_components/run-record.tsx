@@ -38,7 +38,7 @@ export function RunRecordSection({ grids, number }: { grids: readonly Grid[]; nu
         <Head>
           <tr>
             <HeadCell>Grids</HeadCell><HeadCell>Compiler and flags</HeadCell><HeadCell>Precision</HeadCell><HeadCell>Platform</HeadCell>
-            <HeadCell num>Ranks</HeadCell><HeadCell afterNumber>Mesh tool</HeadCell><HeadCell>Input deck</HeadCell><HeadCell num>Wall time, s</HeadCell>
+            <HeadCell num>Ranks</HeadCell><HeadCell afterNumber>Mesh tool</HeadCell><HeadCell>Input deck</HeadCell><HeadCell num>Wall time, s, coarse to fine</HeadCell>
           </tr>
         </Head>
         <tbody>

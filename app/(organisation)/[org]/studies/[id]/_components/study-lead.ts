@@ -7,7 +7,7 @@ interface StudyLead {
   /** How many norms and quantities are as they are, and why. */
   sentences: string[];
   nextStep: string | null;
-  /** Norms that do not count and are not as they should be. */
+  /** Norms that do not count, are not as they should be, and say something else than the study as a whole. */
   beside: { field: FieldAssessment; sentence: string }[];
   /** How many more of them Table 1 tells of. */
   more: number;
@@ -26,7 +26,7 @@ export function leadOf(assessment: Assessment, statement: string): StudyLead {
   ];
   const reason = isGood(outcome) || outcome === null ? undefined : concerned[0]?.[0]?.sentence;
   const sentences = [whole?.sentence, reason].filter((text) => text !== undefined && text !== '' && text !== statement) as string[];
-  const beside = fields.filter((field) => !field.counts && field.outcome !== null && !isGood(field.outcome))
+  const beside = fields.filter((field) => !field.counts && field.outcome !== null && field.outcome !== outcome && !isGood(field.outcome))
     .map((field) => ({ field, sentence: explainField(field)[0]?.sentence ?? '' }));
   return {
     sentences: [...new Set(sentences)],

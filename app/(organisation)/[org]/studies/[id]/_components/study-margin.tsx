@@ -71,7 +71,7 @@ export function StudyMargin({ study }: { study: Study }) {
             { name: 'Case', value: <><TextLink href={`/${slug}/cases/${study.case.slug}`}>revision {study.case.revision}</TextLink>{laterText(study.case)}</> },
             { name: 'Problem', value: <><TextLink href={`/${slug}/problems/${problem.slug}`}>revision {problem.revision}</TextLink>{laterText(problem)}</> },
             { name: 'Rule', value: `revision ${rule.revision}` },
-            { name: 'Prepared', value: study.createdBy },
+            { name: 'Prepared', value: <span title={study.createdBy}>{study.createdBy.split('@')[0]}</span> },
             ...(assessment ? [
               { name: 'Content', value: <Content hash={assessment.inputsSha256} /> },
               { name: 'Numerics', value: `version ${assessment.numericsVersion}` },

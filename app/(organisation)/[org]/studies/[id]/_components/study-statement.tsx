@@ -34,7 +34,7 @@ export function StudyStatement({ study, assessment }: StudyStatementProps) {
             );
           })}
           {lead.more > 0 && <span>{lead.more} more {lead.more === 1 ? 'norm' : 'norms'} without weight in Table 1. </span>}
-          {lead.nextStep !== null && <b><FormulaText text={lead.nextStep} symbols={symbols} /></b>}
+          {lead.nextStep !== null && <span className="mt-2 block"><b>Next.</b> <FormulaText text={lead.nextStep} symbols={symbols} /></span>}
         </>
       )}
     >

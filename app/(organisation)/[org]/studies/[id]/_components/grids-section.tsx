@@ -1,0 +1,106 @@
+'use client';
+
+import { useRef, useState, type DragEvent } from 'react';
+import { NeedsEngineer } from '@/app/_components/organisation/needs-engineer';
+import { useOrganisation } from '@/app/_components/organisation/organisation-context';
+import { HeadCell } from '@/app/_components/tables/cells';
+import { Head, Table } from '@/app/_components/tables/table';
+import { Button } from '@/app/_components/ui/button';
+import { Section } from '@/app/_components/ui/section';
+import { matchFiles } from '@/lib/domain/uploads/match-files';
+import type { Grid, Study } from '@/lib/domain/studies/schema';
+import { AddGrid } from './add-grid';
+import { FilesToPlace, type PlacedFile } from './files-to-place';
+import { UploadRow } from './upload-row';
+import { useUploads } from './use-uploads';
+import type { Reading } from './use-study-events';
+
+interface GridsSectionProps { study: Study; readings: ReadonlyMap<string, Reading> }
+
+const takesFile = ({ state, excluded }: Grid) => excluded === null && (state === 'expected' || state === 'rejected' || state === 'receiving' || state === 'needs-columns');
+
+/** The grids while the study collects: drop the files of several at once, watch them, add a grid or leave one out. */
+export function GridsSection({ study, readings }: GridsSectionProps) {
+  const { may } = useOrganisation();
+  const { uploader, transfers } = useUploads(study.id);
+  const [toPlace, setToPlace] = useState<readonly PlacedFile[] | null>(null);
+  const [isOver, setIsOver] = useState(false);
+  const [isAdding, setIsAdding] = useState(false);
+  const [told, setTold] = useState('');
+  const input = useRef<HTMLInputElement>(null);
+  const chosenGrid = useRef<string | null>(null);
+  const mayChange = may('work.write');
+  const comparesFiles = study.definition.fields.length > 0;
+  const grids = [...study.grids].reverse();
+
+  const send = (files: readonly { file: File; grid: string }[]) => {
+    setToPlace(null);
+    setTold(`Sending ${files.length === 1 ? files[0]?.file.name ?? '' : `${files.length} files`}.`);
+    void uploader?.send(files.map(({ file, grid }) => {
+      const known = study.grids.find(({ label }) => label === grid);
+      return { file, grid, halfSent: known?.state === 'receiving' ? (known.upload?.id ?? null) : null };
+    }));
+  };
+  const take = (list: FileList | null) => {
+    const files = [...(list ?? [])];
+    const one = chosenGrid.current;
+    chosenGrid.current = null;
+    if (files.length === 0) return;
+    if (one !== null && files[0] && files.length === 1) { send([{ file: files[0], grid: one }]); return; }
+    const open = grids.filter((grid) => takesFile(grid) && !transfers.has(grid.label));
+    const found = matchFiles(files, open.length >= files.length ? open : grids.filter(({ excluded }) => excluded === null));
+    const placed = files.map((file, index) => ({ file, grid: found[index] ?? null }));
+    const areClear = placed.every(({ grid }) => grid !== null && open.some(({ label }) => label === grid));
+    if (areClear) send(placed.flatMap(({ file, grid }) => (grid === null ? [] : [{ file, grid }])));
+    else setToPlace(placed);
+  };
+  const choose = (grid: string | null) => {
+    chosenGrid.current = grid;
+    if (input.current) input.current.multiple = grid === null;
+    input.current?.click();
+  };
+  const drop = (event: DragEvent) => {
+    event.preventDefault();
+    setIsOver(false);
+    if (mayChange && comparesFiles) take(event.dataTransfer.files);
+  };
+  return (
+    <Section
+      heading="Grids"
+      note={(
+        <>
+          {comparesFiles && <p>Tables separated by comma, semicolon, tab or space, or JSON columns; gzip or not. Files go straight to storage; <b>progress counts confirmed bytes</b>, reading counts rows.</p>}
+          <p>The plan is frozen with the first data; what changes later is marked “after data”.</p>
+        </>
+      )}
+    >
+      <div
+        onDragOver={(event) => { if (mayChange && comparesFiles) { event.preventDefault(); setIsOver(true); } }}
+        onDragLeave={() => setIsOver(false)} onDrop={drop} className={isOver ? 'bg-wash outline-2 outline-offset-8 outline-pen outline-dashed' : ''}
+      >
+        <Table caption="Grids, coarse to fine, and their files." hideCaption>
+          <Head><tr><HeadCell>Grid, file</HeadCell><HeadCell num>Size</HeadCell><HeadCell>State</HeadCell><HeadCell>Progress</HeadCell><HeadCell><span className="sr-only">Actions</span></HeadCell></tr></Head>
+          <tbody>
+            {grids.map((grid) => (
+              <UploadRow
+                key={grid.label} study={study} grid={grid} transfer={transfers.get(grid.label)} reading={readings.get(grid.label)} uploader={uploader}
+                mayChange={mayChange} onChoose={comparesFiles ? () => choose(grid.label) : null}
+              />
+            ))}
+          </tbody>
+        </Table>
+        {comparesFiles && mayChange && <p className="mt-2 text-note text-graphite">Drop several files here at once; each finds its grid by name and size.</p>}
+      </div>
+      {toPlace && <FilesToPlace key={toPlace.map(({ file }) => file.name).join(' ')} files={toPlace} grids={grids.filter(({ excluded }) => excluded === null)} onSend={send} onCancel={() => setToPlace(null)} />}
+      {mayChange ? (
+        <div className="mt-4 flex flex-wrap items-center gap-3">
+          {comparesFiles && <Button kind="primary" onClick={() => choose(null)}>Upload files</Button>}
+          <Button aria-expanded={isAdding} onClick={() => setIsAdding(!isAdding)}>Add a grid</Button>
+          <span role="status" className="text-note text-graphite">{told}</span>
+        </div>
+      ) : <div className="mt-4"><NeedsEngineer what="send files or change grids" /></div>}
+      <input ref={input} type="file" multiple hidden data-testid="files" aria-hidden tabIndex={-1} onChange={(event) => { take(event.target.files); event.target.value = ''; }} />
+      {isAdding && <AddGrid study={study} onDone={() => setIsAdding(false)} />}
+    </Section>
+  );
+}

@@ -1,0 +1,42 @@
+import { ProgressBar } from '@/app/_components/ui/progress-bar';
+import { formatBytes } from '@/lib/domain/numbers/format-bytes';
+import { formatCount } from '@/lib/domain/numbers/format-count';
+import { formatSeconds } from '@/lib/domain/numbers/format-seconds';
+import type { Grid } from '@/lib/domain/studies/schema';
+import type { Transfer } from './uploader';
+import type { Reading } from './use-study-events';
+
+interface UploadProgressProps { grid: Grid; transfer: Transfer | undefined; reading: Reading | undefined }
+
+/** How far a file is: bytes that storage has confirmed while it is sent, rows while it is read. */
+export function UploadProgress({ grid, transfer, reading }: UploadProgressProps) {
+  if (transfer) return <SendingProgress transfer={transfer} />;
+  const { state, upload } = grid;
+  if (grid.excluded !== null || !upload) return null;
+  if (state === 'read') return <>{formatCount(upload.rows ?? upload.rowsRead ?? 0)} rows</>;
+  if (state === 'reading') {
+    const rows = reading?.rowsRead ?? upload.rowsRead ?? 0;
+    return (
+      <>
+        <ProgressBar label={`Reading grid ${grid.label}`} share={reading?.share ?? null} />
+        <span className="text-note text-graphite">{formatCount(rows)} rows</span>
+      </>
+    );
+  }
+  if (state === 'rejected') return <>{upload.reasons.length === 1 ? 'One reason' : `${upload.reasons.length} reasons`}</>;
+  if (state === 'receiving') return <span className="text-note text-graphite">Choose the same file to go on where it stopped.</span>;
+  return null;
+}
+
+function SendingProgress({ transfer: { grid, bytes, confirmed, rate, state } }: { transfer: Transfer }) {
+  if (state === 'failed') return null;
+  const left = rate === null || rate <= 0 ? null : (bytes - confirmed) / rate;
+  return (
+    <>
+      <ProgressBar label={`Sending grid ${grid}`} share={bytes > 0 ? confirmed / bytes : 0} />
+      <span className="text-note text-graphite">
+        {formatBytes(confirmed)} of {formatBytes(bytes)}{rate !== null && `, ${formatBytes(rate)}/s`}{left !== null && `, ${formatSeconds(left)} left`}
+      </span>
+    </>
+  );
+}
