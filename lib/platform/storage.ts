@@ -38,9 +38,15 @@ export function createStorage(options: StorageOptions) {
 
     partLifetimeSeconds,
 
-    async listParts(key: string, multipartId: string): Promise<StoredPart[]> {
-      const answer = await client.send(new ListPartsCommand({ Bucket: bucket, Key: key, UploadId: multipartId, MaxParts: 1000 }));
-      return (answer.Parts ?? []).map((part) => ({ number: part.PartNumber ?? 0, etag: part.ETag ?? '', bytes: part.Size ?? 0 }));
+    /** Parts stored so far, null where the upload was completed or given up. */
+    async findParts(key: string, multipartId: string): Promise<StoredPart[] | null> {
+      try {
+        const answer = await client.send(new ListPartsCommand({ Bucket: bucket, Key: key, UploadId: multipartId, MaxParts: 1000 }));
+        return (answer.Parts ?? []).map((part) => ({ number: part.PartNumber ?? 0, etag: part.ETag ?? '', bytes: part.Size ?? 0 }));
+      } catch (error) {
+        if (error instanceof Error && error.name === 'NoSuchUpload') return null;
+        throw error;
+      }
     },
 
     async completeMultipart(key: string, multipartId: string, parts: { number: number; etag: string }[]): Promise<void> {

@@ -6,7 +6,7 @@ import {
 } from '@/lib/domain/uploads/schema';
 import { ok, send, type Who } from './api';
 
-interface GridPlace { id: string; label: string }
+type GridPlace = { id: string; label: string };
 
 /** Sends a file in one call. */
 export function putFile(who: Who, params: GridPlace, bytes: Buffer, headers: Record<string, string> = {}): Promise<Upload> {

@@ -35,11 +35,13 @@ function checkParts({ bytes, partSize }: ReceivingUpload, stated: CompleteUpload
 /** Joins the parts in storage. A call that was cut off after that finds the whole object and goes on from there. */
 async function joinParts(ctx: MemberContext, receiving: ReceivingUpload, stated: CompleteUploadInput['parts']): Promise<void> {
   const { upload, multipartId, bytes } = receiving;
-  if (await ctx.storage.sizeOf(upload.storage_key) === bytes) return;
-  checkParts(receiving, stated, await ctx.storage.listParts(upload.storage_key, multipartId));
+  const stored = await ctx.storage.findParts(upload.storage_key, multipartId);
+  if (stored === null) {
+    if (await ctx.storage.sizeOf(upload.storage_key) === bytes) return;
+    throw new AppError('wrong-state', 'Storage no longer knows this upload. Start another one.');
+  }
+  checkParts(receiving, stated, stored);
   await ctx.storage.completeMultipart(upload.storage_key, multipartId, stated);
-  const size = await ctx.storage.sizeOf(upload.storage_key);
-  if (size !== bytes) throw invalidParts(`The stored file has ${size ?? 0} bytes; ${bytes} were announced.`);
 }
 
 /** Closes an upload: from here on it is kept, and read. Closing it again changes nothing. */

@@ -10,6 +10,7 @@ export async function getUpload(ctx: MemberContext, id: string): Promise<Upload>
   permit(ctx, 'work.read');
   const loaded = await withOrganisation(ctx, (trx) => requireUpload(ctx, trx, id));
   const { upload } = loaded;
-  const parts = upload.state === 'receiving' && upload.multipart_id !== null ? await ctx.storage.listParts(upload.storage_key, upload.multipart_id) : [];
-  return mapUpload(loaded, parts);
+  const isOpen = upload.state === 'receiving' && upload.multipart_id !== null;
+  const parts = isOpen ? await ctx.storage.findParts(upload.storage_key, upload.multipart_id ?? '') : null;
+  return mapUpload(loaded, parts ?? []);
 }

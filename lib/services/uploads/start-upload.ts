@@ -11,7 +11,7 @@ import { announce } from '../studies/announce';
 import { freezePlan } from '../studies/freeze-plan';
 import { requireGrid } from '../studies/require-grid';
 import { lockCollectingStudy } from '../studies/require-study';
-import { withOrganisation } from '../with-organisation';
+import { withOrganisation, type Trx } from '../with-organisation';
 import { abandonParts } from './abandon-parts';
 import { requireFields } from './require-fields';
 import { storageKey } from './storage-key';
@@ -24,14 +24,20 @@ export async function startUpload(ctx: MemberContext, key: { id: string; label: 
   }
   const id = newId();
   const partSize = partSizeOf(input.bytes);
-  const { grid, replaced } = await withOrganisation(ctx, async (trx) => {
+  const target = async (trx: Trx) => {
     const study = await lockCollectingStudy(ctx, trx, key.id);
     requireFields(study);
-    const grid = await requireGrid(trx, study, key.label);
-    const storage_key = storageKey(ctx.organisation.id, study.head.id, id);
+    return { study, grid: await requireGrid(trx, study, key.label) };
+  };
+  const { study: { head } } = await withOrganisation(ctx, target);
+  const storage_key = storageKey(ctx.organisation.id, head.id, id);
+  // Asked for between the transactions, so that nobody waits for storage with the study held.
+  const multipart_id = await ctx.storage.startMultipart(storage_key);
+  const { grid, replaced } = await withOrganisation(ctx, async (trx) => {
+    const { study, grid } = await target(trx);
     await insertUpload(trx, {
       organisation_id: ctx.organisation.id, id, grid_id: grid.id, filename: input.filename, bytes: input.bytes, stated_sha256: input.sha256 ?? null,
-      storage_key, multipart_id: await ctx.storage.startMultipart(storage_key), part_size: partSize,
+      storage_key, multipart_id, part_size: partSize,
       created_by: ctx.userId, token_id: ctx.token?.id ?? null,
     });
     const before = grid.state === 'receiving' && grid.upload_id !== null ? await findUpload(trx, ctx.organisation.id, grid.upload_id) : undefined;
