@@ -14,7 +14,7 @@ async function readDocument(): Promise<ApiDocument> {
 
 function createCheck(document: ApiDocument) {
   const ajv = new Ajv2020({ strict: false, allErrors: true });
-  addFormats.default(ajv);
+  addFormats(ajv);
   ajv.addSchema(document, 'document');
   const compiled = new Map<string, ValidateFunction>();
   const escape = (part: string) => encodeURIComponent(part.replaceAll('~', '~0').replaceAll('/', '~1'));

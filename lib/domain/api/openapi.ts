@@ -7,10 +7,12 @@ import { problemSchema } from './problem-document';
 
 type Json = Record<string, unknown>;
 
-const schemaOf = (schema: z.ZodType, io: 'input' | 'output'): Json => {
-  const { $schema: _dialect, ...rest } = z.toJSONSchema(schema, { target: 'draft-2020-12', io }) as Json;
-  return rest;
-};
+/** Without its own dialect, which is that of the document. */
+function schemaOf(schema: z.ZodType, io: 'input' | 'output'): Json {
+  const printed = z.toJSONSchema(schema, { target: 'draft-2020-12', io }) as Json;
+  delete printed.$schema;
+  return printed;
+}
 
 /** The whole API as an OpenAPI 3.1 document, printed from the contracts. */
 export function printOpenApi(publicUrl: string): Json {

@@ -8,7 +8,7 @@ import type { MatrixCell } from './schema';
  */
 export function lowestOrder(assessment: Assessment): MatrixCell['lowest'] {
   const fields = judgedFields(assessment).map((field) => ({
-    field: field.field, norm: field.norm as string, observed: lastOrder(field), formalOrder: judgedOrder(field),
+    field: field.field, norm: field.norm, observed: lastOrder(field), formalOrder: judgedOrder(field),
   }));
   const quantities = assessment.quantities.map((quantity) => ({
     field: quantity.name, norm: 'value', observed: quantity.orderObserved, formalOrder: quantity.formalOrder,
