@@ -1,5 +1,5 @@
 import { compileExpressions } from '../numerics/expression/compile-expressions';
-import type { Node, Variable } from '../numerics/expression/graph';
+import type { Node, Variable } from '../numerics/expression/node';
 import type { GridReading } from './grid-reading';
 
 /** The exact value of every field as a node, in the order of the fields. Throws TypeError where an expression does not compile. */

@@ -1,4 +1,4 @@
-import type { Variable } from '@/lib/numerics/expression/graph';
+import type { Variable } from '@/lib/numerics/expression/node';
 import type { ProblemDefinition } from './schema';
 
 /** The coordinates of a problem: as many as its dimension, and t where it is unsteady. */

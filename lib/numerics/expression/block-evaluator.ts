@@ -1,5 +1,5 @@
 import { functions } from './functions';
-import type { Node, Variable } from './graph';
+import type { Node, Variable } from './node';
 import { listNodes } from './list-nodes';
 import { evaluateBinary } from './evaluate-binary';
 

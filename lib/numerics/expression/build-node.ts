@@ -1,7 +1,7 @@
 import { differentiate } from './differentiate';
 import { ExpressionProblem } from './expression-problem';
 import { functionNames, isFunctionName, notSmooth, otherSpelling } from './functions';
-import type { BinaryOperation, Graph, Node, Variable } from './graph';
+import type { BinaryOperation, Graph, Node, Variable } from './node';
 import { parseTree, positionOf, type Tree } from './parse-tree';
 
 const largestGraph = 50_000;

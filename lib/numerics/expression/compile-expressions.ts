@@ -1,7 +1,8 @@
 import { buildNode, type Scope } from './build-node';
 import { ExpressionProblem } from './expression-problem';
 import { isFunctionName } from './functions';
-import { createGraph, type Graph, type Node, type Variable } from './graph';
+import { createGraph } from './graph';
+import type { Graph, Node, Variable } from './node';
 
 export interface ExpressionSet {
   /** Numbers, or expressions of other constants and of the coordinates. */

@@ -1,5 +1,5 @@
 import type { FunctionName } from './functions';
-import type { Graph, Node, Variable } from './graph';
+import type { Graph, Node, Variable } from './node';
 import { listNodes } from './list-nodes';
 
 /**

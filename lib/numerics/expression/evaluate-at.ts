@@ -1,5 +1,5 @@
 import { createBlockEvaluator } from './block-evaluator';
-import type { Node, Variable } from './graph';
+import type { Node, Variable } from './node';
 
 /**
  * The values of nodes at one point, in their order. NaN or an infinity where an expression is not defined at the point.

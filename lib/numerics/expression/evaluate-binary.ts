@@ -1,4 +1,4 @@
-import type { BinaryOperation } from './graph';
+import type { BinaryOperation } from './node';
 
 /** Applies one operation row by row. `exponent` is the number where a power has one, else null. */
 export function evaluateBinary(

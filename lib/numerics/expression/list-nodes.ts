@@ -1,4 +1,4 @@
-import type { Node } from './graph';
+import type { Node } from './node';
 
 /** Every node that the given ones are made of, each once, operands before what uses them. */
 export function listNodes(roots: readonly Node[]): Node[] {

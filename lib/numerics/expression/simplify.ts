@@ -1,4 +1,4 @@
-import type { BinaryOperation, Graph, Node, UnaryOperation } from './graph';
+import type { BinaryOperation, Graph, Node, UnaryOperation } from './node';
 
 /** A simpler node of the same value, or null where the operation stays as it is. */
 export function simplifyUnary(graph: Graph, operation: UnaryOperation, a: Node): Node | null {

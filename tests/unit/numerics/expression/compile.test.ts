@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { compileExpressions, type ExpressionSet } from '@/lib/numerics/expression/compile-expressions';
 import { evaluateAt } from '@/lib/numerics/expression/evaluate-at';
-import type { Variable } from '@/lib/numerics/expression/graph';
+import type { Variable } from '@/lib/numerics/expression/node';
 
 type Point = Partial<Record<Variable, number>>;
 

@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { createBlockEvaluator } from '@/lib/numerics/expression/block-evaluator';
 import { compileExpressions } from '@/lib/numerics/expression/compile-expressions';
 import { evaluateAt } from '@/lib/numerics/expression/evaluate-at';
-import type { Node } from '@/lib/numerics/expression/graph';
+import type { Node } from '@/lib/numerics/expression/node';
 import { listNodes } from '@/lib/numerics/expression/list-nodes';
 
 function compileCompared(fields: Record<string, string>, compared: Record<string, string>, constants = {}): Record<string, Node> {
