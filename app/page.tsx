@@ -55,8 +55,8 @@ export default async function FrontPage() {
             <p>Below each grid the <NormSymbol norm="L2" /> error, and by how much it fell.</p>
           </>
         }
+        heading="One problem on four grids"
       >
-        <h2 className="sr-only">The errors of one solution on four grids</h2>
         <ErrorRasters />
         <div className="mt-8 flex flex-wrap items-center gap-3">
           <ButtonLink kind="primary" href="/quick-check">Check a series</ButtonLink>

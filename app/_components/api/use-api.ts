@@ -5,11 +5,19 @@ import type { ContractShape, ResponseOf } from '@/lib/domain/api/contract';
 import { apiKey, type ApiTarget } from './api-key';
 import { callApi } from './call-api';
 
+interface ApiOptions<Answer> {
+  enabled?: boolean;
+  /** Milliseconds until it is read again, while the answer says that something is under way. */
+  refetchEvery?: (answer: Answer) => number | false;
+}
+
 /** The answer of a reading call, kept and refreshed. */
-export function useApi<C extends ContractShape>(contract: C, target: ApiTarget<C>, options: { enabled?: boolean } = {}) {
+export function useApi<C extends ContractShape>(contract: C, target: ApiTarget<C>, options: ApiOptions<ResponseOf<C>> = {}) {
+  const { enabled, refetchEvery = () => false } = options;
   return useQuery({
     queryKey: apiKey(contract, target),
     queryFn: ({ signal }): Promise<ResponseOf<C>> => callApi(contract, { ...target, signal }),
-    ...options,
+    enabled,
+    refetchInterval: ({ state }) => (state.data === undefined ? false : refetchEvery(state.data)),
   });
 }

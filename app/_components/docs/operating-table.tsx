@@ -1,6 +1,7 @@
 import { Cell, HeadCell, RowHead } from '../tables/cells';
 import { Head, Row, Table } from '../tables/table';
 import { Section } from '../ui/section';
+import { Sym } from '../ui/symbols';
 
 const measured = [
   { grids: 4, falseFails: '1.4 %', falsePasses: '0.8 %' },
@@ -13,7 +14,7 @@ export function OperatingTable() {
   return (
     <Section
       heading="How often the rule errs"
-      note={<p>20 000 drawn series each, formal order 2, halved spacing, coarsest <i className="font-serif">h</i> between 0.05 and 0.8.</p>}
+      note={<p>20 000 drawn series each, formal order 2, halved spacing, coarsest <Sym>h</Sym> between 0.05 and 0.8.</p>}
     >
       <Table number={1} caption="Series of a true order 2 that fail, and series with a first-order part that pass, by number of grids.">
         <Head><tr><HeadCell>Grids</HeadCell><HeadCell num>False fails</HeadCell><HeadCell num>False passes</HeadCell></tr></Head>
@@ -24,7 +25,8 @@ export function OperatingTable() {
         </tbody>
       </Table>
       <p className="mt-3 max-w-[46em] text-graphite">
-        Drawn errors are |h²(1 + ah + bh²)| with a and b normally distributed, standard deviations 2 and 4; and |ah + h²| with |a| between 0.001 and 1, evenly in its logarithm, of either sign.
+        Drawn errors are |<Sym>h</Sym><sup>2</sup>(1 + <Sym>ah</Sym> + <Sym>bh</Sym><sup>2</sup>)| with <Sym>a</Sym> and <Sym>b</Sym> normally distributed, standard
+        deviations 2 and 4; and |<Sym>ah</Sym> + <Sym>h</Sym><sup>2</sup>| with |<Sym>a</Sym>| between 0.001 and 1, evenly in its logarithm, of either sign.
       </p>
     </Section>
   );

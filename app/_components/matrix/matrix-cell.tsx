@@ -42,7 +42,7 @@ export function MatrixCellView({ row, cell, href, isCurrent, place, onRead, onKe
     <td role="gridcell" className="px-1 py-0.5 text-center align-middle">
       {href === null
         ? <span {...shared} role="note"><Content row={row} cell={cell} /></span>
-        : <Link {...shared} href={href}><Content row={row} cell={cell} /></Link>}
+        : <Link prefetch={false} {...shared} href={href}><Content row={row} cell={cell} /></Link>}
     </td>
   );
 }

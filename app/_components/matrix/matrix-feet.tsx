@@ -28,10 +28,10 @@ export function MatrixFeet({ releases, caseColumn }: MatrixFeetProps) {
         </tr>
       ))}
       <tr>
-        <th scope="row" className={`${caseColumn} py-1 text-note`}>Standing</th>
+        <th scope="row" className={`${caseColumn} pt-1 pb-2 text-note`}>Standing</th>
         <td className="max-tablet:hidden" />
         {releases.map(({ id, standing }) => (
-          <td key={id} className={`px-1 py-1 text-center align-top text-note leading-4 ${standing === 'does-not-stand' ? 'font-semibold text-fail-text' : standing === 'stands' ? '' : 'text-graphite'}`}>
+          <td key={id} className={`px-1 pt-1 pb-2 text-center text-note leading-4 ${standing === 'does-not-stand' ? 'font-semibold text-fail-text' : standing === 'stands' ? '' : 'text-graphite'}`}>
             {standingWords[standing].replace(/^is /, '')}
           </td>
         ))}

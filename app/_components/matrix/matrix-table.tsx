@@ -25,15 +25,19 @@ const caseColumn = 'sticky left-0 bg-paper pr-3 text-left align-middle font-norm
 
 /** Cases down, releases across; on a phone the newest release stands next to the case. */
 export function MatrixTable({ matrix }: { matrix: Matrix }) {
-  const { slug } = useOrganisation();
   const isNarrow = useIsNarrow();
+  return <MatrixGrid key={String(isNarrow)} matrix={matrix} isNarrow={isNarrow} />;
+}
+
+function MatrixGrid({ matrix, isNarrow }: { matrix: Matrix; isNarrow: boolean }) {
+  const { slug } = useOrganisation();
   const table = useRef<HTMLTableElement>(null);
   const order = matrix.releases.map((_, index) => index);
   const columns = isNarrow ? order.toReversed() : order;
   const rows = groups.flatMap(({ kind }) => matrix.cases.filter((row) => row.kind === kind));
   const newest = matrix.releases.length - 1;
-  const keys = useGridKeys(table, { rows: rows.length, columns: columns.length }, { row: 0, column: newest });
-  const current = { row: keys.current.row, column: isNarrow ? Math.min(newest, keys.current.column) : keys.current.column };
+  const keys = useGridKeys(table, { rows: rows.length, columns: columns.length }, { row: 0, column: isNarrow ? 0 : newest });
+  const { current } = keys;
   const readRow = rows[current.row];
   const readCell = readRow?.cells[columns[current.column] ?? 0];
   const errorsOf = (row: Matrix['cases'][number]) => matrix.releases.map(({ version }) => row.trend.find(({ release }) => release === version)?.error ?? null);

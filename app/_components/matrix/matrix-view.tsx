@@ -18,9 +18,11 @@ import { MatrixTable } from './matrix-table';
 import { standingReason, standingWords } from './release-statement';
 import { WorseSection } from './worse-section';
 
+const isUnderWay = ({ cases }: Matrix) => cases.some(({ cells }) => cells.some(({ state }) => state === 'collecting' || state === 'assessing'));
+
 export function MatrixView({ code }: { code: string }) {
   const { slug } = useOrganisation();
-  const query = useApi(getMatrixContract, { organisation: slug, params: { code } });
+  const query = useApi(getMatrixContract, { organisation: slug, params: { code } }, { refetchEvery: (matrix) => (isUnderWay(matrix) ? 4000 : false) });
   useEffect(() => {
     document.cookie = `${lastCodeCookie(slug)}=${encodeURIComponent(code)}; path=/; max-age=31536000; samesite=lax`;
   }, [slug, code]);

@@ -20,11 +20,12 @@ export function standingReason({ standing, counts }: Release, cases: number): st
   if (cases === 0) return 'it has no case yet';
   if (standing === 'stands') return counts.passOrExact === 1 ? 'its one case passes' : `all ${count(counts.passOrExact)} cases pass`;
   const parts = [
-    counts.fail > 0 && verb(counts.fail, 'case fails', 'cases fail'),
+    counts.fail > 0 && verb(counts.fail, 'fails', 'fail'),
     counts.inconclusive > 0 && verb(counts.inconclusive, 'is inconclusive', 'are inconclusive'),
     counts.missesTarget > 0 && verb(counts.missesTarget, 'misses its target', 'miss their targets'),
     counts.notRun > 0 && verb(counts.notRun, 'was not run', 'were not run'),
     counts.inProgress > 0 && verb(counts.inProgress, 'is in progress', 'are in progress'),
   ].filter((part) => part !== false);
-  return joined(parts);
+  // The first part says what is counted: "one case fails and two were not run".
+  return joined(parts).replace(/^(\S+) /, (_all, first: string) => `${first} ${first === 'one' ? 'case' : 'cases'} `);
 }

@@ -39,7 +39,7 @@ export function AccountMenu() {
           <div className="wide:hidden">
             <DropdownMenu.Separator className={rule} />
             {sectionLinks(slug).map(({ label, href }) => (
-              <DropdownMenu.Item key={href} asChild><Link href={href} className={item}>{label}</Link></DropdownMenu.Item>
+              <DropdownMenu.Item key={href} asChild><Link prefetch={false} href={href} className={item}>{label}</Link></DropdownMenu.Item>
             ))}
           </div>
           {organisations.length > 1 && (
@@ -48,14 +48,14 @@ export function AccountMenu() {
               <DropdownMenu.Label className="px-4 pt-1 text-note text-graphite">Organisation</DropdownMenu.Label>
               {organisations.map((other) => (
                 <DropdownMenu.Item key={other.id} asChild>
-                  <Link href={`/${other.slug}`} aria-current={other.slug === slug || undefined} className={`${item} ${other.slug === slug ? 'font-semibold' : ''}`}>{other.name}</Link>
+                  <Link prefetch={false} href={`/${other.slug}`} aria-current={other.slug === slug || undefined} className={`${item} ${other.slug === slug ? 'font-semibold' : ''}`}>{other.name}</Link>
                 </DropdownMenu.Item>
               ))}
             </DropdownMenu.Group>
           )}
           <DropdownMenu.Separator className={rule} />
-          <DropdownMenu.Item asChild><Link href={`/${slug}/settings/tokens`} className={item}>Tokens</Link></DropdownMenu.Item>
-          <DropdownMenu.Item asChild><Link href="/docs/methods" className={item}>Methods and sources</Link></DropdownMenu.Item>
+          <DropdownMenu.Item asChild><Link prefetch={false} href={`/${slug}/settings/tokens`} className={item}>Tokens</Link></DropdownMenu.Item>
+          <DropdownMenu.Item asChild><Link prefetch={false} href="/docs/methods" className={item}>Methods and sources</Link></DropdownMenu.Item>
           <DropdownMenu.Item className={item} onSelect={(event) => { event.preventDefault(); void signOut(); }}>Sign out</DropdownMenu.Item>
           {fault && <p role="alert" className="px-4 py-2 text-note text-fail-text">Not signed out. The server did not answer; try again.</p>}
         </DropdownMenu.Content>

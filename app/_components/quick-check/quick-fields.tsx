@@ -21,7 +21,7 @@ export function QuickFields({ state, reading, onChange }: QuickFieldsProps) {
         <option value="values">values of a quantity</option><option value="errors">errors by norm</option>
       </SelectField>
       <SelectField
-        label="Spacing as" className={state.spacingAs === 'h' ? 'col-span-2' : ''} value={state.spacingAs}
+        label="Spacing as" className="col-span-2" value={state.spacingAs}
         onChange={(event) => set({ spacingAs: (['h', 'cells', 'cellsPerDirection'] as const).find((each) => each === event.target.value) ?? 'h' })}
       >
         {Object.entries(spacingColumns).map(([value, name]) => <option key={value} value={value}>{name.charAt(0).toLowerCase() + name.slice(1)}</option>)}
@@ -33,7 +33,7 @@ export function QuickFields({ state, reading, onChange }: QuickFieldsProps) {
       )}
       <NumberField label="Formal order" value={state.formalOrder} error={reading.fields.formalOrder} onChange={(event) => set({ formalOrder: event.target.value })} />
       <TextField label={holdsValues ? 'Quantity' : 'Field'} autoComplete="off" value={state.name} onChange={(event) => set({ name: event.target.value })} />
-      {holdsValues && <NumberField label="Known value, if there is one" className="col-span-2" value={state.knownValue} error={reading.fields.knownValue} onChange={(event) => set({ knownValue: event.target.value })} />}
+      {holdsValues && <NumberField label="Known value, if any" value={state.knownValue} error={reading.fields.knownValue} onChange={(event) => set({ knownValue: event.target.value })} />}
     </div>
   );
 }

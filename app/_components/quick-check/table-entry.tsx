@@ -20,6 +20,8 @@ interface TableEntryProps {
 
 const symbols: Record<string, 'L1' | 'L2' | 'Linf'> = { L1: 'L1', L2: 'L2', 'L∞': 'Linf' };
 
+const placeholders: Record<string, string> = { 'Spacing h': 'h', 'Cells in all': 'cells', 'Cells per direction': 'cells', Value: 'value', L1: 'error', L2: 'error', 'L∞': 'error' };
+
 /** A small table to type or paste into: Enter and the arrow keys move between rows, a new row is always there. */
 export function TableEntry({ columns, rows, faults, onChange, onPasted }: TableEntryProps) {
   const table = useRef<HTMLDivElement>(null);
@@ -56,7 +58,7 @@ export function TableEntry({ columns, rows, faults, onChange, onPasted }: TableE
               {columns.map((column, index) => (
                 <Cell key={column} className="border-l border-hairline p-0 pr-0">
                   <TableInput
-                    label={`${column}, row ${row + 1}`} value={cells[index] ?? ''} data-place={`${row} ${index}`}
+                    label={`${column}, row ${row + 1}`} value={cells[index] ?? ''} placeholder={row === rows.length - 1 ? placeholders[column] : undefined} data-place={`${row} ${index}`}
                     isFaulty={faults.some((fault) => fault.row === row && fault.column === index)}
                     onChange={(event) => setCell(row, index, event.target.value)}
                     onKeyDown={(event) => move(event, row, index)} onPaste={(event) => paste(event, row, index)}

@@ -23,7 +23,7 @@ function Place({ parts }: { parts: readonly PlacePart[] }) {
             <Fragment key={`${index} ${part.label}`}>
               <li className={`min-w-0 truncate whitespace-nowrap ${shrink} ${index < parts.length - 2 ? 'hidden wide:block' : ''}`}>
                 {part.href && !isLast ? (
-                  <Link href={part.href} className="text-graphite underline-offset-3 hover:underline">{part.label}</Link>
+                  <Link prefetch={false} href={part.href} className="text-graphite underline-offset-3 hover:underline">{part.label}</Link>
                 ) : (
                   <span aria-current={isLast ? 'page' : undefined} className={isLast ? 'font-semibold' : 'text-graphite'}>{part.label}</span>
                 )}
@@ -41,7 +41,7 @@ export function TopBar({ home = '/', place = [], children }: TopBarProps) {
   return (
     <header className="top-bar border-b border-hairline">
       <div className="bar-frame flex min-h-12 items-center gap-x-6">
-        <Link href={home} className="bar-brand flex min-h-11 items-center wide:min-h-0">
+        <Link prefetch={false} href={home} className="bar-brand flex min-h-11 items-center wide:min-h-0">
           <Brand />
         </Link>
         <div className="bar-main flex min-h-12 min-w-0 flex-1 items-center justify-between gap-x-6">

@@ -1,6 +1,6 @@
 import type { Metadata } from 'next';
 import { PublicPage } from '@/app/_components/public/public-page';
-import { Cell, HeadCell, RowHead } from '@/app/_components/tables/cells';
+import { Cell, HeadCell } from '@/app/_components/tables/cells';
 import { Head, Row, Table } from '@/app/_components/tables/table';
 import { PageTitle } from '@/app/_components/ui/page-title';
 import { findHome } from '@/app/_server/visit';
@@ -38,13 +38,15 @@ export default async function ProblemsPage() {
         <PageTitle under="What the API says when it cannot do what was asked, and the way on.">Answers that refuse</PageTitle>
         <div className="mt-6">
           <Table caption="Every kind of refusal, by its type." hideCaption>
-            <Head><tr><HeadCell num>Status</HeadCell><HeadCell afterNumber>Title</HeadCell><HeadCell>Way on</HeadCell></tr></Head>
+            <Head><tr><HeadCell num>Status</HeadCell><HeadCell afterNumber>Answer, and the way on</HeadCell></tr></Head>
             <tbody>
               {(Object.keys(errorTable) as ErrorCode[]).map((code) => (
                 <Row key={code} id={code} className="target:bg-wash">
                   <Cell num>{errorTable[code].status}</Cell>
-                  <RowHead className="min-w-44 pl-[14px]">{errorTable[code].title}<code className="block font-mono text-code text-graphite">{code}</code></RowHead>
-                  <Cell className="min-w-60">{wayOn[code]}</Cell>
+                  <Cell afterNumber>
+                    <b>{errorTable[code].title}</b> <code className="ml-2 font-mono text-code text-graphite">{code}</code>
+                    <span className="block">{wayOn[code]}</span>
+                  </Cell>
                 </Row>
               ))}
             </tbody>

@@ -1,0 +1,78 @@
+import AxeBuilder from '@axe-core/playwright';
+import { chromium, type Browser, type BrowserContext, type ConsoleMessage, type Page } from 'playwright-core';
+import { expect, test } from 'vitest';
+import { need } from './environment';
+import type { Person } from './people';
+
+const sizes = { wide: { width: 1280, height: 900 }, phone: { width: 390, height: 844 } } as const;
+
+export interface VisitOptions {
+  /** Who is signed in; nobody where absent. */
+  person?: Pick<Person, 'cookie'>;
+  size?: keyof typeof sizes;
+  theme?: 'light' | 'dark';
+}
+
+export type OpenPage = (path: string, options?: VisitOptions) => Promise<Page>;
+
+async function launch(): Promise<Browser> {
+  return chromium.launch({ executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: ['--no-sandbox'] });
+}
+
+/** The browser reports every refusal as an error, also one that the page shows: of the API, or that the page is not there. */
+function isFault(message: ConsoleMessage, page: Page): boolean {
+  const { url } = message.location();
+  const isRefusal = message.text().startsWith('Failed to load resource') && (url.includes('/api/v1/') || url === page.url());
+  return message.type() === 'error' && !isRefusal;
+}
+
+async function newContext(browser: Browser, { person, size = 'wide', theme = 'light' }: VisitOptions): Promise<BrowserContext> {
+  const context = await browser.newContext({ baseURL: need('WEB_URL'), viewport: sizes[size], colorScheme: theme, reducedMotion: 'reduce' });
+  await context.grantPermissions(['clipboard-read', 'clipboard-write']);
+  const [name = '', value = ''] = person?.cookie.split('=') ?? [];
+  if (person) await context.addCookies([{ name, value, url: need('WEB_URL') }]);
+  return context;
+}
+
+/** Whether the page answers to keys and clicks: React leaves its marks on what it has taken over. */
+const isHydrated = () => Object.keys(document.querySelector('#content') ?? {}).some((key) => key.startsWith('__reactProps'));
+
+interface BrowserFixtures { browser: Browser; open: OpenPage }
+
+/** A test with a browser: `open` opens a page, and any error on its console fails the test. */
+export const browserTest = test.extend<BrowserFixtures>({
+  browser: [async ({ task: _task }, use) => {
+    const browser = await launch();
+    await use(browser);
+    await browser.close();
+  }, { scope: 'file' }],
+  open: async ({ browser }, use) => {
+    const contexts: BrowserContext[] = [];
+    const faults: string[] = [];
+    await use(async (path, options = {}) => {
+      const context = await newContext(browser, options);
+      contexts.push(context);
+      const page = await context.newPage();
+      page.on('console', (message) => { if (isFault(message, page)) faults.push(`${page.url()}: ${message.text()}`); });
+      page.on('pageerror', (error) => faults.push(`${page.url()}: ${error.message}`));
+      await page.goto(path);
+      await page.waitForFunction(isHydrated);
+      return page;
+    });
+    await Promise.all(contexts.map((context) => context.close()));
+    expect(faults).toEqual([]);
+  },
+});
+
+/** What axe finds that keeps somebody out. */
+export async function seriousFindings(page: Page): Promise<string[]> {
+  const { violations } = await new AxeBuilder({ page }).analyze();
+  return violations
+    .filter(({ impact }) => impact === 'serious' || impact === 'critical')
+    .map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html.slice(0, 160)).join(' | ')}`);
+}
+
+/** How far the page is wider than its window, in pixels. */
+export async function overflowOf(page: Page): Promise<number> {
+  return page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
+}
