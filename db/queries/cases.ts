@@ -90,3 +90,15 @@ export function updateCaseColumns(db: Kysely<DB>, organisationId: string, id: st
     .where('id', '=', id)
     .execute();
 }
+
+/** The mapping as it stands, which nobody changes until the transaction ends. */
+export async function lockCaseColumns(db: Kysely<DB>, organisationId: string, id: string) {
+  const row = await db
+    .selectFrom('cases')
+    .select('columns')
+    .where('organisation_id', '=', organisationId)
+    .where('id', '=', id)
+    .forShare()
+    .executeTakeFirstOrThrow();
+  return row.columns;
+}

@@ -1,3 +1,5 @@
+import { isDeepStrictEqual } from 'node:util';
+import { lockCaseColumns } from '@/db/queries/cases';
 import { upsertGridResult } from '@/db/queries/grid-results';
 import { updateGrid } from '@/db/queries/grids';
 import { updateRevisionFailure } from '@/db/queries/study-revisions';
@@ -12,6 +14,7 @@ import { numericsVersion } from '@/lib/numerics/version';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import type { GridReadResult } from '@/lib/readers/read-grid';
 import { RejectedFile } from '@/lib/readers/rejected-file';
+import { enqueueJob } from '../outbox/enqueue-job';
 import type { JobContext } from '../outbox/job-context';
 import { announce } from '../studies/announce';
 import { definitionOf } from '../studies/grid-definition';
@@ -59,10 +62,15 @@ async function findMapping(ctx: JobContext, reading: Reading, reader: GridReader
   await withOrganisation(ctx, (trx) => updateUpload(trx, ctx.organisation.id, upload.id, { preview: json(preview) }));
   const { mapping } = mapColumns(preview.header, { mapping: head.case_columns as unknown as ColumnMapping | null, bound, grid });
   if (mapping) return mapping;
+  let state: GridState = 'needs-columns';
   const isHeard = await whileReading(ctx, reading, async (trx) => {
-    await updateGrid(trx, ctx.organisation.id, grid.id, { state: 'needs-columns', rows_read: null });
+    // Columns mapped since the reading began have resumed only grids that waited by then: this one resumes itself.
+    const columns = await lockCaseColumns(trx, ctx.organisation.id, head.case_id);
+    if (!isDeepStrictEqual(columns, head.case_columns)) state = 'stored';
+    await updateGrid(trx, ctx.organisation.id, grid.id, { state, rows_read: null });
+    if (state === 'stored') await enqueueJob(trx, { organisationId: ctx.organisation.id, job: 'grid.read', subjectId: grid.id, subjectRevision: null });
   });
-  if (isHeard) await tellState(ctx, reading, 'needs-columns');
+  if (isHeard) await tellState(ctx, reading, state);
   return null;
 }
 
