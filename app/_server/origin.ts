@@ -4,7 +4,7 @@ import { AppError } from '@/lib/errors';
 const loopbackNames = ['localhost', '127.0.0.1'];
 
 /** The public origin, and beside a loopback one its other name. */
-export function allowedOrigins(publicUrl: string): string[] {
+function allowedOrigins(publicUrl: string): string[] {
   const url = new URL(publicUrl);
   if (!loopbackNames.includes(url.hostname)) return [url.origin];
   return loopbackNames.map((name) => `${url.protocol}//${name}${url.port === '' ? '' : `:${url.port}`}`);

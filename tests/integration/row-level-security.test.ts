@@ -1,15 +1,14 @@
 import { randomUUID } from 'node:crypto';
-import { Client } from 'pg';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { adminDatabase } from '../support/admin-database';
-import { need } from '../support/environment';
+import { applicationClient } from '../support/application-database';
 import { makeToken, signUp, type Person } from '../support/people';
 import { makeWork, type Work } from '../support/work';
 
 /** Held apart by other means: they carry no content of an organisation. */
 const withoutPolicy = ['kysely_migration', 'kysely_migration_lock', 'outbox', 'sessions', 'users'];
 
-const application = new Client({ connectionString: need('DATABASE_URL') });
+const application = applicationClient();
 let own: Person;
 let other: Person;
 let tables: { name: string; organisation: string }[];

@@ -46,7 +46,7 @@ const declaredQuantitySchema = z.strictObject({
 });
 export type DeclaredQuantity = z.infer<typeof declaredQuantitySchema>;
 
-export const plannedGridSchema = z.strictObject({
+const plannedGridSchema = z.strictObject({
   label: labelSchema, cells: count.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(), h: positive.optional(), dt: positive.optional(),
 });
 

@@ -39,7 +39,7 @@ export const previewSchema = z.strictObject({
 });
 export type UploadPreview = z.infer<typeof previewSchema>;
 
-export const putDataQuerySchema = z.strictObject({ filename: filenameSchema.optional() });
+const putDataQuerySchema = z.strictObject({ filename: filenameSchema.optional() });
 
 export const putDataContract = contract({
   method: 'PUT', path: '/studies/{id}/grids/{label}/data', summary: 'Upload one file in one call', access: 'organisation', status: 202,
