@@ -13,7 +13,8 @@ const sweepEveryMilliseconds = 60_000;
 /** The supervisor kills what has not ended ten seconds after it was asked to. */
 const finishWithinMilliseconds = 7000;
 
-const { context, log, redis, adding, openListener, close } = openWorkerContext(readEnv(process.env));
+const connections = openWorkerContext(readEnv(process.env));
+const { context, log, redis, adding, openListener } = connections;
 const threads = os.availableParallelism();
 const pool = createThreadPool(threads);
 // The queue sends its first command as it is made; on a connection that is not ready that fails for good.
@@ -48,7 +49,7 @@ async function stop(signal: string): Promise<void> {
   }
   await queue.close();
   await pool.close();
-  await close();
+  await connections.close();
   process.exit(0);
 }
 

@@ -2,13 +2,13 @@ import 'server-only';
 
 const heartbeatMilliseconds = 15_000;
 
-export interface EventSender { send(event: string, data: string): void }
+type Send = (event: string, data: string) => void;
 
 /**
  * A stream of server-sent events: what was already known, then what is sent until the reader goes. A comment now and then
  * keeps proxies from closing it; `stop` is called once, when it ends.
  */
-export function eventStream(signal: AbortSignal, headers: Headers, begin: (sender: EventSender) => Promise<() => void>): Promise<Response> {
+export function eventStream(signal: AbortSignal, headers: Headers, begin: (send: Send) => Promise<() => void>): Promise<Response> {
   const encoder = new TextEncoder();
   let stream: ReadableStreamDefaultController<Uint8Array> | null = null;
   let early: Uint8Array[] = [];
@@ -18,7 +18,7 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (sende
     else early.push(bytes);
   };
 
-  return begin({ send: (event, data) => write(`event: ${event}\ndata: ${data}\n\n`) }).then((stop) => {
+  return begin((event, data) => write(`event: ${event}\ndata: ${data}\n\n`)).then((stop) => {
     const heartbeat = setInterval(() => write(': still here\n\n'), heartbeatMilliseconds);
     let isOver = false;
     const end = () => {

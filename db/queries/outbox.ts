@@ -1,7 +1,5 @@
-import { sql, type Insertable, type Kysely, type Selectable, type Updateable } from 'kysely';
+import { sql, type Insertable, type Kysely, type Updateable } from 'kysely';
 import type { DB, Outbox } from '../schema.generated';
-
-export type OutboxRow = Selectable<Outbox>;
 
 export function insertOutboxRow(db: Kysely<DB>, row: Insertable<Outbox>) {
   return db.insertInto('outbox').values(row).execute();

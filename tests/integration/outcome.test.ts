@@ -21,7 +21,7 @@ beforeAll(async () => {
 });
 
 function make(grids: object[]): Promise<Study> {
-  return ok(engineer, createStudyContract, { body: { case: work.case.slug, release: '1.0.0', grids } as never });
+  return ok(engineer, createStudyContract, { body: { case: work.case.slug, release: '1.0.0', grids } });
 }
 
 describe('GET /api/v1/studies/{id}/outcome', () => {

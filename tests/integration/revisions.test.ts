@@ -25,7 +25,7 @@ beforeAll(async () => {
   work = await makeWork(engineer);
 });
 
-const make = (grids: object[]) => ok(engineer, createStudyContract, { body: { case: work.case.slug, release: '1.0.0', grids } as never });
+const make = (grids: object[]) => ok(engineer, createStudyContract, { body: { case: work.case.slug, release: '1.0.0', grids } });
 const read = (id: string, revision?: number) => ok(engineer, getStudyContract, { params: { id }, query: revision === undefined ? {} : { revision } });
 const change = (id: string, grid: Grid, body: object) => ok(engineer, updateGridContract, { params: { id, label: grid.label }, body, ...ifMatch(grid.revision) });
 

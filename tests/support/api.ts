@@ -37,7 +37,7 @@ export async function send<C extends ContractShape>(who: Who, contract: C, sent:
   let call = supertest(need('WEB_URL'))[method](addressOf(contract, sent, who)).set({ ...headersOf(contract, who), ...sent.headers });
   if (sent.body !== undefined) call = call.send(sent.body as object | string);
   const response = await call;
-  await checkAgainstDocument(contract, response.status, response.type, response.body);
+  await checkAgainstDocument(contract, response.status, response.type, response.type.endsWith('json') ? response.body : response.text);
   return response;
 }
 

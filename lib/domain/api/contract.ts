@@ -6,6 +6,9 @@ export type PathParameters<Path extends string> = Record<ParameterNames<Path>, s
 /** Who may call: anybody, anybody signed in, or a member (or token) of one organisation. */
 type Access = 'public' | 'signed-in' | 'organisation';
 
+/** What it is, and where it has a shape of its own: JSON of a schema, or text of media types. */
+export interface OtherAnswer { description: string; schema?: z.ZodType; text?: readonly string[] }
+
 export interface ContractShape {
   method: 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE';
   path: string;
@@ -23,7 +26,7 @@ export interface ContractShape {
   /** The body is not JSON and is handed on as a stream. */
   rawBody?: true;
   /** What else than `response` may come, told in the document only. */
-  alsoAnswers?: Record<number, string>;
+  alsoAnswers?: Record<number, OtherAnswer>;
 }
 
 /** One call of the API: the same object types the form, the route, the service, the tests and the printed document. */

@@ -80,9 +80,14 @@ function responsesOf(contract: ContractShape): Json {
     responses[code] = { description: 'A problem', content: { 'application/problem+json': { schema: { $ref: '#/components/schemas/Problem' } } } };
   }
   responses[status] = response ? { description: summary, content: { 'application/json': { schema: schemaOf(response, 'output') } } } : { description: summary };
-  for (const [code, description] of Object.entries(alsoAnswers)) {
-    if (responses[code]) responses[code] = { ...responses[code], description };
-    else responses[code] = { description };
+  for (const [code, { description, schema, text: mediaTypes = [] }] of Object.entries(alsoAnswers)) {
+    const stated = responses[code] as { content?: Json } | undefined;
+    const content = {
+      ...stated?.content,
+      ...(schema ? { 'application/json': { schema: schemaOf(schema, 'output') } } : {}),
+      ...Object.fromEntries(mediaTypes.map((mediaType) => [mediaType, { schema: { type: 'string' } }])),
+    };
+    responses[code] = Object.keys(content).length > 0 ? { description, content } : { description };
   }
   return responses;
 }

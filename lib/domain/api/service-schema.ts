@@ -9,5 +9,5 @@ export const readyContract = contract({
   response: z.strictObject({ database: z.literal(true), queue: z.literal(true), storage: z.literal(true) }),
 });
 export const openApiContract = contract({
-  method: 'GET', path: '/openapi.json', summary: 'This document', access: 'public', status: 200, alsoAnswers: { 200: 'OpenAPI 3.1' },
+  method: 'GET', path: '/openapi.json', summary: 'This document', access: 'public', status: 200, alsoAnswers: { 200: { description: 'OpenAPI 3.1' } },
 });

@@ -65,7 +65,7 @@ export type OutcomeAnswer = z.infer<typeof outcomeAnswerSchema>;
 export const listStudiesQuerySchema = listQuerySchema.extend({
   case: z.string().optional(), release: z.string().optional(), state: studyStateSchema.optional(),
 });
-export const outcomeQuerySchema = z.strictObject({
+const outcomeQuerySchema = z.strictObject({
   wait: z.coerce.number().int().min(0).max(60).default(0).meta({ description: 'Seconds to wait for an outcome.' }),
   inconclusive: z.enum(['fail', 'skip']).default('fail'),
 });
@@ -108,18 +108,22 @@ export const reviseStudyContract = contract({
 export const assessStudyContract = contract({
   method: 'POST', path: '/studies/{id}/assess', summary: 'Run the assessment again', access: 'organisation', status: 202, response: studySchema,
 });
+const notAssessedYet = { description: 'Not assessed yet', schema: z.strictObject({ state: studyStateSchema }) };
 export const getOutcomeContract = contract({
   method: 'GET', path: '/studies/{id}/outcome', summary: 'The outcome, as JSON or JUnit XML', access: 'organisation', status: 200,
   query: outcomeQuerySchema, response: outcomeAnswerSchema,
-  alsoAnswers: { 202: 'Not assessed yet: {state}', 409: 'A grid is rejected or the assessment failed' },
+  alsoAnswers: {
+    200: { description: 'The outcome; JUnit XML where `Accept` asks for it', text: ['application/xml'] }, 202: notAssessedYet,
+    409: { description: 'A grid is rejected or the assessment failed' },
+  },
 });
 export const getOutcomeXmlContract = contract({
   method: 'GET', path: '/studies/{id}/outcome.xml', summary: 'The outcome as JUnit XML', access: 'organisation', status: 200,
-  query: outcomeQuerySchema, alsoAnswers: { 200: 'JUnit XML', 202: 'Not assessed yet: {state}' },
+  query: outcomeQuerySchema, alsoAnswers: { 200: { description: 'JUnit XML', text: ['application/xml'] }, 202: notAssessedYet },
 });
 export const getEventsContract = contract({
   method: 'GET', path: '/studies/{id}/events', summary: 'Server-sent events: snapshot, progress, state', access: 'organisation', status: 200,
-  alsoAnswers: { 200: 'text/event-stream' },
+  alsoAnswers: { 200: { description: 'Server-sent events', text: ['text/event-stream'] } },
 });
 export const getGridResultContract = contract({
   method: 'GET', path: '/studies/{id}/grids/{label}/result', summary: 'Norms and statistics of one grid', access: 'organisation', status: 200,

@@ -4,7 +4,7 @@ import { studyEventSchema } from '@/lib/domain/events/schema';
 import { getEventsContract } from '@/lib/domain/studies/schema';
 import { watchStudy } from '@/lib/services/studies/watch-study';
 
-export const GET = route(getEventsContract, ({ ctx, params, request, headers }) => eventStream(request.signal, headers, async ({ send }) => {
+export const GET = route(getEventsContract, ({ ctx, params, request, headers }) => eventStream(request.signal, headers, async (send) => {
   const waiting: string[] = [];
   const relay = (message: string) => send(studyEventSchema.parse(JSON.parse(message)).event, message);
   let isStarted = false;
