@@ -27,7 +27,7 @@ export function CaseEdit({ found, onClose }: { found: Case; onClose: () => void 
       <Section note={<p>Saving makes <b>revision {found.revision + 1}</b>. Studies that have data stay with the revision they ran with.</p>}>
         <PageTitle>{found.name}</PageTitle>
       </Section>
-      <Answered query={problems}>{({ items }) => <CaseEditForm found={found} problems={items} onClose={onClose} />}</Answered>
+      <Answered query={problems} inSection>{({ items }) => <CaseEditForm found={found} problems={items} onClose={onClose} />}</Answered>
     </>
   );
 }

@@ -35,8 +35,8 @@ export function CaseNew({ chosen }: { chosen: Chosen }) {
         {!may('work.write') && <div className="mt-6"><NeedsEngineer what="make a case" /></div>}
       </Section>
       {may('work.write') && (
-        <Answered query={codes}>
-          {({ items }) => <Answered query={problems}>{(found) => <CaseStart chosen={chosen} codes={items} problems={found.items} />}</Answered>}
+        <Answered query={codes} inSection>
+          {({ items }) => <Answered query={problems} inSection>{(found) => <CaseStart chosen={chosen} codes={items} problems={found.items} />}</Answered>}
         </Answered>
       )}
     </OrganisationPage>

@@ -33,7 +33,7 @@ export function CaseView({ caseKey }: { caseKey: string }) {
     : [{ label: 'Cases', href: `/${slug}/cases` }, { label: caseKey }];
   return (
     <OrganisationPage place={place} stateLine={found && `Revision ${found.revision}`}>
-      <Answered query={query}>
+      <Answered query={query} inSection>
         {(each) => isEdited
           ? <CaseEdit key={each.revision} found={each} onClose={() => setIsEdited(false)} />
           : <CaseDefinitionView found={each} onEdit={() => setIsEdited(true)} />}

@@ -40,7 +40,7 @@ export function ReleaseTable({ code, releases, mayChange }: ReleaseTableProps) {
                     value={change.isPending && change.variables.release.id === release.id ? change.variables.state : release.state}
                     disabled={change.isPending}
                     onChange={(event) => change.mutate({ release, state: releaseStateSchema.parse(event.target.value) })}
-                    className="min-h-11 cursor-pointer bg-transparent underline decoration-rule/60 decoration-1 underline-offset-3 tablet:min-h-6"
+                    className="-ml-1 min-h-11 cursor-pointer bg-transparent underline decoration-rule/60 decoration-1 underline-offset-3 tablet:min-h-6"
                   >
                     {releaseStateSchema.options.map((state) => <option key={state} value={state} className="bg-paper">{state}</option>)}
                   </select>

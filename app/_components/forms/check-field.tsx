@@ -18,7 +18,7 @@ export function CheckField({ label, hint, error, id, className = '', type = 'che
           aria-describedby={described || undefined}
           className="size-4 shrink-0 cursor-pointer accent-ink"
         />
-        {label}
+        <span>{label}</span>
       </label>
       {error && <FaultText id={`${controlId}-error`} text={error} />}
       {hint && <p id={`${controlId}-hint`} className="ml-6 text-note text-graphite">{hint}</p>}

@@ -28,7 +28,7 @@ export function MatrixView({ code }: { code: string }) {
   }, [slug, code]);
   return (
     <OrganisationPage place={[{ label: query.data?.code.name ?? code }]}>
-      <Answered query={query}>{(matrix) => <MatrixSections matrix={matrix} />}</Answered>
+      <Answered query={query} inSection>{(matrix) => <MatrixSections matrix={matrix} />}</Answered>
     </OrganisationPage>
   );
 }

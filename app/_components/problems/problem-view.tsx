@@ -30,7 +30,7 @@ export function ProblemView({ problem: key }: { problem: string }) {
       place={[{ label: 'Problems', href: `/${slug}/problems` }, { label: problem.data?.name ?? key }]}
       stateLine={problem.data && `Revision ${problem.data.revision}`}
     >
-      <Answered query={problem}>
+      <Answered query={problem} inSection>
         {(found) => isEdited
           ? <ProblemEdit key={found.revision} problem={found} onClose={() => setIsEdited(false)} />
           : <ProblemDefinition problem={found} onEdit={() => setIsEdited(true)} />}

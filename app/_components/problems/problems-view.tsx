@@ -7,7 +7,7 @@ import { PageLinks } from '../lists/page-links';
 import { NeedsEngineer } from '../organisation/needs-engineer';
 import { useOrganisation } from '../organisation/organisation-context';
 import { OrganisationPage } from '../organisation/organisation-page';
-import { Cell, HeadCell, RowHead } from '../tables/cells';
+import { Cell, HeadCell, Missing, RowHead } from '../tables/cells';
 import { Head, Row, Table } from '../tables/table';
 import { ButtonLink } from '../ui/button-link';
 import { EmptyState } from '../ui/empty-state';
@@ -16,6 +16,11 @@ import { Section } from '../ui/section';
 import { Sym } from '../ui/symbols';
 import { NameLink } from '../ui/text-link';
 import { equationNames } from './equation-names';
+
+function ExactNames({ names }: { names: readonly string[] }) {
+  if (names.length === 0) return <Missing reason="No exact solution" />;
+  return names.map((name, index) => <span key={name}>{index > 0 && ', '}<Sym>{name}</Sym></span>);
+}
 
 export function ProblemsView({ query }: { query: { limit: number; cursor?: string } }) {
   const { slug, may } = useOrganisation();
@@ -38,7 +43,7 @@ export function ProblemsView({ query }: { query: { limit: number; cursor?: strin
                         <Row key={problem.id} isLinked>
                           <RowHead className="min-w-40"><NameLink href={`/${slug}/problems/${problem.slug}`}>{problem.name}</NameLink></RowHead>
                           <Cell className="min-w-32">{equationNames[problem.equation]}</Cell>
-                          <Cell>{Object.keys(problem.exact ?? {}).map((name, index) => <span key={name}>{index > 0 && ', '}<Sym>{name}</Sym></span>)}</Cell>
+                          <Cell><ExactNames names={Object.keys(problem.exact ?? {})} /></Cell>
                           <Cell num>{problem.dimension}{problem.unsteady && ' and t'}</Cell>
                           <Cell num>{problem.usedBy.length}</Cell>
                           <Cell num>{problem.revision}</Cell>

@@ -4,8 +4,8 @@ import { columnsOf, isBlankRow, type QuickState } from './quick-state';
 const line = (cells: readonly (string | number | null)[]) => cells.map((cell) => cell ?? '').join('\t');
 
 /** The table as typed and what came of it, in full precision, for a spreadsheet. */
-export function quickTsv(state: QuickState, assessment: SeriesAssessment): string {
-  const typed = state.rows.filter((row) => !isBlankRow(row)).map((row, index) => line([index + 1, ...row.map((cell) => cell.trim())]));
+export function quickTsv(state: QuickState, labels: readonly string[], assessment: SeriesAssessment): string {
+  const typed = state.rows.flatMap((row, index) => (isBlankRow(row) ? [] : [line([labels[index] ?? '', ...row.map((cell) => cell.trim())])]));
   const quantities = assessment.quantities.flatMap((quantity) => [
     line(['order observed', quantity.orderObserved]), line(['order used', quantity.orderUsed]), line(['extrapolated', quantity.extrapolated]),
     line(['relative change', quantity.relativeChange]), line(['GCI', quantity.gci]), line(['GCI in the unit', quantity.gciAbsolute]),

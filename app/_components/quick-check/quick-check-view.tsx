@@ -55,11 +55,11 @@ export function QuickCheckView() {
       >
         <PageTitle under="Type or paste a small table; read order, extrapolated value and grid convergence index.">Quick check</PageTitle>
         {assessment && <QuickStatement assessment={assessment} />}
-        <div className="mt-6 grid gap-x-10 gap-y-8 wide:grid-cols-[312px_minmax(0,1fr)]">
+        <div className={`mt-6 grid gap-x-10 gap-y-8 ${state.holds === 'values' ? 'wide:grid-cols-[312px_minmax(0,1fr)]' : 'wide:grid-cols-[400px_minmax(0,1fr)]'}`}>
           <div className="min-w-0">
             <QuickFields state={state} reading={reading} onChange={setState} />
             <div className="mt-6">
-              <TableEntry columns={columns} rows={state.rows} faults={reading.cells} onChange={(rows) => setState({ ...state, rows })} onPasted={setPasted} />
+              <TableEntry columns={columns} rows={state.rows} labels={reading.labels} faults={reading.cells} onChange={(rows) => setState({ ...state, rows })} onPasted={setPasted} />
             </div>
             {reading.table.map((message) => <FaultText key={message} text={message} />)}
             <p className="mt-1 min-h-5 text-note text-graphite">
@@ -67,7 +67,7 @@ export function QuickCheckView() {
             </p>
             <FormActions>
               {isEmpty && <Button onClick={() => setState(exampleQuick)}>Fill in an example</Button>}
-              {assessment && <CopyButton text={() => quickTsv(state, assessment)}>Copy as TSV</CopyButton>}
+              {assessment && <CopyButton text={() => quickTsv(state, reading.labels, assessment)}>Copy as TSV</CopyButton>}
             </FormActions>
           </div>
           <div className="min-w-0">

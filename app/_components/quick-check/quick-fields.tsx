@@ -34,6 +34,7 @@ export function QuickFields({ state, reading, onChange }: QuickFieldsProps) {
       <NumberField label="Formal order" value={state.formalOrder} error={reading.fields.formalOrder} onChange={(event) => set({ formalOrder: event.target.value })} />
       <TextField label={holdsValues ? 'Quantity' : 'Field'} autoComplete="off" value={state.name} onChange={(event) => set({ name: event.target.value })} />
       {holdsValues && <NumberField label="Known value, if any" value={state.knownValue} error={reading.fields.knownValue} onChange={(event) => set({ knownValue: event.target.value })} />}
+      {holdsValues && <NumberField label="Largest GCI, if any" hint="A fraction: 0.02 is 2 %." value={state.target} error={reading.fields.target} onChange={(event) => set({ target: event.target.value })} />}
     </div>
   );
 }

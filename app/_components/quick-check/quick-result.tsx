@@ -9,6 +9,7 @@ import { FormulaText } from '../ui/formula-text';
 import { OutcomeWord } from '../ui/outcome-word';
 import { Statement } from '../ui/page-title';
 import { Section } from '../ui/section';
+import { NormSymbol } from '../ui/symbols';
 import { NormTable } from './norm-table';
 import { ValueTable } from './value-table';
 
@@ -30,8 +31,10 @@ interface QuickResultProps { input: QuickCheckInput; assessment: SeriesAssessmen
 export function QuickResult({ input, assessment }: QuickResultProps) {
   const { fields, quantities } = assessment;
   const symbols = fields.map(({ field }) => field);
-  const explained = [...fields.flatMap(explainField), ...quantities.flatMap(explainQuantity)];
-  const explanations = explained.filter(({ sentence }, index) => explained.findIndex((other) => other.sentence === sentence) === index);
+  const explanations = [
+    ...fields.flatMap((field) => explainField(field).map((text) => ({ ...text, norm: fields.length > 1 ? field.norm : null }))),
+    ...quantities.flatMap(explainQuantity).map((text) => ({ ...text, norm: null })),
+  ];
   const note = quantities.length > 0
     ? <><p><b>Three-grid procedure</b>: Celik, Ghia, Roache, Freitas and others, J. Fluids Eng. 130, 078001, 2008. Safety factor 1.25.</p><p>The grid convergence index covers the error in about 95 % of cases by experience. It is no bound.</p></>
     : <p>The <b>band</b> reaches from the tolerance below the formal order to twice the tolerance above it; the last two orders must lie in it.</p>;
@@ -41,7 +44,7 @@ export function QuickResult({ input, assessment }: QuickResultProps) {
       {fields.length > 0 && <NormTable fields={fields} />}
       {explanations.length > 0 && (
         <ul className="mt-4 flex max-w-[46em] flex-col gap-2 font-serif text-[16px] leading-6">
-          {explanations.map(({ sentence, nextStep }) => <li key={sentence}><FormulaText text={sentence} symbols={symbols} /> <FormulaText text={nextStep} symbols={symbols} /></li>)}
+          {explanations.map(({ norm, sentence, nextStep }) => <li key={`${norm} ${sentence}`}>{norm && <><NormSymbol norm={norm} />: </>}<FormulaText text={sentence} symbols={symbols} /> <FormulaText text={nextStep} symbols={symbols} /></li>)}
         </ul>
       )}
     </Section>

@@ -5,6 +5,8 @@ export interface QuickState {
   dimension: '1' | '2' | '3';
   formalOrder: string;
   knownValue: string;
+  /** Largest GCI accepted, as a fraction. */
+  target: string;
   name: string;
   /** Spacing first, then a value, or the errors in L1, L2, L∞; the last row is always empty. */
   rows: string[][];
@@ -25,7 +27,7 @@ export function withEmptyRow(rows: readonly string[][], columns: number): string
 }
 
 export const emptyQuick: QuickState = {
-  holds: 'values', spacingAs: 'cellsPerDirection', dimension: '1', formalOrder: '', knownValue: '', name: '', rows: withEmptyRow([], 2),
+  holds: 'values', spacingAs: 'cellsPerDirection', dimension: '1', formalOrder: '', knownValue: '', target: '', name: '', rows: withEmptyRow([], 2),
 };
 
 const trapezoid = (cells: number) => Array.from({ length: cells + 1 }, (_, index) => Math.exp(index / cells) * (index === 0 || index === cells ? 0.5 : 1))
@@ -33,6 +35,6 @@ const trapezoid = (cells: number) => Array.from({ length: cells + 1 }, (_, index
 
 /** The integral of the exponential function over the unit interval by the trapezoidal rule. */
 export const exampleQuick: QuickState = {
-  ...emptyQuick, formalOrder: '2', name: 'integral of exp',
+  ...emptyQuick, formalOrder: '2', name: 'the integral',
   rows: withEmptyRow([8, 16, 32, 64].map((cells) => [String(cells), trapezoid(cells).toFixed(9)]), 2),
 };

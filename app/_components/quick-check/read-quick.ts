@@ -7,12 +7,16 @@ import { isBlankRow, type QuickState } from './quick-state';
 
 export interface CellFault { row: number; column: number; message: string }
 
+type HeldTo = 'formalOrder' | 'knownValue' | 'target';
+
 export interface QuickReading {
   input: QuickCheckInput | null;
   assessment: SeriesAssessment | null;
   cells: CellFault[];
   /** Faults of the fields above the table, by their name. */
-  fields: Partial<Record<'formalOrder' | 'knownValue', string>>;
+  fields: Partial<Record<HeldTo, string>>;
+  /** What each row is called: 1 is the finest grid, as far as the spacings can be read. */
+  labels: string[];
   /** What concerns the table as a whole. */
   table: string[];
 }
@@ -31,17 +35,34 @@ function cellsPerDirection(text: string): number | number[] | null {
   return counts.length === 1 ? (counts[0] ?? null) : (counts as number[]);
 }
 
-function readRow(row: readonly string[], at: number, state: QuickState, faults: CellFault[]): unknown {
+function readSpacing(row: readonly string[], { spacingAs }: QuickState): number | number[] | null {
+  return spacingAs === 'cellsPerDirection' ? cellsPerDirection(row[0] ?? '') : readNumber(row[0] ?? '');
+}
+
+/** Grids by fineness; blank rows have no name, and where a spacing cannot be read the rows count downwards. */
+function labelRows(state: QuickState): string[] {
+  const finenessOf = (row: readonly string[]) => {
+    const stated = readSpacing(row, state);
+    const size = Array.isArray(stated) ? stated.reduce((product, count) => product * count, 1) : stated;
+    return size === null || state.spacingAs !== 'h' ? size : -size;
+  };
+  const typed = state.rows.filter((row) => !isBlankRow(row)).map((row) => ({ row, fineness: finenessOf(row) }));
+  const areAllRead = typed.every(({ fineness }) => fineness !== null);
+  const order = areAllRead ? typed.toSorted((a, b) => (b.fineness ?? 0) - (a.fineness ?? 0)) : typed.toReversed();
+  return state.rows.map((row) => (isBlankRow(row) ? '' : String(order.findIndex((each) => each.row === row) + 1)));
+}
+
+function readRow(row: readonly string[], at: { row: number; label: string }, state: QuickState, faults: CellFault[]): unknown {
   const [spacing = '', ...rest] = row;
-  const stated = state.spacingAs === 'cellsPerDirection' ? cellsPerDirection(spacing) : readNumber(spacing);
-  const expected = (column: number, text: string) => faults.push({ row: at, column, message: text.trim() === '' ? 'Missing. Expected a number.' : `Not a number. Found “${text.trim()}”.` });
+  const { label } = at;
+  const stated = readSpacing(row, state);
+  const expected = (column: number, text: string) => faults.push({ row: at.row, column, message: text.trim() === '' ? 'Missing. Expected a number.' : `Not a number. Found “${text.trim()}”.` });
   if (stated === null) expected(0, spacing);
   const numbers = rest.map((text, index) => {
     const value = readNumber(text);
     if (value === null && (text.trim() !== '' || state.holds === 'values')) expected(index + 1, text);
     return value;
   });
-  const label = String(at + 1);
   if (state.holds === 'values') return { label, [state.spacingAs]: stated, value: numbers[0] ?? undefined, resolution: lastDigit(rest[0] ?? '') };
   const errors = norms.flatMap((norm, index) => (typeof numbers[index] === 'number' ? [[norm, numbers[index]]] : []));
   return { label, [state.spacingAs]: stated, errors: Object.fromEntries(errors) as Record<string, unknown> };
@@ -49,7 +70,7 @@ function readRow(row: readonly string[], at: number, state: QuickState, faults: 
 
 function placeFault({ path, message }: FieldProblem, rowsTyped: readonly number[], reading: QuickReading): void {
   const [list, at, member, norm] = path.split('.');
-  if (list === 'formalOrder' || list === 'knownValue') reading.fields[list] = message;
+  if (list === 'formalOrder' || list === 'knownValue' || list === 'target') reading.fields[list] = message;
   else if (list === 'grids' && at !== undefined) {
     const column = member === 'value' ? 1 : member === 'errors' && norm ? norms.findIndex((each) => each === norm) + 1 : 0;
     reading.cells.push({ row: rowsTyped[Number(at)] ?? 0, column, message });
@@ -58,11 +79,11 @@ function placeFault({ path, message }: FieldProblem, rowsTyped: readonly number[
 
 /** What was typed, as POST /assess would take it, and what comes of it; or what is wrong with it, cell by cell. */
 export function readQuick(state: QuickState): QuickReading {
-  const reading: QuickReading = { input: null, assessment: null, cells: [], fields: {}, table: [] };
+  const reading: QuickReading = { input: null, assessment: null, cells: [], fields: {}, table: [], labels: labelRows(state) };
   const rowsTyped = state.rows.flatMap((row, index) => (isBlankRow(row) ? [] : [index]));
   if (rowsTyped.length < 2) return reading;
-  const grids = rowsTyped.map((at) => readRow(state.rows[at] ?? [], at, state, reading.cells));
-  const optional = (name: 'formalOrder' | 'knownValue') => {
+  const grids = rowsTyped.map((at) => readRow(state.rows[at] ?? [], { row: at, label: reading.labels[at] ?? '' }, state, reading.cells));
+  const optional = (name: HeldTo) => {
     if (state[name].trim() === '') return undefined;
     const value = readNumber(state[name]);
     if (value === null) reading.fields[name] = `Not a number. Found “${state[name].trim()}”.`;
@@ -70,8 +91,9 @@ export function readQuick(state: QuickState): QuickReading {
   };
   const formalOrder = optional('formalOrder');
   const knownValue = state.holds === 'values' ? optional('knownValue') : undefined;
+  const target = state.holds === 'values' ? optional('target') : undefined;
   if (reading.cells.length > 0 || Object.keys(reading.fields).length > 0) return reading;
-  const parsed = quickCheckSchema.safeParse({ dimension: Number(state.dimension), grids, formalOrder, knownValue });
+  const parsed = quickCheckSchema.safeParse({ dimension: Number(state.dimension), grids, formalOrder, knownValue, target });
   if (!parsed.success) {
     for (const issue of parsed.error.issues) placeFault({ path: issue.path.join('.'), message: issue.message }, rowsTyped, reading);
     return reading;

@@ -8,11 +8,13 @@ import { Head, Row, Table } from '../tables/table';
 import { NormSymbol } from '../ui/symbols';
 import { parsePasted, type PastedTable } from './parse-table';
 import type { CellFault } from './read-quick';
-import { isBlankRow, withEmptyRow } from './quick-state';
+import { withEmptyRow } from './quick-state';
 
 interface TableEntryProps {
   columns: readonly string[];
   rows: string[][];
+  /** What the grid of each row is called. */
+  labels: readonly string[];
   faults: readonly CellFault[];
   onChange: (rows: string[][]) => void;
   onPasted: (table: PastedTable) => void;
@@ -23,7 +25,7 @@ const symbols: Record<string, 'L1' | 'L2' | 'Linf'> = { L1: 'L1', L2: 'L2', 'Lâˆ
 const placeholders: Record<string, string> = { 'Spacing h': 'h', 'Cells in all': 'cells', 'Cells per direction': 'cells', Value: 'value', L1: 'error', L2: 'error', 'Lâˆž': 'error' };
 
 /** A small table to type or paste into: Enter and the arrow keys move between rows, a new row is always there. */
-export function TableEntry({ columns, rows, faults, onChange, onPasted }: TableEntryProps) {
+export function TableEntry({ columns, rows, labels, faults, onChange, onPasted }: TableEntryProps) {
   const table = useRef<HTMLDivElement>(null);
   const setCell = (row: number, column: number, text: string) =>
     onChange(withEmptyRow(rows.map((cells, at) => (at === row ? cells.map((cell, index) => (index === column ? text : cell)) : cells)), columns.length));
@@ -46,15 +48,14 @@ export function TableEntry({ columns, rows, faults, onChange, onPasted }: TableE
     onChange(withEmptyRow([...before, ...put, ...rows.slice(row + put.length)], columns.length));
     onPasted(pasted);
   };
-  const grids = rows.filter((row) => !isBlankRow(row)).length;
   return (
     <div ref={table}>
       <Table caption="Grids and what was computed on them." hideCaption className="table-fixed">
-        <Head><tr><HeadCell className="w-12">Grid</HeadCell>{columns.map((column) => <HeadCell key={column} num className="px-2">{symbols[column] ? <NormSymbol norm={symbols[column]} /> : column}</HeadCell>)}</tr></Head>
+        <Head><tr><HeadCell className="w-10">Grid</HeadCell>{columns.map((column) => <HeadCell key={column} num className="px-2">{symbols[column] ? <NormSymbol norm={symbols[column]} /> : column}</HeadCell>)}</tr></Head>
         <tbody>
           {rows.map((cells, row) => (
             <Row key={row}>
-              <RowHead className="align-middle text-graphite">{row < grids || !isBlankRow(cells) ? row + 1 : ''}</RowHead>
+              <RowHead className="align-middle text-graphite">{labels[row]}</RowHead>
               {columns.map((column, index) => (
                 <Cell key={column} className="border-l border-hairline p-0 pr-0">
                   <TableInput

@@ -28,6 +28,11 @@ describe('readQuick(state)', () => {
     expect(assessment?.fields.map(({ norm, outcome }) => [norm, outcome])).toEqual([['L2', 'pass']]);
   });
 
+  it('calls the finest grid 1, in whatever order the rows stand', () => {
+    expect(readQuick({ ...emptyQuick, rows: rows([['16', '1.5'], ['64', '1.2'], ['32', '1.3']]) }).labels).toEqual(['3', '1', '2', '']);
+    expect(readQuick({ ...emptyQuick, spacingAs: 'h', rows: rows([['0.1', '1.5'], ['0.05', '1.2']]) }).labels).toEqual(['2', '1', '']);
+  });
+
   it('says nothing before two rows are typed', () => {
     expect(readQuick({ ...emptyQuick, rows: rows([['16', '1.5']]) })).toMatchObject({ assessment: null, cells: [], table: [] });
   });

@@ -30,7 +30,7 @@ export function StudyView({ id, revision }: StudyViewProps) {
       place={study.data ? placeOf(slug, study.data) : [{ label: 'Studies', href: `/${slug}/studies` }, { label: 'study' }]}
       stateLine={study.data && `${stateWords[study.data.state]}, revision ${study.data.revision}`}
     >
-      <Answered query={study}>{(found) => <StudySections study={found} readings={readings} />}</Answered>
+      <Answered query={study} inSection>{(found) => <StudySections study={found} readings={readings} />}</Answered>
     </OrganisationPage>
   );
 }
