@@ -1,4 +1,4 @@
-import { findGrid } from '@/db/queries/grids';
+import { findGrid, updateGrid } from '@/db/queries/grids';
 import { updateOutboxRow } from '@/db/queries/outbox';
 import { updateRevisionFailure, type RevisionKey } from '@/db/queries/study-revisions';
 import type { JobName, JobPayload } from '@/lib/jobs/jobs';
@@ -11,6 +11,8 @@ const retryMilliseconds = 5 * 60_000;
 async function concerned(trx: Trx, name: JobName, { organisationId, subjectId, subjectRevision }: JobPayload): Promise<{ at: RevisionKey; what: string } | null> {
   if (name === 'study.assess') return { at: { organisationId, studyId: subjectId, revision: subjectRevision ?? 0 }, what: 'The assessment could not be made yet' };
   const grid = await findGrid(trx, organisationId, subjectId);
+  // Nothing is wrong with the file: it lies there to be read.
+  if (grid) await updateGrid(trx, organisationId, grid.id, { state: 'stored' }, { states: ['reading'] });
   return grid ? { at: { organisationId, studyId: grid.study_id, revision: grid.study_revision }, what: `The file of grid ${grid.label} could not be read yet` } : null;
 }
 

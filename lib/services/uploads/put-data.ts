@@ -41,6 +41,15 @@ function statedDigest(field: string | null): string | null {
   }
 }
 
+/** The body, or 400 where the sender went away in the middle of it. */
+async function* unbroken(body: AsyncIterable<Uint8Array>): AsyncGenerator<Uint8Array> {
+  try {
+    yield* body;
+  } catch (cause) {
+    throw new AppError('bad-request', 'The body broke off. Nothing was kept; send the file again.', { cause });
+  }
+}
+
 /** Streams the body into storage, counting and hashing; what is short, damaged or too large is not kept. */
 async function storeBody(ctx: MemberContext, key: string, { body, contentLength, reprDigest }: DataInput): Promise<{ bytes: number; sha256: string }> {
   const stated = { bytes: contentLength === null ? null : Number(contentLength), sha256: statedDigest(reprDigest) };
@@ -48,7 +57,7 @@ async function storeBody(ctx: MemberContext, key: string, { body, contentLength,
   const hash = createHash('sha256');
   let bytes = 0;
   async function* counted(): AsyncGenerator<Uint8Array> {
-    for await (const chunk of body) {
+    for await (const chunk of unbroken(body)) {
       bytes += chunk.length;
       if (bytes > mostBytes) throw tooLarge();
       hash.update(chunk);
