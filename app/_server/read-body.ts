@@ -1,6 +1,10 @@
 import 'server-only';
-import type { z } from 'zod';
+import { z } from 'zod';
+import { faultMessage } from '@/lib/domain/api/fault-message';
 import { AppError, type FieldProblem } from '@/lib/errors';
+
+// A script reads the same sentences as a person at a form.
+z.config({ customError: faultMessage });
 
 const jsonLimit = 1024 * 1024;
 

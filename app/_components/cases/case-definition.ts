@@ -1,4 +1,5 @@
 import { checkCase } from '@/lib/domain/cases/check-case';
+import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import { createCaseSchema, type CreateCaseInput } from '@/lib/domain/cases/schema';
 import type { ProblemDefinition } from '@/lib/domain/problems/schema';
 import { issuesOf, type Checked } from '../forms/checked-resolver';
@@ -55,7 +56,11 @@ function typedCase(values: CaseValues): unknown {
 /** Checks a case as the server will: its shape, then against its problem. */
 export function checkCaseValues(values: CaseValues, problem: ProblemDefinition | undefined): Checked<CreateCaseInput> {
   const parsed = createCaseSchema.safeParse(typedCase(values));
-  if (!parsed.success) return { ok: false, faults: issuesOf(parsed.error) };
-  const faults = problem ? checkCase(parsed.data, problem, parsed.data.kind) : [];
-  return faults.length === 0 ? { ok: true, typed: parsed.data } : { ok: false, faults };
+  if (parsed.success) {
+    const faults = problem ? checkCase(parsed.data, problem, parsed.data.kind) : [];
+    return faults.length === 0 ? { ok: true, typed: parsed.data } : { ok: false, faults };
+  }
+  // What is declared is checked as it is typed, also while the name is still missing.
+  const definition = caseDefinitionSchema.loose().safeParse(typedCase(values));
+  return { ok: false, faults: [...issuesOf(parsed.error), ...(definition.success && problem ? checkCase(definition.data, problem, values.kind) : [])] };
 }

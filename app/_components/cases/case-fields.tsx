@@ -9,6 +9,7 @@ import { SelectField } from '../forms/select-field';
 import { TextArea } from '../forms/text-area';
 import { TextField } from '../forms/text-field';
 import { Section } from '../ui/section';
+import { NormSymbol } from '../ui/symbols';
 import type { CaseForm } from './case-form-type';
 import { FieldRows } from './field-rows';
 import { GridPlanRows } from './grid-plan-rows';
@@ -50,7 +51,7 @@ export function CaseFields({ form, codes, problems, isNew }: CaseFieldsProps) {
       {kind !== 'solution' && (
         <Section
           heading="Fields and norms"
-          note={<><p>A norm that <b>counts</b> decides the outcome. L1 may not count alone.</p><p>Left empty, the tolerance is the rule’s: the larger of 0.1 and 5 % of the order, for L∞ 0.2 and 10 %. A case may only tighten it.</p></>}
+          note={<><p>A norm that <b>counts</b> decides the outcome. <NormSymbol norm="L1" /> may not count alone.</p><p>Left empty, the tolerance is the rule’s: the larger of 0.1 and 5 % of the order, for <NormSymbol norm="Linf" /> 0.2 and 10 %. A case may only tighten it.</p></>}
         >
           <FieldRows form={form} isExactness={kind === 'exactness'} known={Object.keys(problem?.exact ?? {})} />
         </Section>

@@ -27,14 +27,14 @@ export function GridPlanRows({ form, dimension, isUnsteady }: GridPlanRowsProps)
   const spacingName = spacingNames[spacingAs];
   return (
     <div className="flex flex-col gap-6">
-      <div className="grid items-end gap-5 tablet:grid-cols-[2fr_1fr_1fr_1fr_auto]">
-        <SelectField label="Spacing as" {...register('spacingAs')}>
+      <div className="grid grid-cols-3 items-end gap-x-3 gap-y-5 tablet:grid-cols-[2fr_1fr_1fr_1fr_auto] tablet:gap-x-5">
+        <SelectField label="Spacing as" className="col-span-3 tablet:col-span-1" {...register('spacingAs')}>
           {Object.entries(spacingNames).map(([value, name]) => <option key={value} value={value}>{name}</option>)}
         </SelectField>
         <NumberField label="Coarsest" value={series.coarsest} onChange={(event) => setSeries({ ...series, coarsest: event.target.value })} />
         <NumberField label="Ratio" value={series.ratio} onChange={(event) => setSeries({ ...series, ratio: event.target.value })} />
         <NumberField label="Grids" value={series.count} onChange={(event) => setSeries({ ...series, count: event.target.value })} />
-        <Button onClick={() => { if (planned) replace(planned); }} aria-disabled={planned === null || undefined}>Fill the plan</Button>
+        <Button className="col-span-3 tablet:col-span-1" onClick={() => { if (planned) replace(planned); }} aria-disabled={planned === null || undefined}>Fill the plan</Button>
       </div>
       {fields.length > 0 && (
         <Table caption="Grid plan." hideCaption>

@@ -1,5 +1,5 @@
 import { checkProblem } from '@/lib/domain/problems/check-problem';
-import { createProblemSchema, type CreateProblemInput, type Equation, type Problem } from '@/lib/domain/problems/schema';
+import { createProblemSchema, problemDefinitionSchema, type CreateProblemInput, type Equation, type Problem } from '@/lib/domain/problems/schema';
 import type { FieldProblem } from '@/lib/errors';
 import { issuesOf, type Checked } from '../forms/checked-resolver';
 import { typedNumber } from '../forms/typed-number';
@@ -63,9 +63,13 @@ export function checkProblemValues(values: ProblemValues): Checked<CreateProblem
   const faults = [...nameFaults(values.exact, 'exact'), ...nameFaults(values.constants, 'constants')];
   if (faults.length > 0) return { ok: false, faults };
   const parsed = createProblemSchema.safeParse(definitionOf(values));
-  if (!parsed.success) return { ok: false, faults: issuesOf(parsed.error) };
-  const found = checkProblem(parsed.data);
-  return found.length === 0 ? { ok: true, typed: parsed.data } : { ok: false, faults: found };
+  if (parsed.success) {
+    const found = checkProblem(parsed.data);
+    return found.length === 0 ? { ok: true, typed: parsed.data } : { ok: false, faults: found };
+  }
+  // Expressions are checked as they are typed, also while the name is still missing.
+  const definition = problemDefinitionSchema.loose().safeParse(definitionOf(values));
+  return { ok: false, faults: [...issuesOf(parsed.error), ...(definition.success ? checkProblem(definition.data) : [])] };
 }
 
 /** The field of the form for a path of the definition, such as `exact.u`. */

@@ -26,7 +26,7 @@ export function faultMessage(issue: z.core.$ZodRawIssue): string | undefined {
   switch (issue.code) {
     case 'invalid_type': {
       if (issue.input === undefined) return 'Missing. Fill this in.';
-      if (issue.expected === 'number' || issue.expected === 'int') return `Not ${kinds[issue.expected]}.${quoted(issue.input)}`;
+      if (issue.expected === 'number' || issue.expected === 'int') return `Not ${kinds[issue.expected]}.${quoted(issue.input)} Expected ${kinds[issue.expected]}, such as ${issue.expected === 'int' ? 16 : 0.1}.`;
       return `Not readable.${quoted(issue.input)} Expected ${kinds[issue.expected] ?? issue.expected}.`;
     }
     case 'too_small': return tooSmall(issue);
