@@ -17,7 +17,7 @@ export function matchFiles(files: readonly NamedFile[], grids: readonly Matchabl
       if (grid && claims.filter((other) => other === grid).length === 1) found[index] = grid.label;
     });
   }
-  const restFiles = files.flatMap((file, index) => (found[index] === null ? [{ ...file, index }] : []));
+  const restFiles = files.flatMap((file, index) => (found[index] === null ? [{ name: file.name, size: file.size, index }] : []));
   const restGrids = grids.filter(({ label }) => !found.includes(label));
   if (restFiles.length === 0 || restFiles.length !== restGrids.length) return found;
   const inOrder = byCount(restFiles, restGrids.length) ?? bySize(restFiles);

@@ -1,5 +1,7 @@
 'use client';
 
+import { useState } from 'react';
+import { useOrganisation } from '@/app/_components/organisation/organisation-context';
 import { NormSymbol, Sym } from '@/app/_components/ui/symbols';
 import { PageTitle } from '@/app/_components/ui/page-title';
 import { Section } from '@/app/_components/ui/section';
@@ -12,6 +14,7 @@ import { CollectingSections } from './collecting-sections';
 import { DefinitionSection } from './definition-section';
 import { FigureNotes, StudyFigures } from './figures';
 import { GridTable } from './grid-table';
+import { GridsNotes, GridsWork } from './grids-work';
 import { OutcomeTable } from './outcome-table';
 import { QuantityTable, TripleTable } from './quantity-table';
 import { RunRecordSection } from './run-record';
@@ -26,16 +29,30 @@ interface StudySectionsProps { study: Study; readings: ReadonlyMap<string, Readi
 
 /** A study in reading order: what came out, how it is known, what it was, what may be done. */
 export function StudySections({ study, readings }: StudySectionsProps) {
-  const { assessment } = study;
+  const { may } = useOrganisation();
+  const { assessment, definition } = study;
+  const collects = study.state === 'collecting' && study.revision === study.currentRevision;
+  const comparesFiles = definition.fields.length > 0;
+  const [isTypingAsked, setIsTypingAsked] = useState(false);
+  const isTyping = may('work.write') && (isTypingAsked || !comparesFiles);
+  const notes = (
+    <>
+      <StudyMargin study={study} />
+      {assessment && <FigureNotes study={study} fields={assessment.fields} />}
+      {collects && <GridsNotes study={study} />}
+    </>
+  );
   return (
     <>
-      <Section note={<><StudyMargin study={study} />{assessment && <FigureNotes study={study} fields={assessment.fields} />}</>}>
+      <Section note={notes}>
         <PageTitle under={summariseStudy(study)}>{study.case.name}</PageTitle>
         {assessment ? <StudyStatement study={study} assessment={assessment} /> : <StudyProgress study={study} readings={readings} />}
         <AfterData study={study} />
         {assessment && <StudyFigures assessment={assessment} />}
+        {collects && <GridsWork study={study} readings={readings} onType={isTyping ? null : () => setIsTypingAsked(true)} />}
       </Section>
-      {assessment ? <Results study={study} assessment={assessment} /> : <CollectingSections study={study} readings={readings} />}
+      {assessment && <Results study={study} assessment={assessment} />}
+      {collects && <CollectingSections study={study} isTyping={isTyping} />}
       <DefinitionSection study={study} />
       <RunRecordSection grids={study.grids} number={assessment ? lastTable(assessment) + 1 : 1} />
       <WayOn study={study} />

@@ -4,7 +4,6 @@ import { useRef, useState, type ClipboardEvent, type KeyboardEvent } from 'react
 import { FaultText } from '@/app/_components/forms/fault-text';
 import { ProblemNotice } from '@/app/_components/forms/problem-notice';
 import { TableInput } from '@/app/_components/forms/table-input';
-import { useOrganisation } from '@/app/_components/organisation/organisation-context';
 import { parsePasted } from '@/app/_components/quick-check/parse-table';
 import { Cell, HeadCell, RowHead } from '@/app/_components/tables/cells';
 import { Head, Row, Table } from '@/app/_components/tables/table';
@@ -22,18 +21,8 @@ const nameOf = (column: TypedColumn) => (column.kind === 'value' ? column.name :
 
 /** Values of quantities, or norms that the solver computed itself, typed or pasted grid by grid. */
 export function TypedSection({ study }: { study: Study }) {
-  const { may } = useOrganisation();
   const columns = typedColumns(study);
   const comparesFiles = study.definition.fields.length > 0;
-  const [isOpen, setIsOpen] = useState(!comparesFiles);
-  if (!may('work.write') || columns.length === 0) return null;
-  if (!isOpen) {
-    return (
-      <Section note={<p>Where the solver computes norms itself there is no file to send.</p>}>
-        <Button onClick={() => setIsOpen(true)}>Type norms instead of files</Button>
-      </Section>
-    );
-  }
   return (
     <Section
       heading={comparesFiles ? 'Norms from the solver' : 'Values'}

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { ProgressBar } from '@/app/_components/ui/progress-bar';
 import { formatBytes } from '@/lib/domain/numbers/format-bytes';
 import { formatCount } from '@/lib/domain/numbers/format-count';
@@ -17,10 +18,10 @@ export function UploadProgress({ grid, transfer, reading }: UploadProgressProps)
   if (state === 'reading') {
     const rows = reading?.rowsRead ?? upload.rowsRead ?? 0;
     return (
-      <>
+      <WithBar>
         <ProgressBar label={`Reading grid ${grid.label}`} share={reading?.share ?? null} />
         <span className="text-note text-graphite">{formatCount(rows)} rows</span>
-      </>
+      </WithBar>
     );
   }
   if (state === 'rejected') return <>{upload.reasons.length === 1 ? 'One reason' : `${upload.reasons.length} reasons`}</>;
@@ -32,11 +33,16 @@ function SendingProgress({ transfer: { grid, bytes, confirmed, rate, state } }: 
   if (state === 'failed') return null;
   const left = rate === null || rate <= 0 ? null : (bytes - confirmed) / rate;
   return (
-    <>
+    <WithBar>
       <ProgressBar label={`Sending grid ${grid}`} share={bytes > 0 ? confirmed / bytes : 0} />
       <span className="text-note text-graphite">
         {formatBytes(confirmed)} of {formatBytes(bytes)}{rate !== null && `, ${formatBytes(rate)}/s`}{left !== null && `, ${formatSeconds(left)} left`}
       </span>
-    </>
+    </WithBar>
   );
+}
+
+/** A bar with its words beside it, and under it where there is little room. */
+function WithBar({ children }: { children: ReactNode }) {
+  return <span className="flex flex-wrap items-center gap-x-3 [&>svg]:max-w-36 [&>svg]:min-w-16 [&>svg]:flex-1">{children}</span>;
 }

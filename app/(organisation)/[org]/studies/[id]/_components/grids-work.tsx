@@ -6,7 +6,7 @@ import { useOrganisation } from '@/app/_components/organisation/organisation-con
 import { HeadCell } from '@/app/_components/tables/cells';
 import { Head, Table } from '@/app/_components/tables/table';
 import { Button } from '@/app/_components/ui/button';
-import { Section } from '@/app/_components/ui/section';
+import { DateTime } from '@/app/_components/ui/date-time';
 import { matchFiles } from '@/lib/domain/uploads/match-files';
 import type { Grid, Study } from '@/lib/domain/studies/schema';
 import { AddGrid } from './add-grid';
@@ -15,12 +15,16 @@ import { UploadRow } from './upload-row';
 import { useUploads } from './use-uploads';
 import type { Reading } from './use-study-events';
 
-interface GridsSectionProps { study: Study; readings: ReadonlyMap<string, Reading> }
+interface GridsWorkProps {
+  study: Study; readings: ReadonlyMap<string, Reading>;
+  /** Opens the table of typed values; null where it is open or there is nothing to type. */
+  onType: (() => void) | null;
+}
 
 const takesFile = ({ state, excluded }: Grid) => excluded === null && (state === 'expected' || state === 'rejected' || state === 'receiving' || state === 'needs-columns');
 
 /** The grids while the study collects: drop the files of several at once, watch them, add a grid or leave one out. */
-export function GridsSection({ study, readings }: GridsSectionProps) {
+export function GridsWork({ study, readings, onType }: GridsWorkProps) {
   const { may } = useOrganisation();
   const { uploader, transfers } = useUploads(study.id);
   const [toPlace, setToPlace] = useState<readonly PlacedFile[] | null>(null);
@@ -65,15 +69,8 @@ export function GridsSection({ study, readings }: GridsSectionProps) {
     if (mayChange && comparesFiles) take(event.dataTransfer.files);
   };
   return (
-    <Section
-      heading="Grids"
-      note={(
-        <>
-          {comparesFiles && <p>Tables separated by comma, semicolon, tab or space, or JSON columns; gzip or not. Files go straight to storage; <b>progress counts confirmed bytes</b>, reading counts rows.</p>}
-          <p>The plan is frozen with the first data; what changes later is marked “after data”.</p>
-        </>
-      )}
-    >
+    <div className="mt-12">
+      <h2 className="mb-3 font-serif text-section font-semibold">Grids</h2>
       <div
         onDragOver={(event) => { if (mayChange && comparesFiles) { event.preventDefault(); setIsOver(true); } }}
         onDragLeave={() => setIsOver(false)} onDrop={drop} className={isOver ? 'bg-wash outline-2 outline-offset-8 outline-pen outline-dashed' : ''}
@@ -96,11 +93,28 @@ export function GridsSection({ study, readings }: GridsSectionProps) {
         <div className="mt-4 flex flex-wrap items-center gap-3">
           {comparesFiles && <Button kind="primary" onClick={() => choose(null)}>Upload files</Button>}
           <Button aria-expanded={isAdding} onClick={() => setIsAdding(!isAdding)}>Add a grid</Button>
+          {onType && <Button onClick={onType}>Type norms instead</Button>}
           <span role="status" className="text-note text-graphite">{told}</span>
         </div>
       ) : <div className="mt-4"><NeedsEngineer what="send files or change grids" /></div>}
       <input ref={input} type="file" multiple hidden data-testid="files" aria-hidden tabIndex={-1} onChange={(event) => { take(event.target.files); event.target.value = ''; }} />
       {isAdding && <AddGrid study={study} onDone={() => setIsAdding(false)} />}
-    </Section>
+    </div>
+  );
+}
+
+/** What a file may be, and what the plan has to do with it. */
+export function GridsNotes({ study }: { study: Study }) {
+  return (
+    <div className="mt-4 flex flex-col gap-2">
+      {study.definition.fields.length > 0 && (
+        <p>Files are tables separated by comma, semicolon, tab or space, or JSON columns; gzip or not. They go straight to storage: <b>progress counts confirmed bytes</b>, reading counts rows.</p>
+      )}
+      <p>
+        {study.planFrozenAt === null
+          ? 'The plan is frozen with the first data; what changes later is marked “after data”.'
+          : <><b>Plan frozen</b> <DateTime value={study.planFrozenAt} show="both" />, before the first data. What changes now is marked “after data”.</>}
+      </p>
+    </div>
   );
 }
