@@ -17,8 +17,11 @@ function openServer(): Server {
   const env = readEnv(process.env);
   const log = createLogger('web', env.LOG_LEVEL);
   const { pool, db } = openDatabase(env.DATABASE_URL, (error) => log.warn({ fault: error.message }, 'database connection'));
-  // The first request waits for the connection; when Redis is away answers fail within a second and the outbox keeps the work.
-  const redis = openRedis(env.REDIS_URL, log, { maxRetriesPerRequest: 1, retryStrategy: (times) => Math.min(times * 50, 400) });
+  // The first request waits for the connection. When Redis is away answers fail within a second, when it hangs within
+  // three; the outbox keeps the work.
+  const redis = openRedis(env.REDIS_URL, log, {
+    maxRetriesPerRequest: 1, commandTimeout: 3000, retryStrategy: (times) => Math.min(times * 50, 400),
+  });
   const subscriber = openRedis(env.REDIS_URL, log, { maxRetriesPerRequest: null });
   const context: Context = {
     db,

@@ -8,7 +8,7 @@ function isServiceFault(error: unknown): boolean {
   if (!(error instanceof Error)) return false;
   const code = (error as Error & { code?: unknown }).code;
   if (typeof code === 'string' && unreachableCodes.has(code)) return true;
-  return error.message.includes("Stream isn't writeable") || error.name === 'MaxRetriesPerRequestError';
+  return error.message === 'Command timed out' || error.name === 'MaxRetriesPerRequestError';
 }
 
 function toAppError(error: unknown, log: Logger, requestId: string): AppError {

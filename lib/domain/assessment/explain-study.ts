@@ -36,7 +36,7 @@ function countSentence(names: readonly string[], { all, noun, outcome }: { all: 
   const [one, several] = said[outcome];
   if (all === 1) return noun === 'norm' ? `The one norm that counts, ${names.join('')}, ${one}.` : `The one quantity, ${names.join('')}, ${one}.`;
   const which = noun === 'norm' ? `${plural} that count` : plural;
-  if (names.length === all) return `All ${all} ${which} ${several}.`;
+  if (names.length === all) return `${all === 2 ? 'Both' : `All ${all}`} ${which} ${several}.`;
   return `${names.length} of ${all} ${which} ${names.length === 1 ? one : several}: ${joinWords(names)}.`;
 }
 
