@@ -2,7 +2,10 @@ import { expect } from 'vitest';
 import { browserTest } from '@/tests/support/browser';
 import { makeShownWork } from '@/tests/support/shown-work';
 
-const focusedName = () => document.activeElement?.getAttribute('aria-label') ?? document.activeElement?.textContent ?? '';
+const focusedName = () => {
+  const focused = document.activeElement === document.body ? null : document.activeElement;
+  return focused?.getAttribute('aria-label') ?? focused?.textContent ?? '';
+};
 
 browserTest('the first stop of a page skips to its content', async ({ open }) => {
   const page = await open('/');
@@ -34,5 +37,5 @@ browserTest('the account menu opens, moves and closes by keys', async ({ open })
   await page.keyboard.press('Enter');
   await page.getByRole('menuitem', { name: 'Tokens' }).waitFor();
   await page.keyboard.press('Escape');
-  expect(await page.evaluate(focusedName)).toContain('Account');
+  await expect.poll(() => page.evaluate(focusedName)).toContain('Account');
 });

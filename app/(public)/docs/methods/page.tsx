@@ -29,7 +29,9 @@ export default async function MethodsPage() {
       <Section heading="Error norms" note={<p>Sums are compensated. Rows without a weight count alike only where that was said.</p>}>
         <div className={prose}>
           <p>With the exact solution known and weights <Sym>w</Sym> from the file:</p>
-          <Formula tex="L_1 = \frac{\sum w_i |e_i|}{\sum w_i},\qquad L_2 = \sqrt{\frac{\sum w_i e_i^2}{\sum w_i}},\qquad L_\infty = \max |e_i|" />
+          <Formula tex="L_1 = \frac{\sum w_i |e_i|}{\sum w_i}" />
+          <Formula tex="L_2 = \sqrt{\frac{\sum w_i e_i^2}{\sum w_i}}" />
+          <Formula tex="L_\infty = \max |e_i|" />
           <p>What the digits of a file or an unfinished iteration leave unknown is carried into the uncertainty of each order.</p>
         </div>
       </Section>
@@ -44,7 +46,8 @@ export default async function MethodsPage() {
       </Section>
       <Section heading="Extrapolated value and grid convergence index" note={<p>An estimate that covers the error in about 95 % of cases by experience. It is not a bound.</p>}>
         <div className={prose}>
-          <Formula tex="\varphi_0 = \frac{r_{21}^{\,p}\varphi_1 - \varphi_2}{r_{21}^{\,p}-1},\qquad \mathrm{GCI} = F_s\,\frac{|(\varphi_1-\varphi_2)/\varphi_1|}{r_{21}^{\,p}-1}" />
+          <Formula tex="\varphi_0 = \frac{r_{21}^{\,p}\varphi_1 - \varphi_2}{r_{21}^{\,p}-1}" />
+          <Formula tex="\mathrm{GCI} = F_s\,\frac{|(\varphi_1-\varphi_2)/\varphi_1|}{r_{21}^{\,p}-1}" />
           <p>The safety factor is 1.25 with an order observed on three grids, and 3 with two grids and the formal order. Where values oscillate or the order is not positive, half their range is given instead.</p>
         </div>
       </Section>
