@@ -19,10 +19,13 @@ async function launch(): Promise<Browser> {
   return chromium.launch({ executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: ['--no-sandbox'] });
 }
 
-/** The browser reports every refusal as an error, also one that the page shows: of the API, or that the page is not there. */
-function isFault(message: ConsoleMessage, page: Page): boolean {
+/**
+ * The browser reports every refusal as an error, also one that the page shows: of the API, or that the page is not there.
+ * That may be before the page has its address, so the one asked for counts too.
+ */
+function isFault(message: ConsoleMessage, page: Page, asked: string): boolean {
   const { url } = message.location();
-  const isRefusal = message.text().startsWith('Failed to load resource') && (url.includes('/api/v1/') || url === page.url());
+  const isRefusal = message.text().startsWith('Failed to load resource') && (url.includes('/api/v1/') || url === page.url() || url === asked);
   return message.type() === 'error' && !isRefusal;
 }
 
@@ -53,7 +56,7 @@ export const browserTest = test.extend<BrowserFixtures>({
       const context = await newContext(browser, options);
       contexts.push(context);
       const page = await context.newPage();
-      page.on('console', (message) => { if (isFault(message, page)) faults.push(`${page.url()}: ${message.text()}`); });
+      page.on('console', (message) => { if (isFault(message, page, new URL(path, need('WEB_URL')).href)) faults.push(`${page.url()}: ${message.text()} (${message.location().url})`); });
       page.on('pageerror', (error) => faults.push(`${page.url()}: ${error.message}`));
       await page.goto(path);
       await page.waitForFunction(isHydrated);

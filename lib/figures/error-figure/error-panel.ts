@@ -27,10 +27,13 @@ function errorAxis(scales: ErrorFigureScales, y: Map1, left: number, right: numb
   });
 }
 
-function triangle(field: FigureField, x: Map1, y: Map1): SceneItem[] {
+function triangle(field: FigureField, x: Map1, y: Map1, box: PanelDrawing['box']): SceneItem[] {
   const shape = slopeTriangle(field);
   if (!shape) return [];
   const [left, right, foot] = [x(shape.from), x(shape.to), y(shape.base)];
+  // Errors far off their formal order leave the formal line outside the panel, and no room for the triangle under it.
+  const top = y(Math.max(...shape.slopes.map((slope) => slope.top)));
+  if (top < box.top || foot > box.top + box.height) return [];
   const paths = [...shape.slopes].reverse().map(({ top }): SceneItem => ({
     kind: 'path', path: `M${left} ${foot}H${right}V${y(top)}z`, fill: 'band', stroke: 'graphite', width: 1,
   }));
@@ -84,7 +87,7 @@ export function errorPanel(field: FigureField, { layout, scales, isFirst }: Pane
     })),
     under: [
       title, ...gridNames(field.grids, x, box), ...errorAxis(scales, y, box.left, right, isFirst), ...gridLines(field.grids, x, box),
-      ...triangle(field, x, y), ...axesAndSpacingTicks(scales.spacing, x, box), ...slopes,
+      ...triangle(field, x, y, box), ...axesAndSpacingTicks(scales.spacing, x, box), ...slopes,
     ],
     over: [...points, ...labels],
   };

@@ -24,8 +24,9 @@ interface ColumnFormProps { study: Study; preview: UploadPreview; filename: stri
 const shownRows = 4;
 
 function nameOf({ key, kind }: ColumnNeed) {
-  if (kind === 'weight') return 'Weight of a row';
-  return <>{kind === 'field' ? 'Field' : 'Coordinate'} <Sym>{key.replace('field ', '')}</Sym></>;
+  // The serif name would make its label a pixel taller than the one beside it.
+  if (kind === 'weight') return <span className="block h-5">Weight of a row</span>;
+  return <span className="block h-5">{kind === 'field' ? 'Field' : 'Coordinate'} <Sym>{key.replace('field ', '')}</Sym></span>;
 }
 
 /** The first rows of a file, and a choice for everything that must have a column. */

@@ -30,16 +30,15 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
   const [toPlace, setToPlace] = useState<readonly PlacedFile[] | null>(null);
   const [isOver, setIsOver] = useState(false);
   const [isAdding, setIsAdding] = useState(false);
-  const [told, setTold] = useState('');
   const input = useRef<HTMLInputElement>(null);
   const chosenGrid = useRef<string | null>(null);
   const mayChange = may('work.write');
   const comparesFiles = study.definition.fields.length > 0;
   const grids = [...study.grids].reverse();
+  const sending = [...transfers.values()].filter(({ state }) => state === 'sending').length;
 
   const send = (files: readonly { file: File; grid: string }[]) => {
     setToPlace(null);
-    setTold(`Sending ${files.length === 1 ? files[0]?.file.name ?? '' : `${files.length} files`}.`);
     void uploader?.send(files.map(({ file, grid }) => {
       const known = study.grids.find(({ label }) => label === grid);
       return { file, grid, halfSent: known?.state === 'receiving' ? (known.upload?.id ?? null) : null };
@@ -94,7 +93,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
           {comparesFiles && <Button kind="primary" onClick={() => choose(null)}>Upload files</Button>}
           <Button aria-expanded={isAdding} onClick={() => setIsAdding(!isAdding)}>Add a grid</Button>
           {onType && <Button onClick={onType}>Type norms instead</Button>}
-          <span role="status" className="text-note text-graphite">{told}</span>
+          <span role="status" className="text-note text-graphite">{sending > 0 && `Sending ${sending} ${sending === 1 ? 'file' : 'files'}. You may read other pages meanwhile.`}</span>
         </div>
       ) : <div className="mt-4"><NeedsEngineer what="send files or change grids" /></div>}
       <input ref={input} type="file" multiple hidden data-testid="files" aria-hidden tabIndex={-1} onChange={(event) => { take(event.target.files); event.target.value = ''; }} />

@@ -58,10 +58,10 @@ export function OutcomeTable({ study, fields, number }: OutcomeTableProps) {
         <tr>
           <HeadCell rowSpan={2}>Field</HeadCell><HeadCell rowSpan={2}>Norm</HeadCell><HeadCell rowSpan={2}>Outcome</HeadCell>
           <HeadCell rowSpan={2}>Counts</HeadCell><HeadCell rowSpan={2} num>Formal</HeadCell><HeadCell rowSpan={2} num>Band</HeadCell>
-          {pairs.length > 0 && <HeadCell ofGroup colSpan={pairs.length}>{areWhole ? <>Observed between 1/<Sym>h</Sym> of</> : 'Observed between grids'}</HeadCell>}
+          {pairs.length > 0 && <HeadCell ofGroup colSpan={pairs.length} className="whitespace-nowrap">{areWhole ? <>Observed between 1/<Sym>h</Sym> of</> : 'Observed between grids'}</HeadCell>}
           <HeadCell rowSpan={2} num className="w-16">Last ratio</HeadCell>
         </tr>
-        <tr>{pairs.map((pair) => <HeadCell key={pairName(pair)} num>{pairName(pair)}</HeadCell>)}</tr>
+        <tr>{pairs.map((pair) => <HeadCell key={pairName(pair)} num className="whitespace-nowrap">{pairName(pair)}</HeadCell>)}</tr>
       </Head>
       <tbody>
         {figureFields(fields).flatMap(({ field, norms }, group) => norms.map((part, index) => (

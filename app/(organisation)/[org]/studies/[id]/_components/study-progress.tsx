@@ -1,8 +1,10 @@
 import { Busy } from '@/app/_components/ui/busy';
 import { Notice } from '@/app/_components/ui/notice';
 import { Statement } from '@/app/_components/ui/page-title';
+import { TextLink } from '@/app/_components/ui/text-link';
+import { joinWords } from '@/lib/domain/assessment/series-name';
 import { formatCount } from '@/lib/domain/numbers/format-count';
-import type { Study } from '@/lib/domain/studies/schema';
+import type { Grid, Study } from '@/lib/domain/studies/schema';
 import type { Reading } from './use-study-events';
 
 interface StudyProgressProps { study: Study; readings: ReadonlyMap<string, Reading> }
@@ -24,9 +26,21 @@ export function StudyProgress({ study, readings }: StudyProgressProps) {
   }
   const now = reading && (readings.get(reading.label) ?? { rowsRead: reading.upload?.rowsRead ?? 0, share: null });
   return (
-    <Statement lead="The outcome comes by itself once every grid is there or left out with a reason.">
+    <Statement lead={<WhatIsNeeded taking={taking} />}>
       {done.length} of {taking.length} grids {done.length === 1 ? 'is' : 'are'} there.
       {reading && now && now.rowsRead > 0 && <span aria-live="polite"> Reading grid {reading.label}, {formatCount(now.rowsRead)} rows.</span>}
     </Statement>
+  );
+}
+
+function WhatIsNeeded({ taking }: { taking: readonly Grid[] }) {
+  const labelsOf = (state: Grid['state']) => taking.filter((grid) => grid.state === state).map(({ label }) => label).reverse();
+  const [rejected, unmapped] = [labelsOf('rejected'), labelsOf('needs-columns')];
+  return (
+    <>
+      {rejected.length > 0 && `The ${rejected.length === 1 ? 'file' : 'files'} of ${joinWords(rejected)} ${rejected.length === 1 ? 'was' : 'were'} rejected: replace ${rejected.length === 1 ? 'it' : 'them'}, or leave the grid out. `}
+      {unmapped.length > 0 && <>The columns must be chosen once for this case: <TextLink href="#columns">choose columns</TextLink>. </>}
+      The outcome comes by itself once every grid is there or left out with a reason.
+    </>
   );
 }

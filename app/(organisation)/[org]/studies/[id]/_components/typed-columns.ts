@@ -28,7 +28,7 @@ function valueOf(text: string, value: number) {
   return decimals === undefined ? value : { value, resolution: Number(`1e-${decimals}`) };
 }
 
-export type ReadCells = { ok: true; change: UpdateGridInput } | { ok: false; column: number; found: string };
+type ReadCells = { ok: true; change: UpdateGridInput } | { ok: false; column: number; found: string };
 
 /** The cells of a row as a change of its grid; the first cell that is no number otherwise. */
 export function readCells(columns: readonly TypedColumn[], cells: readonly string[]): ReadCells {

@@ -18,7 +18,7 @@ const stateWords: Record<GridState, string> = {
   expected: 'expected', typed: 'typed', receiving: 'half sent', stored: 'waits to be read', 'needs-columns': 'needs columns', reading: 'reading', read: 'read', rejected: 'rejected',
 };
 const transferWords = { sending: 'receiving', paused: 'paused', failed: 'not sent' } as const;
-export const uploadColumns = 5;
+const uploadColumns = 5;
 
 interface UploadRowProps {
   study: Study; grid: Grid; transfer: Transfer | undefined; reading: Reading | undefined; uploader: Uploader | null;
@@ -37,7 +37,7 @@ export function UploadRow({ study, grid, transfer, reading, uploader, mayChange,
   const bytes = transfer?.bytes ?? grid.upload?.bytes;
   const size = gridSize(grid, study.dimension);
   const reasons = isBad ? (grid.upload?.reasons ?? []) : [];
-  const chooseWords = isBad ? 'Replace file' : grid.upload ? 'Replace file' : 'Choose a file';
+  const chooseWords = grid.upload ? 'Replace file' : 'Choose a file';
   return (
     <>
       <Row className={`${isBad ? '!border-t-[1.5px] !border-fail' : ''} ${isOut ? 'text-graphite' : ''}`}>
