@@ -15,10 +15,6 @@ export interface VisitOptions {
 
 export type OpenPage = (path: string, options?: VisitOptions) => Promise<Page>;
 
-async function launch(): Promise<Browser> {
-  return chromium.launch({ executablePath: process.env.CHROMIUM ?? '/usr/bin/chromium', args: ['--no-sandbox'] });
-}
-
 /**
  * The browser reports every refusal as an error, also one that the page shows: of the API, or that the page is not there.
  * That may be before the page has its address, so the one asked for counts too.
@@ -40,23 +36,27 @@ async function newContext(browser: Browser, { person, size = 'wide', theme = 'li
 /** Whether the page answers to keys and clicks: React leaves its marks on what it has taken over. */
 const isHydrated = () => Object.keys(document.querySelector('#content') ?? {}).some((key) => key.startsWith('__reactProps'));
 
-interface BrowserFixtures { browser: Browser; open: OpenPage }
+interface BrowserFixtures { executable: string; browser: Browser; open: OpenPage }
 
 /** A test with a browser: `open` opens a page, and any error on its console fails the test. */
 export const browserTest = test.extend<BrowserFixtures>({
-  browser: [async ({ task: _task }, use) => {
-    const browser = await launch();
-    await use(browser);
+  executable: [process.env.CHROMIUM ?? '/usr/bin/chromium', { scope: 'file' }],
+  browser: [async ({ executable }, provide) => {
+    const browser = await chromium.launch({ executablePath: executable, args: ['--no-sandbox'] });
+    await provide(browser);
     await browser.close();
   }, { scope: 'file' }],
-  open: async ({ browser }, use) => {
+  open: async ({ browser }, provide) => {
     const contexts: BrowserContext[] = [];
     const faults: string[] = [];
-    await use(async (path, options = {}) => {
+    await provide(async (path, options = {}) => {
       const context = await newContext(browser, options);
       contexts.push(context);
       const page = await context.newPage();
-      page.on('console', (message) => { if (isFault(message, page, new URL(path, need('WEB_URL')).href)) faults.push(`${page.url()}: ${message.text()} (${message.location().url})`); });
+      const asked = new URL(path, need('WEB_URL')).href;
+      page.on('console', (message) => {
+        if (isFault(message, page, asked)) faults.push(`${page.url()}: ${message.text()} (${message.location().url})`);
+      });
       page.on('pageerror', (error) => faults.push(`${page.url()}: ${error.message}`));
       await page.goto(path);
       await page.waitForFunction(isHydrated);

@@ -9,7 +9,7 @@ interface Rasters { grids: GridErrors[]; scale: ErrorScale }
 let computed: Rasters | undefined;
 
 /** Solved at the first request and kept: the answer never changes. */
-export function frontRasters(): Rasters {
+function frontRasters(): Rasters {
   const grids = computed?.grids ?? [8, 16, 32, 64].map(poissonErrors);
   computed ??= { grids, scale: errorScale(grids) };
   return computed;

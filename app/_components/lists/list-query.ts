@@ -1,7 +1,7 @@
 export type SearchParams = Promise<Record<string, string | string[] | undefined>>;
 
 /** The pages of a list hold 50; the cursor of a page stands in its address. */
-export const pageLength = 50;
+const pageLength = 50;
 
 /** One member of an address, where it is there once. */
 export function single(value: string | string[] | undefined): string | undefined {
