@@ -39,7 +39,7 @@ export function WorseSection({ matrix, slug }: { matrix: Matrix; slug: string })
               {matrix.worse.map((entry) => (
                 <Row key={`${entry.case} ${entry.field} ${entry.norm}`} isLinked>
                   <RowHead className="min-w-36"><NameLink href={`/${slug}/cases/${entry.case}`}>{entry.caseName}</NameLink></RowHead>
-                  <Cell><Series field={entry.field} norm={entry.norm} /></Cell>
+                  <Cell className="whitespace-nowrap"><Series field={entry.field} norm={entry.norm} /></Cell>
                   <Cell num>{spacingLabel(entry.h)}</Cell>
                   <Cell num><Order value={entry.orderBefore} /></Cell>
                   <Cell num><b><Order value={entry.orderAfter} /></b></Cell>
