@@ -5,7 +5,7 @@ import { enterOrganisation } from '@/lib/services/people/enter-organisation';
 import { identifyToken } from '@/lib/services/people/identify-token';
 import { getServer } from './context';
 
-export interface Caller { user: UserContext; member: MemberContext | null; renewedCookie: string | null }
+export interface Caller { user: UserContext; member: MemberContext | null }
 
 /** Who calls: by bearer token, else by session cookie, else nobody. */
 export async function identify(headers: Headers): Promise<Caller | null> {
@@ -15,12 +15,12 @@ export async function identify(headers: Headers): Promise<Caller | null> {
     const secret = /^Bearer (\S+)$/i.exec(authorization)?.[1];
     if (!secret) throw new AppError('not-signed-in', 'Expected “Authorization: Bearer” and a token.');
     const member = await identifyToken(context, secret);
-    return { user: member, member, renewedCookie: null };
+    return { user: member, member };
   }
   const sessionId = sessions.readCookie(headers.get('cookie') ?? '');
   const session = sessionId === null ? null : await sessions.validate(sessionId);
   if (!session) return null;
-  return { user: { ...context, ...session.user, token: null }, member: null, renewedCookie: session.renewed };
+  return { user: { ...context, ...session, token: null }, member: null };
 }
 
 /** The caller in the organisation asked for; a token implies its own and reaches no other. */

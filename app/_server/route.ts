@@ -68,7 +68,6 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
   if (contract.method !== 'GET') requireSameOrigin(request, env.PUBLIC_URL, hasCookie);
 
   const caller = contract.access === 'public' ? null : await identify(request.headers);
-  if (caller?.renewedCookie) headers.append('set-cookie', caller.renewedCookie);
   const ctx = await contextFor(contract, caller, url);
   const ifMatch = readIfMatch(contract, request);
   const query = readQuery(contract, url);

@@ -7,17 +7,17 @@ export interface SessionUser { userId: string; email: string }
 /** Cookies are values of a Set-Cookie header. */
 export interface Sessions {
   create(userId: string): Promise<string>;
-  /** `renewed` is set where the cookie's life was prolonged and must be sent again. */
-  validate(sessionId: string): Promise<{ user: SessionUser; renewed: string | null } | null>;
+  validate(sessionId: string): Promise<SessionUser | null>;
   end(sessionId: string): Promise<string>;
   readCookie(header: string): string | null;
 }
 
-/** Sessions of thirty days in PostgreSQL; `secure` where the public address is https. */
+/** Sessions in PostgreSQL that end thirty days after their last use; `secure` where the public address is https. */
 export function createSessions(pool: Pool, secure: boolean): Sessions {
   const lucia = new Lucia(new NodePostgresAdapter(pool, { user: 'users', session: 'sessions' }), {
     sessionExpiresIn: new TimeSpan(30, 'd'),
-    sessionCookie: { name: 'fourfold_session', attributes: { secure, sameSite: 'lax', path: '/' } },
+    // The row ends the session. A cookie with an end of its own would need sending again from pages, which cannot.
+    sessionCookie: { expires: false, name: 'fourfold_session', attributes: { secure, sameSite: 'lax', path: '/' } },
     getUserAttributes: (row) => ({ email: (row as { email: string }).email }),
   });
 
@@ -30,7 +30,7 @@ export function createSessions(pool: Pool, secure: boolean): Sessions {
       const { session, user } = await lucia.validateSession(sessionId);
       if (!session) return null;
       const email = (user as typeof user & { email: string }).email;
-      return { user: { userId: user.id, email }, renewed: session.fresh ? lucia.createSessionCookie(session.id).serialize() : null };
+      return { userId: user.id, email };
     },
     async end(sessionId) {
       await lucia.invalidateSession(sessionId);
