@@ -13,7 +13,7 @@ export const findVisitor = cache(async (): Promise<UserContext | null> => {
   const { context, sessions } = getServer();
   const sessionId = sessions.readCookie((await cookies()).toString());
   const session = sessionId === null ? null : await sessions.validate(sessionId);
-  return session ? { ...context, ...session.user, token: null } : null;
+  return session ? { ...context, ...session, token: null } : null;
 });
 
 /** The page a visitor starts from; null where nobody is signed in. */
