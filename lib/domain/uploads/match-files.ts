@@ -3,30 +3,52 @@ export interface NamedFile { name: string; size: number }
 /** Grids as they are told apart by the names of their files. Coarse to fine. */
 export interface MatchableGrid { label: string; cells?: number; cellsPerDirection?: number | readonly number[] }
 
+type Claims = readonly (string | null)[];
+type Rule = (file: NamedFile, grid: MatchableGrid, dimension: number) => boolean;
+
 /**
- * Which grid each file belongs to, file by file; null where a person must say so. Strongest sign first: the label in the
- * name, the cells per direction, the cells in all, numbers that count the grids off, at last the sizes in order. No grid
- * gets two files: where two claim one, neither has it.
+ * Which grid each file belongs to, file by file; null where a person must say so. The label in the name tells first. Then
+ * the numbers in the names: cells per direction, cells in all, the number of the label; the reading that fits the most
+ * files holds, and where two readings as good disagree on a file it has no grid. At last names that count the grids off,
+ * and sizes in order. No grid gets two files: where two claim one, neither has it.
  */
-export function matchFiles(files: readonly NamedFile[], grids: readonly MatchableGrid[]): (string | null)[] {
-  const found: (string | null)[] = files.map(() => null);
-  for (const rule of [hasLabel, hasCellsPerDirection, hasCells]) {
-    const free = grids.filter(({ label }) => !found.includes(label));
-    const claims = files.map((file, index) => (found[index] === null ? onlyOne(free.filter((grid) => rule(file, grid))) : null));
-    claims.forEach((grid, index) => {
-      if (grid && claims.filter((other) => other === grid).length === 1) found[index] = grid.label;
-    });
+export function matchFiles(files: readonly NamedFile[], grids: readonly MatchableGrid[], dimension: number): (string | null)[] {
+  const found = claimsOf(hasLabel, { files, grids, dimension, found: files.map(() => null) }).slice();
+  let isDisputed = false;
+  for (;;) {
+    const readings = [hasCellsPerDirection, hasCells, hasLabelNumber].map((rule) => claimsOf(rule, { files, grids, dimension, found }));
+    const counts = readings.map((claims) => claims.filter((claim) => claim !== null).length);
+    const best = readings.filter((_, index) => counts[index] === Math.max(...counts));
+    const agreed = files.map((_, index) => agreedOn(best.map((claims) => claims[index] ?? null)));
+    isDisputed ||= agreed.some((claim) => claim === 'disputed');
+    const isNew = agreed.some((claim) => claim !== null && claim !== 'disputed');
+    agreed.forEach((claim, index) => { if (claim !== null && claim !== 'disputed') found[index] = claim.label; });
+    if (!isNew || isDisputed) break;
   }
   const restFiles = files.flatMap((file, index) => (found[index] === null ? [{ name: file.name, size: file.size, index }] : []));
   const restGrids = grids.filter(({ label }) => !found.includes(label));
-  if (restFiles.length === 0 || restFiles.length !== restGrids.length) return found;
+  if (isDisputed || restFiles.length === 0 || restFiles.length !== restGrids.length) return found;
   const inOrder = byCount(restFiles, restGrids.length) ?? bySize(restFiles);
   inOrder?.forEach(({ index }, place) => { found[index] = restGrids[place]?.label ?? null; });
   return found;
 }
 
-function onlyOne<T>(candidates: readonly T[]): T | null {
-  return candidates.length === 1 ? (candidates[0] ?? null) : null;
+interface Matching { files: readonly NamedFile[]; grids: readonly MatchableGrid[]; dimension: number; found: Claims }
+
+/** What a rule says of the files without a grid, where it says one thing and no other file wants the same. */
+function claimsOf(rule: Rule, { files, grids, dimension, found }: Matching): Claims {
+  const free = grids.filter(({ label }) => !found.includes(label));
+  const claims = files.map((file, index) => {
+    const fitting = found[index] === null ? free.filter((grid) => rule(file, grid, dimension)) : [];
+    return fitting.length === 1 ? (fitting[0]?.label ?? null) : null;
+  });
+  return claims.map((claim) => (claims.filter((other) => other === claim).length === 1 ? claim : null));
+}
+
+function agreedOn(claims: Claims): { label: string } | 'disputed' | null {
+  const labels = [...new Set(claims.filter((claim) => claim !== null))];
+  if (labels.length > 1) return 'disputed';
+  return labels[0] === undefined ? null : { label: labels[0] };
 }
 
 const withoutEnding = (name: string) => name.replace(/(\.[A-Za-z]{2,4})?(\.gz)?$/i, '');
@@ -42,15 +64,23 @@ function hasLabel({ name }: NamedFile, { label }: MatchableGrid): boolean {
   return new RegExp(`(^|[^a-z0-9])${escaped}($|[^a-z0-9])`).test(withoutEnding(name).toLowerCase());
 }
 
-function hasCellsPerDirection({ name }: NamedFile, { cellsPerDirection }: MatchableGrid): boolean {
-  if (cellsPerDirection === undefined) return false;
-  const counts = typeof cellsPerDirection === 'number' ? [cellsPerDirection] : cellsPerDirection;
+/** Cells along each direction as stated, or as cells in all have them where all directions have as many. */
+function hasCellsPerDirection({ name }: NamedFile, { cells, cellsPerDirection }: MatchableGrid, dimension: number): boolean {
+  const root = cells === undefined ? 0 : Math.round(cells ** (1 / dimension));
+  const counts = cellsPerDirection ?? (dimension > 1 && root ** dimension === cells ? root : []);
   const numbers = numbersIn(name);
-  return counts.every((count) => numbers.includes(count));
+  const wanted = typeof counts === 'number' ? [counts] : counts;
+  return wanted.length > 0 && wanted.every((count) => numbers.includes(count));
 }
 
 function hasCells({ name }: NamedFile, { cells }: MatchableGrid): boolean {
   return cells !== undefined && numbersIn(name).includes(cells);
+}
+
+/** The one number of the label: "burgers_064.csv" for n64. */
+function hasLabelNumber({ name }: NamedFile, { label }: MatchableGrid): boolean {
+  const numbers = numbersIn(label);
+  return numbers.length === 1 && numbersIn(name).includes(numbers[0] ?? -1);
 }
 
 type IndexedFile = NamedFile & { index: number };

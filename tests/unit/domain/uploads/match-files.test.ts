@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
-import { matchFiles } from '@/lib/domain/uploads/match-files';
+import { matchFiles as match, type MatchableGrid, type NamedFile } from '@/lib/domain/uploads/match-files';
 
+const matchFiles = (given: NamedFile[], grids: MatchableGrid[]) => match(given, grids, 2);
 const plan = [8, 16, 32, 64, 128].map((n) => ({ label: `n${n}`, cells: n * n, cellsPerDirection: n }));
 const files = (names: string[], sizes = names.map((_, index) => 1000 * 4 ** index)) => names.map((name, index) => ({ name, size: sizes[index] ?? 0 }));
 
@@ -18,6 +19,19 @@ describe('matchFiles', () => {
     expect(matchFiles(files(['cells4096.dat']), plan)).toEqual(['n64']);
     const oblong = [{ label: 'a', cellsPerDirection: [8, 4] }, { label: 'b', cellsPerDirection: [16, 8] }];
     expect(matchFiles(files(['out_16x8.csv', 'out_8x4.csv']), oblong)).toEqual(['b', 'a']);
+  });
+
+  it('takes the number of the label, where it is the only one that fits', () => {
+    const labelled = [{ label: 'mesh3' }, { label: 'mesh4' }, { label: 'mesh5' }];
+    expect(matchFiles(files(['out_04.csv', 'out_03.csv']), labelled)).toEqual(['mesh4', 'mesh3']);
+    expect(matchFiles(files(['D1_3.csv']), [{ label: 'g1' }, { label: 'g2' }, { label: 'g3' }])).toEqual([null]);
+  });
+
+  it('takes 64 for the cells along each direction where that reading fits more files, and asks where it stands alone', () => {
+    const counted = plan.map(({ label, cells }) => ({ label: `g-${label.length}-${cells}`, cells }));
+    expect(matchFiles(files(['burgers_008.csv', 'burgers_016.csv', 'burgers_032.csv', 'burgers_064.csv', 'burgers_128.csv']), counted))
+      .toEqual(counted.map(({ label }) => label));
+    expect(matchFiles(files(['burgers_064.csv']), counted)).toEqual([null]);
   });
 
   it('reads names that count the grids off, in the direction in which the files grow', () => {

@@ -51,7 +51,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
     if (files.length === 0) return;
     if (one !== null && files[0] && files.length === 1) { send([{ file: files[0], grid: one }]); return; }
     const open = grids.filter((grid) => takesFile(grid) && !transfers.has(grid.label));
-    const found = matchFiles(files, open.length >= files.length ? open : grids.filter(({ excluded }) => excluded === null));
+    const found = matchFiles(files, open.length >= files.length ? open : grids.filter(({ excluded }) => excluded === null), study.dimension);
     const placed = files.map((file, index) => ({ file, grid: found[index] ?? null }));
     const areClear = placed.every(({ grid }) => grid !== null && open.some(({ label }) => label === grid));
     if (areClear) send(placed.flatMap(({ file, grid }) => (grid === null ? [] : [{ file, grid }])));

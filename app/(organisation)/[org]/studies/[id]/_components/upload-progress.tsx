@@ -29,14 +29,13 @@ export function UploadProgress({ grid, transfer, reading }: UploadProgressProps)
   return null;
 }
 
-function SendingProgress({ transfer: { grid, bytes, confirmed, rate, state } }: { transfer: Transfer }) {
+function SendingProgress({ transfer: { grid, bytes, confirmed, rate, secondsLeft, state } }: { transfer: Transfer }) {
   if (state === 'failed') return null;
-  const left = rate === null || rate <= 0 ? null : (bytes - confirmed) / rate;
   return (
     <WithBar>
       <ProgressBar label={`Sending grid ${grid}`} share={bytes > 0 ? confirmed / bytes : 0} />
       <span className="text-note text-graphite">
-        {formatBytes(confirmed)} of {formatBytes(bytes)}{rate !== null && `, ${formatBytes(rate)}/s`}{left !== null && `, ${formatSeconds(left)} left`}
+        {formatBytes(confirmed)} of {formatBytes(bytes)}{rate !== null && `, ${formatBytes(rate)}/s`}{secondsLeft !== null && `, ${formatSeconds(secondsLeft)} left`}
       </span>
     </WithBar>
   );

@@ -9,7 +9,7 @@ import { forgetUpload, isRemembered, rememberUpload } from './upload-memory';
 
 /** A file on its way from this browser to storage. `confirmed` counts whole parts that storage has answered for. */
 export interface Transfer {
-  grid: string; filename: string; bytes: number; confirmed: number; rate: number | null;
+  grid: string; filename: string; bytes: number; confirmed: number; rate: number | null; secondsLeft: number | null;
   state: 'sending' | 'paused' | 'failed'; fault: string | null;
 }
 
@@ -39,7 +39,8 @@ function createS3Options(organisation: string, study: string, notes: PartNotes) 
   const target = (id: string) => ({ organisation, params: { id } });
   return {
     shouldUseMultipart: true as const,
-    limit: 4,
+    // Few at a time: each is counted once it is whole, and a slow line should show something soon.
+    limit: 3,
     getChunkSize: ({ size }: { size: number }) => partSizeOf(size),
     createMultipartUpload: async (file: SentFile) => {
       notes.restart(file.id);
@@ -81,9 +82,11 @@ function createUploader(organisation: string, study: string): Uploader {
   const confirm = (id: string, numbers: readonly number[]) => parts.set(id, new Set([...(parts.get(id) ?? []), ...numbers]));
   const toTransfer = (file: SentFile): [string, Transfer] => {
     const bytes = file.size ?? 0;
+    const rate = file.isPaused ? null : transferRate(samples.get(file.id) ?? []);
+    const sent = typeof file.progress.bytesUploaded === 'number' ? file.progress.bytesUploaded : 0;
     return [file.meta.grid, {
       grid: file.meta.grid, filename: file.name, bytes, confirmed: Math.min(bytes, (parts.get(file.id)?.size ?? 0) * partSizeOf(bytes)),
-      rate: file.isPaused ? null : transferRate(samples.get(file.id) ?? []),
+      rate, secondsLeft: rate === null ? null : (bytes - sent) / rate,
       state: file.error ? 'failed' : file.isPaused ? 'paused' : 'sending', fault: file.error ? (faults.get(file.id) ?? file.error) : null,
     }];
   };
