@@ -12,13 +12,17 @@ export interface Head {
 export async function readHead(chunks: AsyncGenerator<Buffer, void>): Promise<Head> {
   const parts: Buffer[] = [];
   let length = 0;
-  let lines = 0;
-  while (length < usual || (lines < 3 && length <= longestLine)) {
+  let lineFeeds = 0;
+  let returns = 0;
+  while (length < usual || (Math.max(lineFeeds, returns) < 3 && length <= longestLine)) {
     const next = await chunks.next();
     if (next.done === true) return { bytes: Buffer.concat(parts), complete: true };
     parts.push(next.value);
     length += next.value.length;
-    for (const byte of next.value) if (byte === 10) lines += 1;
+    for (const byte of next.value) {
+      if (byte === 10) lineFeeds += 1;
+      else if (byte === 13) returns += 1;
+    }
   }
   return { bytes: Buffer.concat(parts), complete: false };
 }

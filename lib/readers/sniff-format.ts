@@ -7,7 +7,9 @@ const readable = 'a text table, or JSON with one array of numbers per column';
 
 const signatures: readonly { bytes: string; name: string }[] = [
   { bytes: '\x89HDF\r\n\x1a\n', name: 'HDF5' },
-  { bytes: 'CDF', name: 'netCDF' },
+  { bytes: 'CDF\x01', name: 'netCDF' },
+  { bytes: 'CDF\x02', name: 'netCDF' },
+  { bytes: 'CDF\x05', name: 'netCDF' },
   { bytes: '\x93NUMPY', name: 'a numpy array' },
   { bytes: 'PK\x03\x04', name: 'a ZIP archive or a spreadsheet' },
   { bytes: 'BZh', name: 'bzip2' },
@@ -27,7 +29,7 @@ export function sniffFormat(head: Head): SourceFormat {
 
   const content = text.replace(/^\xef\xbb\xbf/, '').trimStart();
   if (content === '' && head.complete && head.bytes.toString('latin1').trim() === '') throw rejected('empty-file', `${head.bytes.length} bytes`);
-  if (head.bytes.includes(0)) throw rejected('binary-content', 'zero bytes');
+  if (head.bytes.includes(0)) throw rejected('binary-content', 'null bytes');
   if (/^<(?:\?xml|VTKFile|!)/i.test(content)) throw rejected('unsupported-format', /<VTKFile/i.test(content) ? 'VTK XML' : 'XML or HTML');
   return content.startsWith('{') || content.startsWith('[') ? 'json' : 'table';
 }

@@ -23,7 +23,20 @@ export function splitFields(line: string, delimiter: Delimiter): string[] {
   return isQuoted ? line.split(character).map(unquote) : fields;
 }
 
+const withUnit = /"[^"]*"|\S+(?:\s+(?:\[[^\]]*\]|\([^)]*\)))?/g;
+
+/**
+ * The fields of a line of names. Between names parted by white space or tabs a comma is no part of the name, and where
+ * `width`, the columns of the rows, says so, neither is the white space before a unit: “u [m/s]” is one name.
+ */
+export function splitNames(line: string, delimiter: Delimiter, width: number | null): string[] {
+  const plain = splitFields(line, delimiter);
+  if (delimiter !== 'white space' && delimiter !== 'tab') return plain;
+  const joined = delimiter === 'white space' && width !== null && plain.length !== width ? (line.match(withUnit) ?? []).map(unquote) : plain;
+  return (joined.length === width ? joined : plain).map((name) => name.replace(/[,;]$/, ''));
+}
+
 function unquote(field: string): string {
   const trimmed = field.trim();
-  return trimmed.length >= 2 && trimmed.startsWith('"') && trimmed.endsWith('"') ? trimmed.slice(1, -1).trim() : trimmed;
+  return trimmed.length >= 2 && trimmed.startsWith('"') && trimmed.endsWith('"') ? trimmed.slice(1, -1).replaceAll('""', '"').trim() : trimmed;
 }

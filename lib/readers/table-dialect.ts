@@ -1,7 +1,7 @@
 import { parseNumber, type NumberReading } from './parse-number';
 import type { Head } from './read-head';
 import { RejectedFile } from './rejected-file';
-import { splitFields } from './split-fields';
+import { splitFields, splitNames } from './split-fields';
 import type { Delimiter } from './source';
 
 export interface TableDialect {
@@ -10,6 +10,8 @@ export interface TableDialect {
   header: string[];
   /** The line that names the columns, or the first row where none does. */
   headerLine: number;
+  /** The byte that ends a line: a carriage return only where no line ends in a line feed. */
+  lineEnd: 10 | 13;
   /** Lines before the first row of numbers. */
   linesBefore: number;
   /** The first rows as text. */
@@ -18,13 +20,14 @@ export interface TableDialect {
 
 const shownRows = 10;
 const triedLines = 50;
-const comment = /^\s*(?:#|%|!|\/\/)/;
+const comment = /^\s*(?:#+|%+|!+|\/\/)/;
 
 interface NumberedLine { text: string; number: number }
 
 /** Finds out how a text table is written: what parts its columns, what they are called, where the numbers begin. */
 export function detectTableDialect(head: Head): TableDialect {
-  const { content, lastComment } = readFirstLines(head);
+  const lineEnd = head.bytes.includes(10) || !head.bytes.includes(13) ? 10 : 13;
+  const { content, lastComment } = readFirstLines(head, lineEnd);
   const [first, second] = content;
   if (first === undefined) {
     throw new RejectedFile([{
@@ -33,25 +36,26 @@ export function detectTableDialect(head: Head): TableDialect {
   }
   const delimiter = detectDelimiter(content);
   const fields = splitFields(first.text, delimiter);
+  const names = (text: string, row: NumberedLine | undefined) => splitNames(text, delimiter, row ? splitFields(row.text, delimiter).length : null);
   const rows = (lines: NumberedLine[]) => lines.slice(0, shownRows).map((line) => splitFields(line.text, delimiter));
   if (!fields.some(isNumeric) && fields.some((field) => field !== '')) {
     return {
-      delimiter, hasHeader: true, header: nameColumns(fields), headerLine: first.number,
+      delimiter, lineEnd, hasHeader: true, header: nameColumns(names(first.text, second)), headerLine: first.number,
       linesBefore: second === undefined ? first.number : second.number - 1, firstRows: rows(content.slice(1)),
     };
   }
   // A comment just above the numbers that names as many columns as there are is their header.
-  const named = lastComment === null ? [] : splitFields(lastComment.text.replace(comment, ''), delimiter);
+  const named = lastComment === null ? [] : names(lastComment.text.replace(comment, ''), first);
   const isNamed = named.length === fields.length && new Set(named).size === named.length && named.every((name) => name !== '' && !isNumeric(name));
   return {
-    delimiter, hasHeader: isNamed, header: isNamed ? named : fields.map((_, index) => `c${index + 1}`),
+    delimiter, lineEnd, hasHeader: isNamed, header: isNamed ? named : fields.map((_, index) => `c${index + 1}`),
     headerLine: isNamed && lastComment !== null ? lastComment.number : first.number,
     linesBefore: first.number - 1, firstRows: rows(content),
   };
 }
 
-function readFirstLines(head: Head): { content: NumberedLine[]; lastComment: NumberedLine | null } {
-  const lines = head.bytes.toString('utf8').replace(/^\uFEFF/, '').split('\n');
+function readFirstLines(head: Head, lineEnd: 10 | 13): { content: NumberedLine[]; lastComment: NumberedLine | null } {
+  const lines = head.bytes.toString('utf8').replace(/^\uFEFF/, '').split(lineEnd === 10 ? '\n' : '\r');
   // The last line of an incomplete head may be cut.
   if (!head.complete && lines.length > 1) lines.pop();
   const content: NumberedLine[] = [];

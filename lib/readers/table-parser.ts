@@ -7,7 +7,6 @@ import type { ColumnBatch } from './source';
 import type { TableDialect } from './table-dialect';
 
 const batchRows = 2048;
-const newline = 10;
 
 export interface TableParserOptions {
   dialect: TableDialect;
@@ -29,6 +28,7 @@ export interface TableParser {
  * left out of the batches and explained to the collector; numbers are read in place, without a string per value.
  */
 export function createTableParser({ dialect, wanted, reasons, onBatch }: TableParserOptions): TableParser {
+  const newline = dialect.lineEnd;
   const width = dialect.header.length;
   const isSpaced = dialect.delimiter === 'white space';
   const delimiter = dialect.delimiter === 'white space' ? 32 : delimiterCharacter[dialect.delimiter].charCodeAt(0);
@@ -82,7 +82,8 @@ export function createTableParser({ dialect, wanted, reasons, onBatch }: TablePa
         if (!readValue(bytes, at, to, slot)) return false;
       } else if (bytes[at] === 34) return false;
       field += 1;
-      if (stop >= end) return field === width;
+      // A separator may end the row.
+      if (stop >= end) return field === width || (field === width + 1 && at === stop);
       at = stop + 1;
       if (isSpaced) while (at < end && isBlank(bytes[at] as number)) at += 1;
     }

@@ -47,7 +47,12 @@ export function matchColumns(header: readonly string[], needs: ColumnNeeds): Col
     const column = findFree(name);
     if (column !== undefined) found[name] = column;
   }
-  const weights = weightNames.map(findFree).filter((column) => column !== undefined);
+  // Beside u and v in three dimensions, or with a unit of its own, w is a velocity.
+  const isVelocity = (column: string) => /[[(]/.test(column) || (needs.dimension === 3 && find('u') !== undefined && find('v') !== undefined);
+  const weights = weightNames.flatMap((name) => {
+    const column = findFree(name);
+    return column === undefined || (name === 'w' && isVelocity(column)) ? [] : [column];
+  });
   if (weights.length === 1) found.weight = weights[0];
   else missing.push('weight');
 

@@ -65,8 +65,6 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights.');
     case 'exact-not-finite':
       return text(`${place}: the exact solution is ${found}; expected ${expected}.`, 'Check the expression of the problem, its constants and the time of the grid.');
-    case 'checksum-differs':
-      return text(`The file arrived with SHA-256 ${found}; ${expected} was stated.`, 'It was changed or damaged on its way. Upload it again.');
   }
 }
 

@@ -21,6 +21,14 @@ describe('a text table', () => {
     ['a decimal comma and tabs', 'x\tu\n0\t10\n1\t-20,5\n2\t3,0e-7\n'],
     ['a comment that names the columns', '# x u\n0 10\n1 -20.5\n2 3e-7\n'],
     ['quotes', '"x","u","a, b"\n"0","10","c, d"\n1,-20.5,"e"\n2,3e-7,f\n'],
+    ['nothing but carriage returns to end its lines', 'x,u\r0,10\r1,-20.5\r2,3e-7\r'],
+    ['units in brackets', 'x [m],u [m/s]\n0,10\n1,-20.5\n2,3e-7\n'],
+    ['units in brackets and white space', 'x [ m ]  flow/u (m s^-1)\n0 10\n1 -20.5\n2 3e-7\n'],
+    ['names parted by commas over rows parted by white space', 'x, u\n0 10\n1 -20.5\n2 3e-7\n'],
+    ['a comment of several marks and commas that names the columns', '## x, u\n0 10\n1 -20.5\n2 3e-7\n'],
+    ['a decimal comma and Fortran exponents', 'x;u\n0,0D0;1,0D+01\n1,0D0;-2,05D1\n2,0D0;3,0D-007\n'],
+    ['a name that begins as a netCDF file does', 'CDF,x,u\n0,0,10\n0,1,-20.5\n0,2,3e-7\n'],
+    ['a separator at the end of the rows alone', 'x,u\n0,10,\n1,-20.5,\n2,3e-7,\n'],
     ['a separator at the end', 'x,u,\n0,10,\n1,-20.5,\n2,3e-7,\n'],
   ])('is read with %s', async (_, content) => {
     expect((await readTable(content, ['x', 'u'])).columns).toEqual(expected);
@@ -32,6 +40,21 @@ describe('a text table', () => {
 
   it('is unpacked where it begins as gzip does', async () => {
     expect((await readTable(gzipSync('x,u\n0,10\n1,-20.5\n2,3e-7\n'), ['x', 'u'])).columns).toEqual(expected);
+  });
+
+  it('is unpacked from several gzip members in one file', async () => {
+    const members = [gzipSync('x,u\n0,10\n1,'), gzipSync('-20.5\n2,3e-7\n')];
+    expect((await readTable(Buffer.concat(members), ['x', 'u'])).columns).toEqual(expected);
+  });
+
+  it('reads a doubled quote as one', async () => {
+    expect((await readTable('"x","u ""mean"" of all"\n0,10\n', ['u "mean" of all'])).columns).toEqual([[10]]);
+  });
+
+  it('is read with thousands of columns in lines longer than one head', async () => {
+    const many = Array.from({ length: 40_000 }, (_, i) => i);
+    const content = `${many.map((i) => `probe_${i}`).join(',')},x\n${many.map((i) => `${i}.5`).join(',')},7\n`;
+    expect((await readTable(content, ['x', 'probe_39999'])).columns).toEqual([[7], [39_999.5]]);
   });
 
   it('gives the columns in the order asked for, and only those', async () => {
@@ -96,7 +119,7 @@ describe('a damaged text table', () => {
     ['text in UTF-16', Buffer.from('\uFEFFx,u\n0,1\n', 'utf16le'), 'unsupported-format'],
     ['native HDF5', Buffer.from('\x89HDF\r\n\x1a\n....', 'latin1'), 'unsupported-format'],
     ['VTK XML', '<?xml version="1.0"?>\n<VTKFile type="UnstructuredGrid">', 'unsupported-format'],
-    ['zero bytes', Buffer.from([120, 0, 1, 2, 10]), 'binary-content'],
+    ['null bytes', Buffer.from([120, 0, 1, 2, 10]), 'binary-content'],
     ['a cut gzip file', gzipSync('x,u\n0,1\n1,2\n').subarray(0, 25), 'damaged-gzip'],
     ['a line without end', `x,u\n0,1\n${'1'.repeat(3_000_000)}`, 'line-too-long'],
     ['thousands parted by commas', 'x;u\n0;1,234.5\n', 'not-a-number'],

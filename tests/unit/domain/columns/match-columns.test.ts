@@ -27,6 +27,19 @@ describe('matchColumns(header, needs)', () => {
     expect(matchColumns(['x', 'w', 'vol', 'u'], { dimension: 1, fields: ['u', 'w'] }).mapping).toMatchObject({ weight: 'vol', fields: { u: 'u', w: 'w' } });
   });
 
+  it('does not take a velocity for the weight', () => {
+    expect(matchColumns(['x', 'y', 'z', 'u', 'v', 'w', 'p'], { dimension: 3, fields: ['p'] })).toMatchObject({ mapping: null, missing: ['weight'] });
+    expect(matchColumns(['x', 'w [m/s]', 'p'], { dimension: 1, fields: ['p'] })).toMatchObject({ mapping: null, missing: ['weight'] });
+    expect(matchColumns(['x', 'y', 'u', 'v', 'w'], { dimension: 2, fields: ['u', 'v'] }).mapping?.weight).toBe('w');
+  });
+
+  it('reads a unit in brackets as no part of the name, and an index as one', () => {
+    const { mapping } = matchColumns(['x [m]', 'vol (m^2)', 'flow.u [m/s]'], { dimension: 1, fields: ['u'] });
+    expect(mapping).toEqual({ x: 'x [m]', weight: 'vol (m^2)', fields: { u: 'flow.u [m/s]' } });
+    expect(matchColumns(['x', 'vol', 'u[0]', 'u(1)'], { dimension: 1, fields: ['u'] }).missing).toEqual(['u']);
+    expect(matchColumns(['x', 'vol', 'u [m/s]', 'u [ft/s]'], { dimension: 1, fields: ['u'] }).missing).toEqual(['u']);
+  });
+
   it('takes the last part of a path where it is unique', () => {
     const { mapping } = matchColumns(['mesh/x', 'mesh/vol', 'flow.u'], { dimension: 1, fields: ['u'] });
     expect(mapping).toEqual({ x: 'mesh/x', weight: 'mesh/vol', fields: { u: 'flow.u' } });
