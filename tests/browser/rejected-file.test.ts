@@ -21,7 +21,7 @@ browserTest('a broken file says where and why it was rejected, and another one t
   await page.getByText(/^Line \d+, column \d+: found “.*”; expected a finite number/).waitFor();
   expect(await seriousFindings(page)).toEqual([]);
   expect(await overflowOf(page)).toBeLessThanOrEqual(0);
-  await page.getByRole('row', { name: /read/ }).nth(3).waitFor({ timeout: 30_000 });
+  await page.getByRole('row', { name: /\bread\b/ }).nth(3).waitFor({ timeout: 30_000 });
   const before = await ok(person, getStudyContract, { params: { id: study.id } });
   expect(before.grids.filter(({ state }) => state === 'read')).toHaveLength(4);
 

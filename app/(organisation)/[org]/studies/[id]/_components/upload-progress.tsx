@@ -20,7 +20,7 @@ export function UploadProgress({ grid, transfer, reading }: UploadProgressProps)
     return (
       <WithBar>
         <ProgressBar label={`Reading grid ${grid.label}`} share={reading?.share ?? null} />
-        <span className="text-note text-graphite">{formatCount(rows)} rows</span>
+        <span className="text-note text-graphite">{rows > 0 ? `${formatCount(rows)} rows` : 'opening the file'}</span>
       </WithBar>
     );
   }
