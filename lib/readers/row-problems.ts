@@ -37,7 +37,7 @@ export function createRowProblems(): RowProblems {
         case 'weight-not-positive':
           return { code, line, column: column(plan.weight), found: `${value}${inRow}`, expected: 'a weight above 0' };
         case 'value-not-finite':
-          return { code: 'not-finite', line, column: column(plan.fields[fields.indexOf(field ?? '')]), found: `${value}${inRow}`, expected: 'a value whose square a double can hold' };
+          return { code: 'not-finite', line, column: column(plan.fields[fields.indexOf(field ?? '')]), found: `${value}${inRow}`, expected: 'a value whose squares a double can add up' };
         case 'exact-not-finite':
           return { code, line, column: null, found: `${value} for ${field} at ${point}`, expected: 'an exact solution that is finite at every row' };
       }

@@ -45,6 +45,9 @@ function checkErrors({ grids, knownValue, target, formalOrder, tolerance }: Quic
     for (const norm of stated) {
       if (grid.errors?.[norm] === undefined) faults.push({ path: `grids.${index}.errors.${norm}`, message: `Other grids have an ${norm} error. Expected one here too.` });
     }
+    for (const norm of quickCheckNorms) {
+      if (grid.iterativeError?.[norm] !== undefined && !stated.includes(norm)) faults.push({ path: `grids.${index}.iterativeError.${norm}`, message: `No grid has an ${norm} error.` });
+    }
     if (grid.resolution !== undefined) faults.push({ path: `grids.${index}.resolution`, message: 'A resolution goes with a value.' });
   });
   if (knownValue !== undefined) faults.push({ path: 'knownValue', message: 'A known value goes with values, not with errors.' });

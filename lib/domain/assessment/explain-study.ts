@@ -51,7 +51,7 @@ function explainNothingCounts({ fields }: StatedAssessment): Explanation {
   }
   const names = fields.map(nameSeries);
   return {
-    sentence: names.length > 0 ? `None of the ${names.length} norms assessed counts: ${joinWords(names)}.` : 'No field and norm counts towards an outcome.',
+    sentence: names.length === 1 ? `The one norm assessed, ${names.join('')}, does not count.` : names.length > 0 ? `None of the ${names.length} norms assessed counts: ${joinWords(names)}.` : 'No field and norm counts towards an outcome.',
     nextStep: 'Let L2 or L∞ of at least one field count in the case.',
   };
 }

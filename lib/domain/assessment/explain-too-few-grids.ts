@@ -9,6 +9,7 @@ const floors = { 'round-off': 'round-off', 'known-error': 'no more than 20 times
 
 /** Why the grids do not suffice: some lie on the floor, the span or the pairs are short, or the case asks for more. */
 export function explainTooFewGrids({ name, used, unused }: FieldFacts, { grids, orders }: FieldAssessment): Explanation {
+  if (grids.length === 0) return { sentence: `No grid has ${name}.`, nextStep: 'Upload the output of the grids, or state the errors.' };
   const floor = joinWords([...new Set(unused.flatMap((grid) => grid.unusedReason ?? []))].map((reason) => {
     const labels = unused.filter((grid) => grid.unusedReason === reason).map((grid) => grid.label).reverse();
     return `${name} is ${floors[reason]} on ${joinWords(labels)}`;
@@ -20,8 +21,8 @@ export function explainTooFewGrids({ name, used, unused }: FieldFacts, { grids, 
   const shortfall = used.length >= 2 && !spansRatio(spacings)
     ? `their spacings span a ratio of ${formatRatio((spacings.at(-1) ?? 1) / (spacings[0] ?? 1))}, where 2 is needed`
     : orders.length < 2
-      ? `they give ${orders.length === 1 ? '1 pair' : 'no pair'} at a ratio of 1.3 or more, where two pairs are needed`
-      : 'the case asks for more';
+      ? `${used.length === 1 ? 'it gives' : 'they give'} ${orders.length === 1 ? '1 pair' : 'no pair'} at a ratio of 1.3 or more, where two pairs are needed`
+      : 'more are asked for';
   return {
     sentence: `${counted}; ${shortfall}.`,
     nextStep: floor

@@ -1,5 +1,6 @@
-import type { FieldAssessment, FieldGrid } from '@/lib/numerics/assessment';
+import type { FieldAssessment, FieldGrid, PairOrder } from '@/lib/numerics/assessment';
 import { formatError } from '../numbers/format-error';
+import { formatMeasure } from '../numbers/format-measure';
 import { formatOrder } from '../numbers/format-order';
 import { capitalise, nameErrors } from './series-name';
 
@@ -9,11 +10,13 @@ export interface FieldFacts {
   name: string;
   Name: string;
   formal: string;
+  /** "formal order 2", or "derived order 3" where that replaces it. */
+  claimed: string;
   /** "1.90 to 2.20". */
   band: string;
   lowest: string;
   highest: string;
-  /** Orders of the finest pair, the one before and the one before that, printed; "–" where there is none. */
+  /** Orders of the finest pair and the one before, printed with ± what the known errors allow where that shows; "–" where there is none. */
   last: string;
   before: string;
   lastOrder: number | null;
@@ -30,17 +33,27 @@ export function gatherFieldFacts(field: FieldAssessment): FieldFacts {
   const judgedBy = field.derivedOrder ?? field.formalOrder;
   const tolerance = field.tolerance ?? 0;
   const limits = judgedBy === null ? [] : [judgedBy - tolerance, judgedBy + 2 * tolerance];
-  const print = (order: number | null | undefined) => (order === null || order === undefined ? '–' : formatOrder(order, limits));
+  const print = (pair: PairOrder | undefined) => (pair ? printOrder(pair, limits) : '–');
   const printLimit = (index: number) => (limits[index] === undefined ? '–' : formatOrder(limits[index]));
   const name = nameErrors(field);
   return {
     name, Name: capitalise(name),
     formal: judgedBy === null ? '–' : String(judgedBy),
+    claimed: `${field.derivedOrder === null ? 'formal' : 'derived'} order ${judgedBy ?? '–'}`,
     band: `${printLimit(0)} to ${printLimit(1)}`, lowest: printLimit(0), highest: printLimit(1),
-    last: print(field.orders[0]?.order), before: print(field.orders[1]?.order), lastOrder: field.orders[0]?.order ?? null,
+    last: print(field.orders[0]), before: print(field.orders[1]), lastOrder: field.orders[0]?.order ?? null,
     orders: field.orders.flatMap((pair) => pair.order ?? []).reverse(),
     gap: (order) => (order === null || order === undefined || judgedBy === null ? '–' : Math.abs(judgedBy - order).toFixed(3)),
     used: field.grids.filter((grid) => grid.used), unused: field.grids.filter((grid) => !grid.used),
     errorOf: (grid) => (grid ? formatError(grid.error).text : '–'),
   };
+}
+
+/** Below this an uncertainty does not show in two decimals. */
+export const shownUncertainty = 0.005;
+
+function printOrder({ order, uncertainty }: PairOrder, limits: readonly number[]): string {
+  if (order === null) return '–';
+  const printed = formatOrder(order, limits);
+  return uncertainty !== null && uncertainty >= shownUncertainty ? `${printed} ± ${formatMeasure(uncertainty)}` : printed;
 }

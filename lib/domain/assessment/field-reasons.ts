@@ -1,9 +1,11 @@
 import { aitkenLimit } from '@/lib/numerics/outcome/aitken-limit';
 import type { FieldAssessment, FieldGrid, ReasonCode } from '@/lib/numerics/assessment';
+import { formatMeasure } from '../numbers/format-measure';
 import { formatOrder } from '../numbers/format-order';
 import type { Explanation } from './explanation';
 import { explainTooFewGrids } from './explain-too-few-grids';
-import type { FieldFacts } from './field-facts';
+import { shownUncertainty, type FieldFacts } from './field-facts';
+import { capitalise } from './series-name';
 
 type FieldText = (facts: FieldFacts, field: FieldAssessment) => Explanation;
 
@@ -19,16 +21,16 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
     nextStep: nothingMore,
   }),
   'exact-not-declared': ({ Name, errorOf }, { grids }) => ({
-    sentence: `${Name} is ${errorOf(largest(grids))} at most, which is round-off: it shows no order, and the case does not expect an exact result.`,
+    sentence: `${Name} is ${errorOf(largest(grids))} at most, which counts as exact: it shows no order, and the case does not expect an exact result.`,
     nextStep: 'Say in the case that an exact result is expected, or choose a solution the scheme does not reproduce exactly.',
   }),
   'not-exact': ({ Name, errorOf }, { grids }) => ({
     sentence: `${Name} is ${errorOf(largest(grids))} on grid ${largest(grids)?.label ?? '–'}, where the case expects an exact result.`,
-    nextStep: 'Look for the term, boundary value or unit that differs from the exact solution, or check whether the scheme should reproduce it.',
+    nextStep: 'Look for the term, boundary value or unit that differs from the exact solution, or check whether the scheme should reproduce it. Where the exact values are zero, state a reference size to tell round-off by.',
   }),
   'too-few-grids': explainTooFewGrids,
-  'above-formal': ({ last, highest, formal }) => ({
-    sentence: `The finest pair shows order ${last}, above ${highest}: more than formal order ${formal} explains.`,
+  'above-formal': ({ last, highest, claimed }) => ({
+    sentence: `The finest pair shows order ${last}, above ${highest}: more than ${claimed} explains.`,
     nextStep: `${addFiner} A change of sign or a cancellation passes with refinement; a higher order that can be derived may be declared as derived order.`,
   }),
   'errors-rise': ({ used, errorOf }) => ({
@@ -44,7 +46,7 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
     nextStep: nothingMore,
   }),
   'one-pair-only': ({ last, before, band }) => ({
-    sentence: `Only the finest pair lies in the band of ${band}: order ${last}, after ${before}. Two consecutive pairs are needed.`,
+    sentence: `Of the last two pairs only the finest lies surely in the band of ${band}: order ${last}, after ${before}. Two consecutive pairs are needed.`,
     nextStep: addFiner,
   }),
   'limit-below-formal': ({ last, lowest, orders }) => ({
@@ -56,9 +58,9 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
     nextStep: addFiner,
   }),
   'below-formal': ({ last, before, lowest, lastOrder, formal, gap, orders }) => ({
-    sentence: `The last two pairs show orders ${before} and ${last}, below ${lowest}; their distance from ${formal} goes from ${gap(orders.at(-2))} to ${gap(orders.at(-1))} and does not close.`,
+    sentence: `The last two pairs show orders ${before} and ${last}, below ${lowest}; their distance from ${formal} goes from ${gap(orders.at(-2))} to ${gap(orders.at(-1))} and ${isClosing(formal, orders) ? 'closes too slowly' : 'does not close'}.`,
     nextStep: lastOrder !== null && lastOrder < standsStill
-      ? 'The error hardly falls. Compare source term, boundary values, constants, units and time of the run with the exact solution, and state the iterative error.'
+      ? `The error ${lastOrder < 0 ? 'does not fall' : 'hardly falls'}. Compare source term, boundary values, constants, units and time of the run with the exact solution, and state the iterative error.`
       : lowerOrderPart,
   }),
   'left-band': ({ last, before, lowest }) => ({
@@ -70,12 +72,12 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
     nextStep: 'Check that the grids are refined alike in every direction and that each run is converged; then add a finer grid.',
   }),
   'within-uncertainty': ({ last, band }, { orders }) => ({
-    sentence: `The finest pair shows order ${last} ± ${formatOrder(orders[0]?.uncertainty ?? 0)}, too uncertain for the band of ${band}.`,
+    sentence: `The finest pair shows order ${last}${unseen(orders[0]?.uncertainty)}, too uncertain for the band of ${band}.`,
     nextStep: 'Lower the iterative error, or store more digits, so that the known error of the finest grids is smaller.',
   }),
-  'sampling-not-stated': ({ formal, last }) => ({
-    sentence: `Formal order ${formal} is claimed and the finest pair shows ${last}, but nobody said where the values live: cell averages differ from point values at second order.`,
-    nextStep: 'State in the case whether the values are at points, cell averages or at quadrature points.',
+  'sampling-not-stated': ({ claimed, last }) => ({
+    sentence: `${capitalise(claimed)} is declared${last === '–' ? '' : ` and the finest pair shows ${last}`}, but nobody said where the values live: cell averages differ from point values at second order.`,
+    nextStep: 'State in the case whether the values are point values, cell averages or at quadrature points.',
   }),
   'not-similar': ({ last, before, band }) => ({
     sentence: `The last two pairs show orders ${before} and ${last} against a band of ${band}, but the grids are not refined alike everywhere.`,
@@ -89,6 +91,17 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
 
 function largest(grids: readonly FieldGrid[]): FieldGrid | undefined {
   return grids.reduce<FieldGrid | undefined>((most, grid) => (most && most.error >= grid.error ? most : grid), undefined);
+}
+
+/** Whether the last two orders come nearer to the formal one, if not by enough. */
+function isClosing(formal: string, orders: readonly number[]): boolean {
+  const [before, last] = orders.slice(-2).map((order) => Math.abs(Number(formal) - order));
+  return before !== undefined && last !== undefined && last < before;
+}
+
+/** An uncertainty too small to stand beside the order, but large enough to leave the question open. */
+function unseen(uncertainty: number | null | undefined): string {
+  return uncertainty && uncertainty < shownUncertainty ? ` ± ${formatMeasure(uncertainty)}` : '';
 }
 
 function printLimit(orders: readonly number[]): string {

@@ -6,6 +6,7 @@ import { formatPercent } from '../numbers/format-percent';
 import { formatRatio } from '../numbers/format-ratio';
 import type { Explanation } from './explanation';
 import { gciWithFormalOrder } from './gci-with-formal-order';
+import { printGci } from './print-gci';
 import { joinWords } from './series-name';
 
 type QuantityText = (quantity: QuantityAssessment) => Explanation;
@@ -34,20 +35,21 @@ export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
     };
   },
   'order-off-formal': (quantity) => ({
-    sentence: `${ordersSeen(quantity).replace(/^t/, 'T')}, where formal order ${quantity.formalOrder ?? '–'} is declared: the GCI of ${percent(quantity.gci)} is not held against the target.`,
+    sentence: `${ordersSeen(quantity).replace(/^t/, 'T')}, where formal order ${quantity.formalOrder ?? '–'} is declared${gciSeen(quantity)}.`,
     nextStep: 'Add a finer grid, or check the declared order for this quantity: singular points and limiters lower it.',
   }),
   'order-not-observed': (quantity) => ({
-    sentence: `Two grids show no order: a GCI of ${percent(quantity.gci)} assumes formal order ${quantity.formalOrder ?? '–'} and takes a safety factor of ${quantity.safetyFactor ?? '–'}.`,
+    sentence: `Two grids show no order: a GCI of ${printGci(quantity)} assumes formal order ${quantity.formalOrder ?? '–'} and takes a safety factor of ${quantity.safetyFactor ?? '–'}.`,
     nextStep: 'Add a third grid, finer by a ratio of 1.3 or more.',
   }),
   'order-out-of-range': (quantity) => ({
-    sentence: `The values of grids ${joinWords(quantity.triples.find(({ order }) => order === null)?.grids ?? [])} fit no order between −10 and 20.`,
+    sentence: `The values of grids ${joinWords(quantity.triples.find(isOutOfRange)?.grids ?? [])} fit no order between −10 and 20.`,
     nextStep: 'Check the values and spacings for a slip, then add a grid.',
   }),
   'too-few-grids': (quantity) => {
     const spacings = quantity.values.map(({ h }) => h);
     const span = (spacings.at(-1) ?? 1) / (spacings[0] ?? 1);
+    if (quantity.values.length === 0) return { sentence: `No grid has a value of ${quantity.name}.`, nextStep: 'State the value on at least 3 grids, each at a ratio of 1.3 or more to the next.' };
     const counted = quantity.values.length === 1 ? 'There is 1 grid' : `There are ${quantity.values.length} grids, spanning a ratio of ${formatRatio(span)}`;
     return {
       sentence: `${counted}; ${spansRatio(spacings) ? 'more are asked for, each at a ratio of 1.3 or more to the next' : 'a ratio of 2 is needed, in steps of 1.3 or more'}.`,
@@ -60,7 +62,7 @@ export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
 function explainNoTarget({ name, formalOrder, target, gciAbsolute, unit, orderObserved }: QuantityAssessment): Explanation {
   if (formalOrder !== null && target !== null) {
     return {
-      sentence: `The value of ${name} is smaller than ten times its last change, so a GCI in percent of it says nothing; it is ${gciAbsolute === null ? '–' : formatMeasure(gciAbsolute, unit)} in the quantity's unit.`,
+      sentence: `The value of ${name} is smaller than ten times its last change, so a GCI in percent of it says nothing; in the quantity's unit it is ${gciAbsolute === null ? '–' : formatMeasure(gciAbsolute, unit)}.`,
       nextStep: 'Judge the uncertainty in the unit of the quantity, or take a quantity that is not near zero.',
     };
   }
@@ -78,6 +80,14 @@ function percent(fraction: number | null): string {
 function ordersSeen({ triples }: QuantityAssessment): string {
   const orders = triples.slice(0, 2).map(({ order }) => (order === null ? '–' : formatOrder(order)));
   return orders.length > 1 ? `the last two triples show orders ${joinWords(orders)}` : `the three grids show order ${orders.join('')}`;
+}
+
+function gciSeen(quantity: QuantityAssessment): string {
+  return quantity.gciAbsolute === null ? '' : `: the GCI of ${printGci(quantity)} is not held against the target`;
+}
+
+function isOutOfRange({ order, convergence }: QuantityAssessment['triples'][number]): boolean {
+  return order === null && (convergence === 'monotone' || convergence === 'divergent');
 }
 
 function rangeSeen({ halfRange, unit }: QuantityAssessment): string {

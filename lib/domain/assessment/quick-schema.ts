@@ -7,7 +7,8 @@ import { assessmentSchema } from './schema';
 
 const positive = z.number().positive();
 const perNorm = z.partialRecord(normNameSchema, z.number().nonnegative());
-const numberOrPerNorm = z.union([positive, z.partialRecord(normNameSchema, positive)]);
+const orders = positive.max(20);
+const tolerances = positive.max(5);
 
 export const quickCheckSchema = z.strictObject({
   dimension: dimensionSchema.default(1),
@@ -15,11 +16,11 @@ export const quickCheckSchema = z.strictObject({
     label: labelSchema.optional(), h: positive.optional(), cells: positive.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
     value: z.number().optional(), resolution: positive.optional(), errors: perNorm.optional(), iterativeError: perNorm.optional(),
   })).min(2).max(50),
-  formalOrder: numberOrPerNorm.optional(),
-  tolerance: numberOrPerNorm.optional(),
+  formalOrder: z.union([orders, z.partialRecord(normNameSchema, orders)]).optional(),
+  tolerance: z.union([tolerances, z.partialRecord(normNameSchema, tolerances)]).optional(),
   minimumGrids: z.number().int().min(3).max(20).optional(),
   procedure: z.enum(['three-grid', 'guarded-order', 'least-squares', 'correction-factor']).optional(),
-  expectExact: z.boolean().optional(), exactLimit: positive.optional(), reference: positive.optional(), derivedOrder: positive.optional(),
+  expectExact: z.boolean().optional(), exactLimit: positive.optional(), reference: positive.optional(), derivedOrder: orders.optional(),
   knownValue: z.number().optional(), target: positive.optional(),
 }).meta({ description: 'One quantity (every grid has a value) or one field (every grid has errors).' });
 export type QuickCheckInput = z.infer<typeof quickCheckSchema>;

@@ -1,27 +1,22 @@
 import type { QuantityAssessment } from '@/lib/numerics/assessment';
 import { formatMeasure } from '../numbers/format-measure';
 import { formatOrder } from '../numbers/format-order';
-import { formatPercent } from '../numbers/format-percent';
 import { formatValue } from '../numbers/format-value';
-
-/** A value under ten of its last changes is near zero: its GCI is stated in the unit alone. */
-const largestChange = 0.1;
+import { printGci } from './print-gci';
 
 /**
  * How a quantity converges, in words: order, extrapolated value and GCI of the finest grid. Half the range where there is
  * no order. Null where too little is known for a sentence of its own.
  */
 export function stateQuantity(quantity: QuantityAssessment): string | null {
-  const { convergence, orderUsed, extrapolated, gci, gciAbsolute, halfRange, relativeChange, unit, branch } = quantity;
+  const { convergence, orderUsed, extrapolated, gciAbsolute, halfRange, unit, branch } = quantity;
   const values = `The values of ${quantity.name}`;
   if (orderUsed !== null && extrapolated !== null && gciAbsolute !== null) {
     const towards = `${formatValue(extrapolated, gciAbsolute, 1)}${unit ? ` ${unit}` : ''}`;
-    const isNearZero = relativeChange === null || relativeChange > largestChange;
-    const index = gci === null || isNearZero ? formatMeasure(gciAbsolute, unit) : formatPercent(gci);
     const how = branch === 'observed'
       ? `${values} converge monotonically with order ${formatOrder(orderUsed)} towards ${towards}.`
       : `Two grids show no order; with the formal order ${orderUsed} ${values.replace('The', 'the')} head for ${towards}.`;
-    return `${how} On the finest grid the grid convergence index is ${index}.`;
+    return `${how} On the finest grid the grid convergence index is ${printGci(quantity)}.`;
   }
   if (convergence === null || halfRange === null) return null;
   const range = formatMeasure(halfRange, unit);

@@ -39,6 +39,8 @@ interface FieldSums {
 
 // Sums run plainly over this many rows and are then compensated: as good as compensating every row, at a fraction of the time.
 const run = 128;
+/** Sums of this many squares must fit into a double: more rows than any file has. */
+const mostRows = 2 ** 40;
 
 /**
  * Gathers the norms of every field block by block, in one pass: with e = q − q_exact and weights w,
@@ -102,7 +104,7 @@ function addWeights(weights: Float64Array, rows: number, sum: CompensatedSum, on
   }
 }
 
-/** Whether something in the run is not finite. */
+/** Whether something in the run is not finite, or so large that sums of its squares may not be. */
 function addRun(sum: FieldSums, values: Float64Array, exact: Float64Array, block: NormBlock, from: number, to: number): boolean {
   const { weights } = block;
   let absolute = 0, square = 0, signed = 0, exactAbsolute = 0, exactSquare = 0;
@@ -139,7 +141,7 @@ function addRun(sum: FieldSums, values: Float64Array, exact: Float64Array, block
     sum.largest = largest;
     sum.at = positionAt(block, largestRow);
   }
-  return !Number.isFinite(square) || !Number.isFinite(exactSquare);
+  return !Number.isFinite(square * mostRows) || !Number.isFinite(exactSquare * mostRows);
 }
 
 function findBad(
@@ -149,8 +151,8 @@ function findBad(
   for (let i = from; i < to; i += 1) {
     const value = part.values[i] as number;
     const known = part.exact[i] as number;
-    // A value whose weighted squared error would pass the largest double has no norm either.
-    const room = 4 * (weights === null ? 1 : (weights[i] as number));
+    // A value whose weighted squared errors might add up beyond the largest double has no norm either.
+    const room = 4 * mostRows * (weights === null ? 1 : (weights[i] as number));
     if (!Number.isFinite(room)) continue;
     if (!Number.isFinite(room * value * value)) report('value-not-finite', i, value);
     if (!Number.isFinite(room * known * known)) report('exact-not-finite', i, known);

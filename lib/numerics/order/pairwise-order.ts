@@ -16,8 +16,15 @@ export function pairwiseOrder(coarse: GridError, fine: GridError): { order: numb
   const logRatio = Math.log(coarse.h / fine.h);
   if (!(logRatio > 0)) throw new RangeError(`coarse.h must exceed fine.h, got ${coarse.h} and ${fine.h}`);
   if (coarse.error === 0 || fine.error === 0) return { order: null, uncertainty: null };
+  const uncertainty = (coarse.knownError / coarse.error + fine.knownError / fine.error) / logRatio;
   return {
-    order: Math.log(coarse.error / fine.error) / logRatio,
-    uncertainty: (coarse.knownError / coarse.error + fine.knownError / fine.error) / logRatio,
+    order: logOfQuotient(coarse.error, fine.error) / logRatio,
+    uncertainty: Math.min(uncertainty, Number.MAX_VALUE),
   };
+}
+
+/** ln(a/b), also where a/b itself is beyond a double. */
+function logOfQuotient(a: number, b: number): number {
+  const quotient = a / b;
+  return quotient > 0 && Number.isFinite(quotient) ? Math.log(quotient) : Math.log(a) - Math.log(b);
 }

@@ -54,6 +54,7 @@ describe('assessQuickCheck', () => {
     [{ grids: [{ h: 1, value: 1 }, { h: 0.5, value: 2 }], formalOrder: { L2: 2 } }, 'formalOrder'],
     [{ grids: [{ h: 1, errors: { L2: 1 } }, { h: 0.5, errors: { L2: 2 } }], target: 0.1 }, 'target'],
     [{ grids: [{ h: 1, errors: { L2: 1 } }, { h: 0.5, errors: { L2: 2 } }], formalOrder: { L1: 2 } }, 'formalOrder.L1'],
+    [{ grids: [{ h: 1, errors: { L2: 1 }, iterativeError: { L1: 1e-3 } }, { h: 0.5, errors: { L2: 2 } }] }, 'grids.0.iterativeError.L1'],
     [{ dimension: 3, grids: [{ cellsPerDirection: [1, 2], value: 1 }, { h: 0.5, value: 2 }] }, 'grids.0.cellsPerDirection'],
   ])('names the member that is wrong in %j', (input, path) => expect(faults(input)).toContain(path));
 });

@@ -50,6 +50,28 @@ describe('explainField(field)', () => {
     const floored = judgeErrorSeries(errorSeries([1, 0.5, 0.25, 0.125], [1, 0.25, 0.06, 0.05], { knownErrors: [0, 0, 0.01, 0.01] }));
     expect(explainField(floored)[0]?.sentence).toBe('2 of 4 grids can be used, because the L2 error of u is no more than 20 times its known error on g3 and g4; they give 1 pair at a ratio of 1.3 or more, where two pairs are needed.');
   });
+  it('puts the uncertainty beside an order that it keeps from its band', () => {
+    const uncertain = judgeErrorSeries(errorSeries([1, 0.5, 0.25, 0.125], [1, 0.25, 0.0625, 0.015625], { knownErrors: [0.04, 0.008, 0, 0] }));
+    expect(explainField({ ...uncertain, reasons: ['one-pair-only'] })[0]?.sentence).toBe('Of the last two pairs only the finest lies surely in the band of 1.90 to 2.20: order 2.00, after 2.00 ± 0.046. Two consecutive pairs are needed.');
+    const barely = judgeErrorSeries(errorSeries([1, 0.5, 0.25, 0.125], [0, 1, 2, 3].map((i) => 2 ** (-1.9 * i)), { knownErrors: [0, 0, 0, 1e-5] }));
+    expect(barely.reasons).toEqual(['within-uncertainty']);
+    expect(explainField(barely)[0]?.sentence).toBe('The finest pair shows order 1.900 ± 7.5\u00A0×\u00A010⁻⁴, too uncertain for the band of 1.90 to 2.20.');
+  });
+  it('tells a gap that closes too slowly from one that does not close, and errors that do not fall', () => {
+    const orders = (...seen: number[]) => judgeErrorSeries(errorSeries(h, [0, ...seen].map((_, i) => 2 ** -seen.slice(0, i).reduce((sum, p) => sum + p, 0))));
+    expect(explainField(orders(1, 1, 1, 1.1))[0]?.sentence).toMatch(/goes from 1\.000 to 0\.900 and closes too slowly\.$/);
+    expect(explainField(orders(1, 1, 1.1, 1))[0]?.sentence).toMatch(/goes from 0\.900 to 1\.000 and does not close\.$/);
+    expect(explainField(orders(0.3, 0.2, 0.2, 0.1))[0]?.nextStep).toMatch(/^The error hardly falls\./);
+    expect(explainField(orders(0.3, 0.2, 0.2, -0.1))[0]?.nextStep).toMatch(/^The error does not fall\./);
+  });
+  it('calls a derived order by its name', () => {
+    const above = judgeErrorSeries(errorSeries([1, 0.5, 0.25, 0.125], [0, 1, 2, 3].map((i) => 2 ** (-4 * i)), { derivedOrder: 3 }));
+    expect(explainField(above)[0]?.sentence).toBe('The finest pair shows order 4.00, above 3.30: more than derived order 3 explains.');
+  });
+  it('counts one grid and none in words that fit', () => {
+    expect(explainField(judgeErrorSeries(errorSeries([1], [1])))[0]?.sentence).toBe('There is 1 grid; it gives no pair at a ratio of 1.3 or more, where two pairs are needed.');
+    expect(explainField(judgeErrorSeries(errorSeries([], [])))[0]?.sentence).toBe('No grid has the L2 error of u.');
+  });
   it('says L∞, and the name alone for a known value', () => {
     expect(explainField(judgeErrorSeries(errorSeries([1], [1e-3], { norm: 'Linf', expectExact: true })))[0]?.sentence).toMatch(/^The L∞ error of u is/);
     expect(explainField(judgeErrorSeries(errorSeries([1], [1e-3], { norm: 'value', field: 'drag', expectExact: true })))[0]?.sentence).toMatch(/^The error of drag is/);
@@ -60,6 +82,15 @@ describe('explainQuantity(quantity)', () => {
   it('puts the GCI with the formal order beside one that a high order shrinks', () => {
     const high = judgeQuantity(quantitySeries([1, 2, 4], [100, 100.4, 102.1], { formalOrder: 2, target: 0.01 }));
     expect(explainQuantity(high)[0]?.sentence).toBe('The GCI of the finest grid is 0.15\u202F%, within the target of 1.0\u202F%; the three grids show order 2.09. An order above the formal one shrinks the GCI: with order 2 it would be 0.17\u202F%.');
+  });
+  it('states a GCI in the unit wherever the value is near zero or zero', () => {
+    const nearZero = judgeQuantity(quantitySeries([1, 2, 4], [0.5, 1, 2], { formalOrder: 2, target: 0.01, unit: 'N' }));
+    expect(explainQuantity(nearZero)[0]?.sentence).toBe('The three grids show order 1.00, where formal order 2 is declared: the GCI of 0.63 N is not held against the target.');
+    const zero = judgeQuantity(quantitySeries([1, 2], [0, 1], { formalOrder: 2, target: 0.01 }));
+    expect(explainQuantity(zero)[0]?.sentence).toBe('Two grids show no order: a GCI of 1.0 assumes formal order 2 and takes a safety factor of 3.');
+  });
+  it('says that no grid has a value', () => {
+    expect(explainQuantity(judgeQuantity(quantitySeries([], [], { formalOrder: 2, target: 0.01 })))[0]?.sentence).toBe('No grid has a value of drag.');
   });
   it('says what is not declared', () => {
     expect(explainQuantity({ ...quantity, formalOrder: null, target: null, reasons: ['no-target'] })[0]?.sentence).toBe('No formal order and no target is declared for drag, so it is not judged; order 2.00 is observed.');
@@ -75,7 +106,7 @@ describe('explainStudy(assessment)', () => {
     expect(study(second(), second({ field: 'v', minimumGrids: 6 }), second({ field: 'w', minimumGrids: 6 }))).toBe('2 of 3 norms that count are inconclusive: L2 of v and L2 of w.');
   });
   it('says that nothing counts, or L1 alone', () => {
-    expect(study(second({ counts: false }))).toBe('None of the 1 norms assessed counts: L2 of u.');
+    expect(study(second({ counts: false }))).toBe('The one norm assessed, L2 of u, does not count.');
     expect(study(second({ norm: 'L1' }))).toBe('Of u only L1 counts, and L1 alone may not: it overlooks a wrong band one cell wide.');
     expect(study()).toBe('No field and norm counts towards an outcome.');
   });

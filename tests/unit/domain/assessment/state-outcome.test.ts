@@ -35,9 +35,9 @@ describe('stateOutcome(assessment)', () => {
     expect(state([powers(2, { formalOrder: null })])).toEqual({ outcome: null, sentence: 'Halving the spacing divides the L2 error of u by 4.00.' });
   });
   it('gives the reason where a ratio says nothing', () => {
-    expect(state([powers(2, { minimumGrids: 5 })]).sentence).toBe('There are 4 grids; the case asks for more.');
+    expect(state([powers(2, { minimumGrids: 5 })]).sentence).toBe('There are 4 grids; more are asked for.');
     expect(state([errorSeries(halvings, [2e-15, 1e-15, 2e-15, 3e-15], { expectExact: true })]).sentence).toMatch(/^The L2 error of u is 3\.00\u00A0×\u00A010⁻¹⁵ at most/);
-    expect(state([powers(2, { counts: false })]).sentence).toBe('None of the 1 norms assessed counts: L2 of u.');
+    expect(state([powers(2, { counts: false })]).sentence).toBe('The one norm assessed, L2 of u, does not count.');
   });
 
   it('states order, extrapolated value and GCI of a quantity', () => {
@@ -48,6 +48,9 @@ describe('stateOutcome(assessment)', () => {
   });
   it('states a GCI in the unit where the value is near zero', () => {
     expect(state([], [quantitySeries([1, 2, 4], [0.251, 1.001, 4.003], { unit: 'm/s' })]).sentence).toMatch(/index is 0\.31 m\/s\.$/);
+  });
+  it('writes no noise for an extrapolated value within its GCI of zero', () => {
+    expect(state([], [quantitySeries([1, 2, 4], [0.25, 1, 4])]).sentence).toBe('The values of drag converge monotonically with order 2.00 towards 0.0. On the finest grid the grid convergence index is 0.31.');
   });
   it('states how values behave that do not converge monotonically', () => {
     expect(state([], [quantitySeries([1, 2, 4], [100.2, 101.1, 98.4], { unit: 'N' })]).sentence).toMatch(/^The values of drag oscillate .* is 1\.\d N\.$/);

@@ -29,13 +29,13 @@ describe('formatOrder(order, limits)', () => {
 });
 
 describe('formatPercent(fraction)', () => {
-  it.each([[0.0015, '0.15'], [0.0217, '2.2'], [0.02, '2.0'], [0.1234, '12'], [1.234, '120'], [12.34, '1\u202F200'], [0, '0'], [-0.05, '\u22125.0'], [1.23e-9, '1.2\u00A0×\u00A010⁻⁷']])('of %d', (fraction, text) => {
+  it.each([[0.0015, '0.15'], [0.0217, '2.2'], [0.02, '2.0'], [0.1234, '12'], [1.234, '120'], [12.34, '1\u202F200'], [0, '0'], [-0.05, '\u22125.0'], [1.23e-9, '1.2\u00A0×\u00A010⁻⁷'], [3.4e22, '3.4\u00A0×\u00A010²⁴']])('of %d', (fraction, text) => {
     expect(formatPercent(fraction)).toBe(`${text}\u202F%`);
   });
 });
 
 it('formatCount(count) sets thousands apart', () => expect([999, 1000, 10_240, 1_234_567].map(formatCount)).toEqual(['999', '1\u202F000', '10\u202F240', '1\u202F234\u202F567']));
-it('formatRatio(ratio) has two decimals', () => expect([4.08, 2, 1234.5].map(formatRatio)).toEqual(['4.08', '2.00', '1\u202F234.50']));
+it('formatRatio(ratio) has two decimals', () => expect([4.08, 2, 1234.5, 1.5e22].map(formatRatio)).toEqual(['4.08', '2.00', '1\u202F234.50', '1.50\u00A0×\u00A010²²']));
 it('orderWord(order) is how people say it', () => expect([1, 2, 10, 1.5, 2 / 3, 12].map(orderWord)).toEqual(['first order', 'second order', 'tenth order', 'order 1.5', 'order 0.667', 'order 12']));
 
 describe('formatValue(value, uncertainty, digits)', () => {
@@ -43,6 +43,7 @@ describe('formatValue(value, uncertainty, digits)', () => {
     expect(formatValue(0.635662, 9.4e-4, 1)).toBe('0.6357');
     expect(formatValue(0.635662, 9.4e-4)).toBe('0.63566');
     expect(formatValue(1234.56, 20)).toBe('1\u202F235');
+    expect([formatValue(2e-16, 0.22, 1), formatValue(-1e-6, 4.9e-4), formatValue(0.2, 60)]).toEqual(['0.0', '0.00000', '0']);
     expect(formatValue(-5.2e-6, 3e-8)).toBe('\u22125.200\u00A0×\u00A010⁻⁶');
   });
   it('has six significant digits without one', () => {

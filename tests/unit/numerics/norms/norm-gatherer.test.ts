@@ -58,5 +58,13 @@ describe('createNormGatherer(fields)', () => {
     expect(gather({ x: [0], q: [1e200], exact: [0] }).gatherer.problems()).toEqual([{ code: 'value-not-finite', field: 'u', count: 1, row: 0, value: 1e200 }]);
   });
 
+  it('reports values whose squares would add up beyond a double, rather than an infinite norm', () => {
+    const large = Array.from({ length: 300 }, () => 1e154);
+    const { gatherer, norms } = gather({ x: large, q: large, exact: large.map(() => 0) });
+    expect(norms).toBeNull();
+    expect(gatherer.problems()).toEqual([{ code: 'value-not-finite', field: 'u', count: 300, row: 0, value: 1e154 }]);
+    expect(gather({ x: large, q: large.map(() => 1e140), exact: large.map(() => 0) }).norms?.fields[0]?.L2).toBeCloseTo(1e140, -127);
+  });
+
   it('has no norms without rows', () => expect(createNormGatherer(['u']).finish([null])).toBeNull());
 });

@@ -16,6 +16,11 @@ describe('pairwiseOrder(coarse, fine)', () => {
   it('carries known errors as (δc/Ec + δf/Ef)/ln r', () => {
     expect(pairwiseOrder(at(0.2, 4, 0.04), at(0.1, 1, 0.02)).uncertainty).toBeCloseTo(0.03 / Math.log(2), 12);
   });
+  it('stays finite where the quotient of two errors is beyond a double', () => {
+    expect(pairwiseOrder(at(0.2, 1e300), at(0.1, 1e-300)).order).toBeCloseTo(600 * Math.log2(10), 9);
+    expect(pairwiseOrder(at(0.2, 1e-300), at(0.1, 1e300)).order).toBeCloseTo(-600 * Math.log2(10), 9);
+    expect(pairwiseOrder(at(0.2, 1e-300, 1e20), at(0.1, 1)).uncertainty).toBe(Number.MAX_VALUE);
+  });
   it('is null where an error is 0', () => expect(pairwiseOrder(at(0.2, 4), at(0.1, 0))).toEqual({ order: null, uncertainty: null }));
   it('throws where the coarse spacing is not the larger', () => expect(() => pairwiseOrder(at(0.1, 4), at(0.2, 1))).toThrow('coarse.h must exceed fine.h, got 0.1 and 0.2'));
 });
