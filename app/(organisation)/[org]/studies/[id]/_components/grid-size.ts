@@ -4,13 +4,6 @@ import { spacingLabel } from '@/lib/figures/spacing-label';
 
 type Stated = Pick<Grid, 'cells' | 'cellsPerDirection' | 'h' | 'dt'>;
 
-/** Cells of a grid in all, as far as stated. */
-export function cellCount({ cells, cellsPerDirection }: Stated, dimension: number): number | null {
-  if (cells !== undefined) return cells;
-  if (cellsPerDirection === undefined) return null;
-  return typeof cellsPerDirection === 'number' ? cellsPerDirection ** dimension : cellsPerDirection.reduce((product, count) => product * count, 1);
-}
-
 /** How fine a grid is, as its author stated it: "8 × 8 cells", "64 cells", "h 1/8"; null where only its file tells. */
 export function gridSize(grid: Stated, dimension: number): string | null {
   const { cells, cellsPerDirection, h, dt } = grid;

@@ -11,7 +11,7 @@ import { formatValue } from '@/lib/domain/numbers/format-value';
 import type { Grid, Study } from '@/lib/domain/studies/schema';
 import { figureFields, type FigureField } from '@/lib/figures/error-figure/figure-fields';
 import { spacingLabel } from '@/lib/figures/spacing-label';
-import { cellCount } from './grid-size';
+import { cellCount } from '@/lib/domain/studies/cell-count';
 
 interface GridTableProps { study: Study; assessment: Assessment; number: number }
 

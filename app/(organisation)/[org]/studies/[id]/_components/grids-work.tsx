@@ -75,7 +75,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
         onDragLeave={() => setIsOver(false)} onDrop={drop} className={isOver ? 'bg-wash outline-2 outline-offset-8 outline-pen outline-dashed' : ''}
       >
         <Table caption="Grids, coarse to fine, and their files." hideCaption>
-          <Head><tr><HeadCell>Grid, file</HeadCell><HeadCell num>Size</HeadCell><HeadCell>State</HeadCell><HeadCell>Progress</HeadCell><HeadCell><span className="sr-only">Actions</span></HeadCell></tr></Head>
+          <Head><tr><HeadCell>Grid, file</HeadCell><HeadCell num>Size</HeadCell><HeadCell>State</HeadCell><HeadCell>Progress</HeadCell><HeadCell className="max-tablet:hidden"><span className="sr-only">Actions</span></HeadCell></tr></Head>
           <tbody>
             {grids.map((grid) => (
               <UploadRow

@@ -5,6 +5,7 @@ import { useOrganisation } from '@/app/_components/organisation/organisation-con
 import { NormSymbol, Sym } from '@/app/_components/ui/symbols';
 import { PageTitle } from '@/app/_components/ui/page-title';
 import { Section } from '@/app/_components/ui/section';
+import { explainSpacing } from '@/lib/domain/assessment/explain-spacing';
 import type { Assessment } from '@/lib/domain/assessment/schema';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
 import type { Study } from '@/lib/domain/studies/schema';
@@ -106,9 +107,19 @@ function Results({ study, assessment }: { study: Study; assessment: Assessment }
           <div className="mt-8"><TripleTable quantities={quantities} number={numbers.triples} /></div>
         </Section>
       )}
-      <Section note={study.grids.some((grid) => grid.upload) && <p>A hash copied gives all 64 digits. Point at it for the name of the file.</p>}>
+      <Section note={<GridNotes study={study} assessment={assessment} />}>
         <GridTable study={study} assessment={assessment} number={numbers.grids} />
       </Section>
+    </>
+  );
+}
+
+function GridNotes({ study, assessment }: { study: Study; assessment: Assessment }) {
+  const notes = study.refinement === 'time' ? [] : explainSpacing(study.grids, assessment.inputs, study.dimension);
+  return (
+    <>
+      {study.grids.some((grid) => grid.upload) && <p>A hash copied gives all 64 digits. Point at it for the name of the file.</p>}
+      {notes.map((note) => <p key={note}>{note}</p>)}
     </>
   );
 }

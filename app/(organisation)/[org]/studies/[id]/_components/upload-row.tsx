@@ -38,6 +38,18 @@ export function UploadRow({ study, grid, transfer, reading, uploader, mayChange,
   const size = gridSize(grid, study.dimension);
   const reasons = isBad ? (grid.upload?.reasons ?? []) : [];
   const chooseWords = grid.upload ? 'Replace file' : 'Choose a file';
+  const actions = mayChange && (
+    <span className="flex flex-wrap gap-x-3 gap-y-1 max-tablet:flex-nowrap max-tablet:whitespace-nowrap max-tablet:[&>button]:min-h-11">
+      {transfer && uploader ? <TransferActions transfer={transfer} uploader={uploader} /> : (
+        <>
+          {!isOut && onChoose && <TextButton aria-label={`${chooseWords}, grid ${grid.label}`} onClick={onChoose}>{chooseWords}</TextButton>}
+          {isOut
+            ? <TextButton aria-label={`Take grid ${grid.label} back in`} onClick={() => void change([{ grid, change: { exclude: null } }]).catch(() => undefined)}>Take back in</TextButton>
+            : <TextButton aria-expanded={isLeavingOut} aria-label={`Leave grid ${grid.label} out`} onClick={() => setIsLeavingOut(!isLeavingOut)}>Leave out</TextButton>}
+        </>
+      )}
+    </span>
+  );
   return (
     <>
       <Row className={`${isBad ? '!border-t-[1.5px] !border-fail' : ''} ${isOut ? 'text-graphite' : ''}`}>
@@ -45,27 +57,15 @@ export function UploadRow({ study, grid, transfer, reading, uploader, mayChange,
           <span className="whitespace-nowrap">{grid.label}{size && <span className="text-graphite">, {size}</span>}</span>
           {grid.afterData && <i className="ml-1 text-note text-graphite">after data</i>}
           {filename && <span className="block break-all text-note text-graphite">{filename}</span>}
+          <span className="tablet:hidden">{actions}</span>
         </RowHead>
         <Cell num>{bytes === undefined ? '' : formatBytes(bytes)}</Cell>
         <Cell className="whitespace-nowrap" aria-live="polite">
           {isOut ? 'left out' : transfer ? <span className={transfer.state === 'failed' ? 'font-semibold text-fail-text' : ''}>{transferWords[transfer.state]}</span>
             : <span className={isBad ? 'font-semibold text-fail-text' : grid.state === 'needs-columns' ? 'font-semibold' : ''}>{stateWords[grid.state]}</span>}
         </Cell>
-        <Cell className="w-[34%] min-w-44"><UploadProgress grid={grid} transfer={transfer} reading={reading} /></Cell>
-        <Cell className="min-w-32">
-          {mayChange && (
-            <span className="flex flex-wrap gap-x-3 gap-y-1">
-              {transfer && uploader ? <TransferActions transfer={transfer} uploader={uploader} /> : (
-                <>
-                  {!isOut && onChoose && <TextButton aria-label={`${chooseWords}, grid ${grid.label}`} onClick={onChoose}>{chooseWords}</TextButton>}
-                  {isOut
-                    ? <TextButton aria-label={`Take grid ${grid.label} back in`} onClick={() => void change([{ grid, change: { exclude: null } }]).catch(() => undefined)}>Take back in</TextButton>
-                    : <TextButton aria-expanded={isLeavingOut} aria-label={`Leave grid ${grid.label} out`} onClick={() => setIsLeavingOut(!isLeavingOut)}>Leave out</TextButton>}
-                </>
-              )}
-            </span>
-          )}
-        </Cell>
+        <Cell className="w-[34%] min-w-28 tablet:min-w-44"><UploadProgress grid={grid} transfer={transfer} reading={reading} /></Cell>
+        <Cell className="min-w-32 max-tablet:hidden">{actions}</Cell>
       </Row>
       {isOut && <ReasonRow columns={uploadColumns}>{grid.excluded}</ReasonRow>}
       {transfer?.fault && <ReasonRow columns={uploadColumns}><span className="text-fail-text">{transfer.fault}</span></ReasonRow>}
