@@ -1,6 +1,7 @@
 import 'server-only';
 import { z } from 'zod';
 import { faultMessage } from '@/lib/domain/api/fault-message';
+import { isStorable } from '@/lib/domain/api/storable-text';
 import { AppError, type FieldProblem } from '@/lib/errors';
 
 // A script reads the same sentences as a person at a form.
@@ -27,12 +28,19 @@ export function invalid(error: z.ZodError): AppError {
   return new AppError('invalid', first ? `${first.path === '' ? 'The body' : first.path}: ${first.message}` : 'The request is not valid.', { fields });
 }
 
+function storable(key: string, value: unknown): unknown {
+  if (isStorable(key) && (typeof value !== 'string' || isStorable(value))) return value;
+  const message = 'Found a character that no text can keep: a NUL, or half of a surrogate pair.';
+  throw new AppError('invalid', `${isStorable(key) ? key : 'A name in the body'}: ${message}`, { fields: [{ path: isStorable(key) ? key : '', message }] });
+}
+
 export async function readJson(request: Request): Promise<{ text: string; value: unknown }> {
   const text = await readText(request);
   if (text === '') return { text, value: undefined };
   try {
-    return { text, value: JSON.parse(text) as unknown };
+    return { text, value: JSON.parse(text, storable) as unknown };
   } catch (cause) {
+    if (cause instanceof AppError) throw cause;
     throw new AppError('bad-request', `The body is not JSON: ${cause instanceof Error ? cause.message : 'unreadable'}.`, { cause });
   }
 }

@@ -1,6 +1,7 @@
 import 'server-only';
 import { createHash, randomUUID } from 'node:crypto';
 import type { ContractShape, ParsedBodyOf, ParsedQueryOf, PathParameters, ResponseOf } from '@/lib/domain/api/contract';
+import { isStorable } from '@/lib/domain/api/storable-text';
 import { AppError } from '@/lib/errors';
 import type { Context, MemberContext, UserContext } from '@/lib/services/context';
 import { answerOnce } from '@/lib/services/idempotency/answer-once';
@@ -27,15 +28,26 @@ export interface Call<C extends ContractShape> {
 }
 
 type Handler<C extends ContractShape> = (call: Call<C>) => Promise<ResponseOf<C> | Response>;
-interface RouteArguments { params: Promise<Record<string, string | string[] | undefined>> }
+/** Longer ones would not fit the index that finds them. */
+const longestKey = 255;
+
+/** Routes without a parameter are handed none. */
+interface RouteArguments { params: Promise<Record<string, string | string[] | undefined> | undefined> }
 
 function readIfMatch(contract: ContractShape, request: Request): number {
   if (!contract.conditional) return 0;
   const header = request.headers.get('if-match');
   if (header === null) throw new AppError('revision-needed', 'Send If-Match with the revision you read, such as If-Match: "3".');
-  const revision = /^(?:W\/)?"(\d+)"$/.exec(header)?.[1];
+  const revision = /^(?:W\/)?"(\d{1,9})"$/.exec(header)?.[1];
   if (!revision) throw new AppError('bad-request', `If-Match is ${header}. Expected a revision in quotes, such as "3".`);
   return Number(revision);
+}
+
+/** What no text can keep names nothing, and would be a fault of the database. */
+function requireStorable(texts: Iterable<unknown>): void {
+  for (const text of texts) {
+    if (typeof text === 'string' && !isStorable(text)) throw new AppError('bad-request', 'The address holds a character that no text can keep.');
+  }
 }
 
 function readQuery(contract: ContractShape, url: URL): unknown {
@@ -69,6 +81,8 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
 
   const caller = contract.access === 'public' ? null : await identify(request.headers);
   const ctx = await contextFor(contract, caller, url);
+  const params = (await route.params) ?? {};
+  requireStorable([...Object.values(params), ...url.searchParams.values()]);
   const ifMatch = readIfMatch(contract, request);
   const query = readQuery(contract, url);
 
@@ -83,13 +97,14 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
   }
 
   const call = {
-    ctx, params: (await route.params), query, body, ifMatch, request, headers, address: clientAddress(request, env.TRUSTED_PROXIES),
+    ctx, params, query, body, ifMatch, request, headers, address: clientAddress(request, env.TRUSTED_PROXIES),
   } as unknown as Call<C>;
   const key = request.headers.get('idempotency-key');
   if (key === null || contract.method !== 'POST' || contract.access !== 'organisation' || contract.secret) {
     const result = await handler(call);
     return result instanceof Response ? result : toResponse(contract.status, result, headers);
   }
+  if (key.length > longestKey) throw new AppError('bad-request', `The Idempotency-Key has ${key.length} characters. Expected at most ${longestKey}.`);
   const requestSha256 = createHash('sha256').update(`${contract.method} ${url.pathname}\n${text}`).digest('hex');
   const kept = await answerOnce(ctx as MemberContext, key, requestSha256, async () => {
     const result = await handler(call);

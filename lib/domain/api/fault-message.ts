@@ -21,6 +21,12 @@ function tooBig(issue: z.core.$ZodRawIssue<z.core.$ZodIssueTooBig>): string {
   return `Too large.${quoted(issue.input)} Expected a number ${issue.inclusive ? `of at most ${most}` : `below ${most}`}.`;
 }
 
+/** What any of the forms of a member would have been. */
+function formsOf({ errors }: z.core.$ZodRawIssue<z.core.$ZodIssueInvalidUnion>): string {
+  const expected = errors.flatMap(([first]) => (first?.code === 'invalid_type' ? [kinds[first.expected] ?? first.expected] : first?.code === 'invalid_value' ? first.values.map(String) : []));
+  return [...new Set(expected)].join(' or ') || 'another form';
+}
+
 /** What was wrong with a value and what was expected, in words; undefined leaves it to the schema's own text. */
 export function faultMessage(issue: z.core.$ZodRawIssue): string | undefined {
   switch (issue.code) {
@@ -32,6 +38,7 @@ export function faultMessage(issue: z.core.$ZodRawIssue): string | undefined {
     case 'too_small': return tooSmall(issue);
     case 'too_big': return tooBig(issue);
     case 'invalid_value': return `Not one of the choices.${quoted(issue.input)} Expected ${issue.values.map(String).join(', ')}.`;
+    case 'invalid_union': return `Not readable.${quoted(issue.input)} Expected ${formsOf(issue)}.`;
     case 'unrecognized_keys': return `Not known: ${issue.keys.join(', ')}. Leave it out.`;
     default: return undefined;
   }

@@ -15,7 +15,7 @@ export function mapColumns(header: readonly string[], { mapping, bound, grid }: 
   const matched = matchColumns(header, { dimension: problem.dimension, fields });
   const found = { ...matched.found, ...mapping, fields: { ...matched.found.fields, ...mapping?.fields } };
   const missing = [
-    ...fields.filter((field) => found.fields[field] === undefined),
+    ...fields.filter((field) => !Object.hasOwn(found.fields, field)),
     ...(['x', 'y', 'z'] as const).slice(0, problem.dimension).filter((axis) => found[axis] === undefined),
     ...(found.weight === undefined ? ['weight'] : []),
     ...(problem.unsteady && found.t === undefined && definitionOf(grid).t === undefined ? ['t'] : []),
