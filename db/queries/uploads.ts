@@ -11,16 +11,18 @@ export function findUpload(db: Kysely<DB>, organisationId: string, id: string) {
   return db.selectFrom('uploads').selectAll().where('organisation_id', '=', organisationId).where('id', '=', id).executeTakeFirst();
 }
 
-/** The last whole file sent for a grid, other than one upload. */
-export function findStoredUpload(db: Kysely<DB>, organisationId: string, gridId: string, otherThan: string) {
+/** The last whole file sent for a grid, in any revision of its study, other than one upload. */
+export function findStoredUpload(db: Kysely<DB>, organisationId: string, grid: { study_id: string; label: string }, otherThan: string) {
   return db
     .selectFrom('uploads')
-    .selectAll()
-    .where('organisation_id', '=', organisationId)
-    .where('grid_id', '=', gridId)
-    .where('state', '=', 'stored')
-    .where('id', '!=', otherThan)
-    .orderBy('stored_at', 'desc')
+    .innerJoin('grids', (join) => join.onRef('grids.organisation_id', '=', 'uploads.organisation_id').onRef('grids.id', '=', 'uploads.grid_id'))
+    .selectAll('uploads')
+    .where('uploads.organisation_id', '=', organisationId)
+    .where('grids.study_id', '=', grid.study_id)
+    .where('grids.label', '=', grid.label)
+    .where('uploads.state', '=', 'stored')
+    .where('uploads.id', '!=', otherThan)
+    .orderBy('uploads.stored_at', 'desc')
     .executeTakeFirst();
 }
 

@@ -104,6 +104,20 @@ describe('PUT /api/v1/studies/{id}/grids/{label}/data', () => {
     expect((await refused(engineer, putDataContract, { params: { id: study.id, label: 'n64' }, body: heatTable(64), headers: binary })).status).toBe(409);
   });
 
+  it('refuses a file that nothing could be compared with', async () => {
+    const problem = await ok(engineer, createProblemContract, { body: { name: 'No exact solution', equation: 'none', dimension: 2 } });
+    const made = await ok(engineer, createCaseContract, {
+      body: { code: work.code.slug, problem: problem.slug, name: 'Errors from the solver', kind: 'order', fields: [{ field: 'T', norms: [{ norm: 'L2', formalOrder: 2 }] }] },
+    });
+    const study = await ok(engineer, createStudyContract, { body: { case: made.slug, release: '1.0.0', grids: [{ label: 'n8', h: 0.125 }] } });
+    const problems = [
+      await refused(engineer, putDataContract, { params: { id: study.id, label: 'n8' }, body: heatTable(8), headers: binary }),
+      await refused(engineer, startUploadContract, { params: { id: study.id, label: 'n8' }, body: { filename: 'n8.csv', bytes: 100 } }),
+    ];
+    for (const { status, detail } of problems) expect([status, detail]).toEqual([422, expect.stringContaining('no exact solution')]);
+    expect((await ok(engineer, getStudyContract, { params: { id: study.id } })).planFrozenAt).toBeNull();
+  });
+
   it('is 404 for a grid that is not there and 403 for a reviewer', async () => {
     const study = await make();
     const sent = { body: heatTable(8), headers: binary };
@@ -163,6 +177,9 @@ describe('uploads in parts', () => {
     const first = await sendPart(1);
     const wrong = await refused(engineer, completeUploadContract, { params: { id: upload }, body: { parts: [{ ...first, etag: second.etag }, second] } });
     expect(wrong.status).toBe(422);
+    for (const parts of [[first, second, second], [first, second, { ...second, number: 3 }]]) {
+      expect((await refused(engineer, completeUploadContract, { params: { id: upload }, body: { parts } })).status).toBe(422);
+    }
     const closed = await ok(engineer, completeUploadContract, { params: { id: upload }, body: { parts: [first, second] } });
     expect(closed).toMatchObject({ id: upload, grid: 'n16' });
     await ok(engineer, completeUploadContract, { params: { id: upload }, body: { parts: [first, second] } });
@@ -170,6 +187,26 @@ describe('uploads in parts', () => {
     expect(study.grids.find(({ label }) => label === 'n16')).toMatchObject({ state: 'read', upload: { id: upload, rows: 256, sha256: sha256(body) } });
     expect((await refused(engineer, signPartsContract, { params: { id: upload }, body: { numbers: [1] } })).status).toBe(409);
     expect((await refused(engineer, deleteUploadContract, { params: { id: upload } })).status).toBe(409);
+  });
+
+  it('closes once where two calls do it at the same moment', async () => {
+    const at = await params();
+    const { upload } = await ok(engineer, startUploadContract, { params: at, body: { filename: 'n16.csv', bytes: heatTable(16).length } });
+    const { parts: [part] } = await ok(engineer, signPartsContract, { params: { id: upload }, body: { numbers: [1] } });
+    const { headers } = await fetch(part?.url ?? '', { method: 'PUT', body: new Uint8Array(heatTable(16)) });
+    const parts = [{ number: 1, etag: headers.get('etag') ?? '' }];
+    await Promise.all([1, 2, 3].map(() => ok(engineer, completeUploadContract, { params: { id: upload }, body: { parts } })));
+    const study = await awaitStudy(engineer, at.id, settled);
+    expect(study.grids.find(({ label }) => label === 'n16')).toMatchObject({ state: 'read', upload: { id: upload } });
+  });
+
+  it('gives way to a file sent in one call', async () => {
+    const at = await params();
+    const { upload } = await ok(engineer, startUploadContract, { params: at, body: { filename: 'n16.csv', bytes: 100 } });
+    const whole = await putFile(engineer, at, heatTable(16));
+    expect((await refused(engineer, getUploadContract, { params: { id: upload } })).status).toBe(404);
+    const study = await awaitStudy(engineer, at.id, settled);
+    expect(study.grids.find(({ label }) => label === 'n16')).toMatchObject({ state: 'read', upload: { id: whole.id } });
   });
 
   it('rejects a file that is not the one stated', async () => {

@@ -5,12 +5,11 @@ import { checkGrid } from './check-grid';
 import type { GridInput } from './input';
 import { statedSpacing } from './stated-spacing';
 
-interface Surroundings { definition: CaseDefinition; refinement: 'space' | 'time'; dimension: number; volume: number | null }
+interface Surroundings { definition: CaseDefinition; refinement: 'space' | 'time'; dimension: number; volume: number | null; canHaveFile: boolean }
 
 /** What of the grids of a new study does not fit the case or each other, each fault with its path in the request. */
 export function checkSeries(grids: readonly GridInput[], around: Surroundings): FieldProblem[] {
-  const canHaveFile = around.definition.fields.length > 0;
-  const faults = grids.flatMap((grid, index) => checkGrid(grid, { ...around, canHaveFile })
+  const faults = grids.flatMap((grid, index) => checkGrid(grid, around)
     .map(({ path, message }) => ({ path: `grids.${index}.${path}`, message })));
   const repeated = grids.flatMap((grid, index) => (grids.findIndex(({ label }) => label === grid.label) < index
     ? [{ path: `grids.${index}.label`, message: `Two grids have the label ${grid.label}.` }] : []));

@@ -1,6 +1,8 @@
 import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
+import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import { checkGrid } from '@/lib/domain/studies/check-grid';
 import type { GridInput } from '@/lib/domain/studies/input';
+import { takesFiles } from '@/lib/domain/studies/takes-files';
 import { AppError } from '@/lib/errors';
 import { refuseUnavailableNorms } from './refuse-unavailable-norms';
 import type { LoadedStudy } from './require-study';
@@ -10,7 +12,8 @@ export function refuseUnfitGrid({ head, bound }: LoadedStudy, grid: GridInput): 
   refuseUnavailableNorms(grid, '');
   const definition = caseDefinitionSchema.parse(bound.case_definition);
   const faults = checkGrid(grid, {
-    definition, refinement: head.refinement === 'time' ? 'time' : 'space', dimension: head.dimension, canHaveFile: definition.fields.length > 0,
+    definition, refinement: head.refinement === 'time' ? 'time' : 'space', dimension: head.dimension,
+    canHaveFile: takesFiles(definition, problemDefinitionSchema.parse(bound.problem_definition)),
   });
   if (faults.length > 0) throw new AppError('invalid', faults[0]?.message ?? 'The grid does not fit the case.', { fields: faults });
 }

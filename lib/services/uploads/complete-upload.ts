@@ -21,7 +21,11 @@ function invalidParts(detail: string): AppError {
 
 /** The parts stored are those stated, none is missing and together they have the size stated at the start. */
 function checkParts({ bytes, partSize }: ReceivingUpload, stated: CompleteUploadInput['parts'], stored: StoredPart[]): void {
-  for (let number = 1; number <= partCountOf(bytes, partSize); number++) {
+  const count = partCountOf(bytes, partSize);
+  const beyond = stated.find(({ number }) => number < 1 || number > count);
+  if (beyond) throw invalidParts(`Part ${beyond.number} is in the list; ${bytes} bytes in parts of ${partSize} are ${count}.`);
+  if (new Set(stated.map(({ number }) => number)).size < stated.length) throw invalidParts('A part is in the list twice. Expected each once.');
+  for (let number = 1; number <= count; number++) {
     const part = stored.find((candidate) => candidate.number === number);
     const claim = stated.find((candidate) => candidate.number === number);
     if (!part) throw invalidParts(`Part ${number} is not stored. Send it, then complete the upload again.`);
@@ -41,7 +45,12 @@ async function joinParts(ctx: MemberContext, receiving: ReceivingUpload, stated:
     throw new AppError('wrong-state', 'Storage no longer knows this upload. Start another one.');
   }
   checkParts(receiving, stated, stored);
-  await ctx.storage.completeMultipart(upload.storage_key, multipartId, stated);
+  try {
+    await ctx.storage.completeMultipart(upload.storage_key, multipartId, stated);
+  } catch (error) {
+    // Another call was quicker.
+    if (await ctx.storage.sizeOf(upload.storage_key) !== bytes) throw error;
+  }
 }
 
 /** Closes an upload: from here on it is kept, and read. Closing it again changes nothing. */
@@ -52,9 +61,11 @@ export async function completeUpload(ctx: MemberContext, id: string, { parts }: 
   await joinParts(ctx, asReceiving(loaded), parts);
   const completed = await withOrganisation(ctx, async (trx) => {
     await lockCollectingStudy(ctx, trx, loaded.grid.study_id);
-    const { grid, isCurrent } = await requireUpload(ctx, trx, id);
-    const isFirst = await updateUploadState(trx, ctx.organisation.id, id, 'receiving', { state: 'stored', stored_at: ctx.clock() });
-    if (isFirst && isCurrent) await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: id });
+    const present = await requireUpload(ctx, trx, id);
+    if (present.upload.state === 'stored') return present;
+    const { grid } = asReceiving(present);
+    await updateUploadState(trx, ctx.organisation.id, id, 'receiving', { state: 'stored', stored_at: ctx.clock() });
+    await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: id });
     return requireUpload(ctx, trx, id);
   });
   await announce(ctx, completed.grid.study_id, { event: 'state', state: 'collecting', grid: completed.grid.label, gridState: 'stored' });

@@ -23,7 +23,7 @@ export async function deleteUpload(ctx: MemberContext, id: string): Promise<void
     const loaded = asReceiving(await requireUpload(ctx, trx, id));
     const { grid } = loaded;
     await updateUploadState(trx, ctx.organisation.id, id, 'receiving', { state: 'given-up' });
-    const before = await findStoredUpload(trx, ctx.organisation.id, grid.id, id);
+    const before = await findStoredUpload(trx, ctx.organisation.id, grid, id);
     if (before) await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: before.id });
     else {
       await updateGrid(trx, ctx.organisation.id, grid.id, {

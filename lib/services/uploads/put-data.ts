@@ -12,6 +12,8 @@ import { freezePlan } from '../studies/freeze-plan';
 import { requireGrid } from '../studies/require-grid';
 import { lockCollectingStudy } from '../studies/require-study';
 import { withOrganisation, type Trx } from '../with-organisation';
+import { abandonParts } from './abandon-parts';
+import { giveUpReceiving } from './give-up-receiving';
 import { mapUpload } from './map-upload';
 import { receiveFile } from './receive-file';
 import { requireFields } from './require-fields';
@@ -86,16 +88,22 @@ export async function putData(ctx: MemberContext, key: { id: string; label: stri
   const id = newId();
   const storage_key = storageKey(ctx.organisation.id, head.id, id);
   const { bytes, sha256 } = await storeBody(ctx, storage_key, input);
-  const loaded = await withOrganisation(ctx, async (trx) => {
+  const { loaded, replaced } = await withOrganisation(ctx, async (trx) => {
     const { study, grid } = await target(trx);
     await insertUpload(trx, {
       organisation_id: ctx.organisation.id, id, grid_id: grid.id, filename: input.filename ?? `${key.label}.csv`, bytes, sha256, storage_key,
       state: 'stored', stored_at: ctx.clock(), created_by: ctx.userId, token_id: ctx.token?.id ?? null,
     });
+    const replaced = await giveUpReceiving(trx, grid);
     await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: id });
     await freezePlan(trx, { ...study, now: ctx.clock() });
-    return requireUpload(ctx, trx, id);
+    return { loaded: await requireUpload(ctx, trx, id), replaced };
+  }).catch(async (error: unknown) => {
+    // Refused for sure, unlike a connection that broke off: nothing will ever name the object.
+    if (error instanceof AppError) await ctx.storage.remove(storage_key);
+    throw error;
   });
+  if (replaced) await abandonParts(ctx, replaced);
   await announce(ctx, head.id, { event: 'state', state: 'collecting', grid: key.label, gridState: 'stored' });
   return mapUpload(loaded, []);
 }

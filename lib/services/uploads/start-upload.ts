@@ -1,5 +1,5 @@
 import { updateGrid } from '@/db/queries/grids';
-import { findUpload, insertUpload, updateUploadState } from '@/db/queries/uploads';
+import { insertUpload } from '@/db/queries/uploads';
 import { json } from '@/db/json';
 import { partSizeOf } from '@/lib/domain/uploads/part-size';
 import type { StartUploadInput } from '@/lib/domain/uploads/schema';
@@ -13,6 +13,7 @@ import { requireGrid } from '../studies/require-grid';
 import { lockCollectingStudy } from '../studies/require-study';
 import { withOrganisation, type Trx } from '../with-organisation';
 import { abandonParts } from './abandon-parts';
+import { giveUpReceiving } from './give-up-receiving';
 import { requireFields } from './require-fields';
 import { storageKey } from './storage-key';
 
@@ -40,11 +41,10 @@ export async function startUpload(ctx: MemberContext, key: { id: string; label: 
       storage_key, multipart_id, part_size: partSize,
       created_by: ctx.userId, token_id: ctx.token?.id ?? null,
     });
-    const before = grid.state === 'receiving' && grid.upload_id !== null ? await findUpload(trx, ctx.organisation.id, grid.upload_id) : undefined;
-    if (before) await updateUploadState(trx, ctx.organisation.id, before.id, 'receiving', { state: 'given-up' });
+    const replaced = await giveUpReceiving(trx, grid);
     await updateGrid(trx, ctx.organisation.id, grid.id, { state: 'receiving', upload_id: id, rows_read: null, reasons: json([]) });
     await freezePlan(trx, { ...study, now: ctx.clock() });
-    return { grid, replaced: before };
+    return { grid, replaced };
   });
   if (replaced) await abandonParts(ctx, replaced);
   await announce(ctx, grid.study_id, { event: 'state', state: 'collecting', grid: grid.label, gridState: 'receiving' });

@@ -3,17 +3,18 @@ import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import { checkSeries } from '@/lib/domain/studies/check-series';
 import type { GridInput } from '@/lib/domain/studies/input';
 import { statedSpacing } from '@/lib/domain/studies/stated-spacing';
+import { takesFiles } from '@/lib/domain/studies/takes-files';
 
 const withField = caseDefinitionSchema.parse({ fields: [{ field: 'u', norms: [{ norm: 'L2' }] }], quantities: [{ name: 'drag' }] });
 const withoutField = caseDefinitionSchema.parse({ quantities: [{ name: 'drag' }] });
-const around = { definition: withField, refinement: 'space', dimension: 2, volume: null } as const;
+const around = { definition: withField, refinement: 'space', dimension: 2, volume: null, canHaveFile: true } as const;
 const paths = (grids: GridInput[], more: object = {}) => checkSeries(grids, { ...around, ...more }).map(({ path }) => path);
 
 describe('checkSeries', () => {
   it('lets a grid without a spacing wait for the weights of its file, unless no file can come', () => {
     expect(paths([{ label: 'a' }])).toEqual([]);
     expect(paths([{ label: 'a', errors: { u: { L2: 1 } } }])).toEqual(['grids.0.h']);
-    expect(paths([{ label: 'a', values: { drag: 1 } }], { definition: withoutField })).toEqual(['grids.0.h']);
+    expect(paths([{ label: 'a', values: { drag: 1 } }], { definition: withoutField, canHaveFile: false })).toEqual(['grids.0.h']);
   });
 
   it('wants a time step of every grid of a study refined in time', () => {
@@ -28,6 +29,14 @@ describe('checkSeries', () => {
   it('finds lengths beside bare counts, and a finer grid with fewer cells', () => {
     expect(paths([{ label: 'a', h: 0.1 }, { label: 'b', cells: 400 }])).toEqual(['grids.1']);
     expect(paths([{ label: 'a', h: 0.1, cells: 10 }, { label: 'b', h: 0.2, cells: 100 }])).toEqual(['grids.0']);
+  });
+});
+
+describe('takesFiles', () => {
+  it('wants a field, and an exact solution to compare it with', () => {
+    expect(takesFiles(withField, { exact: { u: 'x' } })).toBe(true);
+    expect(takesFiles(withField, {})).toBe(false);
+    expect(takesFiles(withoutField, { exact: { u: 'x' } })).toBe(false);
   });
 });
 

@@ -9,6 +9,7 @@ import { Button } from '@/app/_components/ui/button';
 import { DateTime } from '@/app/_components/ui/date-time';
 import { matchFiles } from '@/lib/domain/uploads/match-files';
 import type { Grid, Study } from '@/lib/domain/studies/schema';
+import { takesFiles } from '@/lib/domain/studies/takes-files';
 import { AddGrid } from './add-grid';
 import { FilesToPlace, type PlacedFile } from './files-to-place';
 import { UploadRow } from './upload-row';
@@ -33,7 +34,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
   const input = useRef<HTMLInputElement>(null);
   const chosenGrid = useRef<string | null>(null);
   const mayChange = may('work.write');
-  const comparesFiles = study.definition.fields.length > 0;
+  const comparesFiles = takesFiles(study.definition, study.problemDefinition);
   const grids = [...study.grids].reverse();
   const sending = [...transfers.values()].filter(({ state }) => state === 'sending').length;
 
@@ -106,7 +107,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
 export function GridsNotes({ study }: { study: Study }) {
   return (
     <div className="mt-4 flex flex-col gap-2">
-      {study.definition.fields.length > 0 && (
+      {takesFiles(study.definition, study.problemDefinition) && (
         <p>Files are tables separated by comma, semicolon, tab or space, or JSON columns; gzip or not. They go straight to storage: <b>progress counts confirmed bytes</b>, reading counts rows.</p>
       )}
       <p>

@@ -9,6 +9,7 @@ import { explainSpacing } from '@/lib/domain/assessment/explain-spacing';
 import type { Assessment } from '@/lib/domain/assessment/schema';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
 import type { Study } from '@/lib/domain/studies/schema';
+import { takesFiles } from '@/lib/domain/studies/takes-files';
 import { AfterData } from './after-data';
 import { Cautions } from './cautions';
 import { CollectingSections } from './collecting-sections';
@@ -33,7 +34,7 @@ export function StudySections({ study, readings }: StudySectionsProps) {
   const { may } = useOrganisation();
   const { assessment, definition } = study;
   const collects = study.state === 'collecting' && study.revision === study.currentRevision;
-  const comparesFiles = definition.fields.length > 0;
+  const comparesFiles = takesFiles(definition, study.problemDefinition);
   const [isTypingAsked, setIsTypingAsked] = useState(false);
   const isTyping = may('work.write') && (isTypingAsked || !comparesFiles);
   const notes = (
