@@ -36,6 +36,13 @@ export function findBoundRevision(db: Kysely<DB>, at: RevisionKey) {
       'bound.revision as case_revision', 'bound.name as case_name', 'bound.definition as case_definition',
       'problems.id as problem_id', 'problems.slug as problem_slug', 'problems.revision as problem_current_revision',
       'posed.revision as problem_revision', 'posed.name as problem_name', 'posed.definition as problem_definition',
+      // Data came under other definitions, in an earlier revision of the study.
+      sql<boolean>`exists (
+        select from study_revisions earlier
+        where earlier.organisation_id = own.organisation_id and earlier.study_id = own.study_id and earlier.revision < own.revision
+          and earlier.plan_frozen_at is not null
+          and (earlier.case_revision, earlier.problem_id, earlier.problem_revision) <> (bound.revision, bound.problem_id, posed.revision)
+      )`.as('definition_after_data'),
     ])
     .where('own.organisation_id', '=', at.organisationId)
     .where('own.study_id', '=', at.studyId)

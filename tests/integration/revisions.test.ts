@@ -3,6 +3,7 @@ import { updateProblemContract } from '@/lib/domain/problems/schema';
 import {
   addGridContract, assessStudyContract, createStudyContract, getOutcomeContract, getStudyContract, reviseStudyContract, updateGridContract, type Grid, type Study,
 } from '@/lib/domain/studies/schema';
+import { deleteUploadContract, startUploadContract } from '@/lib/domain/uploads/schema';
 import { ifMatch, ok, refused } from '@/tests/support/api';
 import { heatTable } from '@/tests/support/grids';
 import { addMember, signUp, type Person } from '@/tests/support/people';
@@ -80,6 +81,17 @@ describe('PATCH /api/v1/studies/{id}/grids/{label}', () => {
 });
 
 describe('POST /api/v1/studies/{id}/revisions', () => {
+  it('keeps the file a grid had where another one is begun and given up in the next revision', async () => {
+    const study = await make([8, 16, 32].map((n) => ({ label: `n${n}`, cellsPerDirection: n })));
+    for (const n of [8, 16, 32]) await putFile(engineer, { id: study.id, label: `n${n}` }, heatTable(n));
+    await awaitOutcome(engineer, study.id);
+    const second = await ok(engineer, reviseStudyContract, { params: { id: study.id } });
+    const { upload } = await ok(engineer, startUploadContract, { params: { id: study.id, label: 'n32' }, body: { filename: 'again.csv', bytes: 100 } });
+    await ok(engineer, deleteUploadContract, { params: { id: upload } });
+    expect(gridOf(await read(study.id), 'n32').upload?.id).toBe(gridOf(second, 'n32').upload?.id);
+    expect(await awaitOutcome(engineer, study.id)).toMatchObject({ revision: 2 });
+  });
+
   it('carries grids, files and results over, and one grid more changes the outcome', async () => {
     const study = await make([8, 16, 32].map((n) => ({ label: `n${n}`, cellsPerDirection: n })));
     for (const n of [8, 16, 32]) await putFile(engineer, { id: study.id, label: `n${n}` }, heatTable(n));
@@ -88,7 +100,7 @@ describe('POST /api/v1/studies/{id}/revisions', () => {
     expect(first.assessment?.fields[0]?.reasons).toEqual(['too-few-grids']);
 
     const second = await ok(engineer, reviseStudyContract, { params: { id: study.id } });
-    expect(second).toMatchObject({ state: 'collecting', revision: 2, currentRevision: 2, assessment: null });
+    expect(second).toMatchObject({ state: 'collecting', revision: 2, currentRevision: 2, assessment: null, definitionAfterData: false });
     expect(second.grids.map(({ label, state, upload }) => [label, state, upload?.sha256])).toEqual(
       first.grids.map(({ label, upload }) => [label, 'read', upload?.sha256]),
     );
@@ -104,9 +116,9 @@ describe('POST /api/v1/studies/{id}/revisions', () => {
     expect((await awaitOutcome(engineer, study.id)).outcome).toBe('pass');
     await ok(engineer, updateProblemContract, { params: { problem: work.problem.slug }, body: { exact: { T: 'sin(pi*x)*sin(pi*y) + k*x + 1' } }, ...ifMatch(1) });
     const second = await ok(engineer, reviseStudyContract, { params: { id: study.id } });
-    expect(second.problem).toMatchObject({ revision: 2 });
+    expect(second).toMatchObject({ problem: { revision: 2 }, definitionAfterData: true });
     expect(await awaitOutcome(engineer, study.id)).toMatchObject({ revision: 2, outcome: 'fail' });
-    expect((await read(study.id, 1)).problem).toMatchObject({ revision: 1, currentRevision: 2 });
+    expect(await read(study.id, 1)).toMatchObject({ problem: { revision: 1, currentRevision: 2 }, definitionAfterData: false });
   });
 
   it('is the way on where grids cannot be put in a row: the assessment fails in words', async () => {

@@ -40,6 +40,7 @@ export const studySchema = z.strictObject({
   state: studyStateSchema, stateSince: timestampSchema,
   revision: z.number().int(), currentRevision: z.number().int(),
   planFrozenAt: timestampSchema.nullable(),
+  definitionAfterData: z.boolean().meta({ description: 'The case or its problem was changed after the first data, and this revision is bound to the change.' }),
   definition: caseDefinitionSchema.meta({ description: 'The case as this revision of the study is bound to it.' }),
   problemDefinition: problemDefinitionSchema,
   grids: z.array(gridSchema).meta({ description: 'Finest first where spacings are known.' }),
@@ -69,7 +70,7 @@ const outcomeQuerySchema = z.strictObject({
   wait: z.coerce.number().int().min(0).max(60).default(0).meta({ description: 'Seconds to wait for an outcome.' }),
   inconclusive: z.enum(['fail', 'skip']).default('fail'),
 });
-const revisionQuerySchema = z.strictObject({ revision: z.coerce.number().int().min(1).optional() });
+const revisionQuerySchema = z.strictObject({ revision: z.coerce.number().int().min(1).max(999_999_999).optional() });
 
 const fieldResultSchema = z.strictObject({
   field: z.string(), L1: z.number(), L2: z.number(), Linf: z.number(),

@@ -36,6 +36,7 @@ export async function mapStudy(trx: Trx, { head, bound, at }: LoadedStudy): Prom
     rule: { revision: bound.rule_revision },
     refinement, dimension, state: studyStateSchema.parse(bound.state), stateSince: bound.state_since.toISOString(),
     revision: bound.revision, currentRevision: head.revision, planFrozenAt: bound.plan_frozen_at?.toISOString() ?? null,
+    definitionAfterData: bound.definition_after_data,
     definition: caseDefinitionSchema.parse(bound.case_definition), problemDefinition,
     grids: finestFirst(await listGrids(trx, at), spacing).map(mapGrid),
     assessment: (assessment?.body ?? null) as unknown as Assessment | null,

@@ -41,7 +41,9 @@ export async function updateGrid(ctx: MemberContext, key: { id: string; label: s
     const state = nextState(present, before, after);
     const isLaterPlan = study.bound.plan_frozen_at !== null && planned.some((member) => JSON.stringify(before[member]) !== JSON.stringify(after[member]));
     const isChanged = await updateGridRow(trx, ctx.organisation.id, present.id, {
-      definition: json(after), state, revision: revision + 1, after_data: present.after_data || isLaterPlan,
+      // Left alone where it stays: mapping the columns may be moving it on at this moment.
+      ...(state === present.state ? {} : { state }),
+      definition: json(after), revision: revision + 1, after_data: present.after_data || isLaterPlan,
       ...(exclude === undefined ? {} : { excluded: exclude }),
     }, { revision });
     if (!isChanged) throw staleRevision('grid', present.revision, revision);
