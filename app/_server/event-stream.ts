@@ -33,11 +33,14 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
       start(controller) {
         stream = controller;
         for (const bytes of early.splice(0)) controller.enqueue(bytes);
-        signal.addEventListener('abort', () => {
+        const leave = () => {
           if (isOver) return;
           end();
           controller.close();
-        });
+        };
+        // Gone while the listening began: no event will say so again.
+        if (signal.aborted) leave();
+        else signal.addEventListener('abort', leave);
       },
       cancel: end,
     });

@@ -1,6 +1,9 @@
+import http from 'node:http';
+import { Redis } from 'ioredis';
 import { beforeAll, describe, expect, it } from 'vitest';
 import { createStudyContract, getEventsContract, getOutcomeContract, getOutcomeXmlContract, type Study } from '@/lib/domain/studies/schema';
-import { ok, refused, send } from '@/tests/support/api';
+import { addressOf, headersOf, ok, refused, send } from '@/tests/support/api';
+import { need } from '@/tests/support/environment';
 import { listen } from '@/tests/support/event-reader';
 import { heatSizes, heatTable } from '@/tests/support/grids';
 import { makeToken, signUp, type Person } from '@/tests/support/people';
@@ -80,6 +83,30 @@ describe('GET /api/v1/studies/{id}/events', () => {
     const late = await listen(engineer, study.id);
     expect((await late.until(({ event }) => event === 'snapshot'))[0]?.data).toMatchObject({ state: 'assessed' });
     late.stop();
+  });
+
+  it('ends the listening of those who leave, also while it begins', async () => {
+    const study = await make([{ label: 'n8', cellsPerDirection: 8 }]);
+    const url = new URL(addressOf(getEventsContract, { params: { id: study.id } }, engineer), need('WEB_URL'));
+    await Promise.all(Array.from({ length: 60 }, (_, index) => new Promise<void>((resolve) => {
+      const request = http.get(url, { headers: headersOf(getEventsContract, engineer), agent: false });
+      request.on('error', () => undefined).on('close', resolve);
+      setTimeout(() => request.destroy(), index);
+    })));
+    const redis = new Redis(need('REDIS_URL'));
+    try {
+      await expect.poll(() => redis.pubsub('NUMSUB', `study-events.${study.id}`), { timeout: 10_000 }).toEqual([`study-events.${study.id}`, 0]);
+    } finally {
+      redis.disconnect();
+    }
+  });
+
+  it('hears of a study whose id is written in capitals', async () => {
+    const study = await make([{ label: 'n8', cellsPerDirection: 8 }]);
+    const events = await listen(engineer, study.id.toUpperCase());
+    await putFile(engineer, { id: study.id, label: 'n8' }, heatTable(8));
+    await events.until(({ event, data }) => event === 'state' && data.gridState === 'read');
+    events.stop();
   });
 
   it('is not there for another organisation', async () => {

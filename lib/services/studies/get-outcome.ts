@@ -11,8 +11,8 @@ import { permit } from '../permit';
 import { withOrganisation, type Trx } from '../with-organisation';
 import { requireStudy, type LoadedStudy } from './require-study';
 
-/** A look at the database costs little, and needs no queue to be there. */
-const pollMilliseconds = 400;
+/** A look at the database needs no queue to be there; the longer it takes, the seldomer it is looked. */
+const polls = { first: 300, longest: 1500, growth: 1.4 };
 
 export type OutcomeReading = { state: 'assessed'; answer: OutcomeAnswer } | { state: StudyState; answer: null };
 
@@ -49,8 +49,10 @@ export async function getOutcome(ctx: MemberContext, id: string, waitSeconds: nu
   permit(ctx, 'work.read');
   const deadline = Date.now() + waitSeconds * 1000;
   let reading = await readOutcome(ctx, id);
+  let poll = polls.first;
   while (reading.answer === null && Date.now() < deadline && !signal.aborted) {
-    await pause(Math.min(pollMilliseconds, deadline - Date.now()), undefined, { signal }).catch(() => undefined);
+    await pause(Math.min(poll, deadline - Date.now()), undefined, { signal }).catch(() => undefined);
+    poll = Math.min(poll * polls.growth, polls.longest);
     reading = await readOutcome(ctx, id);
   }
   return reading;

@@ -10,29 +10,32 @@ import { requireStudy } from './require-study';
 
 const patienceMilliseconds = 3000;
 
-async function readSnapshot(ctx: MemberContext, id: string): Promise<StudySnapshot> {
+async function readSnapshot(ctx: MemberContext, id: string): Promise<{ studyId: string; snapshot: StudySnapshot }> {
   return withOrganisation(ctx, async (trx) => {
     const { bound, at } = await requireStudy(ctx, trx, id);
     const grids = await listGrids(trx, at);
-    return {
+    const snapshot = {
       state: bound.state as StudyState, revision: bound.revision,
       grids: grids.map((row) => ({ label: row.label, state: stateOf(row), rowsRead: row.rows_read === null ? null : Number(row.rows_read) })),
     };
+    return { studyId: at.studyId, snapshot };
   });
 }
 
 /** Listens to a study first and then says how it stands, so that nothing falls between; `stop` ends the listening. */
 export async function watchStudy(ctx: MemberContext, id: string, listener: (message: string) => void): Promise<{ snapshot: StudySnapshot; stop: () => void }> {
   permit(ctx, 'work.read');
-  await readSnapshot(ctx, id);
-  const subscription = ctx.events.subscribe(id, listener);
+  // By the study's own id: the path may write it in capitals.
+  const { studyId } = await readSnapshot(ctx, id);
+  const subscription = ctx.events.subscribe(studyId, listener);
   const stop = await Promise.race([subscription, new Promise<null>((resolve) => setTimeout(resolve, patienceMilliseconds, null))]);
   if (stop === null) {
     subscription.then((late) => late(), () => undefined);
     throw new AppError('unavailable', 'Events cannot be told at the moment. Read the study again instead.');
   }
   try {
-    return { snapshot: await readSnapshot(ctx, id), stop };
+    const { snapshot } = await readSnapshot(ctx, id);
+    return { snapshot, stop };
   } catch (error) {
     stop();
     throw error;
