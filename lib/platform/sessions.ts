@@ -9,6 +9,8 @@ export interface Sessions {
   create(userId: string): Promise<string>;
   validate(sessionId: string): Promise<SessionUser | null>;
   end(sessionId: string): Promise<string>;
+  /** Ends every session of the person. */
+  endAll(userId: string): Promise<string>;
   readCookie(header: string): string | null;
 }
 
@@ -34,6 +36,10 @@ export function createSessions(pool: Pool, secure: boolean): Sessions {
     },
     async end(sessionId) {
       await lucia.invalidateSession(sessionId);
+      return lucia.createBlankSessionCookie().serialize();
+    },
+    async endAll(userId) {
+      await lucia.invalidateUserSessions(userId);
       return lucia.createBlankSessionCookie().serialize();
     },
     readCookie: (header) => lucia.readSessionCookie(header),

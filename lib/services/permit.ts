@@ -6,8 +6,9 @@ import type { MemberContext } from './context';
 export function permit(ctx: MemberContext, permission: Permission): void {
   if (ctx.roles.includes('auditor')) throw new AppError('not-found', 'There is nothing here, or not for you.');
   if (ctx.token && permission === 'tokens.manage') throw new AppError('not-allowed', 'A token cannot manage tokens. Sign in.');
-  if (ctx.token && permission === 'work.write' && !ctx.token.scopes.includes('write')) {
-    throw new AppError('not-allowed', `The token “${ctx.token.name}” may only read. Make one with the scope write.`);
+  const scope = permission === 'work.write' ? 'write' : 'read';
+  if (ctx.token && !ctx.token.scopes.includes(scope)) {
+    throw new AppError('not-allowed', `The token “${ctx.token.name}” has no scope ${scope}. Make one that has it.`);
   }
   if (!rolesCarry(ctx.roles, permission)) {
     throw new AppError('not-allowed', `This needs the role engineer. You are ${ctx.roles.join(' and ')} in ${ctx.organisation.name}.`);

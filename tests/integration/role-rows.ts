@@ -6,7 +6,7 @@ import {
   createCodeContract, createReleaseContract, getCodeContract, listCodesContract, listReleasesContract, updateReleaseContract,
 } from '@/lib/domain/codes/schema';
 import { getMatrixContract } from '@/lib/domain/matrix/schema';
-import { meContract, signInContract, signOutContract, signUpContract } from '@/lib/domain/people/schema';
+import { meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '@/lib/domain/people/schema';
 import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '@/lib/domain/problems/schema';
 import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
@@ -66,6 +66,7 @@ export const roleRows: RoleRow[] = [
   { contract: openApiContract, needs: 'nothing', sent: nothing },
   { contract: meContract, needs: 'session', sent: nothing },
   { contract: signOutContract, needs: 'session', sent: nothing },
+  { contract: signOutEverywhereContract, needs: 'session', sent: nothing },
 
   { contract: createTokenContract, needs: 'tokens', sent: () => ({ body: { name: 'matrix', scopes: ['read'] } }) },
   { contract: listTokensContract, needs: 'tokens', sent: nothing },

@@ -1,6 +1,6 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import { listCodesContract } from '@/lib/domain/codes/schema';
-import { meContract, signInContract, signOutContract } from '@/lib/domain/people/schema';
+import { meContract, signInContract, signOutContract, signOutEverywhereContract } from '@/lib/domain/people/schema';
 import { adminDatabase } from '../support/admin-database';
 import { ok, refused, send } from '../support/api';
 import { cookieOf, makeToken, newEmail, password, signUp, type Person } from '../support/people';
@@ -55,6 +55,23 @@ describe('DELETE /api/v1/session', () => {
   it('answers 401 without a session and 403 to a token', async () => {
     expect((await refused(null, signOutContract, {})).status).toBe(401);
     expect((await refused(await makeToken(person, { scopes: ['read'] }), signOutContract, {})).status).toBe(403);
+  });
+});
+
+describe('DELETE /api/v1/sessions', () => {
+  it('ends every session of the person, and nobody else’s', async () => {
+    const leaving = await signUp('Leaving Everywhere Works');
+    const second = { cookie: cookieOf(await send(null, signInContract, { body: { email: leaving.email, password } })) };
+    const response = await send(second, signOutEverywhereContract, {});
+    expect(response.status).toBe(204);
+    expect(String(response.headers['set-cookie'])).toMatch(/fourfold_session=;.*Max-Age=0/);
+    for (const ended of [leaving, second]) expect((await refused(ended, meContract, {})).status).toBe(401);
+    await ok(person, meContract, {});
+  });
+
+  it('answers 401 without a session and 403 to a token', async () => {
+    expect((await refused(null, signOutEverywhereContract, {})).status).toBe(401);
+    expect((await refused(await makeToken(person, { scopes: ['read'] }), signOutEverywhereContract, {})).status).toBe(403);
   });
 });
 

@@ -57,6 +57,13 @@ describe('POST /api/v1/tokens', () => {
     expect((await refused(token, createCodeContract, { body: { name: 'Fourth' } })).status).toBe(403);
   });
 
+  it('makes tokens that can write and not read, or read and not write', async () => {
+    const [writing, reading] = [await makeToken(person, { scopes: ['write'] }), await makeToken(person, { scopes: ['read'] })];
+    expect((await refused(writing, listCodesContract, {})).status).toBe(403);
+    await ok(writing, createCodeContract, { body: { name: 'Made by a token' } });
+    expect((await refused(reading, createCodeContract, { body: { name: 'Not made' } })).status).toBe(403);
+  });
+
   it('makes tokens that end at their time', async () => {
     const token = await makeToken(person, { scopes: ['read'] });
     const { token: shown } = await ok(token, meContract, {});

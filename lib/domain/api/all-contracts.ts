@@ -4,7 +4,7 @@ import {
   createCodeContract, createReleaseContract, getCodeContract, listCodesContract, listReleasesContract, updateReleaseContract,
 } from '../codes/schema';
 import { getMatrixContract } from '../matrix/schema';
-import { meContract, signInContract, signOutContract, signUpContract } from '../people/schema';
+import { meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '../people/schema';
 import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '../problems/schema';
 import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
@@ -19,7 +19,7 @@ import { healthContract, openApiContract, readyContract } from './service-schema
 
 /** Every call there is, in the order they are told. */
 export const allContracts: readonly ContractShape[] = [
-  signUpContract, signInContract, signOutContract, meContract,
+  signUpContract, signInContract, signOutContract, signOutEverywhereContract, meContract,
   createTokenContract, listTokensContract, deleteTokenContract,
   createCodeContract, listCodesContract, getCodeContract,
   createReleaseContract, listReleasesContract, updateReleaseContract, getMatrixContract,

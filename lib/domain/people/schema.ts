@@ -29,4 +29,7 @@ export const signInContract = contract({
   method: 'POST', path: '/session', summary: 'Sign in', access: 'public', status: 200, body: signInSchema, response: meSchema, secret: true,
 });
 export const signOutContract = contract({ method: 'DELETE', path: '/session', summary: 'Sign out', access: 'signed-in', status: 204 });
+export const signOutEverywhereContract = contract({
+  method: 'DELETE', path: '/sessions', summary: 'Sign out everywhere', access: 'signed-in', status: 204,
+});
 export const meContract = contract({ method: 'GET', path: '/me', summary: 'Who is calling', access: 'signed-in', status: 200, response: meSchema });
