@@ -1,5 +1,6 @@
 import type { FieldAssessment, QuantityAssessment } from '@/lib/numerics/assessment';
 import type { OutcomeAnswer } from '../studies/schema';
+import { explainStudy } from './explain-study';
 import { explainField, explainQuantity } from './reason-text';
 
 type Verdict = { kind: 'pass' } | { kind: 'failure' | 'skipped' | 'error'; type: string };
@@ -9,8 +10,7 @@ const escapes: Record<string, string> = { '&': '&amp;', '<': '&lt;', '>': '&gt;'
 
 /** What XML 1.0 cannot hold at all is left out. */
 function escape(text: string): string {
-  const allowed = [...text].filter((character) => character >= ' ' || character === '\n' || character === '\t').join('');
-  return allowed.replace(/[&<>"'\n\t]/g, (character) => escapes[character] ?? '');
+  return text.replace(/[^\t\n -\uD7FF\uE000-\uFFFD\u{10000}-\u{10FFFF}]/gu, '').replace(/[&<>"'\n\t]/g, (character) => escapes[character] ?? '');
 }
 
 function verdictOf({ outcome, counts }: { outcome: FieldAssessment['outcome']; counts: boolean }, inconclusive: 'fail' | 'skip'): Verdict {
@@ -21,7 +21,8 @@ function verdictOf({ outcome, counts }: { outcome: FieldAssessment['outcome']; c
   return { kind: 'failure', type: outcome };
 }
 
-function testCases({ assessment: { fields, quantities } }: OutcomeAnswer, inconclusive: 'fail' | 'skip'): TestCase[] {
+function testCases({ outcome, assessment }: OutcomeAnswer, inconclusive: 'fail' | 'skip'): TestCase[] {
+  const { fields, quantities } = assessment;
   const texts = (explanations: { sentence: string; nextStep: string }[]) => explanations.map(({ sentence, nextStep }) => `${sentence} ${nextStep}`).join(' ');
   const cases = [
     ...fields.map((field: FieldAssessment) => ({
@@ -31,8 +32,11 @@ function testCases({ assessment: { fields, quantities } }: OutcomeAnswer, inconc
       name: quantity.name, verdict: verdictOf({ ...quantity, counts: true }, inconclusive), text: texts(explainQuantity(quantity)),
     })),
   ];
-  if (cases.length > 0) return cases;
-  return [{ name: 'study', verdict: { kind: 'error', type: 'not-run' }, text: 'The case declares nothing that could be assessed.' }];
+  if (cases.length === 0) return [{ name: 'study', verdict: { kind: 'error', type: 'not-run' }, text: 'The case declares nothing that could be assessed.' }];
+  // Inconclusive since nothing counts: the parts alone would be skipped, and the pipeline green.
+  const whole = verdictOf({ outcome, counts: true }, inconclusive);
+  if (whole.kind !== 'failure' || cases.some(({ verdict }) => verdict.kind === 'failure')) return cases;
+  return [{ name: 'study', verdict: whole, text: texts(explainStudy(assessment)) }, ...cases];
 }
 
 function formatCase({ name, verdict, text }: TestCase, suite: string): string {
@@ -46,7 +50,8 @@ function formatCase({ name, verdict, text }: TestCase, suite: string): string {
 
 /**
  * The outcome as JUnit XML: a test case for every field and norm and every quantity. Fail and missed target are failures;
- * inconclusive is a failure of that type, or skipped where so asked; what does not count or is not judged is skipped.
+ * inconclusive is a failure of that type, or skipped where so asked; what does not count or is not judged is skipped. A
+ * study whose outcome no part shows has a test case of its own.
  */
 export function formatJunit(answer: OutcomeAnswer, inconclusive: 'fail' | 'skip'): string {
   const suite = `${answer.code}.${answer.release}.${answer.case}`;

@@ -37,7 +37,14 @@ describe('formatJunit', () => {
     expect(formatJunit(answerOf([]), 'fail')).toContain('errors="1"');
   });
 
+  it('fails where nothing counts, though every part passes or is skipped', () => {
+    const xml = formatJunit(answerOf([series('u', 2, { counts: false }), series('v', 2, { norm: 'L1' })]), 'fail');
+    checkWellFormed(xml);
+    expect(xml).toContain('tests="3" failures="1" errors="0" skipped="0"');
+    expect(xml).toMatch(/name="study">\s+<failure type="inconclusive" message="[^"]+"/);
+  });
+
   it('stays XML whatever a name holds', () => {
-    checkWellFormed(formatJunit({ ...answerOf([series('u', 1)]), case: 'a<b>&"c\u0007\'' }, 'fail'));
+    checkWellFormed(formatJunit({ ...answerOf([series('u', 1)]), case: 'a<b>&"c\u0007\'\ud800\uffff' }, 'fail'));
   });
 });
