@@ -1,5 +1,6 @@
 import fs from 'node:fs';
 import path from 'node:path';
+import { fileURLToPath } from 'node:url';
 import { root } from './places.mjs';
 
 /** @param {string} folder @param {RegExp} name */
@@ -31,6 +32,8 @@ export async function bundleWorker(outdir) {
     target: 'node20',
     format: 'esm',
     packages: 'external',
+    // The parser alone instead of the whole library: half the memory of a thread.
+    alias: { mathjs: fileURLToPath(import.meta.resolve('mathjs')) },
     sourcemap: true,
     logLevel: 'warning',
   });

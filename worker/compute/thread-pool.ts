@@ -4,6 +4,9 @@ import type { ReadProgress } from '@/lib/readers/source';
 import type { ThreadMessage, ThreadResult, ThreadTask } from './thread-messages';
 
 type OnProgress = (progress: ReadProgress) => void;
+/** A thread holds some fifty megabytes; starting one anew takes half a second. */
+const idleMilliseconds = 30_000;
+
 interface Waiting { task: ThreadTask; onProgress: OnProgress; resolve: (result: ThreadResult) => void; reject: (error: Error) => void }
 
 export interface ThreadPool {
@@ -18,12 +21,16 @@ function threadFile(): URL {
   return isSource ? new URL('./read-grid-thread.ts', import.meta.url) : new URL('./compute/read-grid-thread.mjs', import.meta.url);
 }
 
-/** Threads that are started when first needed and used again; tasks wait in line for the next free one. */
+/**
+ * Threads that are started when first needed and used again; tasks wait in line for the next free one. What nothing
+ * needed for a while ends, and gives its memory back.
+ */
 export function createThreadPool(size: number): ThreadPool {
   const idle: Worker[] = [];
   const all = new Set<Worker>();
   const queue: Waiting[] = [];
   let isClosed = false;
+  const retirement = setTimeout(() => idle.splice(0).forEach((thread) => void thread.terminate()), idleMilliseconds).unref();
 
   function next(): void {
     const waiting = queue[0];
@@ -54,6 +61,7 @@ export function createThreadPool(size: number): ThreadPool {
       thread.off('error', onError);
       thread.off('exit', onExit);
       if (isAlive) idle.push(thread);
+      retirement.refresh();
       settle();
       next();
     };
