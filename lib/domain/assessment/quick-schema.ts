@@ -3,6 +3,7 @@ import { contract } from '../api/contract';
 import { labelSchema } from '../api/names';
 import { cellsPerDirectionSchema, normNameSchema } from '../cases/definition';
 import { dimensionSchema } from '../problems/schema';
+import { measuredSchema } from '../studies/input';
 import { assessmentSchema } from './schema';
 
 const positive = z.number().positive();
@@ -14,14 +15,14 @@ export const quickCheckSchema = z.strictObject({
   dimension: dimensionSchema.default(1),
   grids: z.array(z.strictObject({
     label: labelSchema.optional(), h: positive.optional(), cells: positive.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
-    value: z.number().optional(), resolution: positive.optional(), errors: perNorm.optional(), iterativeError: perNorm.optional(),
+    value: measuredSchema.optional(), resolution: positive.optional(), errors: perNorm.optional(), iterativeError: perNorm.optional(),
   })).min(2).max(50),
   formalOrder: z.union([orders, z.partialRecord(normNameSchema, orders)]).optional(),
   tolerance: z.union([tolerances, z.partialRecord(normNameSchema, tolerances)]).optional(),
   minimumGrids: z.number().int().min(3).max(20).optional(),
   procedure: z.enum(['three-grid', 'guarded-order', 'least-squares', 'correction-factor']).optional(),
   expectExact: z.boolean().optional(), exactLimit: positive.optional(), reference: positive.optional(), derivedOrder: orders.optional(),
-  knownValue: z.number().optional(), target: positive.optional(),
+  knownValue: measuredSchema.optional(), target: positive.optional(),
 }).meta({ description: 'One quantity (every grid has a value) or one field (every grid has errors).' });
 export type QuickCheckInput = z.infer<typeof quickCheckSchema>;
 

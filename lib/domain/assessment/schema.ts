@@ -37,7 +37,10 @@ export const assessmentSchema = z.strictObject({
   outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
   fields: z.array(fieldAssessmentSchema), quantities: z.array(quantityAssessmentSchema),
   patterns: z.array(z.strictObject({ code: z.string() })).meta({ description: 'Hints, never an outcome; empty until pattern hints are available.' }),
-  inputs: z.array(z.strictObject({ label: z.string(), sha256: z.string(), bytes: z.number(), rows: z.number() })),
+  inputs: z.array(z.strictObject({
+    label: z.string(), sha256: z.string(), bytes: z.number(), rows: z.number(),
+    weightSum: nullableNumber.meta({ description: 'Null where every row weighs the same.' }),
+  })),
   inputsSha256: z.string(), numericsVersion: z.string(),
 });
 export type Assessment = z.infer<typeof assessmentSchema>;

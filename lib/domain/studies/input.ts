@@ -4,6 +4,8 @@ import { cellsPerDirectionSchema, normNameSchema } from '../cases/definition';
 import { dimensionSchema } from '../problems/schema';
 
 const positive = z.number().positive();
+/** No quantity is larger; differences and fractions of such values stay within a double. */
+export const measuredSchema = z.number().min(-1e100).max(1e100);
 const perNorm = z.partialRecord(normNameSchema, z.number().nonnegative());
 
 /** How a run was made: what an auditor needs to make it again. */
@@ -18,7 +20,7 @@ export const gridInputSchema = z.strictObject({
   label: labelSchema,
   cells: z.number().int().positive().max(1e15).optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
   h: positive.optional(), dt: positive.optional(), t: z.number().optional(),
-  values: z.record(z.string().min(1), z.union([z.number(), z.strictObject({ value: z.number(), resolution: positive.optional() })])).optional(),
+  values: z.record(z.string().min(1), z.union([measuredSchema, z.strictObject({ value: measuredSchema, resolution: positive.optional() })])).optional(),
   errors: z.record(z.string().min(1), perNorm).optional(),
   iterativeError: z.record(z.string().min(1), perNorm).optional(),
   run: runRecordSchema.optional(),

@@ -1,7 +1,6 @@
 import { checkSeriesSpacing } from './check-series-spacing';
 import { gridSpacing } from './grid-spacing';
-import type { KnownSpacing, ResolvedSpacing, SpacingNote, SpacingProblem, StatedSpacing } from './spacing-types';
-import { noteSpacing } from './note-spacing';
+import type { KnownSpacing, ResolvedSpacing, SpacingProblem, StatedSpacing } from './spacing-types';
 
 interface SpacingRequest {
   grids: readonly StatedSpacing[];
@@ -12,7 +11,7 @@ interface SpacingRequest {
 }
 
 type SpacingResult =
-  | { ok: true; grids: ResolvedSpacing[]; notes: SpacingNote[] }
+  | { ok: true; grids: ResolvedSpacing[] }
   | { ok: false; problems: SpacingProblem[] };
 
 /**
@@ -20,7 +19,7 @@ type SpacingResult =
  *
  * In this order: h as stated; cells as (V/N)^(1/D); cells per direction n as V^(1/D)/n; the mean weight of the rows as
  * (Σw/rows)^(1/D). Refined in time, h is the time step. V is 1 where unknown: only ratios matter, so scaling every h
- * changes no order. A count of rows that differs from the cells stated is a note, since nodes outnumber cells.
+ * changes no order. A count of rows that differs from the cells stated is no problem but a note (noteSpacing).
  * Returns problems instead of spacings where something is missing, not positive or contradicts itself.
  */
 export function resolveSpacing(request: SpacingRequest): SpacingResult {
@@ -37,7 +36,7 @@ export function resolveSpacing(request: SpacingRequest): SpacingResult {
   resolved.sort((left, right) => left.h - right.h || left.index - right.index);
   const contradictions = checkSeriesSpacing(resolved, grids, volume !== null);
   if (contradictions.length > 0) return { ok: false, problems: contradictions };
-  return { ok: true, grids: resolved, notes: refinement === 'space' ? noteSpacing(grids) : [] };
+  return { ok: true, grids: resolved };
 }
 
 function dropNulls({ label, h, cells, cellsPerDirection, weightSum, rows, dt }: StatedSpacing): KnownSpacing {

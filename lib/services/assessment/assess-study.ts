@@ -50,7 +50,7 @@ function compute(loaded: LoadedInputs): Computed {
     if (!series.ok) return series;
     const inputs = used.flatMap((row) => {
       const norms = normsOf(row);
-      return norms ? [{ label: row.label, sha256: row.sha256 ?? '', bytes: Number(row.bytes ?? 0), rows: norms.rows }] : [];
+      return norms ? [{ label: row.label, sha256: row.sha256 ?? '', bytes: Number(row.bytes ?? 0), rows: norms.rows, weightSum: norms.equalWeights ? null : norms.weightSum }] : [];
     });
     return { ok: true, assessment: { ...assessSeries(series), patterns: [], inputs, inputsSha256: inputsSha256(loaded) } };
   } catch (error) {

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { cellCount, gridSize } from '@/app/(organisation)/[org]/studies/[id]/_components/grid-size';
+import { cellCount } from '@/lib/domain/studies/cell-count';
+import { gridSize } from '@/app/(organisation)/[org]/studies/[id]/_components/grid-size';
 
 describe('the size of a grid', () => {
   it('is printed as it was stated', () => {
@@ -13,6 +14,6 @@ describe('the size of a grid', () => {
   it('counts cells in all directions', () => {
     expect(cellCount({ cellsPerDirection: 8 }, 3)).toBe(512);
     expect(cellCount({ cellsPerDirection: [16, 8] }, 2)).toBe(128);
-    expect(cellCount({ h: 0.1 }, 2)).toBeNull();
+    expect(cellCount({}, 2)).toBeNull();
   });
 });

@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { noteSpacing } from '@/lib/numerics/spacing/note-spacing';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
 
 function spacings(request: Parameters<typeof resolveSpacing>[0]) {
@@ -54,13 +55,12 @@ describe('resolveSpacing', () => {
     expect(spacings({ grids: [{ label: 'a', cells: 16 }, { label: 'b', cells: 16 }], dimension: 2 })).toEqual([{ code: 'same-spacing', label: 'b' }]);
     expect(spacings({ grids: [{ label: 'a', h: 0.1, cells: 16 }, { label: 'b', h: 0.2, cells: 64 }], dimension: 2 })).toEqual([{ code: 'order-contradicts', label: 'a' }]);
   });
+});
 
+describe('noteSpacing(grids)', () => {
   it('notes rows that are not the cells, and sums of weights that differ by more than 1e-6', () => {
-    const result = resolveSpacing({
-      grids: [{ label: 'a', cells: 64, rows: 81, weightSum: 1 }, { label: 'b', cells: 16, rows: 16, weightSum: 1.00001 }, { label: 'c', cells: 4, weightSum: 1 + 1e-7 }],
-      dimension: 2,
-    });
-    expect(result.ok && result.notes).toEqual([
+    const grids = [{ label: 'a', cells: 64, rows: 81, weightSum: 1 }, { label: 'b', cells: 16, rows: 16, weightSum: 1.00001 }, { label: 'c', cells: 4, weightSum: 1 + 1e-7 }];
+    expect(noteSpacing(grids)).toEqual([
       { code: 'rows-differ-from-cells', label: 'a', found: 81, expected: 64 },
       { code: 'weights-differ', label: 'b', found: 1.00001, expected: 1 },
     ]);
