@@ -9,11 +9,10 @@ import { ButtonLink } from '@/app/_components/ui/button-link';
 import { EmptyState } from '@/app/_components/ui/empty-state';
 import { PageTitle } from '@/app/_components/ui/page-title';
 import { Section } from '@/app/_components/ui/section';
-import { listStudiesContract, type StudyState } from '@/lib/domain/studies/schema';
+import { listStudiesContract } from '@/lib/domain/studies/schema';
+import type { StudiesQuery } from './studies-query';
 import { StudyFilters } from './study-filters';
 import { StudyTable } from './study-table';
-
-export interface StudiesQuery { limit: number; cursor?: string; case?: string; release?: string; state?: StudyState }
 
 /** All studies of the organisation, newest first; what is filtered stands in the address. */
 export function StudiesView({ query }: { query: StudiesQuery }) {

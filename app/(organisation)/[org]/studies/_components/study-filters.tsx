@@ -8,7 +8,7 @@ import { useOrganisation } from '@/app/_components/organisation/organisation-con
 import { Button } from '@/app/_components/ui/button';
 import { listCasesContract } from '@/lib/domain/cases/schema';
 import { studyStateSchema } from '@/lib/domain/studies/schema';
-import type { StudiesQuery } from './studies-view';
+import type { StudiesQuery } from './studies-query';
 
 /** States there can be before studies are reviewed and signed. */
 const choosable = studyStateSchema.exclude(['in-review', 'signed', 'superseded', 'withdrawn']).options;
