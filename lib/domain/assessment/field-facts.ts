@@ -1,7 +1,7 @@
 import type { FieldAssessment, FieldGrid, PairOrder } from '@/lib/numerics/assessment';
 import { formatError } from '../numbers/format-error';
-import { formatMeasure } from '../numbers/format-measure';
 import { formatOrder } from '../numbers/format-order';
+import { formatValue } from '../numbers/format-value';
 import { capitalise, nameErrors } from './series-name';
 
 /** The figures of a field and norm as its sentences quote them. */
@@ -55,5 +55,5 @@ export const shownUncertainty = 0.005;
 function printOrder({ order, uncertainty }: PairOrder, limits: readonly number[]): string {
   if (order === null) return '–';
   const printed = formatOrder(order, limits);
-  return uncertainty !== null && uncertainty >= shownUncertainty ? `${printed} ± ${formatMeasure(uncertainty)}` : printed;
+  return uncertainty !== null && uncertainty >= shownUncertainty ? `${printed} ± ${formatValue(uncertainty, uncertainty)}` : printed;
 }

@@ -1,7 +1,7 @@
 import { aitkenLimit } from '@/lib/numerics/outcome/aitken-limit';
 import type { FieldAssessment, FieldGrid, ReasonCode } from '@/lib/numerics/assessment';
-import { formatMeasure } from '../numbers/format-measure';
 import { formatOrder } from '../numbers/format-order';
+import { formatValue } from '../numbers/format-value';
 import type { Explanation } from './explanation';
 import { explainTooFewGrids } from './explain-too-few-grids';
 import { shownUncertainty, type FieldFacts } from './field-facts';
@@ -101,7 +101,7 @@ function isClosing(formal: string, orders: readonly number[]): boolean {
 
 /** An uncertainty too small to stand beside the order, but large enough to leave the question open. */
 function unseen(uncertainty: number | null | undefined): string {
-  return uncertainty && uncertainty < shownUncertainty ? ` ± ${formatMeasure(uncertainty)}` : '';
+  return uncertainty && uncertainty < shownUncertainty ? ` ± ${formatValue(uncertainty, uncertainty)}` : '';
 }
 
 function printLimit(orders: readonly number[]): string {

@@ -55,7 +55,7 @@ describe('explainField(field)', () => {
     expect(explainField({ ...uncertain, reasons: ['one-pair-only'] })[0]?.sentence).toBe('Of the last two pairs only the finest lies surely in the band of 1.90 to 2.20: order 2.00, after 2.00 ± 0.046. Two consecutive pairs are needed.');
     const barely = judgeErrorSeries(errorSeries([1, 0.5, 0.25, 0.125], [0, 1, 2, 3].map((i) => 2 ** (-1.9 * i)), { knownErrors: [0, 0, 0, 1e-5] }));
     expect(barely.reasons).toEqual(['within-uncertainty']);
-    expect(explainField(barely)[0]?.sentence).toBe('The finest pair shows order 1.900 ± 7.5\u00A0×\u00A010⁻⁴, too uncertain for the band of 1.90 to 2.20.');
+    expect(explainField(barely)[0]?.sentence).toBe('The finest pair shows order 1.900 ± 0.00075, too uncertain for the band of 1.90 to 2.20.');
   });
   it('tells a gap that closes too slowly from one that does not close, and errors that do not fall', () => {
     const orders = (...seen: number[]) => judgeErrorSeries(errorSeries(h, [0, ...seen].map((_, i) => 2 ** -seen.slice(0, i).reduce((sum, p) => sum + p, 0))));
