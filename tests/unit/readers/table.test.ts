@@ -106,6 +106,12 @@ describe('a damaged text table', () => {
     ]);
   });
 
+  it('names every column with something wrong, however many', async () => {
+    const names = Array.from({ length: 60 }, (_, i) => `f${i}`);
+    const reasons = await readReasons(`${names.join(',')}\n${names.map(() => 'nan').join(',')}\n`, names);
+    expect(reasons.map(({ column }) => column)).toEqual(names.map((_, i) => i + 1));
+  });
+
   it('is not rejected for a column that nobody asked for', async () => {
     expect(await readReasons('x,name\n0,cell\n1,\n', ['x'])).toEqual([]);
   });
