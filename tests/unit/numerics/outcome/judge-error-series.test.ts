@@ -29,6 +29,11 @@ describe('judgeErrorSeries(series)', () => {
     expect(judgeErrorSeries(errorSeries(halvings, [0, 0, 0, 0], { formalOrder: null, expectExact: true }))).toMatchObject({ outcome: 'pass', reasons: ['exact'] });
   });
 
+  it('takes scale 1 for a field that is zero everywhere, as the cross flow of a free stream', () => {
+    const noise = [2e-17, 3e-17, 1e-17, 4e-17];
+    expect(judgeErrorSeries(errorSeries(halvings, noise, { expectExact: true, scale: 0 })).reasons).toEqual(['exact']);
+  });
+
   it('takes an exact limit stated for exactness, and the scale of the field for round-off', () => {
     const errors = [1e-9, 2e-9, 1e-9, 3e-9];
     expect(judgeErrorSeries(errorSeries(halvings, errors, { expectExact: true })).reasons).toEqual(['not-exact']);
