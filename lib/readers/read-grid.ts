@@ -9,6 +9,7 @@ import { readColumns } from './read-columns';
 import { createReasonCollector } from './reason-collector';
 import { createRowProblems } from './row-problems';
 import type { ByteSource, ColumnBatch, ReadProgress } from './source';
+import { createTimeCheck } from './time-check';
 
 export interface GridReadResult {
   norms: GridNorms;
@@ -32,6 +33,7 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   const fields = reading.fields.map(({ field }) => field);
   const gatherer = createNormGatherer(fields);
   const rowProblems = createRowProblems();
+  const timeCheck = createTimeCheck(reading.t);
   const reasons = createReasonCollector();
   const hash = createHash('sha256');
   let bytes = 0;
@@ -49,8 +51,10 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
     const x = columns[plan.x] as Float64Array;
     const y = pick(plan.y);
     const z = pick(plan.z);
-    const exact = evaluate(rows, { x, y: y ?? undefined, z: z ?? undefined, t: pick(plan.t) ?? reading.t });
+    const t = pick(plan.t);
+    const exact = evaluate(rows, { x, y: y ?? undefined, z: z ?? undefined, t: t ?? reading.t });
     const before = gatherer.rows();
+    timeCheck.note(t, { rows, before, lines });
     gatherer.add({
       rows, x, y, z, weights: pick(plan.weight),
       fields: plan.fields.map((slot, at) => ({ values: columns[slot] as Float64Array, exact: exact[at] as Float64Array })),
@@ -61,6 +65,8 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   const read = await readColumns(hashed(), { columns: plan.names, onBatch, reasons, ...options });
   const indices = read.columns.map(({ index }) => index);
   for (const problem of gatherer.problems()) reasons.add(rowProblems.explain(problem, plan, fields, indices), problem.count);
+  const otherTime = timeCheck.problem(plan.t === null ? undefined : indices[plan.t]);
+  if (otherTime) reasons.add(otherTime.found, otherTime.count);
   reasons.throwIfAny();
   const norms = gatherer.finish(plan.fields.map((slot) => read.columns[slot]?.significantDigits ?? null));
   if (norms === null) throw new Error('readGrid: rows without a problem have no norms');

@@ -3,6 +3,7 @@ import { createCodeContract, getCodeContract, listCodesContract, updateReleaseCo
 import { createProblemContract, getProblemContract } from '@/lib/domain/problems/schema';
 import { createStudyContract, getStudyContract, listStudiesContract } from '@/lib/domain/studies/schema';
 import { ifMatch, ok, refused } from '@/tests/support/api';
+import { need } from '@/tests/support/environment';
 import { signUp, type Person } from '@/tests/support/people';
 import { makeWork, type Work } from '@/tests/support/work';
 
@@ -25,6 +26,13 @@ describe('requests that no database could take', () => {
   it('refuses a NUL in the path and in the query', async () => {
     expect((await refused(person, getCodeContract, { params: { code: 'a\0' } })).status).toBe(400);
     expect((await refused(person, listStudiesContract, { query: { case: 'a\0' } })).status).toBe(400);
+  });
+
+  it('refuses an address that cannot be decoded', async () => {
+    for (const address of ['/api/v1/codes/%ff', '/api/v1/codes/%E0%A4%A', '/%ff']) {
+      const response = await fetch(`${need('WEB_URL')}${address}`);
+      expect([response.status, response.headers.get('content-type')]).toEqual([400, 'application/problem+json']);
+    }
   });
 
   it('refuses revisions beyond any that could be', async () => {

@@ -63,6 +63,8 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`${place}: found “${found}”; expected ${expected}. With both marks in one file a number can be read in two ways.`, 'Write all numbers with one decimal mark.');
     case 'weight-not-positive':
       return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights.');
+    case 'time-differs':
+      return text(`${place}: the time is ${found}; expected ${expected}.`, 'Correct the time of the grid, or upload the file that was written at it.');
     case 'exact-not-finite':
       return text(`${place}: the exact solution is ${found}; expected ${expected}.`, 'Check the expression of the problem, its constants and the time of the grid.');
   }

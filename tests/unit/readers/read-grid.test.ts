@@ -45,6 +45,16 @@ describe('readGrid(source, reading)', () => {
     expect(norms.fields[0]?.Linf).toBe(0);
   });
 
+  it('rejects a column of another time than the grid states, but for what printing lost', async () => {
+    const timed = { mapping: { ...reading.mapping, t: 't' }, problem: { ...reading.problem, exact: { u: 'a*x+t' } } };
+    expect(await reasonsOf('x,w,t,u\n0,1,0.3333333,0.3\n1,1,0.3333333,2.3\n', { ...timed, t: 1 / 3 })).toEqual([]);
+    expect(await reasonsOf('x,w,t,u\n0,1,0.7,0.7\n1,1,0.5,2.5\n2,1,0.5,4.5\n', { ...timed, t: 0.7 })).toEqual([
+      { code: 'time-differs', count: 2, line: 3, column: 3, found: '0.5', expected: '0.7, the time stated for the grid' },
+    ]);
+    expect(await reasonsOf('{"x":[0,1],"w":[1,1],"t":[0,1e-6],"u":[0,2]}', { ...timed, t: 0 }))
+      .toMatchObject([{ code: 'time-differs', count: 1, line: null, column: 3, found: '0.000001 in row 2' }]);
+  });
+
   it('takes the time of the grid, or of a column', async () => {
     const problem = { ...reading.problem, exact: { u: 'a*x+t' } };
     const byGrid = await readGrid(byteSource('x,w,u\n0,1,5\n1,1,7\n'), { ...reading, problem, t: 5 });
