@@ -41,6 +41,7 @@ export async function readJson(request: Request): Promise<{ text: string; value:
     return { text, value: JSON.parse(text, storable) as unknown };
   } catch (cause) {
     if (cause instanceof AppError) throw cause;
+    if (cause instanceof RangeError) throw new AppError('bad-request', 'The body is nested deeper than anything that could be meant.', { cause });
     throw new AppError('bad-request', `The body is not JSON: ${cause instanceof Error ? cause.message : 'unreadable'}.`, { cause });
   }
 }
