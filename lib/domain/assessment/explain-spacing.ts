@@ -20,7 +20,7 @@ export function explainSpacing(grids: readonly Stated[], inputs: Assessment['inp
     const grid = grids.find((each) => each.label === label);
     return { label, cells: (grid && cellCount(grid, dimension)) ?? undefined, rows, weightSum: weightSum ?? undefined };
   }));
-  const first = inputs.find(({ weightSum }) => weightSum !== null);
+  const first = inputs.find(({ weightSum }) => typeof weightSum === 'number');
   const rows = notes.filter(({ code }) => code === 'rows-differ-from-cells');
   const weights = notes.filter(({ code }) => code === 'weights-differ');
   return [

@@ -39,7 +39,7 @@ export const assessmentSchema = z.strictObject({
   patterns: z.array(z.strictObject({ code: z.string() })).meta({ description: 'Hints, never an outcome; empty until pattern hints are available.' }),
   inputs: z.array(z.strictObject({
     label: z.string(), sha256: z.string(), bytes: z.number(), rows: z.number(),
-    weightSum: nullableNumber.meta({ description: 'Null where every row weighs the same.' }),
+    weightSum: nullableNumber.optional().meta({ description: 'Null where every row weighs the same; absent from assessments made before it was kept.' }),
   })),
   inputsSha256: z.string(), numericsVersion: z.string(),
 });

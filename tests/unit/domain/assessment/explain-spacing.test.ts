@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { explainSpacing } from '@/lib/domain/assessment/explain-spacing';
+import { assessmentSchema } from '@/lib/domain/assessment/schema';
 
 const input = (label: string, rows: number, weightSum: number | null = 1) => ({ label, sha256: '', bytes: 1, rows, weightSum });
 
@@ -8,6 +9,11 @@ describe('explainSpacing(grids, inputs, dimension)', () => {
     const grids = [{ label: 'n8', cellsPerDirection: 8 }, { label: 'n16', cells: 256 }, { label: 'n32' }];
     expect(explainSpacing(grids, [input('n8', 64), input('n16', 256, 1 + 1e-7), input('n32', 1089)], 2)).toEqual([]);
     expect(explainSpacing([{ label: 'a', cellsPerDirection: [4, 2] }], [input('a', 8, null)], 2)).toEqual([]);
+  });
+  it('takes assessments made before the sum of weights was kept', () => {
+    const { weightSum: _later, ...before } = input('n8', 64);
+    expect(assessmentSchema.shape.inputs.parse([before])).toEqual([before]);
+    expect(explainSpacing([], [before, input('n16', 256), input('n32', 1024, 2)], 2)).toEqual([expect.stringContaining('those of n16')]);
   });
   it('names rows that are not the cells stated', () => {
     const grids = [{ label: 'n8', cellsPerDirection: 8 }, { label: 'n16', cells: 256 }];
