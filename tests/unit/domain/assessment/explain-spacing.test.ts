@@ -11,7 +11,7 @@ describe('explainSpacing(grids, inputs, dimension)', () => {
     expect(explainSpacing([{ label: 'a', cellsPerDirection: [4, 2] }], [input('a', 8, null)], 2)).toEqual([]);
   });
   it('takes assessments made before the sum of weights was kept', () => {
-    const { weightSum: _later, ...before } = input('n8', 64);
+    const before = { label: 'n8', sha256: '', bytes: 1, rows: 64 };
     expect(assessmentSchema.shape.inputs.parse([before])).toEqual([before]);
     expect(explainSpacing([], [before, input('n16', 256), input('n32', 1024, 2)], 2)).toEqual([expect.stringContaining('those of n16')]);
   });
