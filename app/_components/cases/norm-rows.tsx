@@ -21,7 +21,7 @@ export function NormRows({ form, place, isExactness, onRemove }: NormRowsProps) 
   const field = form.watch(`fields.${place}`);
   const faults = errors.fields?.[place];
   const typed = isExactness ? (['exactLimit'] as const) : (['formalOrder', 'derivedOrder', 'tolerance'] as const);
-  const placeholders = { formalOrder: '', derivedOrder: '', tolerance: 'rule', exactLimit: 'round-off' };
+  const placeholders = { formalOrder: 'order', derivedOrder: 'none', tolerance: 'rule', exactLimit: 'round-off' };
   return (
     <fieldset className="flex flex-col gap-3">
       <legend className="sr-only">Field {field.field}</legend>

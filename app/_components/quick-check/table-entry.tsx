@@ -57,7 +57,7 @@ export function TableEntry({ columns, rows, labels, faults, onChange, onPasted }
             <Row key={row}>
               <RowHead className="align-middle text-graphite">{labels[row]}</RowHead>
               {columns.map((column, index) => (
-                <Cell key={column} className="border-l border-hairline p-0 pr-0">
+                <Cell key={column} className="p-0 pr-0">
                   <TableInput
                     label={`${column}, row ${row + 1}`} value={cells[index] ?? ''} placeholder={row === rows.length - 1 ? placeholders[column] : undefined} data-place={`${row} ${index}`}
                     isFaulty={faults.some((fault) => fault.row === row && fault.column === index)}

@@ -27,10 +27,17 @@ export function StudyProgress({ study, readings }: StudyProgressProps) {
   const now = reading && (readings.get(reading.label) ?? { rowsRead: reading.upload?.rowsRead ?? 0, share: null });
   return (
     <Statement lead={<WhatIsNeeded taking={taking} />}>
-      {done.length} of {taking.length} grids {done.length === 1 ? 'is' : 'are'} there.
+      {headline(taking, done.length)}
       {reading && now && now.rowsRead > 0 && <span aria-live="polite"> Reading grid {reading.label}, {formatCount(now.rowsRead)} rows.</span>}
     </Statement>
   );
+}
+
+function headline(taking: readonly Grid[], done: number): string {
+  const unmapped = taking.filter((grid) => grid.state === 'needs-columns').length;
+  if (unmapped > 0) return unmapped === 1 ? 'A file waits for its columns.' : `${formatCount(unmapped)} files wait for their columns.`;
+  if (done === 0) return taking.length === 1 ? 'The one grid is not there yet.' : `None of the ${formatCount(taking.length)} grids is there yet.`;
+  return `${formatCount(done)} of ${formatCount(taking.length)} grids ${done === 1 ? 'is' : 'are'} there.`;
 }
 
 function WhatIsNeeded({ taking }: { taking: readonly Grid[] }) {

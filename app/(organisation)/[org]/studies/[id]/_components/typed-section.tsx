@@ -94,7 +94,7 @@ function TypedTable({ study, columns }: { study: Study; columns: readonly TypedC
             <Row key={grid.label}>
               <RowHead className="align-middle whitespace-nowrap">{grid.label} <span className="text-graphite">{gridSize(grid, study.dimension)}</span></RowHead>
               {columns.map((column, index) => (
-                <Cell key={nameOf(column)} className="min-w-28 border-l border-hairline p-0 pr-0">
+                <Cell key={nameOf(column)} className="min-w-28 p-0 pr-0">
                   <TableInput
                     label={`${nameOf(column)}, grid ${grid.label}`} value={rows[row]?.[index] ?? ''} data-place={`${row} ${index}`}
                     isFaulty={fault?.row === row && fault.column === index}
