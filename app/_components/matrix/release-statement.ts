@@ -1,24 +1,20 @@
+import { joinWords } from '@/lib/domain/assessment/series-name';
 import type { Matrix, Standing } from '@/lib/domain/matrix/schema';
+import { countWord } from '@/lib/domain/numbers/count-word';
 
 type Release = Matrix['releases'][number];
 
-const small = ['no', 'one', 'two', 'three', 'four', 'five', 'six', 'seven', 'eight', 'nine', 'ten', 'eleven', 'twelve'];
-const count = (number: number) => small[number] ?? String(number);
-const verb = (number: number, one: string, many: string) => `${count(number)} ${number === 1 ? one : many}`;
+const verb = (number: number, one: string, many: string) => `${countWord(number)} ${number === 1 ? one : many}`;
 
 /** Standings as a person says them of a release. */
 export const standingWords: Record<Standing, string> = {
   stands: 'stands', 'does-not-stand': 'does not stand', incomplete: 'is incomplete', withdrawn: 'is withdrawn',
 };
 
-function joined(parts: readonly string[]): string {
-  return parts.length < 2 ? parts.join('') : `${parts.slice(0, -1).join(', ')} and ${parts.at(-1)}`;
-}
-
 /** What the standing of a release rests on: "one case fails and one was not run". */
 export function standingReason({ standing, counts }: Release, cases: number): string {
   if (cases === 0) return 'it has no case yet';
-  if (standing === 'stands') return counts.passOrExact === 1 ? 'its one case passes' : `all ${count(counts.passOrExact)} cases pass`;
+  if (standing === 'stands') return counts.passOrExact === 1 ? 'its one case passes' : `all ${countWord(counts.passOrExact)} cases pass`;
   const parts = [
     counts.fail > 0 && verb(counts.fail, 'fails', 'fail'),
     counts.inconclusive > 0 && verb(counts.inconclusive, 'is inconclusive', 'are inconclusive'),
@@ -27,5 +23,5 @@ export function standingReason({ standing, counts }: Release, cases: number): st
     counts.inProgress > 0 && verb(counts.inProgress, 'is in progress', 'are in progress'),
   ].filter((part) => part !== false);
   // The first part says what is counted: "one case fails and two were not run".
-  return joined(parts).replace(/^(\S+) /, (_all, first: string) => `${first} ${first === 'one' ? 'case' : 'cases'} `);
+  return joinWords(parts).replace(/^(\S+) /, (_all, first: string) => `${first} ${first === 'one' ? 'case' : 'cases'} `);
 }
