@@ -28,7 +28,7 @@ export function WayOn({ study }: { study: Study }) {
   const canRevise = study.state === 'assessed' || study.state === 'assessment-failed';
   if (study.revision < study.currentRevision) {
     return (
-      <Section heading="Later revision">
+      <Section heading="Later revision" screenOnly>
         <p className="mb-4">This is revision {study.revision} as it was. The study is now at revision {study.currentRevision}.</p>
         <ButtonLink href={`/${slug}/studies/${study.id}`}>Read revision {study.currentRevision}</ButtonLink>
       </Section>
@@ -37,7 +37,7 @@ export function WayOn({ study }: { study: Study }) {
   if (!canRevise) return null;
   const problem = problemOf(revise.error ?? assess.error, 'Not changed');
   return (
-    <Section heading="Go on" note={<p>An assessment never changes. A new revision begins with the same grids and files; this one stays readable.</p>}>
+    <Section heading="Go on" screenOnly note={<p>An assessment never changes. A new revision begins with the same grids and files; this one stays readable.</p>}>
       {may('work.write') ? (
         <div className="flex flex-wrap gap-3">
           {study.state === 'assessment-failed' && <Button kind="primary" disabled={assess.isPending} onClick={() => assess.mutate()}>Run the assessment again</Button>}
