@@ -68,6 +68,12 @@ export function ensurePackages(name) {
   console.log(`Installing ${missing.join(', ')} …`);
   withoutStartingServices(() => {
     if (!hasPackageLists()) aptGet(['update']);
-    aptGet(install);
+    try {
+      aptGet(install);
+    } catch (error) {
+      console.log(`${error instanceof Error ? error.message : error} The package lists may be old: fetching them anew …`);
+      aptGet(['update']);
+      aptGet(install);
+    }
   });
 }
