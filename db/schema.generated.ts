@@ -131,6 +131,7 @@ export interface Organisations {
   id: string;
   name: string;
   slug: string;
+  storage_quota_bytes: Int8 | null;
 }
 
 export interface Outbox {
@@ -219,8 +220,10 @@ export interface Uploads {
   created_at: Generated<Timestamp>;
   created_by: string;
   filename: string;
+  fingerprint: string | null;
   grid_id: string;
   id: string;
+  last_activity_at: Generated<Timestamp>;
   multipart_id: string | null;
   organisation_id: string;
   part_size: Int8 | null;
