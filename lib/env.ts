@@ -13,6 +13,8 @@ const envSchema = z.object({
   STORAGE_REGION: z.string().default('us-east-1'),
   STORAGE_ACCESS_KEY: z.string().min(1),
   STORAGE_SECRET_KEY: z.string().min(1),
+  STORAGE_QUOTA_BYTES: z.coerce.number().int().min(0).default(100e9),
+  PART_ADDRESS_SECONDS: z.coerce.number().int().min(1).max(604_800).default(3600),
   TRUSTED_PROXIES: z.string().default(''),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error']).default('info'),
 });

@@ -12,6 +12,7 @@ export const errorTable = {
   'request-in-flight': { status: 409, title: 'The same request is still being answered' },
   'stale-revision': { status: 412, title: 'Changed in the meantime' },
   'too-large': { status: 413, title: 'Too large' },
+  'no-room': { status: 413, title: 'No room left' },
   invalid: { status: 422, title: 'Not valid' },
   'not-available': { status: 422, title: 'Not available yet' },
   'key-reused': { status: 422, title: 'Idempotency key used for something else' },

@@ -4,9 +4,9 @@ import type { Env } from '@/lib/env';
 import { createLogger } from '@/lib/platform/logger';
 import { openRedis } from '@/lib/platform/redis';
 import { createStorage } from '@/lib/platform/storage';
+import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { createStudyEvents } from '@/lib/platform/study-events';
 import type { JobContext } from '@/lib/services/outbox/job-context';
-import { storageOptionsOf } from './storage-options';
 
 export type WorkerContext = Omit<JobContext, 'organisation'>;
 

@@ -8,6 +8,7 @@ import { openWorkerContext } from './context';
 import { createDispatcher } from './outbox/dispatcher';
 import { listenToOutbox } from './outbox/listener';
 import { createQueueWorker } from './queue-worker';
+import { startSweeps } from './schedules/sweeps';
 
 const sweepEveryMilliseconds = 60_000;
 /** The supervisor kills what has not ended ten seconds after it was asked to. */
@@ -29,6 +30,7 @@ const stopListening = listenToOutbox(openListener, log, () => dispatcher.dispatc
 adding.on('ready', () => dispatcher.sweep());
 dispatcher.sweep();
 const schedule = setInterval(() => dispatcher.sweep(), sweepEveryMilliseconds);
+const stopSweeps = startSweeps(context);
 log.info({ threads }, 'worker ready');
 
 let isStopping = false;
@@ -40,8 +42,9 @@ async function stop(signal: string): Promise<void> {
   log.info({ signal }, 'worker stopping');
   clearInterval(schedule);
   await Promise.all([stopListening(), dispatcher.close()]);
+  const swept = stopSweeps();
   const late = new Promise<'late'>((resolve) => setTimeout(resolve, finishWithinMilliseconds, 'late'));
-  const ended = worker.close().then(() => 'ended' as const);
+  const ended = Promise.all([worker.close(), swept]).then(() => 'ended' as const);
   const isLate = (await Promise.race([ended, late])) === 'late';
   if (isLate) {
     log.warn({}, 'jobs left unfinished for the next worker');

@@ -8,6 +8,7 @@ import { createRateLimits } from '@/lib/platform/rate-limits';
 import { openRedis } from '@/lib/platform/redis';
 import { createSessions, type Sessions } from '@/lib/platform/sessions';
 import { createStorage } from '@/lib/platform/storage';
+import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { createStudyEvents } from '@/lib/platform/study-events';
 import type { Context } from '@/lib/services/context';
 
@@ -25,10 +26,8 @@ function openServer(): Server {
   const subscriber = openRedis(env.REDIS_URL, log, { maxRetriesPerRequest: null });
   const context: Context = {
     db,
-    storage: createStorage({
-      endpoint: env.STORAGE_ENDPOINT, publicUrl: env.STORAGE_PUBLIC_URL, bucket: env.STORAGE_BUCKET, region: env.STORAGE_REGION,
-      accessKeyId: env.STORAGE_ACCESS_KEY, secretAccessKey: env.STORAGE_SECRET_KEY,
-    }),
+    storage: createStorage(storageOptionsOf(env)),
+    storageQuotaBytes: env.STORAGE_QUOTA_BYTES,
     events: createStudyEvents(redis, subscriber),
     limits: createRateLimits(redis),
     clock: () => new Date(),

@@ -11,11 +11,12 @@ export function listGrids(db: Kysely<DB>, at: RevisionKey) {
   return db
     .selectFrom('grids')
     .leftJoin('uploads', (join) => join.onRef('uploads.organisation_id', '=', 'grids.organisation_id').onRef('uploads.id', '=', 'grids.upload_id'))
+    .leftJoin('users as sender', 'sender.id', 'uploads.created_by')
     .leftJoin('grid_results as result', (join) => join
       .onRef('result.organisation_id', '=', 'grids.organisation_id').onRef('result.grid_id', '=', 'grids.id').onRef('result.upload_id', '=', 'grids.upload_id'))
     .selectAll('grids')
     .select([
-      'uploads.filename', 'uploads.bytes', 'uploads.sha256', 'result.norms', 'result.mapping', 'result.numerics_version',
+      'uploads.filename', 'uploads.bytes', 'uploads.sha256', 'uploads.created_at as sent_at', 'sender.email as sender', 'result.norms', 'result.mapping', 'result.numerics_version',
     ])
     .where('grids.organisation_id', '=', at.organisationId)
     .where('grids.study_id', '=', at.studyId)

@@ -42,3 +42,9 @@ export function deleteIdempotencyKey(db: Kysely<DB>, at: KeyOf) {
     .where('organisation_id', '=', at.organisationId).where('actor_id', '=', at.actorId).where('key', '=', at.key)
     .execute();
 }
+
+/** Removes the keys of an organisation that were claimed before a moment; how many. */
+export async function deleteOldIdempotencyKeys(db: Kysely<DB>, organisationId: string, before: Date): Promise<number> {
+  const removed = await db.deleteFrom('idempotency_keys').where('organisation_id', '=', organisationId).where('created_at', '<', before).executeTakeFirst();
+  return Number(removed.numDeletedRows);
+}

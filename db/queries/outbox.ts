@@ -38,3 +38,12 @@ export function requeueOutboxRow(db: Kysely<DB>, id: string, attempt: number) {
     .where('state', '=', 'queued')
     .execute();
 }
+
+/** Removes rows that were done before a moment, some at a time; how many. */
+export async function deleteDoneOutboxRows(db: Kysely<DB>, before: Date, limit: number): Promise<number> {
+  const removed = await db
+    .deleteFrom('outbox')
+    .where('id', 'in', (eb) => eb.selectFrom('outbox').select('id').where('state', '=', 'done').where('done_at', '<', before).limit(limit).forUpdate().skipLocked())
+    .executeTakeFirst();
+  return Number(removed.numDeletedRows);
+}

@@ -7,9 +7,18 @@ export function insertUpload(db: Kysely<DB>, row: Insertable<Uploads>) {
   return db.insertInto('uploads').values(row).returningAll().executeTakeFirstOrThrow();
 }
 
+/** With the address of whoever sends it. */
 export function findUpload(db: Kysely<DB>, organisationId: string, id: string) {
-  return db.selectFrom('uploads').selectAll().where('organisation_id', '=', organisationId).where('id', '=', id).executeTakeFirst();
+  return db
+    .selectFrom('uploads')
+    .innerJoin('users', 'users.id', 'uploads.created_by')
+    .selectAll('uploads')
+    .select('users.email as sender')
+    .where('uploads.organisation_id', '=', organisationId)
+    .where('uploads.id', '=', id)
+    .executeTakeFirst();
 }
+export type SentUpload = NonNullable<Awaited<ReturnType<typeof findUpload>>>;
 
 /** The last whole file sent for a grid, in any revision of its study, other than one upload. */
 export function findStoredUpload(db: Kysely<DB>, organisationId: string, grid: { study_id: string; label: string }, otherThan: string) {

@@ -1,22 +1,26 @@
 import { Readable } from 'node:stream';
 import {
   AbortMultipartUploadCommand, CompleteMultipartUploadCommand, CreateMultipartUploadCommand, DeleteObjectCommand, GetObjectCommand,
-  HeadBucketCommand, HeadObjectCommand, ListPartsCommand, S3Client, UploadPartCommand,
+  HeadBucketCommand, HeadObjectCommand, ListMultipartUploadsCommand, ListObjectsV2Command, ListPartsCommand, S3Client, UploadPartCommand,
+  type ListMultipartUploadsCommandOutput,
 } from '@aws-sdk/client-s3';
 import { Upload } from '@aws-sdk/lib-storage';
 import { getSignedUrl } from '@aws-sdk/s3-request-presigner';
 
 export interface StoredPart { number: number; etag: string; bytes: number }
+/** `since`: when it was written or begun. */
+export interface StoredObject { key: string; since: Date }
 
-interface StorageOptions { endpoint: string; publicUrl: string; bucket: string; region: string; accessKeyId: string; secretAccessKey: string }
-
-const partLifetimeSeconds = 3600;
+interface StorageOptions {
+  endpoint: string; publicUrl: string; bucket: string; region: string; accessKeyId: string; secretAccessKey: string;
+  partLifetimeSeconds: number;
+}
 
 export type Storage = ReturnType<typeof createStorage>;
 
 /** Files in an S3-compatible bucket. Part addresses are signed for the URL at which browsers reach storage. */
 export function createStorage(options: StorageOptions) {
-  const { bucket, region, accessKeyId, secretAccessKey } = options;
+  const { bucket, region, accessKeyId, secretAccessKey, partLifetimeSeconds } = options;
   const clientAt = (endpoint: string) => new S3Client({
     endpoint, region, forcePathStyle: true, credentials: { accessKeyId, secretAccessKey },
     requestChecksumCalculation: 'WHEN_REQUIRED', responseChecksumValidation: 'WHEN_REQUIRED',
@@ -54,8 +58,33 @@ export function createStorage(options: StorageOptions) {
       await client.send(new CompleteMultipartUploadCommand({ Bucket: bucket, Key: key, UploadId: multipartId, MultipartUpload: { Parts: sorted } }));
     },
 
+    /** Frees the parts; one that is already gone is as wanted. */
     async abortMultipart(key: string, multipartId: string): Promise<void> {
-      await client.send(new AbortMultipartUploadCommand({ Bucket: bucket, Key: key, UploadId: multipartId }));
+      try {
+        await client.send(new AbortMultipartUploadCommand({ Bucket: bucket, Key: key, UploadId: multipartId }));
+      } catch (error) {
+        if (!(error instanceof Error && error.name === 'NoSuchUpload')) throw error;
+      }
+    },
+
+    /** Objects under a prefix, page by page. */
+    async *listObjects(prefix: string): AsyncGenerator<StoredObject> {
+      let after: string | undefined;
+      do {
+        const answer = await client.send(new ListObjectsV2Command({ Bucket: bucket, Prefix: prefix, ContinuationToken: after }));
+        for (const { Key, LastModified } of answer.Contents ?? []) if (Key && LastModified) yield { key: Key, since: LastModified };
+        after = answer.IsTruncated ? answer.NextContinuationToken : undefined;
+      } while (after !== undefined);
+    },
+
+    /** Uploads in parts under a prefix that are neither completed nor given up, page by page. */
+    async *listMultiparts(prefix: string): AsyncGenerator<StoredObject & { multipartId: string }> {
+      let after: { KeyMarker?: string; UploadIdMarker?: string } | undefined = {};
+      while (after) {
+        const answer: ListMultipartUploadsCommandOutput = await client.send(new ListMultipartUploadsCommand({ Bucket: bucket, Prefix: prefix, ...after }));
+        for (const { Key, UploadId, Initiated } of answer.Uploads ?? []) if (Key && UploadId && Initiated) yield { key: Key, multipartId: UploadId, since: Initiated };
+        after = answer.IsTruncated ? { KeyMarker: answer.NextKeyMarker, UploadIdMarker: answer.NextUploadIdMarker } : undefined;
+      }
     },
 
     /** Streams a body of unknown length in parts of 8 MiB. */

@@ -10,6 +10,8 @@ import type { StudyEvents } from '@/lib/platform/study-events';
 export interface Context {
   db: Database;
   storage: Storage;
+  /** What an organisation may store where no quota of its own is set. */
+  storageQuotaBytes: number;
   events: StudyEvents;
   limits: RateLimits;
   clock: () => Date;

@@ -12,6 +12,7 @@ import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
   getStudyContract, listStudiesContract, reviseStudyContract, updateGridContract,
 } from '@/lib/domain/studies/schema';
+import { getStorageContract } from '@/lib/domain/storage/schema';
 import { createTokenContract, deleteTokenContract, listTokensContract } from '@/lib/domain/tokens/schema';
 import {
   completeUploadContract, deleteUploadContract, getUploadContract, previewContract, putDataContract, signPartsContract, startUploadContract,
@@ -107,6 +108,7 @@ export const roleRows: RoleRow[] = [
   write(deleteUploadContract, upload),
   write(putDataContract, (ground) => ({ ...grid(ground), body: 'x,y,T\n', headers: { 'content-type': 'text/csv' } })),
   read(getGridResultContract, grid),
+  read(getStorageContract, nothing, 'answer'),
   write(reviseStudyContract, study),
   write(assessStudyContract, study),
 ];

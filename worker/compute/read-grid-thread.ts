@@ -1,11 +1,11 @@
 import { parentPort } from 'node:worker_threads';
 import { readEnv } from '@/lib/env';
 import { createStorage } from '@/lib/platform/storage';
+import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { ReadProgress } from '@/lib/readers/source';
-import { storageOptionsOf } from '../storage-options';
 import type { ThreadMessage, ThreadResult, ThreadTask } from './thread-messages';
 
 const toldEveryMilliseconds = 200;

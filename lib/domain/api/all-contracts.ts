@@ -6,6 +6,7 @@ import {
 import { getMatrixContract } from '../matrix/schema';
 import { meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '../people/schema';
 import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '../problems/schema';
+import { getStorageContract } from '../storage/schema';
 import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
   getStudyContract, listStudiesContract, reviseStudyContract, updateGridContract,
@@ -27,6 +28,6 @@ export const allContracts: readonly ContractShape[] = [
   createCaseContract, listCasesContract, getCaseContract, updateCaseContract, putColumnsContract,
   createStudyContract, listStudiesContract, getStudyContract, addGridContract, updateGridContract, reviseStudyContract, assessStudyContract,
   getOutcomeContract, getOutcomeXmlContract, getEventsContract, getGridResultContract,
-  putDataContract, startUploadContract, signPartsContract, completeUploadContract, getUploadContract, deleteUploadContract, previewContract,
+  putDataContract, startUploadContract, signPartsContract, completeUploadContract, getUploadContract, deleteUploadContract, previewContract, getStorageContract,
   assessContract, healthContract, readyContract, openApiContract,
 ];

@@ -23,6 +23,7 @@ export const gridSchema = gridInputSchema.extend({
   upload: z.strictObject({
     id: z.string(), filename: z.string(), bytes: z.number().int(), sha256: z.string().nullable(),
     rowsRead: z.number().int().nullable(), rows: z.number().int().nullable(), reasons: z.array(rejectionReasonSchema),
+    createdBy: z.string().meta({ description: 'E-mail address of who sends or sent it.' }), createdAt: timestampSchema,
   }).nullable(),
 });
 export type Grid = z.infer<typeof gridSchema>;

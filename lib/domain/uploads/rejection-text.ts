@@ -33,7 +33,7 @@ function describeCode(reason: RejectionReason): RejectionText {
     case 'damaged-gzip':
       return text(`The compressed file cannot be unpacked: ${found}.`, 'Test it with gzip -t, compress it anew, and upload it again.');
     case 'checksum-differs':
-      return text(`The bytes that arrived have the SHA-256 ${found}; announced was ${expected}.`, 'The file changed on its way. Upload it again.');
+      return text(`The stored bytes differ from the file that was sent: their SHA-256 is ${found}, that of the file ${expected}.`, 'Send the file again.');
     case 'malformed-json':
       return text(`${place}: found ${found} where the JSON should have ${expected}.`, 'Write the file with a JSON library, or as a text table.');
     case 'line-too-long':

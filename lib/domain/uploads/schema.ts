@@ -14,11 +14,20 @@ export const uploadSchema = z.strictObject({
   id: z.string(), study: z.string(), grid: z.string(), filename: z.string(), bytes: z.number().int(), sha256: z.string().nullable(),
   state: uploadStateSchema, partSize: z.number().int().nullable(),
   parts: z.array(z.strictObject({ number: z.number().int(), etag: z.string(), bytes: z.number().int() })).meta({ description: 'Parts stored so far.' }),
-  rowsRead: z.number().int().nullable(), reasons: z.array(rejectionReasonSchema), createdAt: timestampSchema,
+  rowsRead: z.number().int().nullable(), reasons: z.array(rejectionReasonSchema),
+  fingerprint: z.string().nullable().meta({ description: 'SHA-256 of the first and the last megabyte, where it was stated at the start.' }),
+  createdBy: z.string().meta({ description: 'E-mail address of who sends or sent it.' }), createdAt: timestampSchema,
+  lastActivityAt: timestampSchema.meta({ description: 'When addresses for parts were last asked for.' }),
 });
 export type Upload = z.infer<typeof uploadSchema>;
 
-export const startUploadSchema = z.strictObject({ filename: filenameSchema, bytes: z.number().int().min(0).max(50e9), sha256: sha256Schema.optional() });
+export const startUploadSchema = z.strictObject({
+  filename: filenameSchema, bytes: z.number().int().min(0).max(50e9), sha256: sha256Schema.optional(),
+  fingerprint: sha256Schema.optional().meta({ description: 'SHA-256 of the first and the last megabyte together, by which the same file is known again.' }),
+  replaces: z.string().nullable().optional().meta({
+    description: 'The open upload of the grid that this one takes the place of, null for none: refused where it is another by now. Absent, whatever is open gives way.',
+  }),
+});
 export type StartUploadInput = z.infer<typeof startUploadSchema>;
 const startedUploadSchema = z.strictObject({ upload: z.string(), partSize: z.number().int() });
 
@@ -27,7 +36,10 @@ export type SignPartsInput = z.infer<typeof signPartsSchema>;
 const signedPartsSchema = z.strictObject({
   parts: z.array(z.strictObject({ number: z.number().int(), url: z.string(), expiresAt: timestampSchema })),
 });
-export const completeUploadSchema = z.strictObject({ parts: z.array(z.strictObject({ number: z.number().int(), etag: z.string() })).min(1).max(1000) });
+export const completeUploadSchema = z.strictObject({
+  parts: z.array(z.strictObject({ number: z.number().int(), etag: z.string() })).min(1).max(1000),
+  sha256: sha256Schema.optional().meta({ description: 'Of the whole file; a file that is stored with another is rejected when it is read.' }),
+});
 export type CompleteUploadInput = z.infer<typeof completeUploadSchema>;
 
 export const previewSchema = z.strictObject({

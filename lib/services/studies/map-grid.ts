@@ -9,6 +9,7 @@ export function mapGrid(row: GridRow): Grid {
     upload: row.upload_id === null ? null : {
       id: row.upload_id, filename: row.filename ?? '', bytes: Number(row.bytes ?? 0), sha256: row.sha256,
       rowsRead: row.rows_read === null ? null : Number(row.rows_read), rows: normsOf(row)?.rows ?? null,
+      createdBy: row.sender ?? '', createdAt: (row.sent_at ?? row.created_at).toISOString(),
       reasons: row.reasons as unknown as RejectionReason[],
     },
   };

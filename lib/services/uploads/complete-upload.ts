@@ -11,7 +11,7 @@ import { withOrganisation } from '../with-organisation';
 import { mapUpload } from './map-upload';
 import { receiveFile } from './receive-file';
 import { asReceiving, type ReceivingUpload } from './receiving-upload';
-import { requireUpload } from './require-upload';
+import { requireUpload, type LoadedUpload } from './require-upload';
 
 const bare = (etag: string) => etag.replace(/^W\//, '').replaceAll('"', '');
 
@@ -53,18 +53,26 @@ async function joinParts(ctx: MemberContext, receiving: ReceivingUpload, stated:
   }
 }
 
+/** What the file's SHA-256 is said to be, at the start or now; refused where the two differ. */
+function statedSha256({ upload: { stated_sha256: atStart } }: LoadedUpload, now: string | undefined): string | null {
+  if (atStart === null || now === undefined || atStart === now) return now ?? atStart;
+  const detail = `The upload was started with SHA-256 ${atStart}; now ${now} is stated. Start another upload for another file.`;
+  throw new AppError('invalid', detail, { fields: [{ path: 'sha256', message: detail }] });
+}
+
 /** Closes an upload: from here on it is kept, and read. Closing it again changes nothing. */
-export async function completeUpload(ctx: MemberContext, id: string, { parts }: CompleteUploadInput): Promise<Upload> {
+export async function completeUpload(ctx: MemberContext, id: string, { parts, sha256 }: CompleteUploadInput): Promise<Upload> {
   permit(ctx, 'work.write');
   const loaded = await withOrganisation(ctx, (trx) => requireUpload(ctx, trx, id));
   if (loaded.upload.state === 'stored') return mapUpload(loaded, []);
+  const stated = statedSha256(loaded, sha256);
   await joinParts(ctx, asReceiving(loaded), parts);
   const completed = await withOrganisation(ctx, async (trx) => {
     await lockCollectingStudy(ctx, trx, loaded.grid.study_id);
     const present = await requireUpload(ctx, trx, id);
     if (present.upload.state === 'stored') return present;
     const { grid } = asReceiving(present);
-    await updateUploadState(trx, ctx.organisation.id, id, 'receiving', { state: 'stored', stored_at: ctx.clock() });
+    await updateUploadState(trx, ctx.organisation.id, id, 'receiving', { state: 'stored', stored_at: ctx.clock(), stated_sha256: stated });
     await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: id });
     return requireUpload(ctx, trx, id);
   });

@@ -15,6 +15,7 @@ export function mapUpload(loaded: LoadedUpload, parts: StoredPart[]): Upload {
     id: upload.id, study: grid.study_id, grid: grid.label, filename: upload.filename, bytes: Number(upload.bytes), sha256: upload.sha256,
     state: stateOfUpload(loaded), partSize: upload.part_size === null ? null : Number(upload.part_size), parts,
     rowsRead: isCurrent && grid.rows_read !== null ? Number(grid.rows_read) : null,
-    reasons: isCurrent ? grid.reasons as unknown as RejectionReason[] : [], createdAt: upload.created_at.toISOString(),
+    reasons: isCurrent ? grid.reasons as unknown as RejectionReason[] : [], fingerprint: upload.fingerprint,
+    createdBy: upload.sender, createdAt: upload.created_at.toISOString(), lastActivityAt: upload.last_activity_at.toISOString(),
   };
 }

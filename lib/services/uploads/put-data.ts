@@ -7,6 +7,7 @@ import { AppError } from '@/lib/errors';
 import type { MemberContext } from '../context';
 import { newId } from '../keys';
 import { permit } from '../permit';
+import { noRoom, requireRoom, roomLeft } from '../storage/require-room';
 import { announce } from '../studies/announce';
 import { freezePlan } from '../studies/freeze-plan';
 import { requireGrid } from '../studies/require-grid';
@@ -21,6 +22,8 @@ import { requireUpload } from './require-upload';
 import { storageKey } from './storage-key';
 
 const mostBytes = 100e6;
+
+type Room = Awaited<ReturnType<typeof roomLeft>>;
 
 interface DataInput {
   filename: string | undefined;
@@ -53,15 +56,17 @@ async function* unbroken(body: AsyncIterable<Uint8Array>): AsyncGenerator<Uint8A
 }
 
 /** Streams the body into storage, counting and hashing; what is short, damaged or too large is not kept. */
-async function storeBody(ctx: MemberContext, key: string, { body, contentLength, reprDigest }: DataInput): Promise<{ bytes: number; sha256: string }> {
+async function storeBody(ctx: MemberContext, { key, room }: { key: string; room: Room }, { body, contentLength, reprDigest }: DataInput): Promise<{ bytes: number; sha256: string }> {
   const stated = { bytes: contentLength === null ? null : Number(contentLength), sha256: statedDigest(reprDigest) };
   if (stated.bytes !== null && stated.bytes > mostBytes) throw tooLarge();
+  if (stated.bytes !== null && stated.bytes > room.left) throw noRoom(ctx, room, stated.bytes);
   const hash = createHash('sha256');
   let bytes = 0;
   async function* counted(): AsyncGenerator<Uint8Array> {
     for await (const chunk of unbroken(body)) {
       bytes += chunk.length;
       if (bytes > mostBytes) throw tooLarge();
+      if (bytes > room.left) throw noRoom(ctx, room, null);
       hash.update(chunk);
       yield chunk;
     }
@@ -82,14 +87,19 @@ export async function putData(ctx: MemberContext, key: { id: string; label: stri
   const target = async (trx: Trx) => {
     const study = await lockCollectingStudy(ctx, trx, key.id);
     requireFields(study);
-    return { study, grid: await requireGrid(trx, study, key.label) };
+    const grid = await requireGrid(trx, study, key.label);
+    return { study, grid, open: grid.state === 'receiving' ? grid.upload_id : null };
   };
-  const { study: { head } } = await withOrganisation(ctx, target);
+  const { head, room } = await withOrganisation(ctx, async (trx) => {
+    const { study: { head }, open } = await target(trx);
+    return { head, room: await roomLeft(ctx, trx, open) };
+  });
   const id = newId();
   const storage_key = storageKey(ctx.organisation.id, head.id, id);
-  const { bytes, sha256 } = await storeBody(ctx, storage_key, input);
+  const { bytes, sha256 } = await storeBody(ctx, { key: storage_key, room }, input);
   const { loaded, replaced } = await withOrganisation(ctx, async (trx) => {
-    const { study, grid } = await target(trx);
+    const { study, grid, open } = await target(trx);
+    await requireRoom(ctx, trx, { bytes, besides: open });
     await insertUpload(trx, {
       organisation_id: ctx.organisation.id, id, grid_id: grid.id, filename: input.filename ?? `${key.label}.csv`, bytes, sha256, storage_key,
       state: 'stored', stored_at: ctx.clock(), created_by: ctx.userId, token_id: ctx.token?.id ?? null,

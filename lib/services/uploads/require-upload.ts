@@ -1,5 +1,5 @@
 import { findGrid, findGridOfUpload } from '@/db/queries/grids';
-import { findUpload, type UploadRow } from '@/db/queries/uploads';
+import { findUpload, type SentUpload } from '@/db/queries/uploads';
 import { AppError } from '@/lib/errors';
 import type { MemberContext } from '../context';
 import { keyOf } from '../keys';
@@ -7,7 +7,7 @@ import { requireStudy } from '../studies/require-study';
 import type { Trx } from '../with-organisation';
 
 type UploadGrid = NonNullable<Awaited<ReturnType<typeof findGrid>>>;
-export interface LoadedUpload { upload: UploadRow; grid: UploadGrid; isCurrent: boolean }
+export interface LoadedUpload { upload: SentUpload; grid: UploadGrid; isCurrent: boolean }
 
 /** An upload with the grid that names it, else the one it was made for; 404 also where it was given up. */
 export async function requireUpload(ctx: MemberContext, trx: Trx, id: string): Promise<LoadedUpload> {

@@ -22,6 +22,7 @@ const wayOn: Record<ErrorCode, string> = {
   'request-in-flight': 'Wait for the first answer; the same key then gives it again.',
   'stale-revision': 'Read it again, look at what changed, and send the change with the new revision.',
   'too-large': 'Send the file in parts.',
+  'no-room': 'Give up uploads in progress under Storage, or have the quota raised; nothing was kept.',
   invalid: 'Mend the members named under errors; nothing was changed.',
   'not-available': 'Leave out the member named under errors.',
   'key-reused': 'Use a new key for a request with another body.',
