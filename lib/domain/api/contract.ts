@@ -25,6 +25,8 @@ export interface ContractShape {
   conditional?: true;
   /** The body is not JSON and is handed on as a stream. */
   rawBody?: true;
+  /** Statuses of refusals that do not follow from the rest. */
+  alsoRefuses?: readonly number[];
   /** What else than `response` may come, told in the document only. */
   alsoAnswers?: Record<number, OtherAnswer>;
 }

@@ -1,7 +1,7 @@
 import type { ContractShape } from './contract';
 
 /** With which statuses a call may be refused. */
-export function problemStatuses({ method, path, access, body, query, conditional, rawBody, response }: ContractShape): number[] {
+export function problemStatuses({ method, path, access, body, query, conditional, rawBody, response, alsoRefuses = [] }: ContractShape): number[] {
   const writes = method !== 'GET';
   const statuses = new Set([500, 503]);
   const add = (applies: boolean, ...more: number[]) => {
@@ -18,5 +18,6 @@ export function problemStatuses({ method, path, access, body, query, conditional
   add(rawBody === true, 413);
   add(conditional === true, 412, 428);
   add(response === undefined && access === 'signed-in', 403);
+  add(true, ...alsoRefuses);
   return [...statuses].sort((a, b) => a - b);
 }
