@@ -35,11 +35,23 @@ export interface ErrorSeries {
   samplingStated: boolean;
 }
 
+export const procedures = ['three-grid', 'guarded-order', 'least-squares', 'correction-factor'] as const;
+export type Procedure = (typeof procedures)[number];
+/** Which way a procedure went; `none` where it gives no uncertainty. */
+export const procedureBranches = [
+  'observed', 'formal-two-grids', 'near-formal', 'off-formal', 'order-undefined', 'power', 'first-term', 'second-term', 'two-terms',
+  'near-asymptotic', 'far-from-asymptotic', 'none',
+] as const;
+export type ProcedureBranch = (typeof procedureBranches)[number];
+
 export interface QuantitySeries {
   name: string;
   unit: string | null;
-  /** `resolution` is one unit of the last digit stated, null where it is to be read off the value. */
-  grids: { label: string; h: number; value: number; resolution: number | null }[];
+  /** `resolution` is one unit of the last digit stated, null where it is to be read off the value; the errors of iteration and time step are in the quantity's unit. */
+  grids: { label: string; h: number; value: number; resolution: number | null; iterativeError?: number; timeError?: number }[];
+  procedure: Procedure;
+  /** What the band of about 95 % is divided by to give u_num; null where it is not stated. */
+  uNumFactor: number | null;
   formalOrder: number | null;
   /** Largest acceptable GCI as a fraction. */
   target: number | null;
@@ -65,6 +77,19 @@ export type Convergence = 'monotone' | 'oscillatory' | 'divergent' | 'oscillator
 /** `grids` are labels, finest first. */
 export interface Triple { grids: string[]; order: number | null; convergence: Convergence }
 
+/** Values fitted over all grids: φ0 + Σ α·h^order. `uncertainty` is U of each grid, finest first. */
+export interface ValueFit {
+  kind: 'power' | 'first-term' | 'second-term' | 'two-terms';
+  /** Whether grid i counts by (1/h_i)/Σ(1/h_j). */
+  weighted: boolean;
+  value0: number; alpha: number[];
+  /** Null for the two terms, which have the orders 1 and 2. */
+  order: number | null;
+  sigma: number; dataRange: number; uncertainty: number[];
+  /** The bound of the search that the fit of an order ended at. */
+  atBound: 'lowest' | 'highest' | null;
+}
+
 export interface QuantityAssessment {
   name: string; unit: string | null;
   /** As declared: what the orders and the GCI are judged by. */
@@ -76,7 +101,13 @@ export interface QuantityAssessment {
   safetyFactor: number | null; gci: number | null; gciAbsolute: number | null; gciCoarse: number | null; asymptoticRatio: number | null;
   /** Half the range of the three values, given instead of a GCI where the order is not positive or the values oscillate. */
   halfRange: number | null;
-  procedure: 'three-grid'; branch: 'observed' | 'formal-two-grids' | 'none';
+  procedure: Procedure; branch: ProcedureBranch;
+  /** Constants of the procedure as used, by name. Members from here to uNum are absent from assessments made before they were kept. */
+  constants?: Record<string, number>;
+  fit?: ValueFit | null;
+  /** U of the finest grid in the quantity's unit and as a fraction, where the procedure gives one instead of a GCI. */
+  uncertainty?: number | null; uncertaintyFraction?: number | null;
+  uNum?: number | null;
   triples: Triple[];
   outcome: Outcome | null; reasons: ReasonCode[];
 }

@@ -49,7 +49,7 @@ function assess(theCase: ScenarioCase, grids: readonly Read[]): SeriesAssessment
     };
   }));
   const quantities = definition.quantities.map(({ name, formalOrder, target }): QuantitySeries => ({
-    name, unit: null, formalOrder: formalOrder ?? null, target: target ?? null, minimumGrids,
+    name, unit: null, formalOrder: formalOrder ?? null, target: target ?? null, minimumGrids, procedure: 'three-grid', uNumFactor: null,
     grids: grids.map(({ label, h, values }) => ({ label, h, value: values[name] ?? Number.NaN, resolution: null })),
   }));
   return assessSeries({ errors, quantities });

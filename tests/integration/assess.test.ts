@@ -71,6 +71,17 @@ describe('POST /api/v1/assess', () => {
     published.forEach((order, index) => expect(Math.abs((found[index] ?? Number.NaN) - order)).toBeLessThan(0.01));
   });
 
+  it.each([
+    ['guarded-order', 'near-formal', { gci: expect.any(Number) as number, uncertainty: null }],
+    ['least-squares', 'power', { gci: null, uncertainty: expect.any(Number) as number, fit: { kind: 'power' } }],
+    ['correction-factor', 'near-asymptotic', { gci: null, uncertainty: expect.any(Number) as number }],
+  ])('takes the procedure %s and tells its branch and constants', async (procedure, branch, rest) => {
+    const grids = [1, 2, 4, 8].map((h) => ({ h, value: 10 + 0.1 * h ** 1.95 }));
+    const found = await quantityOf({ grids, procedure, formalOrder: 2, uNumFactor: 2 });
+    expect(found).toMatchObject({ procedure, branch, ...rest, uNum: expect.any(Number) as number, constants: expect.any(Object) as object });
+    expect(await refused(null, assessContract, { body: { grids, procedure: 'guarded-order' } })).toMatchObject({ status: 422, errors: [{ path: 'formalOrder' }] });
+  });
+
   it('answers the same hash to the same table whatever the order of its members, and another to another', async () => {
     const hash = async (body: object) => (await ok(null, assessContract, { body })).inputsSha256;
     const first = await hash({ formalOrder: 2, grids: [{ h: 1, value: 1 }, { h: 0.5, value: 2 }] });
@@ -89,7 +100,6 @@ describe('POST /api/v1/assess', () => {
   });
 
   it.each([
-    ['procedure', { procedure: 'least-squares', grids: [{ h: 1, value: 1 }, { h: 0.5, value: 2 }] }],
     ['grids.0.errors.H1', { grids: [{ h: 1, errors: { H1: 1 } }, { h: 0.5, errors: { H1: 1 } }] }],
   ])('answers 422 not available for %s', async (path, body) => {
     expect(await refused(null, assessContract, { body })).toMatchObject({ status: 422, title: 'Not available yet', errors: [{ path }] });

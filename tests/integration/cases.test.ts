@@ -66,8 +66,6 @@ describe('POST /api/v1/cases', () => {
     ['fields.0.norms.0.logFactor', norm({ logFactor: 1 })],
     ['fields.0.norms.0.regularity', norm({ regularity: 0.5 })],
     ['fields.0.norms.0.backing.scheme', norm({ backing: { scheme: 'central-2' } })],
-    ['quantities.0.procedure', { quantities: [{ name: 'drag', procedure: 'least-squares' }] }],
-    ['quantities.0.uNumFactor', { quantities: [{ name: 'drag', uNumFactor: 1.1 }] }],
     ['boundaryBand', { boundaryBand: { thickness: 0.1 } }],
   ])('answers 422 not available for %s', async (path, changes) => {
     expect(await refused(person, createCaseContract, { body: caseOf(changes) })).toMatchObject({ status: 422, title: 'Not available yet', errors: [{ path }] });

@@ -15,7 +15,7 @@ export function errorSeries(h: readonly number[], errors: readonly number[], cha
 /** A quantity from spacings and values, the finest first, changed as asked. */
 export function quantitySeries(h: readonly number[], values: readonly number[], changes: Partial<QuantitySeries> = {}): QuantitySeries {
   return {
-    name: 'drag', unit: null, formalOrder: null, target: null, minimumGrids: 3,
+    name: 'drag', unit: null, formalOrder: null, target: null, minimumGrids: 3, procedure: 'three-grid', uNumFactor: null,
     grids: h.map((spacing, i) => ({ label: `g${i + 1}`, h: spacing, value: values[i] ?? Number.NaN, resolution: null })), ...changes,
   };
 }

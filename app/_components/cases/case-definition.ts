@@ -44,8 +44,9 @@ function typedCase(values: CaseValues): unknown {
       ...field.kept, field: field.field.trim(),
       norms: field.norms.filter(isDeclared).map((norm) => declaredNorm(norm, field, values.kind === 'exactness')),
     })),
-    quantities: values.quantities.map(({ kept, name, unit, formalOrder, knownValue, target }) => ({
+    quantities: values.quantities.map(({ kept, name, unit, formalOrder, knownValue, target, procedure, uNumFactor }) => ({
       ...kept, name, unit: someText(unit), formalOrder: typedNumber(formalOrder), knownValue: typedNumber(knownValue), target: typedNumber(target),
+      procedure, uNumFactor: typedNumber(uNumFactor),
     })),
     sampling: values.sampling === '' ? undefined : values.sampling, minimumGrids: typedNumber(values.minimumGrids),
     gridPlan: values.gridPlan.filter((grid) => !isBlankGrid(grid)).map((grid) => plannedGrid(grid, values.spacingAs)),

@@ -1,4 +1,5 @@
 import type { CaseDefinition, CaseKind, DeclaredField, DeclaredNorm, DeclaredQuantity } from '@/lib/domain/cases/definition';
+import type { Procedure } from '@/lib/numerics/assessment';
 import type { Case } from '@/lib/domain/cases/schema';
 
 type PlannedGrid = CaseDefinition['gridPlan'][number];
@@ -8,7 +9,7 @@ type DeclaredNormName = 'L1' | 'L2' | 'Linf';
 /** One norm of a field as it is typed; `kept` holds what the form does not ask for. */
 export interface NormValues { norm: DeclaredNormName; formalOrder: string; tolerance: string; derivedOrder: string; exactLimit: string; counts: boolean; kept: DeclaredNorm | null }
 export interface FieldValues { field: string; citation: string; norms: NormValues[]; kept: DeclaredField | null }
-export interface QuantityValues { name: string; unit: string; formalOrder: string; knownValue: string; target: string; kept: DeclaredQuantity | null }
+export interface QuantityValues { name: string; unit: string; formalOrder: string; knownValue: string; target: string; procedure: Procedure; uNumFactor: string; kept: DeclaredQuantity | null }
 export interface GridValues { label: string; spacing: string; dt: string; kept: PlannedGrid | null }
 
 /** A case as it is typed. */
@@ -29,7 +30,7 @@ export function newField(field: string): FieldValues {
   return { field, citation: '', norms, kept: null };
 }
 
-export const newQuantity: QuantityValues = { name: '', unit: '', formalOrder: '', knownValue: '', target: '', kept: null };
+export const newQuantity: QuantityValues = { name: '', unit: '', formalOrder: '', knownValue: '', target: '', procedure: 'three-grid', uNumFactor: '', kept: null };
 export const newGrid: GridValues = { label: '', spacing: '', dt: '', kept: null };
 
 export function emptyCase(given: { code: string; problem: string }): CaseValues {
@@ -66,7 +67,8 @@ export function valuesOfCase(found: Case): CaseValues {
     options: Object.entries(found.options).map(([name, option]) => ({ name, text: option })),
     fields: found.fields.map(valuesOfField),
     quantities: found.quantities.map((kept) => ({
-      name: kept.name, unit: kept.unit ?? '', formalOrder: text(kept.formalOrder), knownValue: text(kept.knownValue), target: text(kept.target), kept,
+      name: kept.name, unit: kept.unit ?? '', formalOrder: text(kept.formalOrder), knownValue: text(kept.knownValue), target: text(kept.target),
+      procedure: kept.procedure, uNumFactor: text(kept.uNumFactor), kept,
     })),
     sampling: found.sampling === 'point' ? 'point' : '', minimumGrids: text(found.minimumGrids),
     spacingAs, gridPlan: found.gridPlan.map((kept) => ({ label: kept.label, spacing: spacingText(kept, spacingAs), dt: text(kept.dt), kept })),

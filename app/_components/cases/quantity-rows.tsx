@@ -2,8 +2,11 @@
 
 import { useFieldArray } from 'react-hook-form';
 import type { CaseKind } from '@/lib/domain/cases/definition';
+import { procedureNames } from '@/lib/domain/assessment/explain-procedure';
+import { procedures } from '@/lib/numerics/assessment';
 import { FaultText } from '../forms/fault-text';
 import { NumberField } from '../forms/number-field';
+import { SelectField } from '../forms/select-field';
 import { TextField } from '../forms/text-field';
 import { Button } from '../ui/button';
 import { TextButton } from '../ui/text-link';
@@ -27,7 +30,13 @@ export function QuantityRows({ form, kind }: { form: CaseForm; kind: CaseKind })
             <TextButton className="min-h-11 text-left tablet:mt-7 tablet:min-h-9" onClick={() => remove(place)}>Remove quantity</TextButton>
             <NumberField label="Formal order" error={faults?.formalOrder?.message} {...register(`quantities.${place}.formalOrder`)} />
             {kind !== 'solution' && <NumberField label="Known value" error={faults?.knownValue?.message} {...register(`quantities.${place}.knownValue`)} />}
-            {kind !== 'benchmark' && <NumberField label="Largest GCI accepted" hint="A fraction: 0.02 is 2 %." error={faults?.target?.message} {...register(`quantities.${place}.target`)} />}
+            {kind !== 'benchmark' && <NumberField label="Largest GCI or U accepted" hint="A fraction: 0.02 is 2 %." error={faults?.target?.message} {...register(`quantities.${place}.target`)} />}
+            {kind !== 'benchmark' && (
+              <SelectField label="Procedure" error={faults?.procedure?.message} {...register(`quantities.${place}.procedure`)}>
+                {procedures.map((each) => <option key={each} value={each}>{procedureNames[each].toLowerCase()}</option>)}
+              </SelectField>
+            )}
+            {kind !== 'benchmark' && <NumberField label="Factor k of u_num" hint="1.1 to 1.15, or 2; left empty: none." error={faults?.uNumFactor?.message} {...register(`quantities.${place}.uNumFactor`)} />}
           </fieldset>
         );
       })}

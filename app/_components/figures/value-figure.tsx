@@ -20,7 +20,7 @@ interface ValueFigureProps {
 }
 
 function usualCaption(quantity: QuantityAssessment): string {
-  const bars = quantity.gciAbsolute !== null ? '; bars are the index in the quantity’s unit' : quantity.halfRange !== null ? '; the bar is half the range' : '';
+  const bars = quantity.uncertainty ? '; bars are U in the quantity’s unit' : quantity.gciAbsolute !== null ? '; bars are the index in the quantity’s unit' : quantity.halfRange !== null ? '; the bar is half the range' : '';
   const curve = quantity.extrapolated !== null ? '; dashed, the extrapolation' : '';
   return `Value against spacing${bars}${curve}.`;
 }

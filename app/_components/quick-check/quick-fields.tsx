@@ -1,5 +1,7 @@
 'use client';
 
+import { procedureNames } from '@/lib/domain/assessment/explain-procedure';
+import { procedures } from '@/lib/numerics/assessment';
 import { NumberField } from '../forms/number-field';
 import { SelectField } from '../forms/select-field';
 import { TextField } from '../forms/text-field';
@@ -33,8 +35,13 @@ export function QuickFields({ state, reading, onChange }: QuickFieldsProps) {
       )}
       <NumberField label="Formal order" value={state.formalOrder} error={reading.fields.formalOrder} onChange={(event) => set({ formalOrder: event.target.value })} />
       <TextField label={holdsValues ? 'Quantity' : 'Field'} autoComplete="off" value={state.name} onChange={(event) => set({ name: event.target.value })} />
+      {holdsValues && (
+        <SelectField label="Procedure" className="col-span-2" value={state.procedure} onChange={(event) => set({ procedure: procedures.find((each) => each === event.target.value) ?? 'three-grid' })}>
+          {procedures.map((each) => <option key={each} value={each}>{procedureNames[each].toLowerCase()}</option>)}
+        </SelectField>
+      )}
       {holdsValues && <NumberField label="Known value, if any" value={state.knownValue} error={reading.fields.knownValue} onChange={(event) => set({ knownValue: event.target.value })} />}
-      {holdsValues && <NumberField label="Largest GCI, if any" hint="A fraction: 0.02 is 2 %." value={state.target} error={reading.fields.target} onChange={(event) => set({ target: event.target.value })} />}
+      {holdsValues && <NumberField label="Largest GCI or U, if any" hint="A fraction: 0.02 is 2 %." value={state.target} error={reading.fields.target} onChange={(event) => set({ target: event.target.value })} />}
     </div>
   );
 }

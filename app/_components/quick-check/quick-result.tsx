@@ -1,5 +1,7 @@
 'use client';
 
+import { estimatedBand } from '@/lib/domain/assessment/estimated-band';
+import { explainProcedure, procedureNames, procedureSources } from '@/lib/domain/assessment/explain-procedure';
 import { explainField, explainQuantity } from '@/lib/domain/assessment/reason-text';
 import { stateOutcome } from '@/lib/domain/assessment/state-outcome';
 import type { QuickCheckInput } from '@/lib/domain/assessment/quick-schema';
@@ -35,8 +37,9 @@ export function QuickResult({ input, assessment }: QuickResultProps) {
     ...fields.flatMap((field) => explainField(field).map((text) => ({ ...text, norm: fields.length > 1 ? field.norm : null }))),
     ...quantities.flatMap(explainQuantity).map((text) => ({ ...text, norm: null })),
   ];
-  const note = quantities.length > 0
-    ? <><p><b>Three-grid procedure</b>: Celik, Ghia, Roache, Freitas and others, J. Fluids Eng. 130, 078001, 2008. Safety factor 1.25.</p><p>The grid convergence index covers the error in about 95 % of cases by experience. It is no bound.</p></>
+  const [quantity] = quantities;
+  const note = quantity
+    ? <><p><b>{procedureNames[quantity.procedure]}</b>: {procedureSources[quantity.procedure]}</p><p>The {estimatedBand(quantity).longName} covers the error in about 95 % of cases by experience. It is no bound.</p></>
     : <p>The <b>band</b> reaches from the tolerance below the formal order to twice the tolerance above it; the last two orders must lie in it.</p>;
   return (
     <Section heading="Result" note={note}>
@@ -44,6 +47,7 @@ export function QuickResult({ input, assessment }: QuickResultProps) {
       {fields.length > 0 && <NormTable fields={fields} />}
       {explanations.length > 0 && (
         <ul className="mt-4 flex max-w-[46em] flex-col gap-2 font-serif text-[16px] leading-6">
+          {quantities.map((each) => <li key={each.name}><FormulaText text={explainProcedure(each)} symbols={['p', 'h']} /></li>)}
           {explanations.map(({ norm, sentence, nextStep }) => <li key={`${norm} ${sentence}`}>{norm && <><NormSymbol norm={norm} />: </>}<FormulaText text={sentence} symbols={symbols} /> <FormulaText text={nextStep} symbols={symbols} /></li>)}
         </ul>
       )}

@@ -1,3 +1,5 @@
+import type { Procedure } from '@/lib/numerics/assessment';
+
 /** What the quick check holds while it is typed. */
 export interface QuickState {
   holds: 'values' | 'errors';
@@ -7,6 +9,7 @@ export interface QuickState {
   knownValue: string;
   /** Largest GCI accepted, as a fraction. */
   target: string;
+  procedure: Procedure;
   name: string;
   /** Spacing first, then a value, or the errors in L1, L2, L∞; the last row is always empty. */
   rows: string[][];
@@ -27,7 +30,7 @@ export function withEmptyRow(rows: readonly string[][], columns: number): string
 }
 
 export const emptyQuick: QuickState = {
-  holds: 'values', spacingAs: 'cellsPerDirection', dimension: '1', formalOrder: '', knownValue: '', target: '', name: '', rows: withEmptyRow([], 2),
+  holds: 'values', spacingAs: 'cellsPerDirection', dimension: '1', formalOrder: '', knownValue: '', target: '', procedure: 'three-grid', name: '', rows: withEmptyRow([], 2),
 };
 
 const trapezoid = (cells: number) => Array.from({ length: cells + 1 }, (_, index) => Math.exp(index / cells) * (index === 0 || index === cells ? 0.5 : 1))

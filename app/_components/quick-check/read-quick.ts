@@ -93,7 +93,7 @@ export function readQuick(state: QuickState): QuickReading {
   const knownValue = state.holds === 'values' ? optional('knownValue') : undefined;
   const target = state.holds === 'values' ? optional('target') : undefined;
   if (reading.cells.length > 0 || Object.keys(reading.fields).length > 0) return reading;
-  const parsed = quickCheckSchema.safeParse({ dimension: Number(state.dimension), grids, formalOrder, knownValue, target });
+  const parsed = quickCheckSchema.safeParse({ dimension: Number(state.dimension), grids, formalOrder, knownValue, target, procedure: state.holds === 'values' ? state.procedure : undefined });
   if (!parsed.success) {
     for (const issue of parsed.error.issues) placeFault({ path: issue.path.join('.'), message: issue.message }, rowsTyped, reading);
     return reading;

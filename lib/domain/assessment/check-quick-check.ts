@@ -19,7 +19,7 @@ export function checkQuickCheck(input: QuickCheckInput): FieldProblem[] {
 }
 
 function checkQuantity(input: QuickCheckInput): FieldProblem[] {
-  const { grids, knownValue, target } = input;
+  const { grids, knownValue, target, procedure, formalOrder, uNumFactor } = input;
   const faults = grids.flatMap((grid, index): FieldProblem[] => [
     ...(grid.value === undefined ? [{ path: `grids.${index}.value`, message: 'Other grids have a value. Expected one here too.' }] : []),
     ...(grid.errors === undefined ? [] : [{ path: `grids.${index}.errors`, message: 'Expected a value or errors, not both.' }]),
@@ -28,7 +28,10 @@ function checkQuantity(input: QuickCheckInput): FieldProblem[] {
   for (const member of ['formalOrder', 'tolerance'] as const) {
     if (typeof input[member] === 'object') faults.push({ path: member, message: 'A quantity has no norms. Expected one number.' });
   }
+  const needsOrder = procedure === 'guarded-order' || procedure === 'correction-factor';
+  if (needsOrder && formalOrder === undefined && knownValue === undefined) faults.push({ path: 'formalOrder', message: `The procedure ${procedure} compares with the formal order. State it, or choose another procedure.` });
   if (knownValue !== undefined) {
+    if (uNumFactor !== undefined) faults.push({ path: 'uNumFactor', message: 'A quantity with a known value is judged by its error and has no u_num. Leave the factor out.' });
     return target === undefined ? faults : [...faults, { path: 'target', message: 'A quantity with a known value is judged by its error, not by a GCI. Leave the target out.' }];
   }
   for (const member of ['tolerance', 'expectExact', 'exactLimit', 'reference', 'derivedOrder'] as const) {
@@ -37,7 +40,8 @@ function checkQuantity(input: QuickCheckInput): FieldProblem[] {
   return faults;
 }
 
-function checkErrors({ grids, knownValue, target, formalOrder, tolerance }: QuickCheckInput): FieldProblem[] {
+function checkErrors(input: QuickCheckInput): FieldProblem[] {
+  const { grids, knownValue, target, formalOrder, tolerance } = input;
   const faults: FieldProblem[] = [];
   const stated = quickCheckNorms.filter((norm) => grids.some((grid) => grid.errors?.[norm] !== undefined));
   if (stated.length === 0) faults.push({ path: 'grids', message: 'Expected a value on every grid, or errors on every grid.' });
@@ -52,6 +56,9 @@ function checkErrors({ grids, knownValue, target, formalOrder, tolerance }: Quic
   });
   if (knownValue !== undefined) faults.push({ path: 'knownValue', message: 'A known value goes with values, not with errors.' });
   if (target !== undefined) faults.push({ path: 'target', message: 'A target for the GCI goes with values, not with errors.' });
+  for (const member of ['procedure', 'uNumFactor'] as const) {
+    if (input[member] !== undefined) faults.push({ path: member, message: 'This goes with values, not with errors.' });
+  }
   for (const [member, given] of [['formalOrder', formalOrder], ['tolerance', tolerance]] as const) {
     if (typeof given !== 'object') continue;
     for (const norm of quickCheckNorms) {

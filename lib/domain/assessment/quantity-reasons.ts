@@ -6,7 +6,7 @@ import { formatPercent } from '../numbers/format-percent';
 import { formatRatio } from '../numbers/format-ratio';
 import type { Explanation } from './explanation';
 import { gciWithFormalOrder } from './gci-with-formal-order';
-import { printGci } from './print-gci';
+import { estimatedBand, printBand } from './estimated-band';
 import { joinWords } from './series-name';
 
 type QuantityText = (quantity: QuantityAssessment) => Explanation;
@@ -18,11 +18,11 @@ const behaviour = {
 
 export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
   'within-target': (quantity) => ({
-    sentence: `The GCI of the finest grid is ${percent(quantity.gci)}, within the target of ${percent(quantity.target)}; ${ordersSeen(quantity)}.${caution(quantity)}`,
+    sentence: `The ${estimatedBand(quantity).name} of the finest grid is ${percent(estimatedBand(quantity).fraction)}, within the target of ${percent(quantity.target)}; ${ordersSeen(quantity)}.${caution(quantity)}`,
     nextStep: quantity.triples.length > 1 ? 'Nothing more is needed.' : 'Nothing more is needed; a fourth grid would confirm the order.',
   }),
   'above-target': (quantity) => ({
-    sentence: `The GCI of the finest grid is ${percent(quantity.gci)}, above the target of ${percent(quantity.target)}; ${ordersSeen(quantity)}.${caution(quantity)}`,
+    sentence: `The ${estimatedBand(quantity).name} of the finest grid is ${percent(estimatedBand(quantity).fraction)}, above the target of ${percent(quantity.target)}; ${ordersSeen(quantity)}.${caution(quantity)}`,
     nextStep: 'Add a finer grid, or state the target the value is really needed to.',
   }),
   'not-monotone': (quantity) => {
@@ -39,7 +39,7 @@ export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
     nextStep: 'Add a finer grid, or check the declared order for this quantity: singular points and limiters lower it.',
   }),
   'order-not-observed': (quantity) => ({
-    sentence: `Two grids show no order: a GCI of ${printGci(quantity)} assumes formal order ${quantity.formalOrder ?? '–'} and takes a safety factor of ${quantity.safetyFactor ?? '–'}.`,
+    sentence: `Two grids show no order: a GCI of ${printBand(quantity)} assumes formal order ${quantity.formalOrder ?? '–'} and takes a safety factor of ${quantity.safetyFactor ?? '–'}.`,
     nextStep: 'Add a third grid, finer by a ratio of 1.3 or more.',
   }),
   'order-out-of-range': (quantity) => ({
@@ -59,10 +59,18 @@ export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
   'no-target': (quantity) => explainNoTarget(quantity),
 };
 
-function explainNoTarget({ name, formalOrder, target, gciAbsolute, unit, orderObserved }: QuantityAssessment): Explanation {
+function explainNoTarget(quantity: QuantityAssessment): Explanation {
+  const { name, formalOrder, target, unit, orderObserved } = quantity;
   if (formalOrder !== null && target !== null) {
+    const { name: band, absolute } = estimatedBand(quantity);
+    if (absolute === null) {
+      return {
+        sentence: `The procedure gives no uncertainty of ${name} on these grids.`,
+        nextStep: 'Add grids, four for a fit by least squares, or choose another procedure in the case.',
+      };
+    }
     return {
-      sentence: `The value of ${name} is smaller than ten times its last change, so a GCI in percent of it says nothing; in the quantity's unit it is ${gciAbsolute === null ? '–' : formatMeasure(gciAbsolute, unit)}.`,
+      sentence: `The value of ${name} is smaller than ten times its last change, so ${band} in percent of it says nothing; in the quantity's unit it is ${formatMeasure(absolute, unit)}.`,
       nextStep: 'Judge the uncertainty in the unit of the quantity, or take a quantity that is not near zero.',
     };
   }
@@ -83,7 +91,8 @@ function ordersSeen({ triples }: QuantityAssessment): string {
 }
 
 function gciSeen(quantity: QuantityAssessment): string {
-  return quantity.gciAbsolute === null ? '' : `: the GCI of ${printGci(quantity)} is not held against the target`;
+  const { name, absolute } = estimatedBand(quantity);
+  return absolute === null ? '' : `: the ${name} of ${printBand(quantity)} is not held against the target`;
 }
 
 function isOutOfRange({ order, convergence }: QuantityAssessment['triples'][number]): boolean {

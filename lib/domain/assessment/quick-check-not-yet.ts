@@ -2,8 +2,7 @@ import type { NotAvailableYet } from '../api/not-yet';
 import type { QuickCheckInput } from './quick-schema';
 
 /** The first member that asks for what is not available yet. */
-export function notYetOfQuickCheck({ grids, procedure, formalOrder, tolerance }: QuickCheckInput): NotAvailableYet | null {
-  if (procedure !== undefined && procedure !== 'three-grid') return { path: 'procedure', what: `The procedure ${procedure}` };
+export function notYetOfQuickCheck({ grids, formalOrder, tolerance }: QuickCheckInput): NotAvailableYet | null {
   const perNorm: [string, object | undefined][] = grids.flatMap((grid, index) => [
     [`grids.${index}.errors`, grid.errors], [`grids.${index}.iterativeError`, grid.iterativeError],
   ]);

@@ -33,6 +33,7 @@ export function quickCheckQuantity(input: QuickCheckInput, grids: readonly Quick
     name, unit: null,
     grids: grids.flatMap(({ label, h, value, resolution }) => (value === undefined ? [] : [{ label, h, value, resolution: resolution ?? null }])),
     formalOrder: typeof input.formalOrder === 'number' ? input.formalOrder : null, target: input.target ?? null,
+    procedure: input.procedure ?? 'three-grid', uNumFactor: input.uNumFactor ?? null,
     minimumGrids: input.minimumGrids ?? builtInRule.minimumGridsOfQuantity,
   };
 }

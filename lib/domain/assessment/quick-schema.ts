@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { procedures } from '@/lib/numerics/assessment';
 import { contract } from '../api/contract';
 import { labelSchema } from '../api/names';
 import { cellsPerDirectionSchema, normNameSchema } from '../cases/definition';
@@ -20,7 +21,7 @@ export const quickCheckSchema = z.strictObject({
   formalOrder: z.union([orders, z.partialRecord(normNameSchema, orders)]).optional(),
   tolerance: z.union([tolerances, z.partialRecord(normNameSchema, tolerances)]).optional(),
   minimumGrids: z.number().int().min(3).max(20).optional(),
-  procedure: z.enum(['three-grid', 'guarded-order', 'least-squares', 'correction-factor']).optional(),
+  procedure: z.enum(procedures).optional(), uNumFactor: positive.max(10).optional(),
   expectExact: z.boolean().optional(), exactLimit: positive.optional(), reference: positive.optional(), derivedOrder: orders.optional(),
   knownValue: measuredSchema.optional(), target: positive.optional(),
 }).meta({ description: 'One quantity (every grid has a value) or one field (every grid has errors).' });

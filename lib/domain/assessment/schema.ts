@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { reasonCodes } from '@/lib/numerics/assessment';
+import { procedureBranches, procedures, reasonCodes } from '@/lib/numerics/assessment';
 
 const nullableNumber = z.number().nullable();
 const pointSchema = z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() });
@@ -19,6 +19,10 @@ const fieldAssessmentSchema = z.strictObject({
   fit: z.strictObject({ order: z.number(), low: nullableNumber, high: nullableNumber }).nullable(),
   outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
 });
+const valueFitSchema = z.strictObject({
+  kind: z.enum(['power', 'first-term', 'second-term', 'two-terms']), weighted: z.boolean(), value0: z.number(), alpha: z.array(z.number()),
+  order: nullableNumber, sigma: z.number(), dataRange: z.number(), uncertainty: z.array(z.number()), atBound: z.enum(['lowest', 'highest']).nullable(),
+});
 const quantityAssessmentSchema = z.strictObject({
   name: z.string(), unit: z.string().nullable(), formalOrder: nullableNumber, target: nullableNumber,
   values: z.array(z.strictObject({ label: z.string(), h: z.number(), value: z.number() })),
@@ -27,7 +31,10 @@ const quantityAssessmentSchema = z.strictObject({
   extrapolated: nullableNumber, relativeChange: nullableNumber, extrapolatedError: nullableNumber,
   safetyFactor: nullableNumber, gci: nullableNumber, gciAbsolute: nullableNumber, gciCoarse: nullableNumber, asymptoticRatio: nullableNumber,
   halfRange: nullableNumber,
-  procedure: z.literal('three-grid'), branch: z.enum(['observed', 'formal-two-grids', 'none']),
+  procedure: z.enum(procedures), branch: z.enum(procedureBranches),
+  constants: z.record(z.string(), z.number()).optional(), fit: valueFitSchema.nullable().optional(),
+  uncertainty: nullableNumber.optional().meta({ description: 'U of the finest grid in the quantity’s unit, where the procedure gives one instead of a GCI.' }),
+  uncertaintyFraction: nullableNumber.optional(), uNum: nullableNumber.optional().meta({ description: 'Standard uncertainty of the finest grid, in the unit; only where the factor is stated.' }),
   triples: z.array(z.strictObject({ grids: z.array(z.string()), order: nullableNumber, convergence: convergenceSchema })),
   outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
 });

@@ -1,5 +1,6 @@
 import type { FieldAssessment, Outcome, QuantityAssessment } from '@/lib/numerics/assessment';
 import { decidingParts, type StatedAssessment } from './deciding-parts';
+import { estimatedBand } from './estimated-band';
 import { explainStudy } from './explain-study';
 import { explainField, explainQuantity } from './reason-text';
 import { stateQuantity } from './state-quantity';
@@ -38,6 +39,9 @@ function farthestField(fields: readonly FieldAssessment[]): FieldAssessment | un
 }
 
 function worstQuantity(quantities: readonly QuantityAssessment[]): QuantityAssessment | undefined {
-  const share = ({ gci, target }: QuantityAssessment) => (gci === null ? Infinity : gci / (target ?? 1));
+  const share = (quantity: QuantityAssessment) => {
+    const { fraction } = estimatedBand(quantity);
+    return fraction === null ? Infinity : fraction / (quantity.target ?? 1);
+  };
   return quantities.reduce<QuantityAssessment | undefined>((worst, quantity) => (worst && share(worst) >= share(quantity) ? worst : quantity), undefined);
 }

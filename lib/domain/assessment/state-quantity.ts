@@ -2,21 +2,23 @@ import type { QuantityAssessment } from '@/lib/numerics/assessment';
 import { formatMeasure } from '../numbers/format-measure';
 import { formatOrder } from '../numbers/format-order';
 import { formatValue } from '../numbers/format-value';
-import { printGci } from './print-gci';
+import { estimatedBand, printBand } from './estimated-band';
 
 /**
- * How a quantity converges, in words: order, extrapolated value and GCI of the finest grid. Half the range where there is
+ * How a quantity converges, in words: order, extrapolated value and uncertainty of the finest grid. Half the range where there is
  * no order. Null where too little is known for a sentence of its own.
  */
 export function stateQuantity(quantity: QuantityAssessment): string | null {
-  const { convergence, orderUsed, extrapolated, gciAbsolute, halfRange, unit, branch } = quantity;
+  const { convergence, orderUsed, orderObserved, extrapolated, halfRange, unit, branch } = quantity;
   const values = `The values of ${quantity.name}`;
-  if (orderUsed !== null && extrapolated !== null && gciAbsolute !== null) {
-    const towards = `${formatValue(extrapolated, gciAbsolute, 1)}${unit ? ` ${unit}` : ''}`;
-    const how = branch === 'observed'
-      ? `${values} converge monotonically with order ${formatOrder(orderUsed)} towards ${towards}.`
-      : `Two grids show no order; with the formal order ${orderUsed} ${values.replace('The', 'the')} head for ${towards}.`;
-    return `${how} On the finest grid the grid convergence index is ${printGci(quantity)}.`;
+  const { absolute, longName } = estimatedBand(quantity);
+  if (extrapolated !== null && absolute !== null) {
+    const towards = `${formatValue(extrapolated, absolute, 1)}${unit ? ` ${unit}` : ''}`;
+    const how = branch === 'formal-two-grids'
+      ? `Two grids show no order; with the formal order ${orderUsed ?? '–'} ${values.replace('The', 'the')} head for ${towards}.`
+      : convergence === 'monotone' ? `${values} converge monotonically${orderObserved === null ? '' : ` with order ${formatOrder(orderObserved)}`} towards ${towards}.`
+        : `${values} do not converge monotonically; a fit over all grids heads for ${towards}.`;
+    return `${how} On the finest grid the ${longName} is ${printBand(quantity)}.`;
   }
   if (convergence === null || halfRange === null) return null;
   const range = formatMeasure(halfRange, unit);

@@ -82,13 +82,13 @@ function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm, signif
   return error === undefined ? null : { label: grid.label, h, error, knownError: iterativeError, exactNorm: null, at: null };
 }
 
-function quantitySeries({ name, unit, formalOrder, target }: DeclaredQuantity, placed: readonly PlacedGrid[], minimumGrids: number): QuantitySeries {
+function quantitySeries({ name, unit, formalOrder, target, procedure, uNumFactor }: DeclaredQuantity, placed: readonly PlacedGrid[], minimumGrids: number): QuantitySeries {
   return {
-    name, unit: unit ?? null, formalOrder: formalOrder ?? null, target: target ?? null, minimumGrids,
+    name, unit: unit ?? null, formalOrder: formalOrder ?? null, target: target ?? null, minimumGrids, procedure, uNumFactor: uNumFactor ?? null,
     grids: placed.flatMap(({ grid: { label, values }, h }) => {
       const stated = values?.[name];
       if (stated === undefined) return [];
-      return [typeof stated === 'number' ? { label, h, value: stated, resolution: null } : { label, h, value: stated.value, resolution: stated.resolution ?? null }];
+      return [typeof stated === 'number' ? { label, h, value: stated, resolution: null } : { label, h, ...stated, resolution: stated.resolution ?? null }];
     }),
   };
 }

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { procedures } from '@/lib/numerics/assessment';
 import { labelSchema } from '../api/names';
 
 const positive = z.number().positive();
@@ -41,8 +42,8 @@ const declaredQuantitySchema = z.strictObject({
   formalOrder: positive.max(20).optional(),
   knownValue: z.number().optional(),
   target: positive.optional().meta({ description: 'Largest acceptable GCI, as a fraction.' }),
-  procedure: z.enum(['three-grid', 'guarded-order', 'least-squares', 'correction-factor']).default('three-grid'),
-  uNumFactor: positive.optional(),
+  procedure: z.enum(procedures).default('three-grid'),
+  uNumFactor: positive.max(10).optional().meta({ description: 'k: what the band of about 95 % is divided by to give u_num.' }),
 });
 export type DeclaredQuantity = z.infer<typeof declaredQuantitySchema>;
 

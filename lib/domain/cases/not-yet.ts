@@ -1,17 +1,16 @@
 import type { NotAvailableYet } from '../api/not-yet';
-import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from './definition';
+import type { CaseDefinition, DeclaredField, DeclaredNorm } from './definition';
 
 type Asked = NotAvailableYet | false;
 
 /** The first member that asks for what is not available yet. */
 export function notYetOfCase(definition: CaseDefinition): NotAvailableYet | null {
-  const { fields, quantities, sampling, sourceSampling, boundaryBand } = definition;
+  const { fields, sampling, sourceSampling, boundaryBand } = definition;
   const asked: Asked[] = [
     isAveraged(sampling) && { path: 'sampling', what: `Sampling by ${sampling}` },
     isAveraged(sourceSampling) && { path: 'sourceSampling', what: `Source sampling by ${sourceSampling}` },
     boundaryBand !== undefined && { path: 'boundaryBand', what: 'A boundary band' },
     ...fields.flatMap((field, index) => askedByField(field, `fields.${index}`)),
-    ...quantities.flatMap((quantity, index) => askedByQuantity(quantity, `quantities.${index}`)),
   ];
   return asked.find((each) => each !== false) ?? null;
 }
@@ -34,12 +33,5 @@ function askedByNorm({ norm, logFactor, regularity, backing }: DeclaredNorm, pat
     logFactor !== undefined && { path: `${path}.logFactor`, what: 'A log factor' },
     regularity !== undefined && { path: `${path}.regularity`, what: 'A regularity' },
     backing !== undefined && 'scheme' in backing && { path: `${path}.backing.scheme`, what: 'Backing by a scheme' },
-  ];
-}
-
-function askedByQuantity({ procedure, uNumFactor }: DeclaredQuantity, path: string): Asked[] {
-  return [
-    procedure !== 'three-grid' && { path: `${path}.procedure`, what: `The procedure ${procedure}` },
-    uNumFactor !== undefined && { path: `${path}.uNumFactor`, what: 'A factor for u_num' },
   ];
 }

@@ -6,6 +6,10 @@ import { dimensionSchema } from '../problems/schema';
 const positive = z.number().positive();
 /** No quantity is larger; differences and fractions of such values stay within a double. */
 export const measuredSchema = z.number().min(-1e100).max(1e100);
+const measuredWithErrorsSchema = z.strictObject({
+  value: measuredSchema, resolution: positive.optional(),
+  iterativeError: z.number().nonnegative().max(1e100).optional(), timeError: z.number().nonnegative().max(1e100).optional(),
+}).meta({ description: 'A value with one unit of its last digit, and what iteration and time step may have added, in its unit.' });
 const perNorm = z.partialRecord(normNameSchema, z.number().nonnegative());
 
 /** How a run was made: what an auditor needs to make it again. */
@@ -20,7 +24,7 @@ export const gridInputSchema = z.strictObject({
   label: labelSchema,
   cells: z.number().int().positive().max(1e15).optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
   h: positive.optional(), dt: positive.optional(), t: z.number().optional(),
-  values: z.record(z.string().min(1), z.union([measuredSchema, z.strictObject({ value: measuredSchema, resolution: positive.optional() })])).optional(),
+  values: z.record(z.string().min(1), z.union([measuredSchema, measuredWithErrorsSchema])).optional(),
   errors: z.record(z.string().min(1), perNorm).optional(),
   iterativeError: z.record(z.string().min(1), perNorm).optional(),
   run: runRecordSchema.optional(),

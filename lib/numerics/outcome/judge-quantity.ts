@@ -1,63 +1,43 @@
 import type { QuantityAssessment, QuantitySeries, Triple } from '../assessment';
 import { orderRange } from '../order/order-range';
 import { oscillatingFormula } from '../order/oscillating-formula';
-import { relativeSize } from '../uncertainty/relative-size';
-import { threeGridFigures } from '../uncertainty/three-grid-figures';
+import { numericalUncertainty } from '../uncertainty/numerical-uncertainty';
+import { procedureFigures } from '../uncertainty/procedure-figures';
 import { quantityRule } from './quantity-rule';
-import { quantityTriples, type PrintedGrid, type QuantityTriple } from './quantity-triples';
-
-type Figures = Pick<QuantityAssessment, 'extrapolated' | 'relativeChange' | 'extrapolatedError' | 'safetyFactor' | 'gci' | 'gciAbsolute'
-  | 'gciCoarse' | 'asymptoticRatio' | 'orderUsed' | 'branch' | 'halfRange'>;
-
-const noFigures: Figures = {
-  extrapolated: null, relativeChange: null, extrapolatedError: null, safetyFactor: null, gci: null, gciAbsolute: null, gciCoarse: null,
-  asymptoticRatio: null, orderUsed: null, branch: 'none', halfRange: null,
-};
+import { quantityTriples } from './quantity-triples';
 
 /**
- * Order, extrapolation, GCI and outcome of a quantity without an exact solution, by the three-grid procedure on its three
- * finest grids; two grids take the formal order with a safety factor of 3. Grids run finest first, h in any unit.
+ * Order, extrapolation, GCI and outcome of a quantity without an exact solution, by the procedure declared for
+ * it; two grids take the formal order with a safety factor of 3. Grids run finest first, h in any unit.
  *
- * No extrapolated value and no GCI where the values oscillate, diverge or do not change: half their range instead.
+ * No extrapolated value where the values oscillate, diverge or do not change: half their range instead (procedureFigures).
  * Throws where spacings do not rise or a value is not finite.
  */
 export function judgeQuantity(series: QuantitySeries): QuantityAssessment {
   checkSeries(series);
   const { grids, triples, areApart } = quantityTriples(series);
   const [last] = triples;
-  const figures = last ? figuresOf(last) : formalFigures(grids, series.formalOrder);
+  const { orderObserved = last?.order ?? null, ...figures } = procedureFigures(series.procedure, { all: series.grids, grids, last, formalOrder: series.formalOrder });
   return {
     name: series.name, unit: series.unit, formalOrder: series.formalOrder, target: series.target,
     values: series.grids.map(({ label, h, value }) => ({ label, h, value })),
     convergence: last?.convergence ?? null,
-    orderObserved: last?.order ?? null,
+    orderObserved,
     orderRange: last && last.order !== null ? orderRange(...last.grids) : null,
     formulaValue: last ? oscillatingFormula(last.differences) : null,
-    procedure: 'three-grid', ...figures,
+    procedure: series.procedure, ...figures, ...standardUncertainty(series, figures.gciAbsolute ?? figures.uncertainty),
     triples: triples.map((triple): Triple => ({
       grids: triple.grids.map((grid) => grid.label), order: triple.order, convergence: triple.convergence,
     })),
-    ...quantityRule(series, { grids, triples, areApart, gci: figures.gci }),
+    ...quantityRule(series, { grids, triples, areApart, band: figures.gci ?? figures.uncertaintyFraction }),
   };
 }
 
-function figuresOf({ grids: [fine, middle, coarse], convergence, order }: QuantityTriple): Figures {
-  if (convergence === 'monotone' && order !== null && order > 0) {
-    return { ...noFigures, ...threeGridFigures(fine, middle, coarse, order), orderUsed: order, branch: 'observed' };
-  }
-  const values = [fine.value, middle.value, coarse.value];
-  return {
-    ...noFigures, halfRange: (Math.max(...values) - Math.min(...values)) / 2,
-    relativeChange: relativeSize(middle.value - fine.value, fine.value),
-  };
-}
-
-function formalFigures([fine, coarse]: readonly PrintedGrid[], formalOrder: number | null): Figures {
-  if (!fine || !coarse) return noFigures;
-  if (formalOrder === null) {
-    return { ...noFigures, relativeChange: relativeSize(coarse.value - fine.value, fine.value) };
-  }
-  return { ...noFigures, ...threeGridFigures(fine, coarse, null, formalOrder), orderUsed: formalOrder, branch: 'formal-two-grids' };
+/** u_num where its factor is stated; the parts of iteration and time step are those of the finest grid. */
+function standardUncertainty({ uNumFactor: factor, grids }: QuantitySeries, band: number | null): { uNum?: number | null } {
+  if (factor === null) return {};
+  const { iterativeError: iterative = 0, timeError: time = 0 } = grids[0] ?? {};
+  return { uNum: numericalUncertainty(band, { factor, iterative, time }) };
 }
 
 function checkSeries({ name, grids }: QuantitySeries): void {

@@ -60,10 +60,9 @@ describe('assessQuickCheck', () => {
 });
 
 describe('notYetOfQuickCheck', () => {
-  it('names procedures and norms that are not there', () => {
+  it('names norms that are not there', () => {
     const grids = [{ h: 1, value: 1 }, { h: 0.5, value: 2 }];
-    expect(notYetOfQuickCheck(read({ grids, procedure: 'three-grid' }))).toBeNull();
-    expect(notYetOfQuickCheck(read({ grids, procedure: 'guarded-order' }))).toMatchObject({ path: 'procedure' });
+    expect(notYetOfQuickCheck(read({ grids }))).toBeNull();
     expect(notYetOfQuickCheck(read({ grids: [{ h: 1, errors: { H1: 1 } }, { h: 0.5, errors: { H1: 1 } }] }))).toMatchObject({ path: 'grids.0.errors.H1' });
   });
 });

@@ -83,7 +83,7 @@ describe('judgeQuantity(series)', () => {
 
 describe('errorSeriesOfQuantity(quantity, known value)', () => {
   it('is judged by its errors, with half units of the digits as known errors', () => {
-    const series = errorSeriesOfQuantity(quantitySeries(h, second, { formalOrder: 2, minimumGrids: 4 }), 100, [0.01]);
+    const series = errorSeriesOfQuantity(quantitySeries(h, second, { formalOrder: 2, minimumGrids: 4, grids: h.map((spacing, i) => ({ label: `g${i + 1}`, h: spacing, value: second[i] ?? 0, resolution: null, iterativeError: i === 0 ? 0.01 : 0 })) }), 100);
     expect(series).toMatchObject({ field: 'drag', norm: 'value', scale: 100, counts: true });
     expect(series.grids.map((grid) => grid.error)).toEqual([0.25, 1, 4, 16]);
     expect(series.grids[0]?.knownError).toBeCloseTo(0.015, 12);

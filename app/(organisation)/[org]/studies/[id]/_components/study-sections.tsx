@@ -5,6 +5,7 @@ import { useOrganisation } from '@/app/_components/organisation/organisation-con
 import { NormSymbol, Sym } from '@/app/_components/ui/symbols';
 import { PageTitle } from '@/app/_components/ui/page-title';
 import { Section } from '@/app/_components/ui/section';
+import { procedureNames, procedureSources } from '@/lib/domain/assessment/explain-procedure';
 import { explainSpacing } from '@/lib/domain/assessment/explain-spacing';
 import type { Assessment } from '@/lib/domain/assessment/schema';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
@@ -103,7 +104,7 @@ function Results({ study, assessment }: { study: Study; assessment: Assessment }
         </Section>
       )}
       {quantities.length > 0 && (
-        <Section note={<p>Relative to the finest value. Where that is near zero the GCI in the unit is the one to read.</p>}>
+        <Section note={<QuantityNotes quantities={quantities} />}>
           <QuantityTable quantities={quantities} kind={study.case.kind} number={numbers.quantities} />
           <div className="mt-8"><TripleTable quantities={quantities} number={numbers.triples} /></div>
         </Section>
@@ -111,6 +112,16 @@ function Results({ study, assessment }: { study: Study; assessment: Assessment }
       <Section note={<GridNotes study={study} assessment={assessment} />}>
         <GridTable study={study} assessment={assessment} number={numbers.grids} />
       </Section>
+    </>
+  );
+}
+
+function QuantityNotes({ quantities }: Pick<Assessment, 'quantities'>) {
+  const used = [...new Set(quantities.map(({ procedure }) => procedure))];
+  return (
+    <>
+      <p>Relative to the finest value. Where that is near zero the figure in the unit is the one to read.</p>
+      {used.map((procedure) => <p key={procedure}><b>{procedureNames[procedure]}</b>: {procedureSources[procedure]}</p>)}
     </>
   );
 }
