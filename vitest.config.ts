@@ -27,6 +27,8 @@ export default defineConfig({
       project('integration', shared(1, 60_000)),
       project('browser', shared(2, 120_000)),
       project('faults', shared(3, 120_000)),
+      // Last, since it reads the logs of all the others.
+      project('logs', shared(4, 60_000)),
     ],
   },
 });

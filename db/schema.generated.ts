@@ -144,6 +144,7 @@ export interface Outbox {
   last_error: string | null;
   organisation_id: string;
   queued_at: Timestamp | null;
+  request_id: Generated<string | null>;
   state: Generated<string>;
   subject_id: string;
   subject_revision: number | null;

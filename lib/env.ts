@@ -2,28 +2,37 @@ import { z } from 'zod';
 
 const redisUrl = /^rediss?:\/\//;
 
+const seconds = (smallest: number) => z.coerce.number<string>().int().min(smallest);
+const port = z.coerce.number<string>().int().min(1).max(65535);
+
+/** The descriptions are what the production page of the docs prints. */
 const envSchema = z.object({
-  FOURFOLD_MODE: z.enum(['demo', 'production']).default('demo'),
-  PUBLIC_URL: z.url(),
-  DATABASE_URL: z.url(),
-  REDIS_URL: z.string().regex(redisUrl, 'expected redis://host:port'),
-  STORAGE_ENDPOINT: z.url(),
-  STORAGE_PUBLIC_URL: z.url(),
-  STORAGE_BUCKET: z.string().min(1),
-  STORAGE_REGION: z.string().default('us-east-1'),
-  STORAGE_ACCESS_KEY: z.string().min(1),
-  STORAGE_SECRET_KEY: z.string().min(1),
-  STORAGE_QUOTA_BYTES: z.coerce.number().int().min(0).default(100e9),
-  PART_ADDRESS_SECONDS: z.coerce.number().int().min(1).max(604_800).default(3600),
-  TRUSTED_PROXIES: z.string().default(''),
-  LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error']).default('info'),
+  FOURFOLD_MODE: z.enum(['demo', 'production']).default('demo').describe('In demo mode the demo may be filled in, whose passwords are known.'),
+  PUBLIC_URL: z.url().describe('Where people reach the product. With https, session cookies are sent over TLS only.'),
+  DATABASE_URL: z.url().describe('PostgreSQL as the role fourfold_app.'),
+  REDIS_URL: z.string().regex(redisUrl, 'expected redis://host:port').describe('Redis for the queue, live updates and rate limits. It must write to disk and evict nothing.'),
+  STORAGE_ENDPOINT: z.url().describe('The S3-compatible store, as web and worker reach it.'),
+  STORAGE_PUBLIC_URL: z.url().describe('The same store, as browsers reach it.'),
+  STORAGE_BUCKET: z.string().min(1).describe('The bucket that holds the files. It must exist.'),
+  STORAGE_REGION: z.string().default('us-east-1').describe('The region of the bucket.'),
+  STORAGE_ACCESS_KEY: z.string().min(1).describe('The key that may read, write and delete in the bucket.'),
+  STORAGE_SECRET_KEY: z.string().min(1).describe('The secret of that key.'),
+  STORAGE_QUOTA_BYTES: z.coerce.number<string>().int().min(0).default(100e9).describe('Bytes of files an organisation may keep, unless it has a limit of its own.'),
+  PART_ADDRESS_SECONDS: z.coerce.number<string>().int().min(1).max(604_800).default(3600).describe('How long the address of a part of an upload is good for.'),
+  TRUSTED_PROXIES: z.string().default('').describe('Addresses, separated by commas, whose X-Forwarded-For is believed.'),
+  LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error']).default('info').describe('Lines of this weight and above are written.'),
+  METRICS_TOKEN: z.string().min(16).optional().describe('Whoever sends it as a bearer token may read the metrics. Unless set, only the machine itself may.'),
+  METRICS_PORT: port.optional().describe('Where a worker serves its metrics: on 127.0.0.1, or with METRICS_TOKEN on every address. Unless set it serves none.'),
+  WORKER_THREADS: z.coerce.number<string>().int().min(1).max(64).optional().describe('Files a worker reads at once. Unless set, one for each processor.'),
+  DRAIN_SECONDS: seconds(1).default(8).describe('How long a web process that is told to end waits for requests in flight. Whoever stops it must wait two seconds longer.'),
 });
 
 export type Env = z.infer<typeof envSchema>;
 
 /** Reads the environment once; a missing or wrong variable stops the start and is named. */
 export function readEnv(source: Record<string, string | undefined>): Env {
-  const parsed = envSchema.safeParse(source);
+  // Set to nothing is not set: what starts processes often has no other way to say so.
+  const parsed = envSchema.safeParse(Object.fromEntries(Object.entries(source).filter(([, value]) => value !== '')));
   if (parsed.success) return parsed.data;
   const faults = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
   throw new Error(`The environment is not complete.\n${faults.join('\n')}`);

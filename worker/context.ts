@@ -23,7 +23,7 @@ export function openWorkerContext(env: Env) {
   };
 
   return {
-    context, log, redis, adding,
+    context, log, redis, adding, pool,
     /** A connection of its own for LISTEN, opened anew by the caller when it breaks. */
     openListener: () => new Client({ connectionString: env.DATABASE_URL }),
     async close(): Promise<void> {

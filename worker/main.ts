@@ -7,17 +7,21 @@ import { createThreadReader } from './compute/thread-reader';
 import { openWorkerContext } from './context';
 import { createDispatcher } from './outbox/dispatcher';
 import { listenToOutbox } from './outbox/listener';
+import { serveMetrics } from './metrics-server';
 import { createQueueWorker } from './queue-worker';
 import { startSweeps } from './schedules/sweeps';
+import { createWorkerMetrics } from './worker-metrics';
 
 const sweepEveryMilliseconds = 60_000;
 /** The supervisor kills what has not ended ten seconds after it was asked to. */
 const finishWithinMilliseconds = 7000;
 
-const connections = openWorkerContext(readEnv(process.env));
+const env = readEnv(process.env);
+const connections = openWorkerContext(env);
 const { context, log, redis, adding, openListener } = connections;
-const threads = os.availableParallelism();
+const threads = env.WORKER_THREADS ?? os.availableParallelism();
 const pool = createThreadPool(threads);
+const metrics = createWorkerMetrics(connections.pool);
 // The queue sends its first command as it is made; on a connection that is not ready that fails for good.
 if (adding.status !== 'ready') await new Promise<void>((resolve) => adding.once('ready', resolve));
 const queue = new Queue<JobPayload>(queueName, { connection: adding });
@@ -25,12 +29,13 @@ queue.on('error', (error) => log.warn({ fault: error.message }, 'queue'));
 
 const dispatcher = createDispatcher(context, queue);
 // More jobs than threads, so that assessments pass by files that wait for one.
-const worker = createQueueWorker(context, redis, { reader: createThreadReader(pool), concurrency: threads + 2 });
+const worker = createQueueWorker(context, redis, { reader: metrics.counting(createThreadReader(pool)), metrics, concurrency: threads + 2 });
 const stopListening = listenToOutbox(openListener, log, () => dispatcher.dispatch());
 adding.on('ready', () => dispatcher.sweep());
 dispatcher.sweep();
 const schedule = setInterval(() => dispatcher.sweep(), sweepEveryMilliseconds);
 const stopSweeps = startSweeps(context);
+const stopServing = env.METRICS_PORT === undefined ? () => undefined : serveMetrics(metrics.registry, { port: env.METRICS_PORT, token: env.METRICS_TOKEN, log });
 log.info({ threads }, 'worker ready');
 
 let isStopping = false;
@@ -41,6 +46,7 @@ async function stop(signal: string): Promise<void> {
   isStopping = true;
   log.info({ signal }, 'worker stopping');
   clearInterval(schedule);
+  stopServing();
   await Promise.all([stopListening(), dispatcher.close()]);
   const swept = stopSweeps();
   const late = new Promise<'late'>((resolve) => setTimeout(resolve, finishWithinMilliseconds, 'late'));

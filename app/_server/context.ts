@@ -4,6 +4,7 @@ import type { Pool } from 'pg';
 import { openDatabase } from '@/db/client';
 import { readEnv, type Env } from '@/lib/env';
 import { createLogger } from '@/lib/platform/logger';
+import { createQueueCounts } from '@/lib/platform/queue-counts';
 import { createRateLimits } from '@/lib/platform/rate-limits';
 import { openRedis } from '@/lib/platform/redis';
 import { createSessions, type Sessions } from '@/lib/platform/sessions';
@@ -11,8 +12,18 @@ import { createStorage } from '@/lib/platform/storage';
 import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { createStudyEvents } from '@/lib/platform/study-events';
 import type { Context } from '@/lib/services/context';
+import { watchRequests } from './watch-requests';
+import { createWebMetrics, type WebMetrics } from './web-metrics';
 
-interface Server { env: Env; context: Context; sessions: Sessions; pool: Pool; redis: Redis }
+interface Server {
+  env: Env;
+  context: Context;
+  sessions: Sessions;
+  pool: Pool;
+  redis: Redis;
+  metrics: WebMetrics;
+  countQueue: () => Promise<Record<string, number>>;
+}
 
 function openServer(): Server {
   const env = readEnv(process.env);
@@ -33,7 +44,11 @@ function openServer(): Server {
     clock: () => new Date(),
     log,
   };
-  return { env, context, sessions: createSessions(pool, env.PUBLIC_URL.startsWith('https:')), pool, redis };
+  const metrics = createWebMetrics(pool);
+  watchRequests(log, metrics);
+  return {
+    env, context, sessions: createSessions(pool, env.PUBLIC_URL.startsWith('https:')), pool, redis, metrics, countQueue: createQueueCounts(redis, log),
+  };
 }
 
 // Kept on globalThis so that a reload in development does not open the connections again.

@@ -1,6 +1,9 @@
 import 'server-only';
+import { drainSignal } from './request-record';
 
 const heartbeatMilliseconds = 15_000;
+/** What a page waits before it asks again, when this process ends and another is there. */
+const comeBackMilliseconds = 500;
 
 type Send = (event: string, data: string) => void;
 
@@ -18,6 +21,7 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
     else early.push(bytes);
   };
 
+  const draining = drainSignal();
   return begin((event, data) => write(`event: ${event}\ndata: ${data}\n\n`)).then((stop) => {
     const heartbeat = setInterval(() => write(': still here\n\n'), heartbeatMilliseconds);
     let isOver = false;
@@ -25,22 +29,30 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
       if (isOver) return;
       isOver = true;
       clearInterval(heartbeat);
+      signal.removeEventListener('abort', leave);
+      draining.removeEventListener('abort', takeLeave);
       stream = null;
       early = [];
       stop();
     };
+    function leave(): void {
+      const ending = stream;
+      end();
+      ending?.close();
+    }
+    function takeLeave(): void {
+      write(`retry: ${comeBackMilliseconds}\n\n`);
+      leave();
+    }
     const body = new ReadableStream<Uint8Array>({
       start(controller) {
         stream = controller;
         for (const bytes of early.splice(0)) controller.enqueue(bytes);
-        const leave = () => {
-          if (isOver) return;
-          end();
-          controller.close();
-        };
-        // Gone while the listening began: no event will say so again.
+        // Gone or ending since before the listening began: no event will say so again.
         if (signal.aborted) leave();
-        else signal.addEventListener('abort', leave);
+        else if (draining.aborted) takeLeave();
+        signal.addEventListener('abort', leave);
+        draining.addEventListener('abort', takeLeave);
       },
       cancel: end,
     });

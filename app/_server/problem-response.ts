@@ -1,6 +1,7 @@
 import 'server-only';
 import { AppError } from '@/lib/errors';
 import type { Logger } from '@/lib/platform/logger';
+import { currentRequest } from './request-record';
 
 const unreachableCodes = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'ENOTFOUND', 'EPIPE', '57P01', '57P03']);
 
@@ -19,9 +20,11 @@ function toAppError(error: unknown, log: Logger, requestId: string): AppError {
 }
 
 /** An error as application/problem+json (RFC 9457); what nobody foresaw is logged and told without its inner message. */
-export function problemResponse(error: unknown, log: Logger, requestId: string): Response {
-  const fault = toAppError(error, log, requestId);
-  const headers = new Headers({ 'content-type': 'application/problem+json', 'x-request-id': requestId, 'cache-control': 'no-store' });
+export function problemResponse(error: unknown, log: Logger): Response {
+  const record = currentRequest();
+  const fault = toAppError(error, log, record.id);
+  record.error = fault.code;
+  const headers = new Headers({ 'content-type': 'application/problem+json', 'cache-control': 'no-store' });
   if (fault.retryAfter !== undefined) headers.set('retry-after', String(fault.retryAfter));
   if (fault.code === 'not-signed-in') headers.set('www-authenticate', 'Bearer');
   const body = { type: `/docs/problems#${fault.code}`, title: fault.title, status: fault.status, detail: fault.message, errors: fault.fields };

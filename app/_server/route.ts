@@ -1,5 +1,5 @@
 import 'server-only';
-import { createHash, randomUUID } from 'node:crypto';
+import { createHash } from 'node:crypto';
 import type { ContractShape, ParsedBodyOf, ParsedQueryOf, PathParameters, ResponseOf } from '@/lib/domain/api/contract';
 import { isStorable } from '@/lib/domain/api/storable-text';
 import { AppError } from '@/lib/errors';
@@ -11,6 +11,7 @@ import { enter, identify, type Caller } from './identify';
 import { requireSameOrigin } from './origin';
 import { problemResponse } from './problem-response';
 import { invalid, readJson } from './read-body';
+import { currentRequest } from './request-record';
 
 type ContextOf<C extends ContractShape> = C['access'] extends 'public' ? Context : C['access'] extends 'signed-in' ? UserContext : MemberContext;
 
@@ -59,10 +60,20 @@ function readQuery(contract: ContractShape, url: URL): unknown {
   return parsed.data;
 }
 
-async function contextFor(contract: ContractShape, caller: Caller | null, url: URL): Promise<Context | UserContext | MemberContext> {
+async function contextOf(contract: ContractShape, caller: Caller | null, url: URL): Promise<Context | UserContext | MemberContext> {
   if (contract.access === 'public') return getServer().context;
   if (!caller) throw new AppError('not-signed-in', 'Sign in, or send a token.');
   return contract.access === 'signed-in' ? caller.user : enter(caller, url.searchParams.get('organisation'));
+}
+
+/** The context of the call, and in the record of the request whose it is. */
+async function contextFor(contract: ContractShape, caller: Caller | null, url: URL): Promise<Context | UserContext | MemberContext> {
+  const record = currentRequest();
+  if (caller?.user.token) record.tokenId = caller.user.token.id;
+  else record.userId = caller?.user.userId;
+  const ctx = { ...await contextOf(contract, caller, url), requestId: record.id };
+  if ('organisation' in ctx) record.organisationId = ctx.organisation.id;
+  return ctx;
 }
 
 function toResponse(status: number, body: unknown, headers: Headers): Response {
@@ -117,13 +128,11 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
 /** A route handler of a contract: session or token, organisation, origin, schemas, idempotency, and errors as problems. */
 export function route<C extends ContractShape>(contract: C, handler: Handler<C>) {
   return async (request: Request, routeArguments: RouteArguments): Promise<Response> => {
-    const requestId = randomUUID();
+    currentRequest().route = contract.path;
     try {
-      const response = await answer(contract, handler, request, routeArguments);
-      response.headers.set('x-request-id', requestId);
-      return response;
+      return await answer(contract, handler, request, routeArguments);
     } catch (error) {
-      return problemResponse(error, getServer().context.log, requestId);
+      return problemResponse(error, getServer().context.log);
     }
   };
 }

@@ -7,13 +7,16 @@ import type { MemberContext, UserContext } from '@/lib/services/context';
 import { enterOrganisation } from '@/lib/services/people/enter-organisation';
 import { getMe } from '@/lib/services/people/get-me';
 import { getServer } from './context';
+import { currentRequest } from './request-record';
 
 /** Who looks at the page, or nobody. */
 export const findVisitor = cache(async (): Promise<UserContext | null> => {
   const { context, sessions } = getServer();
   const sessionId = sessions.readCookie((await cookies()).toString());
   const session = sessionId === null ? null : await sessions.validate(sessionId);
-  return session ? { ...context, ...session, token: null } : null;
+  if (!session) return null;
+  currentRequest().userId = session.userId;
+  return { ...context, ...session, token: null };
 });
 
 /** The page a visitor starts from; null where nobody is signed in. */
@@ -28,7 +31,9 @@ export async function findHome(): Promise<string | null> {
 export const requireMember = cache(async (slug: string): Promise<MemberContext> => {
   const visitor = await findVisitor();
   if (!visitor) redirect(`/sign-in?next=${encodeURIComponent((await headers()).get('x-fourfold-path') ?? `/${slug}`)}`);
-  return orNotFound(enterOrganisation(visitor, slug));
+  const member = await orNotFound(enterOrganisation(visitor, slug));
+  currentRequest().organisationId = member.organisation.id;
+  return member;
 });
 
 /** What a service gives; where it finds nothing, the page is the one of an unknown address. */

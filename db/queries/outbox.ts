@@ -47,3 +47,13 @@ export async function deleteDoneOutboxRows(db: Kysely<DB>, before: Date, limit: 
     .executeTakeFirst();
   return Number(removed.numDeletedRows);
 }
+
+/** How many rows are not done, and since when the oldest, by job and state. */
+export function countOpenOutboxRows(db: Kysely<DB>) {
+  return db
+    .selectFrom('outbox')
+    .select(['job', 'state', (eb) => eb.fn.countAll<string>().as('count'), (eb) => eb.fn.min('created_at').as('oldest')])
+    .where('state', 'in', ['waiting', 'queued', 'failed'])
+    .groupBy(['job', 'state'])
+    .execute();
+}

@@ -1,4 +1,4 @@
-import type { Insertable, Kysely, Selectable, UpdateObject } from 'kysely';
+import { sql, type Insertable, type Kysely, type Selectable, type UpdateObject } from 'kysely';
 import type { DB, Uploads } from '../schema.generated';
 
 export type UploadRow = Selectable<Uploads>;
@@ -49,4 +49,10 @@ export async function updateUploadState(db: Kysely<DB>, organisationId: string, 
 
 export function updateUpload(db: Kysely<DB>, organisationId: string, id: string, changes: UpdateObject<DB, 'uploads'>) {
   return db.updateTable('uploads').set(changes).where('organisation_id', '=', organisationId).where('id', '=', id).execute();
+}
+
+/** Files on their way in every organisation. */
+export async function countReceivingUploads(db: Kysely<DB>): Promise<number> {
+  const { rows } = await sql<{ count: string }>`select count_receiving_uploads() as count`.execute(db);
+  return Number(rows[0]?.count ?? 0);
 }

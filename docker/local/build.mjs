@@ -4,7 +4,7 @@ import { bundleWorker } from './bundle-worker.mjs';
 import { withLock } from './lock.mjs';
 import { npmBinary, root, stateFolder } from './places.mjs';
 import { beginningOf, run } from './processes.mjs';
-import { hashSources } from './sources.mjs';
+import { hashSources, startFiles } from './sources.mjs';
 
 const buildsFolder = path.join(stateFolder, 'builds');
 const KEPT = 3;
@@ -55,7 +55,7 @@ async function buildInto(folder) {
   if (fs.existsSync(path.join(root, 'public'))) {
     await run({ command: 'cp', args: ['-a', path.join(root, 'public'), path.join(web, 'public')] });
   }
-  fs.copyFileSync(path.join(root, 'docker/peer-address.mjs'), path.join(web, 'peer-address.mjs'));
+  for (const name of startFiles) fs.copyFileSync(path.join(root, 'docker', name), path.join(web, name));
   await bundleWorker(path.join(folder, 'worker'));
   fs.mkdirSync(path.join(folder, 'users'));
 }

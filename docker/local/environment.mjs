@@ -37,6 +37,7 @@ export function productEnvironment(ports, outside) {
     STORAGE_SECRET_KEY: STORAGE_SECRET,
     // The SDK's note that it will want a newer Node one day would open every log.
     AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
+    METRICS_PORT: String(ports.metrics),
     SMTP_URL: `smtp://127.0.0.1:${ports.smtp}`,
   };
 }

@@ -2,7 +2,7 @@ import net from 'node:net';
 
 /** @typedef {'start' | 'test' | 'validate'} RunName */
 /** @typedef {{ postgres: number, redis: number, storage: number, storageObject: number, storageContainer: number,
- *   storageAccount: number, smtp: number, inbox: number, web: number }} Ports */
+ *   storageAccount: number, smtp: number, inbox: number, metrics: number, web: number }} Ports */
 
 const DEFAULT_BASE = 15400;
 // Tests and validation keep their distance from a running start, so one variable moves all three.
@@ -19,6 +19,7 @@ const PURPOSES = {
   storageAccount: 'the object store (account server)',
   smtp: 'the mail server',
   inbox: 'the mail inbox page',
+  metrics: 'the metrics of the worker',
   web: 'the web server',
 };
 
@@ -45,6 +46,7 @@ export function portsOf(name) {
     storageAccount: base + 5,
     smtp: base + 6,
     inbox: base + 7,
+    metrics: base + 8,
     web: name === 'start' ? readPort('PORT', 3000, 65535) : base + 10,
   };
 }

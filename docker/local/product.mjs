@@ -19,7 +19,7 @@ export function webService(build, port, env) {
     name: 'web',
     line: {
       command: process.execPath,
-      args: ['--enable-source-maps', '--import', path.join(build, 'web/peer-address.mjs'), path.join(build, 'web/server.js')],
+      args: ['--enable-source-maps', '--import', path.join(build, 'web/web-start.mjs'), path.join(build, 'web/server.js')],
       env: { ...process.env, ...env, HOSTNAME: '127.0.0.1', PORT: String(port), NEXT_TELEMETRY_DISABLED: '1' },
     },
     seconds: 60,

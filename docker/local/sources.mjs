@@ -4,6 +4,8 @@ import path from 'node:path';
 import { root } from './places.mjs';
 
 const FOLDERS = ['app', 'lib', 'db', 'worker', 'public'];
+/** What is loaded before the web server. */
+export const startFiles = ['web-start.mjs', 'peer-address.mjs', 'draining.mjs', 'request-record.mjs'];
 // Root files that no build reads, or that the build itself writes.
 const NOT_BUILT = new Set(['vitest.config.ts', 'eslint.config.mjs', 'knip.json', 'next-env.d.ts']);
 
@@ -20,7 +22,7 @@ export function hashSources() {
     .readdirSync(root)
     .filter((name) => /\.(ts|mjs|json)$/.test(name) && !NOT_BUILT.has(name))
     .map((name) => path.join(root, name));
-  const builder = ['peer-address.mjs', 'local/build.mjs', 'local/bundle-worker.mjs'].map((name) =>
+  const builder = [...startFiles, 'local/build.mjs', 'local/bundle-worker.mjs'].map((name) =>
     path.join(root, 'docker', name),
   );
   const files = [...atRoot, ...builder, ...FOLDERS.flatMap((name) => filesBelow(path.join(root, name)))];

@@ -41,7 +41,7 @@ async function startProduct() {
   await supervisor.start(workerService(build, env));
   await supervisor.start(webService(build, ports.web, env));
   console.log(`The product runs for the tests on port ${ports.web} after ${performance.now().toFixed(0)} ms.`);
-  return { ...env, ...testEnvironment(ports), TEST_BUILD_FOLDER: build, TEST_PID_FOLDER: pidFolder };
+  return { ...env, ...testEnvironment(ports), TEST_BUILD_FOLDER: build, TEST_PID_FOLDER: pidFolder, TEST_LOG_FOLDER: logFolder };
 }
 
 /** @param {string[]} args @param {Record<string, string>} env */

@@ -16,6 +16,8 @@ export interface Context {
   limits: RateLimits;
   clock: () => Date;
   log: Logger;
+  /** Of the request that is answered, or that caused the job. */
+  requestId?: string | null;
 }
 
 export interface TokenActor { id: string; name: string; scopes: TokenScope[]; codeId: string | null }

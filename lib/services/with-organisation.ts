@@ -5,9 +5,10 @@ import type { DB } from '@/db/schema.generated';
 export type Trx = Transaction<DB>;
 
 /** A transaction in which row-level security lets through the rows of one organisation. */
-export function withOrganisation<T>(ctx: { db: Database; organisation: { id: string } }, work: (trx: Trx) => Promise<T>): Promise<T> {
+export function withOrganisation<T>(ctx: { db: Database; organisation: { id: string }; requestId?: string | null }, work: (trx: Trx) => Promise<T>): Promise<T> {
   return ctx.db.transaction().execute(async (trx) => {
-    await sql`select set_config('app.organisation_id', ${ctx.organisation.id}, true)`.execute(trx);
+    // The request goes into the outbox rows that the transaction writes.
+    await sql`select set_config('app.organisation_id', ${ctx.organisation.id}, true), set_config('app.request_id', ${ctx.requestId ?? ''}, true)`.execute(trx);
     return work(trx);
   });
 }

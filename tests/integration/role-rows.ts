@@ -1,5 +1,5 @@
 import { assessContract } from '@/lib/domain/assessment/quick-schema';
-import { healthContract, openApiContract, readyContract } from '@/lib/domain/api/service-schema';
+import { healthContract, metricsContract, openApiContract, readyContract } from '@/lib/domain/api/service-schema';
 import type { ContractShape } from '@/lib/domain/api/contract';
 import { createCaseContract, getCaseContract, listCasesContract, putColumnsContract, updateCaseContract } from '@/lib/domain/cases/schema';
 import {
@@ -64,6 +64,7 @@ export const roleRows: RoleRow[] = [
   { contract: assessContract, needs: 'nothing', sent: nothing },
   { contract: healthContract, needs: 'nothing', sent: nothing },
   { contract: readyContract, needs: 'nothing', sent: nothing },
+  { contract: metricsContract, needs: 'nothing', sent: nothing },
   { contract: openApiContract, needs: 'nothing', sent: nothing },
   { contract: meContract, needs: 'session', sent: nothing },
   { contract: signOutContract, needs: 'session', sent: nothing },

@@ -16,7 +16,7 @@ import {
   completeUploadContract, deleteUploadContract, getUploadContract, previewContract, putDataContract, signPartsContract, startUploadContract,
 } from '../uploads/schema';
 import type { ContractShape } from './contract';
-import { healthContract, openApiContract, readyContract } from './service-schema';
+import { healthContract, metricsContract, openApiContract, readyContract } from './service-schema';
 
 /** Every call there is, in the order they are told. */
 export const allContracts: readonly ContractShape[] = [
@@ -29,5 +29,5 @@ export const allContracts: readonly ContractShape[] = [
   createStudyContract, listStudiesContract, getStudyContract, addGridContract, updateGridContract, reviseStudyContract, assessStudyContract,
   getOutcomeContract, getOutcomeXmlContract, getEventsContract, getGridResultContract,
   putDataContract, startUploadContract, signPartsContract, completeUploadContract, getUploadContract, deleteUploadContract, previewContract, getStorageContract,
-  assessContract, healthContract, readyContract, openApiContract,
+  assessContract, healthContract, readyContract, metricsContract, openApiContract,
 ];

@@ -11,3 +11,10 @@ export const readyContract = contract({
 export const openApiContract = contract({
   method: 'GET', path: '/openapi.json', summary: 'This document', access: 'public', status: 200, alsoAnswers: { 200: { description: 'OpenAPI 3.1' } },
 });
+export const metricsContract = contract({
+  method: 'GET', path: '/metrics', summary: 'Numbers of this process and of the queue, as Prometheus text', access: 'public', status: 200,
+  alsoAnswers: {
+    200: { description: 'Text format 0.0.4', text: ['text/plain'] },
+    404: { description: 'Asked from elsewhere without the token' },
+  },
+});

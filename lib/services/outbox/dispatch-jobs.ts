@@ -18,6 +18,7 @@ export async function dispatchJobs(db: Database, now: Date, add: (jobs: JobToAdd
       const attempt = row.attempt + 1;
       const payload = {
         outboxId: row.id, organisationId: row.organisation_id, subjectId: row.subject_id, subjectRevision: row.subject_revision, attempt,
+        requestId: row.request_id,
       };
       return { id: `${row.id}-${attempt}`, name: jobNameSchema.parse(row.job), payload };
     }));

@@ -1,0 +1,4 @@
+// Loaded before the web server (node --import). The later one wraps the earlier.
+import './peer-address.mjs';
+import './draining.mjs';
+import './request-record.mjs';
