@@ -1,7 +1,8 @@
 import type { SeriesNorm } from '../numerics/assessment';
 import type { Ink, ScenePath } from './scene';
 
-interface SeriesLook { ink: Ink; path: string; letter: string; index: string }
+/** A word stands where the norm has no letter. */
+interface SeriesLook { ink: Ink; path: string; letter: string; index: string; word?: string }
 
 const circle = 'M4 0A4 4 0 1 1-4 0A4 4 0 1 1 4 0z';
 export const diamond = 'M0-5.2L5.2 0 0 5.2-5.2 0z';
@@ -12,7 +13,9 @@ const looks: Record<SeriesNorm, SeriesLook> = {
   L1: { ink: 's1', path: circle, letter: 'L', index: '1' },
   L2: { ink: 's2', path: diamond, letter: 'L', index: '2' },
   Linf: { ink: 'si', path: cross, letter: 'L', index: '∞' },
-  value: { ink: 's2', path: diamond, letter: '', index: '' },
+  H1: { ink: 'graphite', path: 'M-5-3.6H5L0 5z', letter: 'H', index: '1' },
+  energy: { ink: 'graphite', path: 'M-4.6 0L-2.3-4H2.3L4.6 0 2.3 4H-2.3z', letter: '', index: '', word: 'energy' },
+  value: { ink: 's2', path: diamond, letter: '', index: '', word: 'value' },
 };
 
 export const seriesLook = (norm: SeriesNorm): SeriesLook => looks[norm];

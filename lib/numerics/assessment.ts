@@ -1,6 +1,7 @@
 /** The shapes that an assessment is computed from and answered in. Grids run from the finest to the coarsest. */
 
-export type Norm = 'L1' | 'L2' | 'Linf';
+export const norms = ['L1', 'L2', 'Linf', 'H1', 'energy'] as const;
+export type Norm = (typeof norms)[number];
 export type SeriesNorm = Norm | 'value';
 export type Outcome = 'pass' | 'fail' | 'inconclusive' | 'meets-target' | 'misses-target';
 
@@ -14,12 +15,22 @@ export type ReasonCode = (typeof reasonCodes)[number];
 
 export interface Position { x: number; y?: number; z?: number }
 
+/** Parts of the domain; only the whole has an outcome. */
+export const regions = ['all', 'interior-2h', 'boundary-2h', 'interior-fixed', 'boundary-fixed'] as const;
+export type Region = (typeof regions)[number];
+
 export interface ErrorSeries {
   field: string;
   norm: SeriesNorm;
+  /** The whole domain where it is left out. */
+  region?: Region;
   /** `exactNorm` is the same norm of the exact field, null where unknown; `knownError` is δ in the unit of the error. */
   grids: { label: string; h: number; error: number; knownError: number; exactNorm: number | null; at: Position | null }[];
   formalOrder: number | null;
+  /** λ of a solution u ~ r^λ, which may limit the formal order (regularOrder). */
+  regularity?: number | null;
+  /** k of an error C·h^p·|ln(h/L)|^k: the order judged is that of the error without its logarithm. */
+  logFactor?: { power: number; length: number } | null;
   /** A higher order derived and declared; replaces the formal order in every step. */
   derivedOrder: number | null;
   /** Null takes the default: max(0.1, 0.05·pf), for L∞ max(0.2, 0.1·pf). */
@@ -61,13 +72,20 @@ export interface QuantitySeries {
 export interface FieldGrid {
   label: string; h: number; error: number; relativeError: number | null; knownError: number;
   used: boolean; unusedReason?: 'round-off' | 'known-error'; at?: Position;
+  /** The error divided by its logarithm, which is what the orders are read from. */
+  correctedError?: number;
 }
 export interface PairOrder { coarse: string; fine: string; ratio: number; order: number | null; uncertainty: number | null }
 export interface OrderFit { order: number; low: number | null; high: number | null }
 
 export interface FieldAssessment {
-  field: string; norm: SeriesNorm; region: 'all';
-  formalOrder: number | null; derivedOrder: number | null; tolerance: number | null; counts: boolean;
+  field: string; norm: SeriesNorm; region: Region;
+  /** The formal order judged by: the stated one, or what the regularity leaves of it. */
+  formalOrder: number | null;
+  /** Only where the regularity limits it. */
+  statedOrder?: number; regularity?: number;
+  logFactor?: number;
+  derivedOrder: number | null; tolerance: number | null; counts: boolean;
   grids: FieldGrid[]; orders: PairOrder[]; fit: OrderFit | null;
   /** Null where there is no formal order to judge by. */
   outcome: Outcome | null; reasons: ReasonCode[];

@@ -99,9 +99,9 @@ describe('POST /api/v1/assess', () => {
     expect(await refused(null, assessContract, { body })).toMatchObject({ status: 422, errors: [{ path }] });
   });
 
-  it.each([
-    ['grids.0.errors.H1', { grids: [{ h: 1, errors: { H1: 1 } }, { h: 0.5, errors: { H1: 1 } }] }],
-  ])('answers 422 not available for %s', async (path, body) => {
-    expect(await refused(null, assessContract, { body })).toMatchObject({ status: 422, title: 'Not available yet', errors: [{ path }] });
+  it('judges H1 and energy norms', async () => {
+    const grids = [1, 2, 4, 8].map((n) => ({ h: 1 / n, errors: { H1: 0.3 / n, energy: 0.1 / n } }));
+    const { fields } = await ok(null, assessContract, { body: { grids, formalOrder: 1 } });
+    expect(fields.map(({ norm, outcome }) => [norm, outcome])).toEqual([['H1', 'pass'], ['energy', 'pass']]);
   });
 });

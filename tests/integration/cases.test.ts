@@ -61,10 +61,6 @@ describe('POST /api/v1/cases', () => {
     ['fields.0.datum', { fields: [{ field: 'T', datum: 'mean', norms: [{ norm: 'L2' }] }] }],
     ['sampling', { sampling: 'average' }],
     ['sampling', { sampling: 'quadrature' }],
-    ['fields.0.norms.0.norm', norm({ norm: 'H1' })],
-    ['fields.0.norms.0.norm', norm({ norm: 'energy' })],
-    ['fields.0.norms.0.logFactor', norm({ logFactor: 1 })],
-    ['fields.0.norms.0.regularity', norm({ regularity: 0.5 })],
     ['fields.0.norms.0.backing.scheme', norm({ backing: { scheme: 'central-2' } })],
     ['boundaryBand', { boundaryBand: { thickness: 0.1 } }],
   ])('answers 422 not available for %s', async (path, changes) => {

@@ -99,8 +99,6 @@ describe('POST /api/v1/studies', () => {
 
   it('says what is not available yet', async () => {
     expect(await refuseMaking(planned(), { refinement: 'space-time' })).toMatchObject({ status: 422, type: '/docs/problems#not-available' });
-    const problem = await refuseMaking([{ label: 'n8', h: 0.1, errors: { T: { H1: 1 } } }]);
-    expect(problem).toMatchObject({ type: '/docs/problems#not-available', errors: [{ path: 'grids.0.errors.T.H1' }] });
   });
 
   it('answers 404 for a case or release that is not there, or another code’s', async () => {

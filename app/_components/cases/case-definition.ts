@@ -16,7 +16,7 @@ function declaredNorm(norm: NormValues, field: FieldValues, isExactness: boolean
   return {
     ...norm.kept, norm: norm.norm, counts: norm.counts,
     formalOrder: typedNumber(norm.formalOrder), tolerance: typedNumber(norm.tolerance), derivedOrder: typedNumber(norm.derivedOrder),
-    exactLimit: typedNumber(norm.exactLimit),
+    regularity: typedNumber(norm.regularity), logFactor: typedNumber(norm.logFactor), exactLimit: typedNumber(norm.exactLimit),
     expectExact: isExactness ? true : (norm.kept?.expectExact ?? false),
     backing: citation === undefined ? undefined : { citation },
   };

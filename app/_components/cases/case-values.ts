@@ -1,13 +1,12 @@
 import type { CaseDefinition, CaseKind, DeclaredField, DeclaredNorm, DeclaredQuantity } from '@/lib/domain/cases/definition';
-import type { Procedure } from '@/lib/numerics/assessment';
+import { norms, type Norm, type Procedure } from '@/lib/numerics/assessment';
 import type { Case } from '@/lib/domain/cases/schema';
 
 type PlannedGrid = CaseDefinition['gridPlan'][number];
 export type SpacingAs = 'cellsPerDirection' | 'cells' | 'h';
-type DeclaredNormName = 'L1' | 'L2' | 'Linf';
 
 /** One norm of a field as it is typed; `kept` holds what the form does not ask for. */
-export interface NormValues { norm: DeclaredNormName; formalOrder: string; tolerance: string; derivedOrder: string; exactLimit: string; counts: boolean; kept: DeclaredNorm | null }
+export interface NormValues { norm: Norm; formalOrder: string; tolerance: string; derivedOrder: string; regularity: string; logFactor: string; exactLimit: string; counts: boolean; kept: DeclaredNorm | null }
 export interface FieldValues { field: string; citation: string; norms: NormValues[]; kept: DeclaredField | null }
 export interface QuantityValues { name: string; unit: string; formalOrder: string; knownValue: string; target: string; procedure: Procedure; uNumFactor: string; kept: DeclaredQuantity | null }
 export interface GridValues { label: string; spacing: string; dt: string; kept: PlannedGrid | null }
@@ -22,12 +21,13 @@ export interface CaseValues {
   requirements: string;
 }
 
-const normNames = ['L1', 'L2', 'Linf'] as const;
 const text = (value: number | undefined) => (value === undefined ? '' : String(value));
 
 export function newField(field: string): FieldValues {
-  const norms = normNames.map((norm) => ({ norm, formalOrder: '', tolerance: '', derivedOrder: '', exactLimit: '', counts: true, kept: null }));
-  return { field, citation: '', norms, kept: null };
+  const empty = norms.map((norm) => ({
+    norm, formalOrder: '', tolerance: '', derivedOrder: '', regularity: '', logFactor: '', exactLimit: '', counts: norm !== 'H1' && norm !== 'energy', kept: null,
+  }));
+  return { field, citation: '', norms: empty, kept: null };
 }
 
 export const newQuantity: QuantityValues = { name: '', unit: '', formalOrder: '', knownValue: '', target: '', procedure: 'three-grid', uNumFactor: '', kept: null };
@@ -44,11 +44,11 @@ function valuesOfField(field: DeclaredField): FieldValues {
   const cited = field.norms.map(({ backing }) => backing).find((backing) => backing !== undefined && 'citation' in backing);
   return {
     field: field.field, citation: cited && 'citation' in cited ? cited.citation : '', kept: field,
-    norms: normNames.map((norm) => {
+    norms: norms.map((norm) => {
       const kept = field.norms.find((each) => each.norm === norm) ?? null;
       return {
         norm, kept, formalOrder: text(kept?.formalOrder), tolerance: text(kept?.tolerance), derivedOrder: text(kept?.derivedOrder),
-        exactLimit: text(kept?.exactLimit), counts: kept?.counts ?? false,
+        regularity: text(kept?.regularity), logFactor: text(kept?.logFactor),        exactLimit: text(kept?.exactLimit), counts: kept?.counts ?? false,
       };
     }),
   };

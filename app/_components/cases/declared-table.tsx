@@ -1,20 +1,23 @@
 import { defaultTolerance } from '@/lib/numerics/outcome/default-tolerance';
+import { regularOrder } from '@/lib/numerics/outcome/regular-order';
 import type { CaseDefinition, DeclaredNorm } from '@/lib/domain/cases/definition';
 import { Cell, HeadCell, Missing, RowHead } from '../tables/cells';
 import { Head, Row, Table } from '../tables/table';
 import { NormSymbol, Sym } from '../ui/symbols';
 
-function isShown(norm: DeclaredNorm): norm is DeclaredNorm & { norm: 'L1' | 'L2' | 'Linf' } {
-  return norm.norm !== 'H1' && norm.norm !== 'energy';
-}
-
 function OrderCell({ norm }: { norm: DeclaredNorm }) {
   if (norm.expectExact) return <Cell num>exact</Cell>;
   if (norm.formalOrder === undefined) return <Cell num><Missing reason="No formal order: shown, not judged" /></Cell>;
-  return <Cell num>{norm.derivedOrder === undefined ? norm.formalOrder : `${norm.derivedOrder} (formal ${norm.formalOrder})`}</Cell>;
+  const left = norm.regularity === undefined ? norm.formalOrder : regularOrder(norm.norm, norm.formalOrder, norm.regularity);
+  const aside = [
+    ...(norm.derivedOrder === undefined ? [] : [`formal ${norm.formalOrder}`]),
+    ...(norm.regularity === undefined ? [] : [`regularity ${norm.regularity} of ${norm.formalOrder}`]),
+    ...(norm.logFactor === undefined ? [] : [`log factor ${norm.logFactor}`]),
+  ];
+  return <Cell num>{Number((norm.derivedOrder ?? left).toPrecision(6))}{aside.length > 0 && <span className="text-graphite"> ({aside.join(', ')})</span>}</Cell>;
 }
 
-function ToleranceCell({ norm }: { norm: DeclaredNorm & { norm: 'L1' | 'L2' | 'Linf' } }) {
+function ToleranceCell({ norm }: { norm: DeclaredNorm }) {
   const order = norm.derivedOrder ?? norm.formalOrder;
   if (norm.expectExact || order === undefined) return <Cell num><Missing reason="No tolerance" /></Cell>;
   const tolerance = norm.tolerance ?? defaultTolerance(norm.norm, order);
@@ -27,7 +30,7 @@ export function DeclaredTable({ fields }: { fields: CaseDefinition['fields'] }) 
     <Table caption="Formal orders and tolerances, by field and norm." hideCaption>
       <Head><tr><HeadCell>Field</HeadCell><HeadCell>Norm</HeadCell><HeadCell num>Order</HeadCell><HeadCell num>Tolerance</HeadCell><HeadCell afterNumber>Counts</HeadCell><HeadCell>Comes from</HeadCell></tr></Head>
       <tbody>
-        {fields.flatMap(({ field, norms }) => norms.filter(isShown).map((norm, index) => (
+        {fields.flatMap(({ field, norms }) => norms.map((norm, index) => (
           <Row key={`${field} ${norm.norm}`} startsGroup={index === 0}>
             <RowHead>{index === 0 && <Sym>{field}</Sym>}</RowHead>
             <Cell><NormSymbol norm={norm.norm} /></Cell>

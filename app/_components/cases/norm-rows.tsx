@@ -10,7 +10,7 @@ import { NormSymbol, Sym } from '../ui/symbols';
 import { TextButton } from '../ui/text-link';
 
 const columns = {
-  formalOrder: 'Formal order', derivedOrder: 'Derived order', tolerance: 'Tolerance', exactLimit: 'Exact below',
+  formalOrder: 'Formal order', derivedOrder: 'Derived order', tolerance: 'Tolerance', regularity: 'Regularity', logFactor: 'Log factor', exactLimit: 'Exact below',
 } as const;
 
 interface NormRowsProps { form: CaseForm; place: number; isExactness: boolean; onRemove: () => void }
@@ -20,8 +20,8 @@ export function NormRows({ form, place, isExactness, onRemove }: NormRowsProps) 
   const { register, formState: { errors } } = form;
   const field = form.watch(`fields.${place}`);
   const faults = errors.fields?.[place];
-  const typed = isExactness ? (['exactLimit'] as const) : (['formalOrder', 'derivedOrder', 'tolerance'] as const);
-  const placeholders = { formalOrder: 'order', derivedOrder: 'none', tolerance: 'rule', exactLimit: 'round-off' };
+  const typed = isExactness ? (['exactLimit'] as const) : (['formalOrder', 'derivedOrder', 'tolerance', 'regularity', 'logFactor'] as const);
+  const placeholders = { formalOrder: 'order', derivedOrder: 'none', tolerance: 'rule', regularity: 'smooth', logFactor: 'none', exactLimit: 'round-off' };
   return (
     <fieldset className="flex flex-col gap-3">
       <legend className="sr-only">Field {field.field}</legend>

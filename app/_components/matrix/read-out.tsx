@@ -1,5 +1,6 @@
 import type { Matrix, MatrixCell } from '@/lib/domain/matrix/schema';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
+import { norms, type SeriesNorm } from '@/lib/numerics/assessment';
 import { DateTime } from '../ui/date-time';
 import { Mark } from '../ui/mark';
 import { NormSymbol, Sym } from '../ui/symbols';
@@ -7,8 +8,8 @@ import { cellOutcome, markOfCell, type MatrixCase } from './cell-words';
 
 interface ReadOutProps { row: MatrixCase; cell: MatrixCell; worse: Matrix['worse'] }
 
-function seriesNorm(norm: string): 'L1' | 'L2' | 'Linf' | 'value' {
-  return norm === 'L1' || norm === 'L2' || norm === 'Linf' ? norm : 'value';
+function seriesNorm(norm: string): SeriesNorm {
+  return norms.find((each) => each === norm) ?? 'value';
 }
 
 /** What the cell under the pointer or the keyboard says, in a line that is always there. */

@@ -1,6 +1,7 @@
 import type { Matrix } from '@/lib/domain/matrix/schema';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
 import { formatRatio } from '@/lib/domain/numbers/format-ratio';
+import { norms } from '@/lib/numerics/assessment';
 import { spacingLabel } from '@/lib/figures/spacing-label';
 import { ErrorText } from '../figures/error-text';
 import { Cell, HeadCell, Missing, RowHead } from '../tables/cells';
@@ -14,8 +15,9 @@ function Order({ value }: { value: number | null }) {
 }
 
 function Series({ field, norm }: { field: string; norm: string }) {
-  if (norm !== 'L1' && norm !== 'L2' && norm !== 'Linf') return <>{field}</>;
-  return <><Sym>{field}</Sym>, <NormSymbol norm={norm} /></>;
+  const known = norms.find((each) => each === norm);
+  if (known === undefined) return <>{field}</>;
+  return <><Sym>{field}</Sym>, <NormSymbol norm={known} /></>;
 }
 
 /** What got worse from the release before the newest to the newest, in order and in error at equal spacing. */

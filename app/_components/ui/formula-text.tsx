@@ -7,7 +7,7 @@ interface FormulaTextProps {
   symbols?: readonly string[];
 }
 
-const norms = { L1: 'L1', L2: 'L2', 'L∞': 'Linf' } as const;
+const norms = { L1: 'L1', L2: 'L2', 'L∞': 'Linf', H1: 'H1' } as const;
 const superscripts = '⁰¹²³⁴⁵⁶⁷⁸⁹⁻';
 const scientific = /^([−-]?\d+(?:\.\d+)?)\s×\s10([⁰¹²³⁴⁵⁶⁷⁸⁹⁻]+)$/u;
 const plainExponent = (raised: string) =>

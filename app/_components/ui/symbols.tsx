@@ -11,10 +11,12 @@ export function Sym({ children, index }: { children: ReactNode; index?: ReactNod
   );
 }
 
-const indices = { L1: '1', L2: '2', Linf: '∞' };
+const indices = { L1: '1', L2: '2', Linf: '∞', H1: '1' };
+const words = { value: 'value', energy: 'energy' } as const;
 
 export function NormSymbol({ norm }: { norm: SeriesNorm }) {
-  return norm === 'value' ? <span>value</span> : <Sym index={indices[norm]}>L</Sym>;
+  if (norm === 'value' || norm === 'energy') return <span>{words[norm]}</span>;
+  return <Sym index={indices[norm]}>{norm === 'H1' ? 'H' : 'L'}</Sym>;
 }
 
 /** An error as `2.20 × 10⁻⁴`, kept on one line. */

@@ -38,8 +38,8 @@ export function gatherFieldFacts(field: FieldAssessment): FieldFacts {
   const name = nameErrors(field);
   return {
     name, Name: capitalise(name),
-    formal: judgedBy === null ? '–' : String(judgedBy),
-    claimed: `${field.derivedOrder === null ? 'formal' : 'derived'} order ${judgedBy ?? '–'}`,
+    formal: judgedBy === null ? '–' : String(Number(judgedBy.toPrecision(4))),
+    claimed: `${field.derivedOrder === null ? 'formal' : 'derived'} order ${judgedBy === null ? '–' : Number(judgedBy.toPrecision(4))}`,
     band: `${printLimit(0)} to ${printLimit(1)}`, lowest: printLimit(0), highest: printLimit(1),
     last: print(field.orders[0]), before: print(field.orders[1]), lastOrder: field.orders[0]?.order ?? null,
     orders: field.orders.flatMap((pair) => pair.order ?? []).reverse(),

@@ -1,10 +1,10 @@
-import type { ErrorSeries, Norm, QuantitySeries } from '@/lib/numerics/assessment';
+import { norms, type ErrorSeries, type Norm, type QuantitySeries } from '@/lib/numerics/assessment';
 import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
 import { builtInRule } from '../rules/built-in-rule';
 import type { QuickCheckGrid } from './quick-check-grids';
 import type { QuickCheckInput } from './quick-schema';
 
-export const quickCheckNorms = ['L1', 'L2', 'Linf'] as const satisfies readonly Norm[];
+export const quickCheckNorms = norms;
 
 function perNorm(stated: QuickCheckInput['formalOrder'], norm: Norm): number | null {
   if (stated === undefined || typeof stated === 'number') return stated ?? null;

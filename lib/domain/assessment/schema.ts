@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { procedureBranches, procedures, reasonCodes } from '@/lib/numerics/assessment';
+import { procedureBranches, procedures, reasonCodes, regions, norms } from '@/lib/numerics/assessment';
 
 const nullableNumber = z.number().nullable();
 const pointSchema = z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() });
@@ -9,11 +9,12 @@ const convergenceSchema = z.enum(['monotone', 'oscillatory', 'divergent', 'oscil
 
 const fieldGridSchema = z.strictObject({
   label: z.string(), h: z.number(), error: z.number(), relativeError: nullableNumber, knownError: z.number(), used: z.boolean(),
-  unusedReason: z.enum(['round-off', 'known-error']).optional(), at: pointSchema.optional(),
+  unusedReason: z.enum(['round-off', 'known-error']).optional(), at: pointSchema.optional(), correctedError: z.number().optional(),
 });
 const fieldAssessmentSchema = z.strictObject({
-  field: z.string(), norm: z.enum(['L1', 'L2', 'Linf', 'value']), region: z.literal('all'),
-  formalOrder: nullableNumber, derivedOrder: nullableNumber, tolerance: nullableNumber, counts: z.boolean(),
+  field: z.string(), norm: z.enum([...norms, 'value']), region: z.enum(regions),
+  formalOrder: nullableNumber, statedOrder: z.number().optional(), regularity: z.number().optional(), logFactor: z.number().optional(),
+  derivedOrder: nullableNumber, tolerance: nullableNumber, counts: z.boolean(),
   grids: z.array(fieldGridSchema),
   orders: z.array(z.strictObject({ coarse: z.string(), fine: z.string(), ratio: z.number(), order: nullableNumber, uncertainty: nullableNumber })),
   fit: z.strictObject({ order: z.number(), low: nullableNumber, high: nullableNumber }).nullable(),

@@ -1,6 +1,6 @@
 import type { SeriesNorm } from '@/lib/numerics/assessment';
 
-const normNames = { L1: 'L1', L2: 'L2', Linf: 'L∞' } as const;
+const normNames = { L1: 'L1', L2: 'L2', Linf: 'L∞', H1: 'H1', energy: 'energy' } as const;
 
 interface Series { field: string; norm: SeriesNorm }
 

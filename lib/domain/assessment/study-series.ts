@@ -39,7 +39,7 @@ export function studySeries({ definition, grids, ...around }: StudyToAssess): St
   return {
     ok: true,
     errors: [
-      ...definition.fields.flatMap((field) => field.norms.flatMap((norm) => fieldSeries(definition, { field, norm }, placed))),
+      ...definition.fields.flatMap((field) => field.norms.flatMap((norm) => fieldSeries({ definition, ...around }, { field, norm }, placed))),
       ...known.map((quantity) => ({
         ...errorSeriesOfQuantity(quantitySeries(quantity, placed, 0), quantity.knownValue ?? 0),
         minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
@@ -49,16 +49,17 @@ export function studySeries({ definition, grids, ...around }: StudyToAssess): St
   };
 }
 
-function fieldSeries(definition: CaseDefinition, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {
+function fieldSeries({ definition, dimension, volume }: Omit<StudyToAssess, 'grids'>, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {
   const { norm: name } = norm;
-  if (name === 'H1' || name === 'energy') return [];
   const columns = placed.flatMap(({ norms }) => norms?.fields.find((column) => column.field === field.field) ?? []);
   const significantDigits = largestOf(columns.flatMap((column) => column.significantDigits ?? []));
   const formalOrder = norm.formalOrder ?? null;
   return [{
     field: field.field, norm: name,
     grids: placed.flatMap((one) => gridError(one, field.field, { norm: name, significantDigits }) ?? []),
-    formalOrder, derivedOrder: norm.derivedOrder ?? null, tolerance: norm.tolerance ?? null, counts: norm.counts,
+    formalOrder, regularity: norm.regularity ?? null,
+    logFactor: norm.logFactor === undefined ? null : { power: norm.logFactor, length: volume === null ? 1 : volume ** (1 / dimension) },
+    derivedOrder: norm.derivedOrder ?? null, tolerance: norm.tolerance ?? null, counts: norm.counts,
     expectExact: norm.expectExact, exactLimit: norm.exactLimit ?? null,
     scale: largestOf([...columns.map((column) => column.exact.Linf), ...(norm.reference === undefined ? [] : [norm.reference])]),
     precision: placed.some(({ grid }) => grid.run?.precision === 'single') ? 'single' : 'double',
@@ -71,10 +72,11 @@ function fieldSeries(definition: CaseDefinition, { field, norm }: { field: Decla
 function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm, significantDigits }: { norm: Norm; significantDigits: number | null }): ErrorSeries['grids'][number] | null {
   const iterativeError = grid.iterativeError?.[field]?.[norm] ?? 0;
   const column = norms?.fields.find((candidate) => candidate.field === field);
-  if (column) {
+  const fromFile = column && norm !== 'H1' && norm !== 'energy' ? { error: column[norm], exactNorm: column.exact[norm] } : null;
+  if (column && fromFile) {
     const stored = { largest: column.maxAbs, significantDigits, precision: grid.run?.precision };
     return {
-      label: grid.label, h, error: column[norm], knownError: knownError(stored, iterativeError), exactNorm: column.exact[norm],
+      label: grid.label, h, ...fromFile, knownError: knownError(stored, iterativeError),
       at: norm === 'Linf' ? column.at : null,
     };
   }

@@ -1,5 +1,6 @@
 import type { FieldProblem } from '@/lib/errors';
 import { defaultTolerance } from '@/lib/numerics/outcome/default-tolerance';
+import { regularOrder } from '@/lib/numerics/outcome/regular-order';
 import type { ProblemDefinition } from '../problems/schema';
 import type { DeclaredField, DeclaredNorm } from './definition';
 import { repeated } from './repeated';
@@ -30,8 +31,10 @@ function checkCounting(norms: readonly DeclaredNorm[], path: string): FieldProbl
   return [{ path: `${path}.${lone}.counts`, message: 'L1 may not count alone. Let L2 or L∞ count beside it.' }];
 }
 
-function checkNorm({ norm, formalOrder, derivedOrder, tolerance }: DeclaredNorm, path: string): FieldProblem[] {
+function checkNorm({ norm, formalOrder, derivedOrder, tolerance, regularity, logFactor }: DeclaredNorm, path: string): FieldProblem[] {
   const faults: FieldProblem[] = [];
+  if (formalOrder === undefined && regularity !== undefined) faults.push({ path: `${path}.regularity`, message: 'A regularity limits a formal order. State the formal order too.' });
+  if (formalOrder === undefined && logFactor !== undefined) faults.push({ path: `${path}.logFactor`, message: 'A log factor stands beside a formal order. State the formal order too.' });
   if (formalOrder === undefined && derivedOrder !== undefined) {
     faults.push({ path: `${path}.derivedOrder`, message: 'A derived order stands beside a formal order. State the formal order too.' });
   }
@@ -39,12 +42,12 @@ function checkNorm({ norm, formalOrder, derivedOrder, tolerance }: DeclaredNorm,
     faults.push({ path: `${path}.derivedOrder`, message: `Found ${derivedOrder}. Expected more than the formal order ${formalOrder}.` });
   }
   if (tolerance === undefined) return faults;
-  const judgedOrder = derivedOrder ?? formalOrder;
+  const judgedOrder = derivedOrder ?? (formalOrder === undefined || regularity === undefined ? formalOrder : regularOrder(norm, formalOrder, regularity));
   if (judgedOrder === undefined) {
     faults.push({ path: `${path}.tolerance`, message: 'A tolerance needs a formal order to stand about.' });
     return faults;
   }
-  const largest = defaultTolerance(norm === 'Linf' ? 'Linf' : 'L2', judgedOrder);
+  const largest = defaultTolerance(norm, judgedOrder);
   if (tolerance > largest) {
     faults.push({ path: `${path}.tolerance`, message: `Found ${tolerance}. A case may only tighten the rule, which allows ${Number(largest.toPrecision(12))} here.` });
   }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { procedures } from '@/lib/numerics/assessment';
+import { norms, procedures } from '@/lib/numerics/assessment';
 import { labelSchema } from '../api/names';
 
 const positive = z.number().positive();
@@ -7,7 +7,7 @@ const count = z.number().int().positive().max(1e15);
 export const cellsPerDirectionSchema = z.union([count, z.array(count).min(1).max(3)])
   .meta({ description: 'Cells along each direction: one number for all, or one for each.' });
 
-export const normNameSchema = z.enum(['L1', 'L2', 'Linf', 'H1', 'energy']);
+export const normNameSchema = z.enum(norms);
 export const caseKindSchema = z.enum(['order', 'exactness', 'benchmark', 'solution']);
 export type CaseKind = z.infer<typeof caseKindSchema>;
 
@@ -22,8 +22,8 @@ const declaredNormSchema = z.strictObject({
   exactLimit: positive.optional(),
   reference: positive.optional(),
   derivedOrder: positive.max(20).optional(),
-  logFactor: z.number().optional(),
-  regularity: positive.optional(),
+  logFactor: z.number().min(-10).max(10).optional().meta({ description: 'k of an error C·h^p·|ln(h/L)|^k.' }),
+  regularity: positive.max(20).optional().meta({ description: 'λ of a solution u ~ r^λ, which may limit the formal order.' }),
   backing: backingSchema.optional(),
 });
 export type DeclaredNorm = z.infer<typeof declaredNormSchema>;

@@ -27,11 +27,8 @@ function askedByField({ compare, datum, norms }: DeclaredField, path: string): A
   ];
 }
 
-function askedByNorm({ norm, logFactor, regularity, backing }: DeclaredNorm, path: string): Asked[] {
+function askedByNorm({ backing }: DeclaredNorm, path: string): Asked[] {
   return [
-    (norm === 'H1' || norm === 'energy') && { path: `${path}.norm`, what: `The ${norm} norm` },
-    logFactor !== undefined && { path: `${path}.logFactor`, what: 'A log factor' },
-    regularity !== undefined && { path: `${path}.regularity`, what: 'A regularity' },
     backing !== undefined && 'scheme' in backing && { path: `${path}.backing.scheme`, what: 'Backing by a scheme' },
   ];
 }

@@ -1,4 +1,4 @@
-import type { FieldAssessment, FieldGrid, SeriesNorm } from '../../numerics/assessment';
+import { norms, type FieldAssessment, type FieldGrid, type SeriesNorm } from '../../numerics/assessment';
 
 export interface FigureField {
   field: string;
@@ -10,7 +10,7 @@ export interface FigureField {
 /** Errors of zero have no place on a logarithmic axis. */
 export const isDrawn = (grid: FieldGrid): boolean => grid.error > 0 && Number.isFinite(grid.error);
 
-const normOrder: SeriesNorm[] = ['L1', 'L2', 'Linf', 'value'];
+const normOrder: SeriesNorm[] = [...norms, 'value'];
 
 /** The assessments of a figure gathered by field, in the order in which the fields come. */
 export function figureFields(assessments: readonly FieldAssessment[]): FigureField[] {

@@ -3,8 +3,10 @@ import { leastSquaresOrder } from '../order/least-squares-order';
 import { spansRatio } from '../spacing/spans-ratio';
 import { defaultTolerance } from './default-tolerance';
 import { dropFloor } from './drop-floor';
+import { logPart } from './log-corrected';
 import { orderRule } from './order-rule';
 import { pairOrders } from './pair-orders';
+import { regularOrder } from './regular-order';
 import { roundOff } from './round-off';
 
 /** From this order on it matters whether values are points or averages: the two differ by h². */
@@ -14,23 +16,46 @@ interface Verdict { outcome: Outcome | null; reason: ReasonCode }
 
 /**
  * Judges one field and norm by its errors over grids, the finest first: exactness, the floor, too few grids, then the
- * observed orders against the formal one (orderRule). A declared derived order replaces the formal one in every step.
+ * observed orders against the formal one (orderRule), of the errors without their logarithm where they have one. A declared
+ * derived order replaces the formal one in every step; the regularity may lower it.
  *
  * The outcome is null with `no-target` where there is no formal order to judge by. Orders of grids left out are not
  * given; an order is null where an error is 0. Throws where spacings do not rise or an error is negative or not finite.
  */
 export function judgeErrorSeries(series: ErrorSeries): FieldAssessment {
   checkSeries(series);
-  const judgedBy = series.derivedOrder ?? series.formalOrder;
+  const { formalOrder, limited } = limitOrder(series);
+  const judgedBy = series.derivedOrder ?? formalOrder;
   const tolerance = series.tolerance ?? (judgedBy === null ? null : defaultTolerance(series.norm, judgedBy));
-  const grids = dropFloor(series);
-  const used = grids.filter((grid) => grid.used);
+  const grids = dropFloor(series).map((grid) => withoutLogarithm(grid, series.logFactor));
+  const used = grids.filter((grid) => grid.used).map(asJudged);
   const orders = pairOrders(used);
   const { outcome, reason } = judgeExactness(series, judgedBy) ?? judgeOrders(series, { used, orders, judgedBy, tolerance });
   return {
-    field: series.field, norm: series.norm, region: 'all', formalOrder: series.formalOrder, derivedOrder: series.derivedOrder,
-    tolerance, counts: series.counts, grids, orders, fit: leastSquaresOrder(used), outcome, reasons: [reason],
+    field: series.field, norm: series.norm, region: series.region ?? 'all', formalOrder, ...limited,
+    ...(series.logFactor && { logFactor: series.logFactor.power }), derivedOrder: series.derivedOrder, tolerance, counts: series.counts, grids, orders, fit: leastSquaresOrder(used), ...(isPart(series) ? { outcome: null, reasons: [] } : { outcome, reasons: [reason] }),
   };
+}
+
+/** Norms of a part of the domain are shown and not judged. */
+function isPart({ region = 'all' }: ErrorSeries): boolean {
+  return region !== 'all';
+}
+
+function limitOrder({ norm, formalOrder, regularity = null }: ErrorSeries): { formalOrder: number | null; limited: { statedOrder?: number; regularity?: number } } {
+  if (formalOrder === null || regularity === null) return { formalOrder, limited: {} };
+  const left = regularOrder(norm, formalOrder, regularity);
+  return { formalOrder: left, limited: left < formalOrder ? { statedOrder: formalOrder, regularity } : {} };
+}
+
+function withoutLogarithm(grid: FieldGrid, logFactor: ErrorSeries['logFactor']): FieldGrid {
+  return logFactor ? { ...grid, correctedError: grid.error / logPart(grid.h, logFactor) } : grid;
+}
+
+/** The grid with the error that its order is read from, and its known error in proportion. */
+function asJudged(grid: FieldGrid): FieldGrid {
+  const { correctedError, error, knownError } = grid;
+  return correctedError === undefined || error === 0 ? grid : { ...grid, error: correctedError, knownError: knownError * (correctedError / error) };
 }
 
 function judgeExactness(series: ErrorSeries, judgedBy: number | null): Verdict | null {

@@ -1,16 +1,13 @@
 import { assessQuickCheck } from '@/lib/domain/assessment/quick-check';
-import { notYetOfQuickCheck } from '@/lib/domain/assessment/quick-check-not-yet';
 import type { QuickCheckInput } from '@/lib/domain/assessment/quick-schema';
 import type { Assessment } from '@/lib/domain/assessment/schema';
 import { AppError } from '@/lib/errors';
 import type { Context } from '../context';
-import { refuseNotYet } from '../refuse';
 import { hashInputs } from './hash-inputs';
 
 /** Assesses a small table for anybody; nothing is kept. */
 export async function assessTable(ctx: Context, address: string, input: QuickCheckInput): Promise<Assessment> {
   await ctx.limits.take('calculator', address);
-  refuseNotYet(notYetOfQuickCheck(input));
   const result = assessQuickCheck(input);
   if (!result.ok) throw new AppError('invalid', result.faults[0]?.message ?? 'The table is not valid.', { fields: result.faults });
   const { assessment } = result;

@@ -19,7 +19,6 @@ import { permit, permitCode } from '../permit';
 import { requireRelease } from '../releases/require-release';
 import { withOrganisation, type Trx } from '../with-organisation';
 import { mapStudy } from './map-study';
-import { refuseUnavailableNorms } from './refuse-unavailable-norms';
 import { requireStudy } from './require-study';
 import { settleStudy } from './settle-study';
 
@@ -34,7 +33,6 @@ function checkInput(input: CreateStudyInput, bound: Awaited<ReturnType<typeof re
   const { refinement } = input;
   if (refinement === 'space-time') throw notAvailable('refinement', 'Refinement in space and time together');
   const dimension = input.dimension ?? bound.problem.dimension;
-  input.grids.forEach((grid, index) => refuseUnavailableNorms(grid, `grids.${index}.`));
   const faults = checkSeries(input.grids, {
     definition: bound.definition, refinement, dimension, volume: domainVolume(bound.problem, dimension),
     canHaveFile: takesFiles(bound.definition, bound.problem),

@@ -4,12 +4,10 @@ import { checkGrid } from '@/lib/domain/studies/check-grid';
 import type { GridInput } from '@/lib/domain/studies/input';
 import { takesFiles } from '@/lib/domain/studies/takes-files';
 import { AppError } from '@/lib/errors';
-import { refuseUnavailableNorms } from './refuse-unavailable-norms';
 import type { LoadedStudy } from './require-study';
 
 /** Refuses a grid that does not fit the case of its study. */
 export function refuseUnfitGrid({ head, bound }: LoadedStudy, grid: GridInput): void {
-  refuseUnavailableNorms(grid, '');
   const definition = caseDefinitionSchema.parse(bound.case_definition);
   const faults = checkGrid(grid, {
     definition, refinement: head.refinement === 'time' ? 'time' : 'space', dimension: head.dimension,

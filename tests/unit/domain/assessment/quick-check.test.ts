@@ -1,6 +1,5 @@
 import { describe, expect, it } from 'vitest';
 import { assessQuickCheck } from '@/lib/domain/assessment/quick-check';
-import { notYetOfQuickCheck } from '@/lib/domain/assessment/quick-check-not-yet';
 import { quickCheckSchema, type QuickCheckInput } from '@/lib/domain/assessment/quick-schema';
 
 type Raw = Record<string, unknown>;
@@ -57,12 +56,4 @@ describe('assessQuickCheck', () => {
     [{ grids: [{ h: 1, errors: { L2: 1 }, iterativeError: { L1: 1e-3 } }, { h: 0.5, errors: { L2: 2 } }] }, 'grids.0.iterativeError.L1'],
     [{ dimension: 3, grids: [{ cellsPerDirection: [1, 2], value: 1 }, { h: 0.5, value: 2 }] }, 'grids.0.cellsPerDirection'],
   ])('names the member that is wrong in %j', (input, path) => expect(faults(input)).toContain(path));
-});
-
-describe('notYetOfQuickCheck', () => {
-  it('names norms that are not there', () => {
-    const grids = [{ h: 1, value: 1 }, { h: 0.5, value: 2 }];
-    expect(notYetOfQuickCheck(read({ grids }))).toBeNull();
-    expect(notYetOfQuickCheck(read({ grids: [{ h: 1, errors: { H1: 1 } }, { h: 0.5, errors: { H1: 1 } }] }))).toMatchObject({ path: 'grids.0.errors.H1' });
-  });
 });

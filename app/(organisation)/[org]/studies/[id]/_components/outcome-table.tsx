@@ -5,6 +5,7 @@ import { Head, Row, Table } from '@/app/_components/tables/table';
 import { FormulaText } from '@/app/_components/ui/formula-text';
 import { OutcomeWord } from '@/app/_components/ui/outcome-word';
 import { NormSymbol, Sym } from '@/app/_components/ui/symbols';
+import { explainOrderSource } from '@/lib/domain/assessment/explain-order-source';
 import { explainField } from '@/lib/domain/assessment/reason-text';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
 import { formatRatio } from '@/lib/domain/numbers/format-ratio';
@@ -71,6 +72,7 @@ export function OutcomeTable({ study, fields, number }: OutcomeTableProps) {
               <Cell><NormSymbol norm={part.norm} /></Cell>
               <OutcomeCells part={part} study={study} pairs={pairs} />
             </Row>
+            {explainOrderSource(part).length > 0 && <ReasonRow before={1} columns={columns}><FormulaText text={explainOrderSource(part).join(' ')} symbols={['h', 'L']} /></ReasonRow>}
             {!isPlainPass(part) && (
               <ReasonRow before={1} columns={columns}>
                 {explainField(part).map(({ sentence, nextStep }) => (
@@ -100,7 +102,7 @@ function OutcomeCells({ part, study, pairs }: { part: FieldAssessment; study: St
         {isAfterData && <i className="ml-1 text-note text-graphite">after data</i>}
       </Cell>
       <Cell>{part.counts ? 'yes' : <span className="text-graphite">no</span>}</Cell>
-      <Cell num>{declared?.expectExact ? 'exact' : formal ?? <Missing reason="No formal order" />}</Cell>
+      <Cell num>{declared?.expectExact ? 'exact' : formal === null ? <Missing reason="No formal order" /> : Number(formal.toPrecision(4))}</Cell>
       <Cell num>{limits.length === 2 && !declared?.expectExact ? `${formatOrder(low)} to ${formatOrder(high)}` : <Missing reason="No band" />}</Cell>
       {pairs.map(({ coarse, fine }) => {
         const order = part.orders.find((each) => each.coarse === coarse && each.fine === fine)?.order ?? null;

@@ -1,14 +1,15 @@
 import { readNumber } from '@/app/_components/quick-check/parse-table';
 import type { UpdateGridInput } from '@/lib/domain/studies/input';
+import type { Norm } from '@/lib/numerics/assessment';
 import type { Grid, Study } from '@/lib/domain/studies/schema';
 
 /** What can be typed for a grid: the value of a quantity, or the norm of an error that the solver computed. */
-export type TypedColumn = { kind: 'value'; name: string; unit: string | null } | { kind: 'error'; field: string; norm: 'L1' | 'L2' | 'Linf' };
+export type TypedColumn = { kind: 'value'; name: string; unit: string | null } | { kind: 'error'; field: string; norm: Norm };
 
 export function typedColumns({ definition }: Study): TypedColumn[] {
   return [
     ...definition.quantities.map(({ name, unit }): TypedColumn => ({ kind: 'value', name, unit: unit ?? null })),
-    ...definition.fields.flatMap(({ field, norms }) => norms.flatMap(({ norm }): TypedColumn[] => (norm === 'H1' || norm === 'energy' ? [] : [{ kind: 'error', field, norm }]))),
+    ...definition.fields.flatMap(({ field, norms }) => norms.map(({ norm }): TypedColumn => ({ kind: 'error', field, norm }))),
   ];
 }
 
