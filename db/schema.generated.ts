@@ -50,6 +50,12 @@ export interface Assessments {
   study_revision: number;
 }
 
+export interface AuditorGrants {
+  code_id: string;
+  organisation_id: string;
+  user_id: string;
+}
+
 export interface CaseRevisions {
   case_id: string;
   created_at: Generated<Timestamp>;
@@ -119,10 +125,48 @@ export interface IdempotencyKeys {
   status: number | null;
 }
 
+export interface Invitations {
+  accepted_by: string | null;
+  code_ids: string[] | null;
+  created_at: Generated<Timestamp>;
+  email: string;
+  expires_at: Timestamp;
+  id: string;
+  invited_by: string;
+  organisation_id: string;
+  roles: string[];
+  state: Generated<string>;
+  token_sha256: Buffer | null;
+  until: Timestamp | null;
+}
+
+export interface MailPreferences {
+  kind: string;
+  user_id: string;
+  wanted: boolean;
+}
+
+export interface Mails {
+  address: string;
+  claimed_at: Timestamp | null;
+  created_at: Generated<Timestamp>;
+  facts: Json;
+  fault: string | null;
+  id: string;
+  kind: string;
+  organisation_id: string | null;
+  resends: Generated<number>;
+  sent_at: Timestamp | null;
+  state: Generated<string>;
+  subject_id: string | null;
+  user_id: string | null;
+}
+
 export interface Memberships {
   created_at: Generated<Timestamp>;
   organisation_id: string;
   roles: string[];
+  until: Timestamp | null;
   user_id: string;
 }
 
@@ -130,6 +174,7 @@ export interface Organisations {
   created_at: Generated<Timestamp>;
   id: string;
   name: string;
+  revision: Generated<number>;
   slug: string;
   storage_quota_bytes: Int8 | null;
 }
@@ -142,12 +187,21 @@ export interface Outbox {
   id: string;
   job: string;
   last_error: string | null;
-  organisation_id: string;
+  organisation_id: string | null;
   queued_at: Timestamp | null;
   request_id: Generated<string | null>;
   state: Generated<string>;
   subject_id: string;
   subject_revision: number | null;
+}
+
+export interface PasswordResets {
+  created_at: Generated<Timestamp>;
+  expires_at: Timestamp;
+  id: string;
+  token_sha256: Buffer | null;
+  used_at: Timestamp | null;
+  user_id: string;
 }
 
 export interface ProblemRevisions {
@@ -247,15 +301,20 @@ export interface Users {
 export interface DB {
   api_tokens: ApiTokens;
   assessments: Assessments;
+  auditor_grants: AuditorGrants;
   case_revisions: CaseRevisions;
   cases: Cases;
   codes: Codes;
   grid_results: GridResults;
   grids: Grids;
   idempotency_keys: IdempotencyKeys;
+  invitations: Invitations;
+  mail_preferences: MailPreferences;
+  mails: Mails;
   memberships: Memberships;
   organisations: Organisations;
   outbox: Outbox;
+  password_resets: PasswordResets;
   problem_revisions: ProblemRevisions;
   problems: Problems;
   releases: Releases;

@@ -19,6 +19,8 @@ const envSchema = z.object({
   STORAGE_SECRET_KEY: z.string().min(1).describe('The secret of that key.'),
   STORAGE_QUOTA_BYTES: z.coerce.number<string>().int().min(0).default(100e9).describe('Bytes of files an organisation may keep, unless it has a limit of its own.'),
   PART_ADDRESS_SECONDS: z.coerce.number<string>().int().min(1).max(604_800).default(3600).describe('How long the address of a part of an upload is good for.'),
+  SMTP_URL: z.string().regex(/^smtps?:\/\//, 'expected smtp://host:port').describe('The mail server, with user and password where it wants them.'),
+  MAIL_FROM: z.string().min(3).describe('The sender of mails, with or without a name: Fourfold <fourfold@example.org>.'),
   TRUSTED_PROXIES: z.string().default('').describe('Addresses, separated by commas, whose X-Forwarded-For is believed.'),
   LOG_LEVEL: z.enum(['debug', 'info', 'warn', 'error']).default('info').describe('Lines of this weight and above are written.'),
   METRICS_TOKEN: z.string().min(16).optional().describe('Whoever sends it as a bearer token may read the metrics. Unless set, only the machine itself may.'),

@@ -14,6 +14,7 @@ export const errorTable = {
   'too-large': { status: 413, title: 'Too large' },
   'no-room': { status: 413, title: 'No room left' },
   invalid: { status: 422, title: 'Not valid' },
+  'wrong-password': { status: 422, title: 'The password does not match' },
   'not-available': { status: 422, title: 'Not available yet' },
   'key-reused': { status: 422, title: 'Idempotency key used for something else' },
   'revision-needed': { status: 428, title: 'Say which revision you read' },

@@ -2,13 +2,14 @@ import { Client } from 'pg';
 import { openDatabase } from '@/db/client';
 import type { Env } from '@/lib/env';
 import { createLogger } from '@/lib/platform/logger';
+import { createMailer } from '@/lib/platform/mailer';
 import { openRedis } from '@/lib/platform/redis';
 import { createStorage } from '@/lib/platform/storage';
 import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { createStudyEvents } from '@/lib/platform/study-events';
-import type { JobContext } from '@/lib/services/outbox/job-context';
+import type { MailJobContext } from '@/lib/services/outbox/job-context';
 
-export type WorkerContext = Omit<JobContext, 'organisation'>;
+export type WorkerContext = Omit<MailJobContext, 'organisation'>;
 
 /** The connections of this worker process. */
 export function openWorkerContext(env: Env) {
@@ -20,6 +21,7 @@ export function openWorkerContext(env: Env) {
   const telling = openRedis(env.REDIS_URL, log, { maxRetriesPerRequest: 1, enableOfflineQueue: false });
   const context: WorkerContext = {
     db, storage: createStorage(storageOptionsOf(env)), events: createStudyEvents(telling, telling), clock: () => new Date(), log,
+    mailer: createMailer({ smtpUrl: env.SMTP_URL, from: env.MAIL_FROM }), publicUrl: env.PUBLIC_URL,
   };
 
   return {

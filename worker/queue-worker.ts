@@ -14,7 +14,7 @@ export interface Tools { reader: GridReader; metrics: WorkerMetrics }
 const liveness = { lockDuration: 5000, stalledInterval: 3000, maxStalledCount: 2 };
 
 function contextOf(context: WorkerContext, payload: JobPayload) {
-  return { ...context, organisation: { id: payload.organisationId }, requestId: payload.requestId };
+  return { ...context, organisation: { id: payload.organisationId ?? '' }, requestId: payload.requestId };
 }
 
 /** What a line about a job says: its id in the queue, what it works on, and the request that caused it. */

@@ -1,5 +1,6 @@
 import type { JobName } from '@/lib/jobs/jobs';
 import { handleGridRead } from './handlers/grid-read';
+import { handleMailSend } from './handlers/mail-send';
 import { handleStudyAssess } from './handlers/study-assess';
 import type { JobHandler } from './job-handler';
 
@@ -7,4 +8,5 @@ import type { JobHandler } from './job-handler';
 export const handlers: Record<JobName, JobHandler> = {
   'grid.read': handleGridRead,
   'study.assess': handleStudyAssess,
+  'mail.send': handleMailSend,
 };

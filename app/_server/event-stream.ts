@@ -8,13 +8,15 @@ const comeBackMilliseconds = 500;
 type Send = (event: string, data: string) => void;
 
 /**
- * A stream of server-sent events: what was already known, then what is sent until the reader goes. A comment now and then
- * keeps proxies from closing it; `stop` is called once, when it ends.
+ * A stream of server-sent events: what was already known, then what is sent until the reader goes or `end` is called. A
+ * comment now and then keeps proxies from closing it; `stop` is called once, when it ends.
  */
-export function eventStream(signal: AbortSignal, headers: Headers, begin: (send: Send) => Promise<() => void>): Promise<Response> {
+export function eventStream(signal: AbortSignal, headers: Headers, begin: (send: Send, end: () => void) => Promise<() => void>): Promise<Response> {
   const encoder = new TextEncoder();
   let stream: ReadableStreamDefaultController<Uint8Array> | null = null;
   let early: Uint8Array[] = [];
+  const ended = new AbortController();
+  const isLeft = AbortSignal.any([signal, ended.signal]);
   const write = (text: string) => {
     const bytes = encoder.encode(text);
     if (stream) stream.enqueue(bytes);
@@ -22,14 +24,14 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
   };
 
   const draining = drainSignal();
-  return begin((event, data) => write(`event: ${event}\ndata: ${data}\n\n`)).then((stop) => {
+  return begin((event, data) => write(`event: ${event}\ndata: ${data}\n\n`), () => ended.abort()).then((stop) => {
     const heartbeat = setInterval(() => write(': still here\n\n'), heartbeatMilliseconds);
     let isOver = false;
     const end = () => {
       if (isOver) return;
       isOver = true;
       clearInterval(heartbeat);
-      signal.removeEventListener('abort', leave);
+      isLeft.removeEventListener('abort', leave);
       draining.removeEventListener('abort', takeLeave);
       stream = null;
       early = [];
@@ -49,9 +51,9 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
         stream = controller;
         for (const bytes of early.splice(0)) controller.enqueue(bytes);
         // Gone or ending since before the listening began: no event will say so again.
-        if (signal.aborted) leave();
+        if (isLeft.aborted) leave();
         else if (draining.aborted) takeLeave();
-        signal.addEventListener('abort', leave);
+        isLeft.addEventListener('abort', leave);
         draining.addEventListener('abort', takeLeave);
       },
       cancel: end,

@@ -6,3 +6,21 @@ export async function insertOrganisation(db: Kysely<DB>, row: Insertable<Organis
   const result = await db.insertInto('organisations').values(row).onConflict((conflict) => conflict.doNothing()).executeTakeFirst();
   return (result.numInsertedOrUpdatedRows ?? 0n) > 0n;
 }
+
+export function getOrganisation(db: Kysely<DB>, id: string) {
+  return db.selectFrom('organisations').selectAll().where('id', '=', id).executeTakeFirstOrThrow();
+}
+
+/** Whoever changes who belongs waits here for the other. */
+export function lockOrganisation(db: Kysely<DB>, id: string) {
+  return db.selectFrom('organisations').selectAll().where('id', '=', id).forUpdate().executeTakeFirstOrThrow();
+}
+
+export function renameOrganisation(db: Kysely<DB>, id: string, name: string) {
+  return db
+    .updateTable('organisations')
+    .set((eb) => ({ name, revision: eb('revision', '+', 1) }))
+    .where('id', '=', id)
+    .returningAll()
+    .executeTakeFirstOrThrow();
+}

@@ -6,9 +6,13 @@ export function findUserByEmail(db: Kysely<DB>, email: string) {
 }
 
 export function getUser(db: Kysely<DB>, id: string) {
-  return db.selectFrom('users').select(['id', 'email']).where('id', '=', id).executeTakeFirstOrThrow();
+  return db.selectFrom('users').select(['id', 'email', 'password_hash']).where('id', '=', id).executeTakeFirstOrThrow();
 }
 
 export function insertUser(db: Kysely<DB>, row: { id: string; email: string; password_hash: string }) {
   return db.insertInto('users').values(row).execute();
+}
+
+export function updatePassword(db: Kysely<DB>, id: string, passwordHash: string) {
+  return db.updateTable('users').set({ password_hash: passwordHash }).where('id', '=', id).execute();
 }

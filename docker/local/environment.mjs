@@ -39,6 +39,7 @@ export function productEnvironment(ports, outside) {
     AWS_SDK_JS_NODE_VERSION_SUPPORT_WARNING_DISABLED: 'true',
     METRICS_PORT: String(ports.metrics),
     SMTP_URL: `smtp://127.0.0.1:${ports.smtp}`,
+    MAIL_FROM: outside.MAIL_FROM ?? 'Fourfold <fourfold@northmoor.example>',
   };
 }
 

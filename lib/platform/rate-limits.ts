@@ -6,6 +6,11 @@ const limits = {
   'sign-in-account': { points: 10, duration: 300 },
   'sign-in-address': { points: 100, duration: 300 },
   'sign-up': { points: 120, duration: 60 },
+  'reset-address': { points: 60, duration: 900 },
+  'reset-account': { points: 5, duration: 900 },
+  // Guessing the secret of a link is hopeless; this keeps it cheap for the server too.
+  link: { points: 120, duration: 60 },
+  invitation: { points: 100, duration: 3600 },
   calculator: { points: 600, duration: 60 },
 } as const;
 

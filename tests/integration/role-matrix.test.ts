@@ -83,6 +83,13 @@ describe('who may only read', () => {
   });
 });
 
+describe('who may not touch people', () => {
+  it.each(rowsThat('people'))('%s answers 403 to an engineer, a reviewer and a token', async (_name, row) => {
+    for (const who of [engineer, reviewer, readToken]) expect(await statusOf(who, row)).toBe(403);
+  });
+  it.each(rowsThat('members'))('%s answers 403 to a token', async (_name, row) => expect(await statusOf(readToken, row)).toBe(403));
+});
+
 describe('a token limited to another code', () => {
   it.each(rowsThat('read', 'write'))('%s shows and changes nothing of this one', async (_name, row) => {
     const status = await statusOf(otherCodeToken, row);
@@ -104,6 +111,13 @@ describe('who may', () => {
   it.each(rowsThat('write'))('%s lets an engineer through', async (_name, row) => {
     const status = await statusOf(engineer, row);
     expect(isLetThrough(status), `${status}`).toBe(true);
+  });
+  it.each(rowsThat('people'))('%s lets an owner through', async (_name, row) => {
+    const status = await statusOf(owner, row);
+    expect(isLetThrough(status), `${status}`).toBe(true);
+  });
+  it.each(rowsThat('members'))('%s answers every member who reads', async (_name, row) => {
+    for (const who of [engineer, owner, reviewer]) expect(isLetThrough(await statusOf(who, row))).toBe(true);
   });
   it.each(rowsThat('tokens'))('%s lets engineers and owners through to their own', async (_name, row) => {
     const isOnOne = row.contract.path.includes('{id}');

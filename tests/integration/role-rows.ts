@@ -5,6 +5,7 @@ import { createCaseContract, getCaseContract, listCasesContract, putColumnsContr
 import {
   createCodeContract, createReleaseContract, getCodeContract, listCodesContract, listReleasesContract, updateReleaseContract,
 } from '@/lib/domain/codes/schema';
+import { createInvitationContract } from '@/lib/domain/invitations/schema';
 import { getMatrixContract } from '@/lib/domain/matrix/schema';
 import { meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '@/lib/domain/people/schema';
 import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '@/lib/domain/problems/schema';
@@ -18,11 +19,12 @@ import {
   completeUploadContract, deleteUploadContract, getUploadContract, previewContract, putDataContract, signPartsContract, startUploadContract,
 } from '@/lib/domain/uploads/schema';
 import { ifMatch, ok, type Sent } from '../support/api';
-import { makeToken, signUp, type Person } from '../support/people';
+import { addMember, makeToken, newEmail, signUp, type Person } from '../support/people';
 import { heatProblem, makeWork, orderCase, type Work } from '../support/work';
+import { peopleRows, type PeopleGround } from './people-rows';
 
 /** What the calls of the matrix are made on: work of one organisation, and a token of its engineer. */
-export interface Ground { person: Person; work: Work; study: string; upload: string; token: string }
+export interface Ground extends PeopleGround { person: Person; work: Work; study: string; upload: string; token: string }
 
 export async function layGround(): Promise<Ground> {
   const person = await signUp('Role Works');
@@ -32,11 +34,14 @@ export async function layGround(): Promise<Ground> {
   const { upload } = await ok(person, startUploadContract, { params: { id: study.id, label: 'n8' }, body: { filename: 'a.csv', bytes: 100 } });
   await makeToken(person, { scopes: ['read'] });
   const { items: [token] } = await ok(person, listTokensContract, {});
-  return { person, work, study: study.id, upload, token: token?.id ?? '' };
+  const invitation = await ok(person, createInvitationContract, { body: { email: newEmail('guest'), roles: ['engineer'] } });
+  const member = await addMember(person.at, ['engineer']);
+  const people = { invitation: invitation.id, mail: invitation.mail?.id ?? '', member: member.userId };
+  return { ...people, person, work, study: study.id, upload, token: token?.id ?? '' };
 }
 
-/** Who may: everybody; everybody signed in; members who read; engineers; engineers and owners for themselves. */
-type Needs = 'nothing' | 'session' | 'read' | 'write' | 'tokens';
+/** Who may: everybody; everybody signed in; members who read; engineers; engineers and owners for themselves; owners; members, without tokens. */
+type Needs = 'nothing' | 'session' | 'read' | 'write' | 'tokens' | 'people' | 'members';
 
 export interface RoleRow {
   contract: ContractShape;
@@ -59,6 +64,7 @@ const write = (contract: ContractShape, sent: RoleRow['sent'], otherCode: RoleRo
 
 /** One row for every call of the API: who may, and what is sent. A new route needs its row here. */
 export const roleRows: RoleRow[] = [
+  ...peopleRows,
   { contract: signUpContract, needs: 'nothing', sent: nothing },
   { contract: signInContract, needs: 'nothing', sent: nothing },
   { contract: assessContract, needs: 'nothing', sent: nothing },

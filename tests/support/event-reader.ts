@@ -6,7 +6,7 @@ import { need } from './environment';
 export interface HeardEvent { event: string; data: Record<string, unknown> }
 
 /** Listens to a study as a page does; `until` resolves with everything heard once one event is as wanted. */
-export async function listen(who: Who, id: string): Promise<{ until: (isWanted: (event: HeardEvent) => boolean) => Promise<HeardEvent[]>; stop: () => void; type: string | null }> {
+export async function listen(who: Who, id: string): Promise<{ until: (isWanted: (event: HeardEvent) => boolean) => Promise<HeardEvent[]>; ended: (seconds: number) => Promise<void>; stop: () => void; type: string | null }> {
   const abort = new AbortController();
   const contract: ContractShape = getEventsContract;
   const response = await fetch(new URL(addressOf(contract, { params: { id } }, who), need('WEB_URL')), { headers: headersOf(contract, who), signal: abort.signal });
@@ -17,6 +17,11 @@ export async function listen(who: Who, id: string): Promise<{ until: (isWanted: 
   return {
     type: response.headers.get('content-type'),
     stop: () => abort.abort(),
+    async ended(seconds) {
+      const late = setTimeout(() => abort.abort(new Error(`The events went on after ${seconds} s.`)), seconds * 1000);
+      while (!(await reader.read()).done);
+      clearTimeout(late);
+    },
     async until(isWanted) {
       while (!heard.some(isWanted)) {
         const { value, done } = await reader.read();

@@ -3,8 +3,17 @@ import { createCaseContract, getCaseContract, listCasesContract, putColumnsContr
 import {
   createCodeContract, createReleaseContract, getCodeContract, listCodesContract, listReleasesContract, updateReleaseContract,
 } from '../codes/schema';
+import {
+  acceptInvitationContract, createInvitationContract, listInvitationsContract, lookUpInvitationContract, resendInvitationContract, revokeInvitationContract,
+} from '../invitations/schema';
+import { listMailsContract, resendMailContract } from '../mail/schema';
 import { getMatrixContract } from '../matrix/schema';
-import { meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '../people/schema';
+import { listMembersContract, removeMemberContract, updateMemberContract } from '../members/schema';
+import { getOrganisationContract, updateOrganisationContract } from '../organisation/schema';
+import {
+  changePasswordContract, confirmResetContract, getMailPreferencesContract, requestResetContract, updateMailPreferencesContract,
+} from '../people/account-schema';
+import { createOrganisationContract, meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '../people/schema';
 import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '../problems/schema';
 import { getStorageContract } from '../storage/schema';
 import {
@@ -21,6 +30,10 @@ import { healthContract, metricsContract, openApiContract, readyContract } from 
 /** Every call there is, in the order they are told. */
 export const allContracts: readonly ContractShape[] = [
   signUpContract, signInContract, signOutContract, signOutEverywhereContract, meContract,
+  requestResetContract, confirmResetContract, changePasswordContract, getMailPreferencesContract, updateMailPreferencesContract,
+  createOrganisationContract, getOrganisationContract, updateOrganisationContract, listMembersContract, updateMemberContract, removeMemberContract,
+  createInvitationContract, listInvitationsContract, resendInvitationContract, revokeInvitationContract, lookUpInvitationContract, acceptInvitationContract,
+  listMailsContract, resendMailContract,
   createTokenContract, listTokensContract, deleteTokenContract,
   createCodeContract, listCodesContract, getCodeContract,
   createReleaseContract, listReleasesContract, updateReleaseContract, getMatrixContract,

@@ -7,8 +7,6 @@ import { refuseWrongRoles, roleSetShape } from '../people/role-set';
 import { roleSchema } from '../people/roles';
 import { emailSchema, meSchema, passwordSchema } from '../people/schema';
 
-/** Days from the sending of an invitation to its end. */
-export const invitationDays = 7;
 
 export const createInvitationSchema = z.strictObject({ email: emailSchema, ...roleSetShape }).superRefine(refuseWrongRoles);
 export type CreateInvitationInput = z.infer<typeof createInvitationSchema>;

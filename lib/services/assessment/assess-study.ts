@@ -16,6 +16,7 @@ import { announce } from '../studies/announce';
 import { definitionOf, normsOf } from '../studies/grid-definition';
 import { withOrganisation } from '../with-organisation';
 import { hashInputs } from './hash-inputs';
+import { queueFailMails } from './queue-fail-mails';
 
 interface LoadedInputs { head: StudyHead; bound: BoundRevision; rows: GridRow[] }
 type Computed = { ok: true; assessment: Assessment } | { ok: false; reason: string };
@@ -77,7 +78,9 @@ export async function assessStudy(ctx: JobContext, studyId: string, revision: nu
       organisation_id: ctx.organisation.id, id: newId(), study_id: studyId, study_revision: revision, outcome: assessment.outcome,
       body: json(assessment), inputs_sha256: assessment.inputsSha256, numerics_version: assessment.numericsVersion,
     });
-    return updateRevisionState(trx, at, ['assessing'], { state: 'assessed', since: now });
+    const isFirst = await updateRevisionState(trx, at, ['assessing'], { state: 'assessed', since: now });
+    if (isFirst && assessment.outcome === 'fail') await queueFailMails(ctx, trx, { at, head: loaded.head, caseName: loaded.bound.case_name, assessment });
+    return isFirst;
   });
   if (isChanged) await announce(ctx, studyId, { event: 'state', state: computed.ok ? 'assessed' : 'assessment-failed' });
 }

@@ -3,6 +3,7 @@ import type { StudySnapshot } from '@/lib/domain/events/schema';
 import type { StudyState } from '@/lib/domain/studies/schema';
 import { AppError } from '@/lib/errors';
 import type { MemberContext } from '../context';
+import { watchMembership } from '../members/announce-membership';
 import { permit } from '../permit';
 import { withOrganisation } from '../with-organisation';
 import { stateOf } from './grid-definition';
@@ -22,12 +23,16 @@ async function readSnapshot(ctx: MemberContext, id: string): Promise<{ studyId: 
   });
 }
 
-/** Listens to a study first and then says how it stands, so that nothing falls between; `stop` ends the listening. */
-export async function watchStudy(ctx: MemberContext, id: string, listener: (message: string) => void): Promise<{ snapshot: StudySnapshot; stop: () => void }> {
+/**
+ * Listens to a study first and then says how it stands, so that nothing falls between; `stop` ends the listening. `onLost`
+ * is called when the roles of the listener have changed: whether they still may listen is asked anew.
+ */
+export async function watchStudy(ctx: MemberContext, id: string, listener: (message: string) => void, onLost: () => void): Promise<{ snapshot: StudySnapshot; stop: () => void }> {
   permit(ctx, 'work.read');
   // By the study's own id: the path may write it in capitals.
   const { studyId } = await readSnapshot(ctx, id);
-  const subscription = ctx.events.subscribe(studyId, listener);
+  const subscription = Promise.all([ctx.events.subscribe(studyId, listener), watchMembership(ctx, ctx.organisation.id, ctx.userId, onLost)])
+    .then((stops) => () => stops.forEach((each) => each()));
   const stop = await Promise.race([subscription, new Promise<null>((resolve) => setTimeout(resolve, patienceMilliseconds, null))]);
   if (stop === null) {
     subscription.then((late) => late(), () => undefined);

@@ -24,6 +24,7 @@ const wayOn: Record<ErrorCode, string> = {
   'too-large': 'Send the file in parts.',
   'no-room': 'Give up uploads in progress under Storage, or have the quota raised; nothing was kept.',
   invalid: 'Mend the members named under errors; nothing was changed.',
+  'wrong-password': 'Type the present password again.',
   'not-available': 'Leave out the member named under errors.',
   'key-reused': 'Use a new key for a request with another body.',
   'revision-needed': 'Send If-Match with the revision you read.',

@@ -4,14 +4,14 @@ import { studyEventSchema } from '@/lib/domain/events/schema';
 import { getEventsContract } from '@/lib/domain/studies/schema';
 import { watchStudy } from '@/lib/services/studies/watch-study';
 
-export const GET = route(getEventsContract, ({ ctx, params, request, headers }) => eventStream(request.signal, headers, async (send) => {
+export const GET = route(getEventsContract, ({ ctx, params, request, headers }) => eventStream(request.signal, headers, async (send, end) => {
   const waiting: string[] = [];
   const relay = (message: string) => send(studyEventSchema.parse(JSON.parse(message)).event, message);
   let isStarted = false;
   const { snapshot, stop } = await watchStudy(ctx, params.id, (message) => {
     if (isStarted) relay(message);
     else waiting.push(message);
-  });
+  }, end);
   send('snapshot', JSON.stringify(snapshot));
   waiting.forEach(relay);
   isStarted = true;
