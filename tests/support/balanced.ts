@@ -1,0 +1,65 @@
+import { setTimeout as pause } from 'node:timers/promises';
+
+/** Whether nothing was sent yet: only then may whoever spreads the load ask the next. */
+function isRefused(error: unknown): boolean {
+  const cause = error instanceof Error ? (error.cause as { code?: string } | undefined) : undefined;
+  return cause?.code === 'ECONNREFUSED';
+}
+
+export interface Balanced {
+  fetch(path: string, init?: RequestInit): Promise<Response>;
+  /** Reads a stream of server-sent events until told to stop, coming back each time it ends, as a browser does. */
+  listen(path: string, init: RequestInit): { events: string[]; endings: string[]; stop: () => Promise<void> };
+}
+
+/** Sends each request to the next of several web processes, and past one that takes no connections: what a load balancer does. */
+export function createBalanced(addresses: string[]): Balanced {
+  let turn = 0;
+  const ask = async (path: string, init?: RequestInit): Promise<Response> => {
+    for (let tries = 1; ; tries += 1) {
+      turn += 1;
+      try {
+        return await fetch(`${addresses[turn % addresses.length] ?? ''}${path}`, init);
+      } catch (error) {
+        if (!isRefused(error) || tries > 2 * addresses.length) throw error;
+      }
+    }
+  };
+
+  return {
+    fetch: ask,
+    listen(path, init) {
+      const abort = new AbortController();
+      const events: string[] = [];
+      const endings: string[] = [];
+      const once = async () => {
+        const response = await ask(path, { ...init, signal: abort.signal });
+        if (response.status !== 200 || !response.body) throw new Error(`Events answered ${response.status}.`);
+        let text = '';
+        const reader = response.body.pipeThrough(new TextDecoderStream()).getReader();
+        for (let read = await reader.read(); !read.done; read = await reader.read()) {
+          text += read.value;
+          const blocks = text.split('\n\n');
+          text = blocks.pop() ?? '';
+          events.push(...blocks);
+        }
+        const last = events.at(-1) ?? '';
+        endings.push(last);
+        await pause(Number(/^retry: (\d+)$/.exec(last)?.[1] ?? 3000));
+      };
+      const run = async () => {
+        while (!abort.signal.aborted) await once();
+      };
+      const running = run().catch((error: unknown) => {
+        if (!abort.signal.aborted) endings.push(`failed: ${String(error)}`);
+      });
+      return {
+        events, endings,
+        async stop() {
+          abort.abort();
+          await running;
+        },
+      };
+    },
+  };
+}
