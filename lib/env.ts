@@ -31,11 +31,41 @@ const envSchema = z.object({
 
 export type Env = z.infer<typeof envSchema>;
 
-/** Reads the environment once; a missing or wrong variable stops the start and is named. */
-export function readEnv(source: Record<string, string | undefined>): Env {
+const backupSchema = envSchema.pick({
+  STORAGE_ENDPOINT: true, STORAGE_PUBLIC_URL: true, STORAGE_BUCKET: true, STORAGE_REGION: true, STORAGE_ACCESS_KEY: true, STORAGE_SECRET_KEY: true,
+  PART_ADDRESS_SECONDS: true,
+}).extend({
+  MAINTENANCE_DATABASE_URL: z.url().describe('PostgreSQL as the role fourfold_maintenance, which reads everything. For backups and checks.'),
+  MIGRATION_DATABASE_URL: z.url().describe('PostgreSQL as the role fourfold_owner, which owns the tables. For migrations and for restoring.'),
+});
+
+function parse<S extends z.ZodType>(schema: S, source: Record<string, string | undefined>): z.output<S> {
   // Set to nothing is not set: what starts processes often has no other way to say so.
-  const parsed = envSchema.safeParse(Object.fromEntries(Object.entries(source).filter(([, value]) => value !== '')));
+  const parsed = schema.safeParse(Object.fromEntries(Object.entries(source).filter(([, value]) => value !== '')));
   if (parsed.success) return parsed.data;
   const faults = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
   throw new Error(`The environment is not complete.\n${faults.join('\n')}`);
+}
+
+/** Reads the environment once; a missing or wrong variable stops the start and is named. */
+export function readEnv(source: Record<string, string | undefined>): Env {
+  return parse(envSchema, source);
+}
+
+/** What the commands that back up and restore need of the environment. */
+export function readBackupEnv(source: Record<string, string | undefined>): z.infer<typeof backupSchema> {
+  return parse(backupSchema, source);
+}
+
+/** A variable as a person sets it; the default is null where it must be set, and empty where it may be left out. */
+export interface Variable { name: string; meaning: string; standard: string | null; isForCommands: boolean }
+
+/** Every variable there is, from the schemas that read them. */
+export function listVariables(): Variable[] {
+  const own = Object.keys(envSchema.shape);
+  return Object.entries({ ...envSchema.shape, ...backupSchema.shape }).map(([name, schema]) => {
+    const unset = (schema as z.ZodType<string | number | undefined>).safeParse(undefined);
+    const standard = unset.success ? String(unset.data ?? '') : null;
+    return { name, meaning: schema.description ?? '', standard, isForCommands: !own.includes(name) };
+  });
 }

@@ -87,9 +87,10 @@ export function createStorage(options: StorageOptions) {
       }
     },
 
-    /** Streams a body of unknown length in parts of 8 MiB. */
-    async put(key: string, body: Readable): Promise<void> {
-      await new Upload({ client, params: { Bucket: bucket, Key: key, Body: body }, partSize: 8 * 1024 * 1024, queueSize: 2 }).done();
+    /** Streams a body in parts of 8 MiB, or of more where it is known to be so long that a thousand would not do. */
+    async put(key: string, body: Readable, bytes = 0): Promise<void> {
+      const partSize = Math.max(8 * 1024 * 1024, Math.ceil(bytes / 1000));
+      await new Upload({ client, params: { Bucket: bucket, Key: key, Body: body }, partSize, queueSize: 2 }).done();
     },
 
     /** Size in bytes, or null where there is no such object. */
