@@ -1,3 +1,5 @@
+import type { Pattern } from './patterns/pattern';
+
 /** The shapes that an assessment is computed from and answered in. Grids run from the finest to the coarsest. */
 
 export const norms = ['L1', 'L2', 'Linf', 'H1', 'energy'] as const;
@@ -130,8 +132,28 @@ export interface QuantityAssessment {
   outcome: Outcome | null; reasons: ReasonCode[];
 }
 
+/** Errors over a matrix of grids and time steps; of a value with a known one they keep their sign. */
+export interface SpaceTimeSeries {
+  field: string; norm: SeriesNorm; isSigned: boolean;
+  formalOrder: number | null;
+  points: { label: string; h: number; dt: number; error: number }[];
+}
+
+/** E² = A²h^2p + 2ρAB·h^pΔt^q + B²Δt^2q, or E = Ah^p + BΔt^q with a sign; null members where there is no fit. */
+export interface SpaceTimeAssessment {
+  field: string; norm: SeriesNorm; formalOrder: number | null;
+  A: number | null; p: number | null; B: number | null; q: number | null; rho: number | null; residual: number | null;
+  spread: { A: number; p: number; B: number; q: number; rho: number | null } | null;
+  /** The parts Ah^p and BΔt^q on every grid, null without a fit. */
+  points: { label: string; h: number; dt: number; error: number; space: number | null; time: number | null }[];
+}
+
 export interface SeriesAssessment {
   outcome: Outcome | null; reasons: ReasonCode[];
   fields: FieldAssessment[]; quantities: QuantityAssessment[];
+  /** Of a study refined in space and time together, which has no outcome. */
+  spaceTime?: SpaceTimeAssessment[];
+  /** Hints, never an outcome. */
+  patterns: Pattern[];
   numericsVersion: string;
 }

@@ -9,7 +9,7 @@ const publicPages = ['/', '/quick-check', '/docs/methods', '/docs/problems', '/s
 const memberPages = [
   ['', 'release matrix'], ['/codes', 'codes'], ['/codes/brack', 'a code'], ['/problems', 'problems'], ['/problems/new', 'a new problem'],
   ['/problems/heat-in-a-square', 'a problem'], ['/cases', 'cases'], ['/cases/new', 'a new case'], ['/cases/heat-second-order', 'a case'],
-  ['/studies', 'studies'], ['/studies/{study}', 'a study'], ['/settings/tokens', 'tokens'],
+  ['/studies', 'studies'], ['/studies/{study}', 'a study'], ['/studies/{spaceTime}', 'a study in space and time'], ['/settings/tokens', 'tokens'],
 ] as const;
 
 const looks = [{ size: 'wide', theme: 'light' }, { size: 'wide', theme: 'dark' }, { size: 'phone', theme: 'light' }] as const;
@@ -23,7 +23,7 @@ describe.each(looks)('every page, $size and $theme', ({ size, theme }) => {
   });
 
   browserTest.for(memberPages)('%s of an organisation: %s', async ([path], { open }) => {
-    const page = await open(`/${work.person.at.slug}${path.replace('{study}', work.study)}`, { size, theme, person: work.person });
+    const page = await open(`/${work.person.at.slug}${path.replace('{study}', work.study).replace('{spaceTime}', work.spaceTimeStudy)}`, { size, theme, person: work.person });
     expect(await overflowOf(page)).toBe(0);
     expect(await page.getByRole('heading', { level: 1 }).count()).toBe(1);
     expect(await seriousFindings(page)).toEqual([]);

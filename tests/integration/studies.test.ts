@@ -97,8 +97,16 @@ describe('POST /api/v1/studies', () => {
     expect(problem.errors.map((error) => error.path)).toContain(path);
   });
 
-  it('says what is not available yet', async () => {
-    expect(await refuseMaking(planned(), { refinement: 'space-time' })).toMatchObject({ status: 422, type: '/docs/problems#not-available' });
+  it('fits a matrix refined in space and time, and gives it no outcome', async () => {
+    const steps = [0.1, 0.05, 0.025];
+    const grids = [8, 16, 32].flatMap((n) => steps.map((dt) => ({ label: `n${n}-dt${dt}`, cellsPerDirection: n, dt, errors: { T: { L2: 3 / n ** 2 + 0.2 * dt, Linf: 6 / n ** 2 + 0.4 * dt } } })));
+    const { outcome, assessment } = await awaitOutcome(engineer, (await make(grids, { refinement: 'space-time' })).id);
+    expect(outcome).toBeNull();
+    const [first] = assessment.spaceTime ?? [];
+    expect(first).toMatchObject({ field: 'T', norm: 'L2', p: expect.closeTo(2, 3) as number, q: expect.closeTo(1, 3) as number, rho: expect.closeTo(1, 3) as number });
+    expect(first?.points).toHaveLength(9);
+    expect(await refuseMaking(grids.slice(0, 8), { refinement: 'space-time' })).toMatchObject({ status: 422, errors: [{ path: 'grids' }] });
+    expect(await refuseMaking(grids.map((grid) => ({ ...grid, dt: undefined })), { refinement: 'space-time' })).toMatchObject({ status: 422, errors: expect.arrayContaining([expect.objectContaining({ path: 'grids.0.dt' })]) as unknown[] });
   });
 
   it('answers 404 for a case or release that is not there, or another code’s', async () => {

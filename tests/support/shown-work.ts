@@ -10,7 +10,7 @@ const errorsAt = (order: number) => [8, 16, 32, 64].map((n) => {
   return { label: `n${n}`, cellsPerDirection: n, errors: { T: { L2: error, Linf: 2 * error } } };
 });
 
-export interface ShownWork extends Work { person: Person; study: string }
+export interface ShownWork extends Work { person: Person; study: string; spaceTimeStudy: string }
 
 /** An organisation with something on every page: a case that passes on one release and fails on the next. */
 export async function makeShownWork(): Promise<ShownWork> {
@@ -22,6 +22,9 @@ export async function makeShownWork(): Promise<ShownWork> {
     await awaitOutcome(person, study.id);
     return study.id;
   };
+  const matrix = [8, 16, 32].flatMap((n) => [0.1, 0.05, 0.025].map((dt) => ({ label: `n${n}-dt${dt}`, cellsPerDirection: n, dt, errors: { T: { L2: 3 / n ** 2 + 0.2 * dt } } })));
+  const spaceTime = await ok(person, createStudyContract, { body: { case: work.case.slug, release: '1.0.0', refinement: 'space-time', grids: matrix } });
+  await awaitOutcome(person, spaceTime.id);
   await run('1.0.0', 2);
-  return { ...work, person, study: await run('1.1.0', 1.2) };
+  return { ...work, person, study: await run('1.1.0', 1.2), spaceTimeStudy: spaceTime.id };
 }

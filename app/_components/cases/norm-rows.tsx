@@ -23,7 +23,7 @@ export function NormRows({ form, place, isExactness, onRemove }: NormRowsProps) 
   const typed = isExactness ? (['exactLimit'] as const) : (['formalOrder', 'derivedOrder', 'tolerance', 'regularity', 'logFactor'] as const);
   const placeholders = { formalOrder: 'order', derivedOrder: 'none', tolerance: 'rule', regularity: 'smooth', logFactor: 'none', exactLimit: 'round-off' };
   return (
-    <fieldset className="flex flex-col gap-3">
+    <fieldset className="flex min-w-0 flex-col gap-3">
       <legend className="sr-only">Field {field.field}</legend>
       <div className="flex flex-wrap items-start gap-x-5 gap-y-2">
         <TextField label="Field" autoComplete="off" spellCheck={false} className="w-32 [&_input]:font-mono" error={faults?.field?.message} {...register(`fields.${place}.field`)} />

@@ -2,6 +2,7 @@
 
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { useRouter } from 'next/navigation';
+import { plannedRefinement } from '@/lib/domain/cases/planned-refinement';
 import type { Case } from '@/lib/domain/cases/schema';
 import { getMatrixContract } from '@/lib/domain/matrix/schema';
 import { createStudyContract, listStudiesContract } from '@/lib/domain/studies/schema';
@@ -18,10 +19,9 @@ export function StartStudy({ found, release }: StartStudyProps) {
   const { slug } = useOrganisation();
   const router = useRouter();
   const queries = useQueryClient();
-  const isInTime = found.gridPlan.every(({ dt, h, cells, cellsPerDirection }) => dt !== undefined && h === undefined && cells === undefined && cellsPerDirection === undefined);
   const start = useMutation({
     mutationFn: () => callApi(createStudyContract, {
-      organisation: slug, body: { case: found.slug, release, refinement: isInTime ? 'time' : 'space', grids: found.gridPlan },
+      organisation: slug, body: { case: found.slug, release, refinement: plannedRefinement(found.gridPlan), grids: found.gridPlan },
     }),
     onSuccess: (study) => {
       void queries.invalidateQueries({ queryKey: apiKey(listStudiesContract) });

@@ -1,6 +1,7 @@
 'use client';
 
 import { estimatedBand } from '@/lib/domain/assessment/estimated-band';
+import { explainPattern } from '@/lib/domain/assessment/explain-pattern';
 import { explainProcedure, procedureNames, procedureSources } from '@/lib/domain/assessment/explain-procedure';
 import { explainField, explainQuantity } from '@/lib/domain/assessment/reason-text';
 import { stateOutcome } from '@/lib/domain/assessment/state-outcome';
@@ -40,7 +41,12 @@ export function QuickResult({ input, assessment }: QuickResultProps) {
   const [quantity] = quantities;
   const note = quantity
     ? <><p><b>{procedureNames[quantity.procedure]}</b>: {procedureSources[quantity.procedure]}</p><p>The {estimatedBand(quantity).longName} covers the error in about 95 % of cases by experience. It is no bound.</p></>
-    : <p>The <b>band</b> reaches from the tolerance below the formal order to twice the tolerance above it; the last two orders must lie in it.</p>;
+    : (
+      <>
+        <p>The <b>band</b> reaches from the tolerance below the formal order to twice the tolerance above it; the last two orders must lie in it.</p>
+        {assessment.patterns.map((pattern) => <p key={pattern.code}><b>Hint.</b> <FormulaText text={explainPattern(pattern)} symbols={symbols} /></p>)}
+      </>
+    );
   return (
     <Section heading="Result" note={note}>
       {quantities.map((quantity) => <ValueTable key={quantity.name} input={input} quantity={quantity} />)}

@@ -1,7 +1,7 @@
 import type { FieldAssessment, QuantityAssessment, SeriesAssessment } from '@/lib/numerics/assessment';
 
 /** What a statement is made from: the shape both of a kept assessment and of one just computed. */
-export type StatedAssessment = Pick<SeriesAssessment, 'outcome' | 'reasons' | 'fields' | 'quantities'>;
+export type StatedAssessment = Pick<SeriesAssessment, 'outcome' | 'reasons' | 'fields' | 'quantities' | 'spaceTime'>;
 
 /** The parts that made the outcome of a study: counting fields, or its quantities where no field counts, or what there is. */
 export function decidingParts({ fields, quantities, reasons }: StatedAssessment): { fields: FieldAssessment[]; quantities: QuantityAssessment[] } {

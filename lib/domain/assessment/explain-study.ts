@@ -1,6 +1,7 @@
 import { decidingParts, type StatedAssessment } from './deciding-parts';
 import type { Explanation } from './explanation';
 import { explainField, explainQuantity } from './reason-text';
+import { spaceTimeNextStep, stateSpaceTime } from './state-space-time';
 import { joinWords, nameSeries } from './series-name';
 
 /**
@@ -8,6 +9,7 @@ import { joinWords, nameSeries } from './series-name';
  * of the first that is not as it should be.
  */
 export function explainStudy(assessment: StatedAssessment): Explanation[] {
+  if (assessment.spaceTime) return [{ sentence: stateSpaceTime(assessment.spaceTime), nextStep: spaceTimeNextStep }];
   if (assessment.reasons.includes('nothing-counts')) return [explainNothingCounts(assessment)];
   const { fields, quantities } = decidingParts(assessment);
   if (assessment.outcome === null) {

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { procedureBranches, procedures, reasonCodes, regions, norms } from '@/lib/numerics/assessment';
+import { patternCodes } from '@/lib/numerics/patterns/pattern';
 
 const nullableNumber = z.number().nullable();
 const pointSchema = z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() });
@@ -40,11 +41,21 @@ const quantityAssessmentSchema = z.strictObject({
   outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
 });
 
+const spreadSchema = z.strictObject({ A: z.number(), p: z.number(), B: z.number(), q: z.number(), rho: nullableNumber });
+const spaceTimeSchema = z.strictObject({
+  field: z.string(), norm: z.enum([...norms, 'value']), formalOrder: nullableNumber,
+  A: nullableNumber, p: nullableNumber, B: nullableNumber, q: nullableNumber, rho: nullableNumber, residual: nullableNumber, spread: spreadSchema.nullable(),
+  points: z.array(z.strictObject({ label: z.string(), h: z.number(), dt: z.number(), error: z.number(), space: nullableNumber, time: nullableNumber })),
+}).meta({ description: 'E² = A²h^2p + 2ρAB·h^pΔt^q + B²Δt^2q; E = Ah^p + BΔt^q where the error has a sign (ρ null). Null members: too few points for a fit.' });
+
 /** What was computed for one revision of a study; it never changes. */
 export const assessmentSchema = z.strictObject({
   outcome: outcomeSchema.nullable(), reasons: z.array(reasonCodeSchema),
   fields: z.array(fieldAssessmentSchema), quantities: z.array(quantityAssessmentSchema),
-  patterns: z.array(z.strictObject({ code: z.string() })).meta({ description: 'Hints, never an outcome; empty until pattern hints are available.' }),
+  spaceTime: z.array(spaceTimeSchema).optional().meta({ description: 'Only of a study refined in space and time together, which has no outcome.' }),
+  patterns: z.array(z.strictObject({
+    code: z.enum(patternCodes), field: z.string().optional(), norm: z.enum([...norms, 'value']).optional(), evidence: z.record(z.string(), z.number()),
+  })).meta({ description: 'Hints with the figures that suggest them, never an outcome.' }),
   inputs: z.array(z.strictObject({
     label: z.string(), sha256: z.string(), bytes: z.number(), rows: z.number(),
     weightSum: nullableNumber.optional().meta({ description: 'Null where every row weighs the same; absent from assessments made before it was kept.' }),

@@ -4,6 +4,7 @@ import { estimatedBand } from './estimated-band';
 import { explainStudy } from './explain-study';
 import { explainField, explainQuantity } from './reason-text';
 import { stateQuantity } from './state-quantity';
+import { stateSpaceTime } from './state-space-time';
 import { stateRatio, type Refinement } from './state-ratio';
 
 /** Reasons under which the ratio of the last errors says nothing, or not the thing that matters. */
@@ -15,7 +16,8 @@ const besideRatio = new Set<string>(['exact', 'exact-not-declared', 'not-exact',
  * stands apart, so that a page can set its mark beside it.
  */
 export function stateOutcome(assessment: StatedAssessment, refinement: Refinement = 'space'): { outcome: Outcome | null; sentence: string } {
-  const { outcome } = assessment;
+  const { outcome, spaceTime } = assessment;
+  if (spaceTime) return { outcome, sentence: stateSpaceTime(spaceTime) };
   const { fields, quantities } = decidingParts(assessment);
   const nothingCounts = assessment.reasons.includes('nothing-counts');
   const field = nothingCounts ? undefined : farthestField(fields.filter((part) => part.outcome === outcome));

@@ -1,7 +1,8 @@
-import type { ErrorSeries, Norm, QuantitySeries } from '@/lib/numerics/assessment';
+import type { ErrorSeries, Norm, QuantitySeries, SpaceTimeSeries } from '@/lib/numerics/assessment';
 import type { GridNorms } from '@/lib/numerics/norms/grid-norms';
 import { knownError } from '@/lib/numerics/norms/known-error';
 import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
+import type { Surroundings } from '@/lib/numerics/patterns/suggest-patterns';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
 import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
 import { builtInRule } from '../rules/built-in-rule';
@@ -10,18 +11,19 @@ import { statedSpacing } from '../studies/stated-spacing';
 
 /** A grid as it takes part in the assessment: what its author stated and, where it has a file, the norms read from it. */
 export interface StudyGrid { grid: GridInput; norms: GridNorms | null }
-type PlacedGrid = StudyGrid & { h: number };
+export type PlacedGrid = StudyGrid & { h: number };
 
-interface StudyToAssess {
+export interface StudyToAssess {
   definition: CaseDefinition;
   grids: readonly StudyGrid[];
   refinement: 'space' | 'time';
   dimension: number;
   /** Of the domain's box, null where unknown. */
   volume: number | null;
+  box?: Surroundings['box'];
 }
 
-export type StudySeries = { ok: true; errors: ErrorSeries[]; quantities: QuantitySeries[] } | { ok: false; reason: string };
+export type StudySeries = { ok: true; errors: ErrorSeries[]; quantities: QuantitySeries[]; spaceTime?: SpaceTimeSeries[]; around?: Surroundings } | { ok: false; reason: string };
 
 /** Series of every declared field and norm and of every quantity; or in words why the grids cannot be put in a row. */
 export function studySeries({ definition, grids, ...around }: StudyToAssess): StudySeries {
@@ -45,11 +47,12 @@ export function studySeries({ definition, grids, ...around }: StudyToAssess): St
         minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
       })),
     ],
+    around: { box: around.box, means: placed.flatMap(({ grid, norms }) => (norms?.fields ?? []).map(({ field, mean }) => ({ field, label: grid.label, mean }))) },
     quantities: unknown.map((quantity) => quantitySeries(quantity, placed, definition.minimumGrids ?? builtInRule.minimumGridsOfQuantity)),
   };
 }
 
-function fieldSeries({ definition, dimension, volume }: Omit<StudyToAssess, 'grids'>, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {
+function fieldSeries({ definition, dimension, volume }: Pick<StudyToAssess, 'definition' | 'dimension' | 'volume'>, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {
   const { norm: name } = norm;
   const columns = placed.flatMap(({ norms }) => norms?.fields.find((column) => column.field === field.field) ?? []);
   const significantDigits = largestOf(columns.flatMap((column) => column.significantDigits ?? []));
@@ -69,7 +72,7 @@ function fieldSeries({ definition, dimension, volume }: Omit<StudyToAssess, 'gri
 }
 
 /** What was read from a file goes before what was typed. */
-function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm, significantDigits }: { norm: Norm; significantDigits: number | null }): ErrorSeries['grids'][number] | null {
+export function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm, significantDigits }: { norm: Norm; significantDigits: number | null }): ErrorSeries['grids'][number] | null {
   const iterativeError = grid.iterativeError?.[field]?.[norm] ?? 0;
   const column = norms?.fields.find((candidate) => candidate.field === field);
   const fromFile = column && norm !== 'H1' && norm !== 'energy' ? { error: column[norm], exactNorm: column.exact[norm] } : null;
@@ -84,7 +87,7 @@ function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm, signif
   return error === undefined ? null : { label: grid.label, h, error, knownError: iterativeError, exactNorm: null, at: null };
 }
 
-function quantitySeries({ name, unit, formalOrder, target, procedure, uNumFactor }: DeclaredQuantity, placed: readonly PlacedGrid[], minimumGrids: number): QuantitySeries {
+export function quantitySeries({ name, unit, formalOrder, target, procedure, uNumFactor }: DeclaredQuantity, placed: readonly PlacedGrid[], minimumGrids: number): QuantitySeries {
   return {
     name, unit: unit ?? null, formalOrder: formalOrder ?? null, target: target ?? null, minimumGrids, procedure, uNumFactor: uNumFactor ?? null,
     grids: placed.flatMap(({ grid: { label, values }, h }) => {

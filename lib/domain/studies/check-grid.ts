@@ -1,12 +1,12 @@
 import type { FieldProblem } from '@/lib/errors';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
 import type { CaseDefinition } from '../cases/definition';
-import type { GridInput } from './input';
+import type { GridInput, Refinement } from './input';
 import { statedSpacing } from './stated-spacing';
 
 interface Surroundings {
   definition: CaseDefinition;
-  refinement: 'space' | 'time';
+  refinement: Refinement;
   dimension: number;
   /** A file is there or can come; its weights may tell the spacing. */
   canHaveFile: boolean;
@@ -22,10 +22,13 @@ export function checkGrid(grid: GridInput, around: Surroundings): FieldProblem[]
   return [...checkSpacing(grid, around), ...checkQuantities(grid, around.definition), ...checkFields(grid, around.definition)];
 }
 
-function checkSpacing(grid: GridInput, { refinement, dimension, canHaveFile }: Surroundings): FieldProblem[] {
+function checkSpacing(grid: GridInput, { refinement, dimension, canHaveFile }: Omit<Surroundings, 'definition'>): FieldProblem[] {
   const counts = grid.cellsPerDirection;
   if (Array.isArray(counts) && counts.length !== dimension) {
     return [{ path: 'cellsPerDirection', message: `Grid ${grid.label}: ${counts.length} counts in ${dimension} dimensions. Give one for each.` }];
+  }
+  if (refinement === 'space-time') {
+    return [...checkSpacing(grid, { refinement: 'time', dimension, canHaveFile }), ...checkSpacing(grid, { refinement: 'space', dimension, canHaveFile })];
   }
   if (canHaveFile && refinement === 'space' && !isTyped(grid)) return [];
   const spacing = resolveSpacing({ grids: [statedSpacing(grid)], refinement, dimension });

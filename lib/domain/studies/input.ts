@@ -32,6 +32,7 @@ export const gridInputSchema = z.strictObject({
 export type GridInput = z.infer<typeof gridInputSchema>;
 
 export const refinementSchema = z.enum(['space', 'time', 'space-time']);
+export type Refinement = z.infer<typeof refinementSchema>;
 
 export const createStudySchema = z.strictObject({
   case: z.string().min(1), release: z.string().min(1).meta({ description: 'Version or id of a release of the case’s code.' }),

@@ -4,10 +4,12 @@ import { findStudy, type StudyHead } from '@/db/queries/studies';
 import { findBoundRevision, updateRevisionState, type BoundRevision, type RevisionKey } from '@/db/queries/study-revisions';
 import { json } from '@/db/json';
 import type { Assessment } from '@/lib/domain/assessment/schema';
+import { spaceTimeSeries } from '@/lib/domain/assessment/space-time-series';
 import { studySeries } from '@/lib/domain/assessment/study-series';
 import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import { domainVolume } from '@/lib/domain/problems/domain-volume';
 import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
+import { refinementSchema } from '@/lib/domain/studies/input';
 import { assessSeries } from '@/lib/numerics/assess-series';
 import { numericsVersion } from '@/lib/numerics/version';
 import { newId } from '../keys';
@@ -42,18 +44,20 @@ function compute(loaded: LoadedInputs): Computed {
   const dimension = head.dimension;
   const used = rows.filter((row) => row.excluded === null);
   try {
-    const series = studySeries({
+    const problem = problemDefinitionSchema.parse(bound.problem_definition);
+    const study = {
       definition: caseDefinitionSchema.parse(bound.case_definition),
       grids: used.map((row) => ({ grid: { label: row.label, ...definitionOf(row) }, norms: normsOf(row) })),
-      refinement: head.refinement === 'time' ? 'time' : 'space', dimension,
-      volume: domainVolume(problemDefinitionSchema.parse(bound.problem_definition), dimension),
-    });
+      dimension, volume: domainVolume(problem, dimension),
+    };
+    const refinement = refinementSchema.parse(head.refinement);
+    const series = refinement === 'space-time' ? spaceTimeSeries(study) : studySeries({ ...study, refinement, box: problem.domain ?? null });
     if (!series.ok) return series;
     const inputs = used.flatMap((row) => {
       const norms = normsOf(row);
       return norms ? [{ label: row.label, sha256: row.sha256 ?? '', bytes: Number(row.bytes ?? 0), rows: norms.rows, weightSum: norms.equalWeights ? null : norms.weightSum }] : [];
     });
-    return { ok: true, assessment: { ...assessSeries(series), patterns: [], inputs, inputsSha256: inputsSha256(loaded) } };
+    return { ok: true, assessment: { ...assessSeries(series), inputs, inputsSha256: inputsSha256(loaded) } };
   } catch (error) {
     if (error instanceof RangeError || error instanceof TypeError) return { ok: false, reason: error.message };
     throw error;

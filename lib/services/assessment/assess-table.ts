@@ -11,5 +11,5 @@ export async function assessTable(ctx: Context, address: string, input: QuickChe
   const result = assessQuickCheck(input);
   if (!result.ok) throw new AppError('invalid', result.faults[0]?.message ?? 'The table is not valid.', { fields: result.faults });
   const { assessment } = result;
-  return { ...assessment, patterns: [], inputs: [], inputsSha256: hashInputs({ request: input, numericsVersion: assessment.numericsVersion }) };
+  return { ...assessment, inputs: [], inputsSha256: hashInputs({ request: input, numericsVersion: assessment.numericsVersion }) };
 }

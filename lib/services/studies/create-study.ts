@@ -12,7 +12,7 @@ import { checkSeries } from '@/lib/domain/studies/check-series';
 import type { CreateStudyInput } from '@/lib/domain/studies/input';
 import type { Study } from '@/lib/domain/studies/schema';
 import { takesFiles } from '@/lib/domain/studies/takes-files';
-import { AppError, notAvailable } from '@/lib/errors';
+import { AppError } from '@/lib/errors';
 import type { MemberContext } from '../context';
 import { keyOf, newId } from '../keys';
 import { permit, permitCode } from '../permit';
@@ -29,16 +29,15 @@ async function requireCaseBinding(ctx: MemberContext, trx: Trx, key: string) {
   return { ...row, definition: caseDefinitionSchema.parse(row.case_definition), problem: problemDefinitionSchema.parse(row.problem_definition) };
 }
 
-function checkInput(input: CreateStudyInput, bound: Awaited<ReturnType<typeof requireCaseBinding>>): { refinement: 'space' | 'time'; dimension: 1 | 2 | 3 } {
+function checkInput(input: CreateStudyInput, bound: Awaited<ReturnType<typeof requireCaseBinding>>): 1 | 2 | 3 {
   const { refinement } = input;
-  if (refinement === 'space-time') throw notAvailable('refinement', 'Refinement in space and time together');
   const dimension = input.dimension ?? bound.problem.dimension;
   const faults = checkSeries(input.grids, {
     definition: bound.definition, refinement, dimension, volume: domainVolume(bound.problem, dimension),
     canHaveFile: takesFiles(bound.definition, bound.problem),
   });
   if (faults.length > 0) throw new AppError('invalid', faults[0]?.message ?? 'The grids do not fit the case.', { fields: faults });
-  return { refinement, dimension };
+  return dimension;
 }
 
 /** A study of a case on a release. Grids whose values are typed are data: with them the plan is frozen at once. */
@@ -47,7 +46,8 @@ export async function createStudy(ctx: MemberContext, input: CreateStudyInput): 
   return withOrganisation(ctx, async (trx) => {
     const bound = await requireCaseBinding(ctx, trx, input.case);
     const release = await requireRelease(ctx, trx, { id: bound.code_id, slug: bound.code_slug }, input.release);
-    const { refinement, dimension } = checkInput(input, bound);
+    const { refinement } = input;
+    const dimension = checkInput(input, bound);
     const now = ctx.clock();
     const organisationId = ctx.organisation.id;
     const at = { organisationId, studyId: newId(), revision: 1 };

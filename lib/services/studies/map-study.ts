@@ -48,7 +48,7 @@ export async function mapStudy(trx: Trx, { head, bound, at }: LoadedStudy): Prom
 function finestFirst(rows: GridRow[], spacing: { refinement: 'space' | 'time'; dimension: number; volume: number | null }): GridRow[] {
   const withSpacing = rows.map((row) => {
     const resolved = resolveSpacing({ grids: [statedSpacing({ label: row.label, ...definitionOf(row) }, normsOf(row))], ...spacing });
-    return { row, h: resolved.ok ? (resolved.grids[0]?.h ?? Infinity) : Infinity };
+    return { row, h: resolved.ok ? (resolved.grids[0]?.h ?? Infinity) : Infinity, dt: definitionOf(row).dt ?? 0 };
   });
-  return withSpacing.sort((left, right) => (left.h === right.h ? 0 : left.h - right.h)).map(({ row }) => row);
+  return withSpacing.sort((left, right) => (left.h === right.h ? left.dt - right.dt : left.h - right.h)).map(({ row }) => row);
 }

@@ -47,8 +47,8 @@ describe('assessSeries', () => {
     const exponents = fc.double({ min: -20, max: 20, noNaN: true });
     fc.assert(fc.property(anyOrder, fc.double({ min: 1.4, max: 3, noNaN: true }), exponents, (order, ratio, exponent) => {
       const grids = Array.from({ length: 5 }, (_, i) => ({ h: ratio ** -i, error: 2 ** exponent * ratio ** (-i * order) }));
-      expect(assess(grids, order)).toMatchObject({ outcome: 'pass', reasons: ['in-band'] });
-      expect(assess(grids, order + 1)).toMatchObject({ outcome: 'fail', reasons: ['below-formal'] });
+      expect(assess(grids, order, 2 ** -200)).toMatchObject({ outcome: 'pass', reasons: ['in-band'] });
+      expect(assess(grids, order + 1, 2 ** -200)).toMatchObject({ outcome: 'fail', reasons: ['below-formal'] });
     }));
   });
 

@@ -31,9 +31,12 @@ export function AddGrid({ study, onDone }: { study: Study; onDone: () => void })
   const [label, setLabel] = useState('');
   const [name, setName] = useState<SpacingName>(usualSpacing(study));
   const [spacing, setSpacing] = useState('');
+  const [step, setStep] = useState('');
   const [areFaultsShown, setAreFaultsShown] = useState(false);
+  const isBoth = study.refinement === 'space-time';
   const value = typedNumber(spacing);
-  const checked = gridInputSchema.safeParse({ label: label.trim(), ...(value === undefined ? {} : { [name]: value }) });
+  const dt = isBoth ? typedNumber(step) : undefined;
+  const checked = gridInputSchema.safeParse({ label: label.trim(), ...(value === undefined ? {} : { [name]: value }), ...(dt === undefined ? {} : { dt }) });
   const faultAt = (path: string) => (areFaultsShown && !checked.success ? checked.error.issues.find((issue) => issue.path[0] === path)?.message : undefined);
   const add = useMutation({
     mutationFn: (body: typeof gridInputSchema._output) => callApi(addGridContract, { organisation: slug, params: { id: study.id }, body }),
@@ -51,6 +54,7 @@ export function AddGrid({ study, onDone }: { study: Study; onDone: () => void })
           {(Object.keys(spacings) as SpacingName[]).filter((each) => (each === 'dt') === isTime).map((each) => <option key={each} value={each}>{spacings[each]}</option>)}
         </SelectField>
         <NumberField label={spacings[name]} value={spacing} error={faultAt(name)} onChange={(event) => setSpacing(event.target.value)} />
+        {isBoth && <NumberField label={spacings.dt} value={step} error={faultAt('dt')} onChange={(event) => setStep(event.target.value)} />}
       </div>
       <ProblemNotice problem={problemOf(add.error, 'Not added')} />
       <div className="mt-4 flex flex-wrap gap-3">

@@ -16,8 +16,8 @@ import { cellCount } from '@/lib/domain/studies/cell-count';
 interface GridTableProps { study: Study; assessment: Assessment; number: number }
 
 /** The spacing a grid was judged with. */
-function spacingOf({ fields, quantities }: Assessment, label: string): number | null {
-  const places = [...fields.flatMap(({ grids }) => grids), ...quantities.flatMap(({ values }) => values)];
+function spacingOf({ fields, quantities, spaceTime = [] }: Assessment, label: string): number | null {
+  const places = [...fields.flatMap(({ grids }) => grids), ...quantities.flatMap(({ values }) => values), ...spaceTime.flatMap(({ points }) => points)];
   return places.find((place) => place.label === label)?.h ?? null;
 }
 
@@ -27,16 +27,18 @@ export function GridTable({ study, assessment, number }: GridTableProps) {
   const { quantities } = assessment;
   const hasCells = study.grids.some((grid) => cellCount(grid, study.dimension) !== null);
   const hasFiles = study.grids.some((grid) => grid.upload !== null);
+  const hasSteps = study.refinement !== 'time' && study.grids.some((grid) => grid.dt !== undefined);
   const isGrouped = fields.length > 0;
   const heads = isGrouped ? 2 : 1;
-  const columns = 2 + Number(hasCells) + fields.reduce((sum, { norms }) => sum + norms.length, 0) + quantities.length + Number(hasFiles);
+  const columns = 2 + Number(hasCells) + Number(hasSteps) + fields.reduce((sum, { norms }) => sum + norms.length, 0) + quantities.length + Number(hasFiles);
   return (
-    <Table number={number} caption={`Grids, coarse to fine, with ${isGrouped ? 'their errors' : 'their values'}${hasFiles ? ' and the files they come from' : ''}.`}>
+    <Table number={number} caption={`Grids, coarse to fine, with ${isGrouped ? 'their errors' : quantities.length > 0 ? 'their values' : 'their spacings'}${hasFiles ? ' and the files they come from' : ''}.`}>
       <Head>
         <tr>
           <HeadCell rowSpan={heads}>Grid</HeadCell>
           {hasCells && <HeadCell rowSpan={heads} num>Cells</HeadCell>}
           <HeadCell rowSpan={heads} num><Sym>{study.refinement === 'time' ? 'Δt' : 'h'}</Sym></HeadCell>
+          {hasSteps && <HeadCell rowSpan={heads} num><Sym>Δt</Sym></HeadCell>}
           {fields.map(({ field, norms }) => <HeadCell key={field} ofGroup colSpan={norms.length}>Error of {norms[0]?.norm === 'value' ? field : <Sym>{field}</Sym>}</HeadCell>)}
           {quantities.map(({ name, unit }) => <HeadCell key={name} rowSpan={heads} num>{name}{unit ? `, ${unit}` : ''}</HeadCell>)}
           {hasFiles && <HeadCell rowSpan={heads} afterNumber>File, SHA-256</HeadCell>}
@@ -54,6 +56,7 @@ export function GridTable({ study, assessment, number }: GridTableProps) {
                 <RowHead className="whitespace-nowrap">{grid.label}{grid.afterData && <i className="ml-1 text-note text-graphite">after data</i>}</RowHead>
                 {hasCells && <Cell num>{cells === null ? <Missing reason="Cells not stated" /> : formatCount(cells)}</Cell>}
                 <Cell num>{h === null ? <Missing reason="Left out, no spacing judged" /> : spacingLabel(h)}</Cell>
+                {hasSteps && <Cell num>{grid.dt === undefined ? <Missing reason="Time step not stated" /> : spacingLabel(grid.dt)}</Cell>}
                 {fields.flatMap((field) => field.norms.map((part) => <ErrorCell key={`${field.field} ${part.norm}`} part={part} label={grid.label} />))}
                 {quantities.map(({ name, values }) => {
                   const value = values.find(({ label }) => label === grid.label)?.value;

@@ -3,11 +3,14 @@
 import { useState } from 'react';
 import { useOrganisation } from '@/app/_components/organisation/organisation-context';
 import { NormSymbol, Sym } from '@/app/_components/ui/symbols';
+import { FormulaText } from '@/app/_components/ui/formula-text';
 import { PageTitle } from '@/app/_components/ui/page-title';
 import { Section } from '@/app/_components/ui/section';
 import { procedureNames, procedureSources } from '@/lib/domain/assessment/explain-procedure';
+import { explainPattern } from '@/lib/domain/assessment/explain-pattern';
 import { explainSpacing } from '@/lib/domain/assessment/explain-spacing';
 import type { Assessment } from '@/lib/domain/assessment/schema';
+import { explainTimeSteps } from '@/lib/domain/assessment/explain-time-steps';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
 import type { Study } from '@/lib/domain/studies/schema';
 import { takesFiles } from '@/lib/domain/studies/takes-files';
@@ -21,6 +24,7 @@ import { GridsNotes, GridsWork } from './grids-work';
 import { OutcomeTable } from './outcome-table';
 import { QuantityTable, TripleTable } from './quantity-table';
 import { RunRecordSection } from './run-record';
+import { SpaceTimeParts, SpaceTimeTable } from './space-time-table';
 import { StudyMargin } from './study-margin';
 import { StudyProgress } from './study-progress';
 import { StudyStatement } from './study-statement';
@@ -66,7 +70,8 @@ export function StudySections({ study, readings }: StudySectionsProps) {
 
 interface Numbers { outcome: number; quantities: number; triples: number; grids: number }
 
-function tableNumbers({ fields, quantities }: Assessment): Numbers {
+function tableNumbers({ fields, quantities, spaceTime }: Assessment): Numbers {
+  if (spaceTime) return { outcome: 0, quantities: 0, triples: 0, grids: 3 };
   const outcome = Number(fields.length > 0);
   const shown = outcome + Number(quantities.length > 0);
   const triples = shown + Number(quantities.some((quantity) => quantity.triples.length > 0));
@@ -86,6 +91,7 @@ function Results({ study, assessment }: { study: Study; assessment: Assessment }
           note={(
             <>
               <p>Grey: outside the band. Three decimals within 0.01 of a limit, else two.</p>
+              {assessment.patterns.map((pattern) => <p key={`${pattern.code} ${pattern.field}`}><b>Hint.</b> <FormulaText text={explainPattern(pattern)} symbols={fields.map(({ field }) => field)} /></p>)}
               {fits.length > 0 && fits.length <= 4 && (
                 <p>
                   Fit over all grids used:{' '}
@@ -101,6 +107,12 @@ function Results({ study, assessment }: { study: Study; assessment: Assessment }
           )}
         >
           <OutcomeTable study={study} fields={fields} number={numbers.outcome} />
+        </Section>
+      )}
+      {assessment.spaceTime && (
+        <Section note={<SpaceTimeNotes />}>
+          <SpaceTimeTable parts={assessment.spaceTime} number={1} />
+          <div className="mt-8"><SpaceTimeParts parts={assessment.spaceTime} number={2} /></div>
         </Section>
       )}
       {quantities.length > 0 && (
@@ -126,12 +138,33 @@ function QuantityNotes({ quantities }: Pick<Assessment, 'quantities'>) {
   );
 }
 
+function SpaceTimeNotes() {
+  return (
+    <>
+      <p>Norms: <Sym>E</Sym><sup>2</sup> = <Sym>A</Sym><sup>2</sup><Sym>h</Sym><sup>2<i>p</i></sup> + 2<Sym>ρAB</Sym> <Sym>h</Sym><sup><i>p</i></sup><Sym>Δt</Sym><sup><i>q</i></sup> + <Sym>B</Sym><sup>2</sup><Sym>Δt</Sym><sup>2<i>q</i></sup>, since the norm of a sum is no sum of norms.</p>
+      <p>A value with a known one keeps its sign: <Sym>E</Sym> = <Sym>A</Sym><Sym>h</Sym><sup><i>p</i></sup> + <Sym>B</Sym><Sym>Δt</Sym><sup><i>q</i></sup>.</p>
+      <p>± is the spread of the fit at 95 %, no confidence interval. Orders fitted together are shown and not judged.</p>
+    </>
+  );
+}
+
+/** Grids that are in the assessment and state a time step. */
+function steppedGrids({ grids }: Study, { fields, quantities }: Assessment): { h: number; dt: number }[] {
+  const placed = [...fields.flatMap((field) => field.grids), ...quantities.flatMap(({ values }) => values)];
+  return grids.flatMap(({ label, dt }) => {
+    const h = placed.find((each) => each.label === label)?.h;
+    return h === undefined || dt === undefined ? [] : [{ h, dt }];
+  });
+}
+
 function GridNotes({ study, assessment }: { study: Study; assessment: Assessment }) {
   const notes = study.refinement === 'time' ? [] : explainSpacing(study.grids, assessment.inputs, study.dimension);
+  const steps = study.refinement === 'space' ? explainTimeSteps(steppedGrids(study, assessment)) : null;
   return (
     <>
       {study.grids.some((grid) => grid.upload) && <p>A hash copied gives all 64 digits. Point at it for the name of the file.</p>}
       {notes.map((note) => <p key={note}>{note}</p>)}
+      {steps !== null && <p><FormulaText text={steps} symbols={['q']} /></p>}
     </>
   );
 }
