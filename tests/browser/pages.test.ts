@@ -9,7 +9,7 @@ const publicPages = ['/', '/quick-check', '/docs/methods', '/docs/problems', '/s
 const memberPages = [
   ['', 'release matrix'], ['/codes', 'codes'], ['/codes/brack', 'a code'], ['/problems', 'problems'], ['/problems/new', 'a new problem'],
   ['/problems/heat-in-a-square', 'a problem'], ['/cases', 'cases'], ['/cases/new', 'a new case'], ['/cases/heat-second-order', 'a case'],
-  ['/studies', 'studies'], ['/studies/{study}', 'a study'], ['/studies/{spaceTime}', 'a study in space and time'], ['/settings/tokens', 'tokens'],
+  ['/studies', 'studies'], ['/studies/{study}', 'a study'], ['/studies/{spaceTime}', 'a study in space and time'], ['/settings/tokens', 'tokens'], ['/settings/storage', 'storage'],
 ] as const;
 
 const looks = [{ size: 'wide', theme: 'light' }, { size: 'wide', theme: 'dark' }, { size: 'phone', theme: 'light' }] as const;

@@ -15,6 +15,8 @@ browserTest('a large file can be paused, and goes on after the page was left fro
   const folder = fs.mkdtempSync(path.join(os.tmpdir(), 'fourfold-'));
   const file = path.join(folder, 'heat_768.csv');
   fs.writeFileSync(file, heatTable(768));
+  const other = path.join(fs.mkdtempSync(path.join(os.tmpdir(), 'fourfold-')), 'heat_768.csv');
+  fs.writeFileSync(other, heatTable(64));
   expect(fs.statSync(file).size).toBeGreaterThan(40 * 1024 * 1024);
   const person = await signUp();
   const work = await makeWork(person);
@@ -37,6 +39,9 @@ browserTest('a large file can be paused, and goes on after the page was left fro
 
   await page.reload();
   await row.getByText('half sent').waitFor();
+  await page.locator('input[type=file]').setInputFiles(other);
+  await page.getByText('heat_768.csv is another file than the one half sent.').waitFor();
+  await page.getByRole('button', { name: 'Keep the one half sent' }).click();
   sentParts = 0;
   await page.locator('input[type=file]').setInputFiles(file);
   await row.getByText('read', { exact: true }).waitFor({ timeout: 60_000 });

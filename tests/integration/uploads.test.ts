@@ -8,6 +8,10 @@ import { createStudyContract, getGridResultContract, getOutcomeContract, getStud
 import {
   completeUploadContract, deleteUploadContract, getUploadContract, putDataContract, signPartsContract, startUploadContract,
 } from '@/lib/domain/uploads/schema';
+import { readEnv } from '@/lib/env';
+import { createStorage } from '@/lib/platform/storage';
+import { storageOptionsOf } from '@/lib/platform/storage-options';
+import { adminDatabase } from '@/tests/support/admin-database';
 import { addressOf, headersOf, ok, refused, send } from '@/tests/support/api';
 import { need } from '@/tests/support/environment';
 import { heatSizes, heatTable } from '@/tests/support/grids';
@@ -215,6 +219,51 @@ describe('uploads in parts', () => {
     const study = await awaitStudy(engineer, at.id, settled);
     const grid = study.grids.find(({ label }) => label === 'n16');
     expect(grid).toMatchObject({ state: 'rejected', upload: { reasons: [{ code: 'checksum-differs', found: sha256(heatTable(16)) }] } });
+  });
+
+  it('reads or rejects by what is stated when it is closed, and refuses two statements that differ', async () => {
+    const bytes = heatTable(16);
+    const close = async (stated: string, atStart?: string) => {
+      const at = await params();
+      const { upload } = await ok(engineer, startUploadContract, { params: at, body: { filename: 'n16.csv', bytes: bytes.length, sha256: atStart } });
+      const { parts: [part] } = await ok(engineer, signPartsContract, { params: { id: upload }, body: { numbers: [1] } });
+      const { headers } = await fetch(part?.url ?? '', { method: 'PUT', body: new Uint8Array(bytes) });
+      const answer = await send(engineer, completeUploadContract, { params: { id: upload }, body: { parts: [{ number: 1, etag: headers.get('etag') ?? '' }], sha256: stated } });
+      return { at, answer };
+    };
+    const [right, wrong] = [sha256(bytes), sha256(Buffer.from('another file'))];
+    const gridAfter = async ({ at }: { at: { id: string } }) => (await awaitStudy(engineer, at.id, settled)).grids.find(({ label }) => label === 'n16');
+    expect(await gridAfter(await close(right))).toMatchObject({ state: 'read' });
+    expect(await gridAfter(await close(wrong))).toMatchObject({ state: 'rejected', upload: { reasons: [{ code: 'checksum-differs', found: right, expected: wrong }] } });
+    expect((await close(wrong, right)).answer).toMatchObject({ status: 422, body: { errors: [{ path: 'sha256' }] } });
+  });
+
+  it('takes the place of an open upload only where it is the one expected', async () => {
+    const at = await params();
+    const start = (replaces?: string | null) => send(engineer, startUploadContract, { params: at, body: { filename: 'n16.csv', bytes: 100, replaces } });
+    const first = (await start(null)).body as { upload: string };
+    const second = await start(null);
+    expect(second).toMatchObject({ status: 409, body: { errors: [{ path: 'replaces', message: first.upload }] } });
+    expect((second.body as { detail: string }).detail).toContain(`by ${engineer.email}: n16.csv`);
+    expect((await start(at.id)).status).toBe(409);
+    expect((await start(first.upload)).status).toBe(201);
+    expect((await refused(engineer, getUploadContract, { params: { id: first.upload } })).status).toBe(404);
+    expect((await start()).status).toBe(201);
+  });
+
+  it('takes at most 100 part numbers a call, and addresses that hold as long as they say', async () => {
+    const at = await params();
+    const { upload } = await ok(engineer, startUploadContract, { params: at, body: { filename: 'n16.csv', bytes: 2e9, fingerprint: sha256(Buffer.from('edges')) } });
+    const numbers = (count: number) => Array.from({ length: count }, (_, index) => index + 1);
+    expect((await ok(engineer, signPartsContract, { params: { id: upload }, body: { numbers: numbers(100) } })).parts).toHaveLength(100);
+    expect((await refused(engineer, signPartsContract, { params: { id: upload }, body: { numbers: numbers(101) } })).status).toBe(422);
+    expect(await ok(engineer, getUploadContract, { params: { id: upload } })).toMatchObject({ fingerprint: sha256(Buffer.from('edges')), createdBy: engineer.email });
+    const { rows: [row] } = await adminDatabase().query<{ storage_key: string; multipart_id: string }>('select storage_key, multipart_id from uploads where id = $1', [upload]);
+    const storage = createStorage({ ...storageOptionsOf(readEnv(process.env)), partLifetimeSeconds: 1 });
+    const url = await storage.signPart(row?.storage_key ?? '', row?.multipart_id ?? '', 1);
+    await new Promise((resolve) => setTimeout(resolve, 2500));
+    expect((await fetch(url, { method: 'PUT', body: 'late' })).status).toBe(403);
+    await ok(engineer, deleteUploadContract, { params: { id: upload } });
   });
 
   it('is given up without a trace, and the grid has the file it had', async () => {

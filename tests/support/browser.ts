@@ -11,6 +11,8 @@ export interface VisitOptions {
   person?: Pick<Person, 'cookie'>;
   size?: keyof typeof sizes;
   theme?: 'light' | 'dark';
+  /** Addresses that the test makes fail. */
+  failing?: RegExp;
 }
 
 export type OpenPage = (path: string, options?: VisitOptions) => Promise<Page>;
@@ -19,9 +21,9 @@ export type OpenPage = (path: string, options?: VisitOptions) => Promise<Page>;
  * The browser reports every refusal as an error, also one that the page shows: of the API, or that the page is not there.
  * That may be before the page has its address, so the one asked for counts too.
  */
-function isFault(message: ConsoleMessage, page: Page, asked: string): boolean {
+function isFault(message: ConsoleMessage, page: Page, asked: string, failing: RegExp | undefined): boolean {
   const { url } = message.location();
-  const isRefusal = message.text().startsWith('Failed to load resource') && (url.includes('/api/v1/') || url === page.url() || url === asked);
+  const isRefusal = message.text().startsWith('Failed to load resource') && (url.includes('/api/v1/') || url === page.url() || url === asked || failing?.test(url) === true);
   return message.type() === 'error' && !isRefusal;
 }
 
@@ -55,7 +57,7 @@ export const browserTest = test.extend<BrowserFixtures>({
       const page = await context.newPage();
       const asked = new URL(path, need('WEB_URL')).href;
       page.on('console', (message) => {
-        if (isFault(message, page, asked)) faults.push(`${page.url()}: ${message.text()} (${message.location().url})`);
+        if (isFault(message, page, asked, options.failing)) faults.push(`${page.url()}: ${message.text()} (${message.location().url})`);
       });
       page.on('pageerror', (error) => faults.push(`${page.url()}: ${error.message}`));
       await page.goto(path);

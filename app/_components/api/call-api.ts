@@ -9,6 +9,8 @@ interface CallOptions<C extends ContractShape> {
   body?: BodyOf<C>;
   /** The revision that was read, on conditional writes. */
   revision?: number;
+  /** The same key and body get the same answer, also where the first was lost. */
+  idempotencyKey?: string;
   signal?: AbortSignal;
 }
 
@@ -28,6 +30,7 @@ export async function callApi<C extends ContractShape>(contract: C, options: Cal
   const headers: Record<string, string> = { accept: 'application/json' };
   if (options.body !== undefined) headers['content-type'] = 'application/json';
   if (options.revision !== undefined) headers['if-match'] = `"${options.revision}"`;
+  if (options.idempotencyKey !== undefined) headers['idempotency-key'] = options.idempotencyKey;
   const response = await fetch(apiAddress(contract, options), {
     method: contract.method, headers, signal: options.signal,
     body: options.body === undefined ? undefined : JSON.stringify(options.body),

@@ -55,6 +55,7 @@ export function AccountMenu() {
           )}
           <DropdownMenu.Separator className={rule} />
           <DropdownMenu.Item asChild><Link prefetch={false} href={`/${slug}/settings/tokens`} className={item}>Tokens</Link></DropdownMenu.Item>
+          <DropdownMenu.Item asChild><Link prefetch={false} href={`/${slug}/settings/storage`} className={item}>Storage</Link></DropdownMenu.Item>
           <DropdownMenu.Item asChild><Link prefetch={false} href="/docs/methods" className={item}>Methods and sources</Link></DropdownMenu.Item>
           <DropdownMenu.Item className={item} onSelect={(event) => { event.preventDefault(); void signOut(); }}>Sign out</DropdownMenu.Item>
           {fault && <p role="alert" className="px-4 py-2 text-note text-fail-text">Not signed out. The server did not answer; try again.</p>}

@@ -29,7 +29,7 @@ export const startUploadSchema = z.strictObject({
   }),
 });
 export type StartUploadInput = z.infer<typeof startUploadSchema>;
-const startedUploadSchema = z.strictObject({ upload: z.string(), partSize: z.number().int() });
+const startedUploadSchema = z.strictObject({ upload: z.string(), partSize: z.number().int(), createdAt: timestampSchema });
 
 export const signPartsSchema = z.strictObject({ numbers: z.array(z.number().int().min(1).max(1000)).min(1).max(100) });
 export type SignPartsInput = z.infer<typeof signPartsSchema>;

@@ -102,7 +102,7 @@ export async function putData(ctx: MemberContext, key: { id: string; label: stri
     await requireRoom(ctx, trx, { bytes, besides: open });
     await insertUpload(trx, {
       organisation_id: ctx.organisation.id, id, grid_id: grid.id, filename: input.filename ?? `${key.label}.csv`, bytes, sha256, storage_key,
-      state: 'stored', stored_at: ctx.clock(), created_by: ctx.userId, token_id: ctx.token?.id ?? null,
+      state: 'stored', stored_at: ctx.clock(), created_at: ctx.clock(), created_by: ctx.userId, token_id: ctx.token?.id ?? null,
     });
     const replaced = await giveUpReceiving(trx, grid);
     await receiveFile(trx, { organisationId: ctx.organisation.id, gridId: grid.id, uploadId: id });

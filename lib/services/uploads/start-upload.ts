@@ -37,13 +37,14 @@ async function loadTarget(ctx: MemberContext, trx: Trx, key: Key, { bytes, repla
 }
 
 /** Opens an upload in parts for a grid; one that was half sent before is given up. */
-export async function startUpload(ctx: MemberContext, key: Key, input: StartUploadInput): Promise<{ upload: string; partSize: number }> {
+export async function startUpload(ctx: MemberContext, key: Key, input: StartUploadInput): Promise<{ upload: string; partSize: number; createdAt: string }> {
   permit(ctx, 'work.write');
   if (input.bytes === 0) {
     throw new AppError('invalid', `${input.filename} is empty. Check that the solver had finished writing.`, { fields: [{ path: 'bytes', message: 'The file is empty.' }] });
   }
   const id = newId();
   const partSize = partSizeOf(input.bytes);
+  const createdAt = ctx.clock();
   const { study: { head } } = await withOrganisation(ctx, (trx) => loadTarget(ctx, trx, key, input));
   const storage_key = storageKey(ctx.organisation.id, head.id, id);
   // Asked for between the transactions, so that nobody waits for storage with the study held.
@@ -53,7 +54,7 @@ export async function startUpload(ctx: MemberContext, key: Key, input: StartUplo
     await insertUpload(trx, {
       organisation_id: ctx.organisation.id, id, grid_id: grid.id, filename: input.filename, bytes: input.bytes, stated_sha256: input.sha256 ?? null,
       fingerprint: input.fingerprint ?? null, storage_key, multipart_id, part_size: partSize,
-      created_by: ctx.userId, token_id: ctx.token?.id ?? null, created_at: ctx.clock(), last_activity_at: ctx.clock(),
+      created_by: ctx.userId, token_id: ctx.token?.id ?? null, created_at: createdAt, last_activity_at: createdAt,
     });
     const replaced = await giveUpReceiving(trx, grid);
     await updateGrid(trx, ctx.organisation.id, grid.id, { state: 'receiving', upload_id: id, rows_read: null, reasons: json([]) });
@@ -65,5 +66,5 @@ export async function startUpload(ctx: MemberContext, key: Key, input: StartUplo
   });
   if (replaced) await abandonParts(ctx, replaced);
   await announce(ctx, grid.study_id, { event: 'state', state: 'collecting', grid: grid.label, gridState: 'receiving' });
-  return { upload: id, partSize };
+  return { upload: id, partSize, createdAt: createdAt.toISOString() };
 }

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { keepRecent, transferRate, type Sample } from '@/app/(organisation)/[org]/studies/[id]/_components/transfer-rate';
+import { keepRecent, transferRate, type Sample } from '@/app/(organisation)/[org]/studies/[id]/_components/sending/transfer-rate';
 import { formatBytes } from '@/lib/domain/numbers/format-bytes';
 import { formatSeconds } from '@/lib/domain/numbers/format-seconds';
 

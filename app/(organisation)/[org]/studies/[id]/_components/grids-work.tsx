@@ -13,7 +13,9 @@ import { takesFiles } from '@/lib/domain/studies/takes-files';
 import { AddGrid } from './add-grid';
 import { FilesToPlace, type PlacedFile } from './files-to-place';
 import { UploadRow } from './upload-row';
-import { useUploads } from './use-uploads';
+import type { Transfer } from './sending/transfer';
+import { useSend } from './sending/use-send';
+import { useUploads } from './sending/use-uploads';
 import type { Reading } from './use-study-events';
 
 interface GridsWorkProps {
@@ -24,10 +26,13 @@ interface GridsWorkProps {
 
 const takesFile = ({ state, excluded }: Grid) => excluded === null && (state === 'expected' || state === 'rejected' || state === 'receiving' || state === 'needs-columns');
 
+const isSending = (transfer: Transfer | undefined) => transfer !== undefined && !transfer.isElsewhere && transfer.state !== 'failed';
+
 /** The grids while the study collects: drop the files of several at once, watch them, add a grid or leave one out. */
 export function GridsWork({ study, readings, onType }: GridsWorkProps) {
   const { may } = useOrganisation();
-  const { uploader, transfers } = useUploads(study.id);
+  const { uploader, transfers } = useUploads(study);
+  const sender = useSend({ study, uploader, transfers });
   const [toPlace, setToPlace] = useState<readonly PlacedFile[] | null>(null);
   const [isOver, setIsOver] = useState(false);
   const [isAdding, setIsAdding] = useState(false);
@@ -36,14 +41,11 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
   const mayChange = may('work.write');
   const comparesFiles = takesFiles(study.definition, study.problemDefinition);
   const grids = [...study.grids].reverse();
-  const sending = [...transfers.values()].filter(({ state }) => state === 'sending').length;
+  const sending = [...transfers.values()].filter(({ state, isElsewhere }) => !isElsewhere && state !== 'paused' && state !== 'failed').length;
 
   const send = (files: readonly { file: File; grid: string }[]) => {
     setToPlace(null);
-    void uploader?.send(files.map(({ file, grid }) => {
-      const known = study.grids.find(({ label }) => label === grid);
-      return { file, grid, halfSent: known?.state === 'receiving' ? (known.upload?.id ?? null) : null };
-    }));
+    sender.send(files);
   };
   const take = (list: FileList | null) => {
     const files = [...(list ?? [])];
@@ -51,7 +53,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
     chosenGrid.current = null;
     if (files.length === 0) return;
     if (one !== null && files[0] && files.length === 1) { send([{ file: files[0], grid: one }]); return; }
-    const open = grids.filter((grid) => takesFile(grid) && !transfers.has(grid.label));
+    const open = grids.filter((grid) => takesFile(grid) && !isSending(transfers.get(grid.label)));
     const found = matchFiles(files, open.length >= files.length ? open : grids.filter(({ excluded }) => excluded === null), study.dimension);
     const placed = files.map((file, index) => ({ file, grid: found[index] ?? null }));
     const areClear = placed.every(({ grid }) => grid !== null && open.some(({ label }) => label === grid));
@@ -80,7 +82,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
           <tbody>
             {grids.map((grid) => (
               <UploadRow
-                key={grid.label} study={study} grid={grid} transfer={transfers.get(grid.label)} reading={readings.get(grid.label)} uploader={uploader}
+                key={grid.label} study={study} grid={grid} transfer={transfers.get(grid.label)} reading={readings.get(grid.label)} uploader={uploader} sender={sender}
                 mayChange={mayChange} onChoose={comparesFiles ? () => choose(grid.label) : null}
               />
             ))}

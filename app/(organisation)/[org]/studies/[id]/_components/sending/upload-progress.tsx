@@ -1,11 +1,12 @@
-import type { ReactNode } from 'react';
 import { ProgressBar } from '@/app/_components/ui/progress-bar';
 import { formatBytes } from '@/lib/domain/numbers/format-bytes';
 import { formatCount } from '@/lib/domain/numbers/format-count';
 import { formatSeconds } from '@/lib/domain/numbers/format-seconds';
 import type { Grid } from '@/lib/domain/studies/schema';
-import type { Transfer } from './uploader';
-import type { Reading } from './use-study-events';
+import type { Reading } from '../use-study-events';
+import { OpenUpload } from './open-upload';
+import type { Transfer } from './transfer';
+import { WithBar } from './with-bar';
 
 interface UploadProgressProps { grid: Grid; transfer: Transfer | undefined; reading: Reading | undefined }
 
@@ -25,23 +26,20 @@ export function UploadProgress({ grid, transfer, reading }: UploadProgressProps)
     );
   }
   if (state === 'rejected') return <>{upload.reasons.length === 1 ? 'One reason' : `${upload.reasons.length} reasons`}</>;
-  if (state === 'receiving') return <span className="text-note text-graphite">Choose the same file to go on where it stopped.</span>;
+  if (state === 'receiving') return <OpenUpload grid={grid.label} upload={upload} />;
   return null;
 }
 
-function SendingProgress({ transfer: { grid, bytes, confirmed, rate, secondsLeft, state } }: { transfer: Transfer }) {
+function SendingProgress({ transfer: { grid, bytes, confirmed, rate, secondsLeft, state, keeps } }: { transfer: Transfer }) {
   if (state === 'failed') return null;
   return (
     <WithBar>
       <ProgressBar label={`Sending grid ${grid}`} share={bytes > 0 ? confirmed / bytes : 0} />
       <span className="text-note text-graphite">
         {formatBytes(confirmed)} of {formatBytes(bytes)}{rate !== null && `, ${formatBytes(rate)}/s`}{secondsLeft !== null && `, ${formatSeconds(secondsLeft)} left`}
+        {state === 'waiting' && ', the line is down; tried again by itself'}
+        {keeps && <span className="block">{keeps} stays until this one is whole.</span>}
       </span>
     </WithBar>
   );
-}
-
-/** A bar with its words beside it, and under it where there is little room. */
-function WithBar({ children }: { children: ReactNode }) {
-  return <span className="flex flex-wrap items-center gap-x-3 [&>svg]:max-w-36 [&>svg]:min-w-16 [&>svg]:flex-1">{children}</span>;
 }
