@@ -5,7 +5,8 @@ import { browserTest, overflowOf, seriousFindings } from '@/tests/support/browse
 import { addMember, signUp } from '@/tests/support/people';
 import { bigTable, fileInput, fileOf, makeUploadStudy, rowOf, throttle } from '@/tests/support/uploading';
 
-const slow = 8e6;
+/** So slow that the file is still on its way when the other has looked and answered. */
+const slow = 1e6;
 
 browserTest('the second to send for a grid sees whose file is on its way, may replace it, and the first is told', async ({ open }) => {
   const first = await signUp();
@@ -16,7 +17,6 @@ browserTest('the second to send for a grid sees whose file is on its way, may re
   await throttle(page, slow);
   await fileInput(page).setInputFiles(fileOf('n16.csv', bigTable(40)));
   await rowOf(other, 'n16').getByText(new RegExp(`by ${first.email}, since \\d\\d:\\d\\d`)).waitFor();
-  await rowOf(page, 'n16').getByText(/^(8\.4|17|25)\sMB of/).waitFor();
 
   await fileInput(other).setInputFiles(fileOf('n16-new.csv', bigTable(1)));
   const question = other.getByRole('group', { name: 'File for grid n16' });
@@ -39,7 +39,6 @@ browserTest('the second to send for a grid sees whose file is on its way, may re
   await rowOf(page, 'n16').getByText('n16-new.csv stays until this one is whole.').waitFor();
   await page.getByRole('button', { name: 'Give up, grid n16' }).click();
   await rowOf(page, 'n16').getByText('256 rows').waitFor({ timeout: 20_000 });
-  await page.screenshot({ path: '/tmp/up-shot.png', fullPage: true });
   await rowOf(page, 'n16').getByText('n16-new.csv').waitFor();
 });
 
@@ -48,7 +47,7 @@ browserTest('a second tab shows how far the first is and sends nothing twice', a
   const study = await makeUploadStudy(person);
   const path = `/${person.at.slug}/studies/${study.id}`;
   const page = await open(path, { person });
-  const line = await throttle(page, slow);
+  const line = await throttle(page, 8e6);
   const file = fileOf('n16.csv', bigTable(40));
   await fileInput(page).setInputFiles(file);
   await rowOf(page, 'n16').getByText('receiving').waitFor();

@@ -78,6 +78,7 @@ class StudyUploader implements Uploader {
   retry = (grid: string) => {
     const sending = this.#sendings.get(grid);
     if (!sending) return;
+    if (sending.upload === null) sending.startedAt = null;
     Object.assign(sending, { state: 'queued', fault: null, abort: new AbortController(), samples: [] });
     this.#sendNext();
   };
@@ -93,8 +94,9 @@ class StudyUploader implements Uploader {
     for (const { label, upload } of grids) {
       const sending = this.#sendings.get(label);
       if (!sending?.startedAt || !upload || upload.id === sending.upload || upload.createdAt <= sending.startedAt) continue;
-      if (sending.state === 'failed') continue;
-      this.#end(sending, new SendFault('gone', `${upload.createdBy} replaced this file: grid ${label} now has ${upload.filename}.`));
+      const words = `${upload.createdBy} replaced this file: grid ${label} now has ${upload.filename}.`;
+      // Where storage was quicker to say that the upload is gone, this says why.
+      if (sending.fault !== words) this.#end(sending, new SendFault('gone', words));
     }
   };
 
@@ -128,7 +130,7 @@ class StudyUploader implements Uploader {
     if (kind === 'changed' && sending.upload) this.#abandon(sending.upload);
     if (kind === 'changed' || kind === 'gone') {
       if (sending.upload) forgetUpload(sending.upload);
-      Object.assign(sending, { upload: null, startedAt: null, stored: new Map(), startKey: v4(), replaces: null });
+      Object.assign(sending, { upload: null, stored: new Map(), startKey: v4(), replaces: null });
       this.#dropHashing(sending);
     }
     this.#tell();
