@@ -29,7 +29,7 @@ export async function waitForNextTry(line: Waiting, failures: number, signal: Ab
 }
 
 /** A refusal of the server as a fault, null where it is worth another try. */
-export function refusalOf(error: unknown): SendFault | null {
+function refusalOf(error: unknown): SendFault | null {
   if (!(error instanceof ApiProblem)) return null;
   const { status, detail } = error.problem;
   if (status === 404) return new SendFault('gone', 'This upload was given up or replaced. Retry sends the file anew.');
