@@ -27,6 +27,8 @@ export function productEnvironment(ports, outside) {
     DEMO_PASSWORD: outside.DEMO_PASSWORD ?? 'fourfold-demo',
     LOG_LEVEL: outside.LOG_LEVEL ?? 'info',
     TRUSTED_PROXIES: outside.TRUSTED_PROXIES ?? '',
+    STORAGE_QUOTA_BYTES: outside.STORAGE_QUOTA_BYTES ?? '',
+    PART_ADDRESS_SECONDS: outside.PART_ADDRESS_SECONDS ?? '',
     ...databaseUrls(ports),
     REDIS_URL: `redis://127.0.0.1:${ports.redis}`,
     STORAGE_ENDPOINT: storage,
