@@ -77,6 +77,7 @@ describe('what no row names', () => {
     const study = await make();
     const kept = await putFile(engineer, { id: study.id, label: 'n8' }, heatTable(8));
     const open = await ok(engineer, startUploadContract, { params: { id: study.id, label: 'n16' }, body: { filename: 'n16.csv', bytes: 100 } });
+    await ctx.storage.put(`${engineer.at.id}/reports/1.pdf`, Readable.from([Buffer.from('of another kind')]));
     const before = await keysOf();
     const stray = `${engineer.at.id}/${study.id}/${randomUUID()}`;
     await ctx.storage.put(stray, Readable.from([Buffer.from('left behind')]));

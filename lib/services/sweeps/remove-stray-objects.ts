@@ -1,6 +1,7 @@
 import { listNamedKeys } from '@/db/queries/swept-uploads';
 import type { StoredObject } from '@/lib/platform/storage';
 import type { JobContext } from '../outbox/job-context';
+import { isUploadKey } from '../uploads/storage-key';
 import { withOrganisation } from '../with-organisation';
 import { daysAgo } from './sweep-context';
 
@@ -14,7 +15,7 @@ async function* inBatches(found: AsyncIterable<Found>, before: Date): AsyncGener
   let old: Found[] = [];
   for await (const each of found) {
     // What is younger may be on its way: objects are written before the row that names them.
-    if (each.since >= before) continue;
+    if (each.since >= before || !isUploadKey(each.key)) continue;
     old.push(each);
     if (old.length < batch) continue;
     yield old;
