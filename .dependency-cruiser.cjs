@@ -78,7 +78,7 @@ module.exports = {
     doNotFollow: { path: 'node_modules' },
     tsPreCompilationDeps: true,
     tsConfig: { fileName: 'tsconfig.json' },
-    exclude: { path: '^(\\.next|\\.fourfold)/' },
+    exclude: { path: '^((\\.next|\\.fourfold)|lib/readers/table-rows)/' },
     enhancedResolveOptions: {
       exportsFields: ['exports'],
       conditionNames: ['import', 'require', 'node', 'default', 'types'],

@@ -6,6 +6,7 @@ import { run, stopRunning } from './processes.mjs';
 
 const AT_ONCE = 2;
 const onlyWritesSchema = process.argv.includes('--write-schema');
+const onlyWritesParser = process.argv.includes('--write-parser');
 
 /** @typedef {{ name: string, check: () => Promise<unknown> }} Step */
 
@@ -20,6 +21,9 @@ async function listSteps() {
   // Loaded after npm has installed what they import.
   const { checkSchema } = await import('./schema.mjs');
   const { checkFiles } = await import('./file-rules.mjs');
+  const { checkTableRows } = await import('./table-rows.mjs');
+  const parser = { name: 'parser', check: () => checkTableRows(onlyWritesParser) };
+  if (onlyWritesParser) return [parser];
   const schema = { name: 'schema', check: () => checkSchema(onlyWritesSchema) };
   if (onlyWritesSchema) return [schema];
   return [
@@ -29,6 +33,7 @@ async function listSteps() {
     script('check:unused'),
     script('check:imports'),
     schema,
+    parser,
     { name: 'files', check: checkFiles },
   ];
 }

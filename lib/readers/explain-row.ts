@@ -3,6 +3,9 @@ import type { ReasonCollector } from './reason-collector';
 import { splitFields } from './split-fields';
 import type { Delimiter } from './source';
 
+/** The decimal mark of the file and the line it was first seen in. */
+export interface DecimalMark { mark: 'point' | 'comma'; line: number }
+
 export interface RowRules {
   delimiter: Delimiter;
   width: number;
@@ -10,17 +13,20 @@ export interface RowRules {
   allowComma: boolean;
   /** Most significant digits seen, per wanted column. */
   digits: number[];
-  /** The decimal mark of the file and the line it was first seen in; null until a number has one. */
-  mark: { mark: 'point' | 'comma'; line: number } | null;
+  /** Null until a number has one. */
+  mark: DecimalMark | null;
   reasons: ReasonCollector;
 }
+
+/** A row of the file: bytes[start, end), without white space at its end. */
+export interface RowText { bytes: Buffer; start: number; end: number; line: number }
 
 /**
  * Reads a row again that was not plain numbers. True, with the values set, where it is a row after all (quotes, an empty
  * column after the last separator); otherwise everything wrong with it goes to the collector.
  */
 export function explainRow(
-  rules: RowRules, bytes: Buffer, start: number, end: number, line: number, columns: Float64Array[], row: number,
+  rules: RowRules, { bytes, start, end, line }: RowText, columns: readonly Float64Array[], row: number,
 ): boolean {
   const fields = splitFields(bytes.toString('latin1', start, end), rules.delimiter);
   if (fields.length === rules.width + 1 && fields.at(-1) === '') fields.pop();

@@ -1,15 +1,21 @@
 import { createHash } from 'node:crypto';
-import { createBlockEvaluator } from '../numerics/expression/block-evaluator';
+import { createNormTotal, type NormTotal } from '../numerics/norms/combine-norms';
 import type { GridNorms } from '../numerics/norms/grid-norms';
-import { createNormGatherer } from '../numerics/norms/norm-gatherer';
+import type { NormPart } from '../numerics/norms/norm-part';
+import type { OpenHelper } from './chunk-helping';
 import { compileExact } from './compile-exact';
+import { prepareGathering, type GridTask } from './gather-grid';
+import { createGridChecks, type GridChecks } from './grid-checks';
 import type { GridReading } from './grid-reading';
+import { locateColumns } from './locate-columns';
 import { planColumns } from './plan-columns';
-import { readColumns } from './read-columns';
-import { createReasonCollector } from './reason-collector';
-import { createRowProblems } from './row-problems';
-import type { ByteSource, ColumnBatch, ReadProgress } from './source';
-import { createTimeCheck } from './time-check';
+import { readChunks } from './read-chunks';
+import type { Head } from './read-head';
+import { readJson } from './read-json';
+import { readSource } from './read-source';
+import type { ByteSource, ReadProgress } from './source';
+import { detectTableDialect } from './table-dialect';
+import { createTableWork, type TableTask } from './table-work';
 
 export interface GridReadResult {
   norms: GridNorms;
@@ -21,7 +27,14 @@ export interface GridReadResult {
 export interface GridReadOptions {
   onProgress?: (progress: ReadProgress) => void;
   signal?: AbortSignal;
+  /** Starts a thread that helps with a large table; without it all is read in this one, to the same result. */
+  openHelper?: (task: TableTask) => OpenHelper<NormPart>;
 }
+
+/** The columns of the file and their most significant digits, in the order of the plan. */
+interface ColumnsRead { indices: number[]; digits: number[] }
+
+interface Gathering { task: GridTask; checks: GridChecks; total: NormTotal; onPiece: () => void }
 
 /**
  * Reads one grid in one pass: hash, decompression, columns, exact solution, norms. Throws RejectedFile with every reason
@@ -29,46 +42,56 @@ export interface GridReadOptions {
  */
 export async function readGrid(source: ByteSource, reading: GridReading, options: GridReadOptions = {}): Promise<GridReadResult> {
   const plan = planColumns(reading);
-  const evaluate = createBlockEvaluator(compileExact(reading));
   const fields = reading.fields.map(({ field }) => field);
-  const gatherer = createNormGatherer(fields);
-  const rowProblems = createRowProblems();
-  const timeCheck = createTimeCheck(reading.t);
-  const reasons = createReasonCollector();
+  const task: GridTask = { plan, fields, exact: compileExact(reading), t: reading.t };
+  const checks = createGridChecks(reading.t);
+  const total = createNormTotal(fields);
   const hash = createHash('sha256');
   let bytes = 0;
-
-  async function* hashed(): AsyncGenerator<Uint8Array> {
-    for await (const chunk of source) {
-      hash.update(chunk);
-      bytes += chunk.length;
-      yield chunk;
-    }
-  }
-
-  const onBatch = ({ rows, columns, lines }: ColumnBatch) => {
-    const pick = (slot: number | null) => (slot === null ? null : columns[slot] as Float64Array);
-    const x = columns[plan.x] as Float64Array;
-    const y = pick(plan.y);
-    const z = pick(plan.z);
-    const t = pick(plan.t);
-    const exact = evaluate(rows, { x, y: y ?? undefined, z: z ?? undefined, t: t ?? reading.t });
-    const before = gatherer.rows();
-    timeCheck.note(t, { rows, before, lines });
-    gatherer.add({
-      rows, x, y, z, weights: pick(plan.weight),
-      fields: plan.fields.map((slot, at) => ({ values: columns[slot] as Float64Array, exact: exact[at] as Float64Array })),
-    });
-    rowProblems.note(gatherer.problems(), { before, lines, coordinates: { x, y, z } });
+  const onBytes = (chunk: Uint8Array) => {
+    hash.update(chunk);
+    bytes += chunk.length;
   };
+  const onPiece = () => options.onProgress?.({ rows: total.rows(), bytes });
+  const gathering: Gathering = { task, checks, total, onPiece };
 
-  const read = await readColumns(hashed(), { columns: plan.names, onBatch, reasons, ...options });
-  const indices = read.columns.map(({ index }) => index);
-  for (const problem of gatherer.problems()) reasons.add(rowProblems.explain(problem, plan, fields, indices), problem.count);
-  const otherTime = timeCheck.problem(plan.t === null ? undefined : indices[plan.t]);
-  if (otherTime) reasons.add(otherTime.found, otherTime.count);
-  reasons.throwIfAny();
-  const norms = gatherer.finish(plan.fields.map((slot) => read.columns[slot]?.significantDigits ?? null));
+  const { indices, digits } = await readSource(source, {
+    json: (pieces) => readJsonGrid(pieces, gathering),
+    table: (pieces, head) => readTableGrid(pieces, head, { ...gathering, openHelper: options.openHelper }),
+  }, { onBytes, signal: options.signal });
+  onPiece();
+  if (total.rows() === 0 && checks.isClean()) {
+    checks.rows.add({ code: 'too-few-rows', line: null, column: null, found: 'no row of numbers', expected: 'at least 1 row' });
+  }
+  checks.throwIfAny(plan.t === null ? undefined : indices[plan.t]);
+  const norms = total.finish(plan.fields.map((slot) => digits[slot] ?? null));
   if (norms === null) throw new Error('readGrid: rows without a problem have no norms');
   return { norms, sha256: hash.digest('hex'), bytes };
+}
+
+async function readJsonGrid(pieces: AsyncGenerator<Buffer, void>, { task, checks, total, onPiece }: Gathering): Promise<ColumnsRead> {
+  const gatherer = prepareGathering(task)(checks);
+  const { columns } = await readJson(pieces, { wanted: task.plan.names, reasons: checks.rows, onBatch: (batch) => gatherer.add(batch), onChunk: onPiece });
+  const indices = columns.map(({ index }) => index);
+  total.add(gatherer.finish(indices));
+  return { indices, digits: columns.map(({ significantDigits }) => significantDigits) };
+}
+
+interface TableGathering extends Gathering { openHelper: GridReadOptions['openHelper'] }
+
+async function readTableGrid(
+  pieces: AsyncGenerator<Buffer, void>, head: Head, { task: grid, checks, total, onPiece, openHelper }: TableGathering,
+): Promise<ColumnsRead> {
+  const dialect = detectTableDialect(head);
+  const indices = locateColumns(dialect.header, grid.plan.names, dialect.headerLine, checks.rows);
+  const task: TableTask = { dialect, indices, grid };
+  const work = createTableWork(task, checks);
+  const digits = await readChunks(pieces, {
+    dialect, work, checks, openHelper: openHelper?.(task),
+    onPart(part) {
+      total.add(part);
+      onPiece();
+    },
+  });
+  return { indices, digits };
 }

@@ -10,9 +10,7 @@ const batchRows = 2048;
 /** Columns arrive one after another, so all their numbers are held: 32 MB of them. */
 const mostNumbers = 4_000_000;
 
-export interface ReadColumnsResult {
-  rows: number;
-  header: string[];
+interface ReadColumnsResult {
   /** In the order asked for. */
   columns: { index: number; significantDigits: number }[];
 }
@@ -21,7 +19,7 @@ interface ReadJsonOptions {
   wanted: readonly string[];
   reasons: ReasonCollector;
   onBatch: (batch: ColumnBatch) => void;
-  onChunk: (rows: number) => void;
+  onChunk: () => void;
 }
 
 /** Reads columns from JSON. Memory grows with the rows here, up to a limit beyond which the file is rejected. */
@@ -44,7 +42,7 @@ export async function readJson(chunks: AsyncIterable<Buffer>, { wanted, reasons,
 
   for await (const chunk of chunks) {
     columns.push(chunk);
-    onChunk(0);
+    onChunk();
   }
   columns.end();
   const header = columns.header();
@@ -60,7 +58,7 @@ export async function readJson(chunks: AsyncIterable<Buffer>, { wanted, reasons,
   }
   reasons.throwIfAny();
   deliver(found, rows, onBatch);
-  return { rows, header: [...header], columns: found.map((spool, slot) => ({ index: indices[slot] ?? 0, significantDigits: spool.digits() })) };
+  return { columns: found.map((spool, slot) => ({ index: indices[slot] ?? 0, significantDigits: spool.digits() })) };
 }
 
 function deliver(spools: readonly NumberSpool[], rows: number, onBatch: (batch: ColumnBatch) => void): void {

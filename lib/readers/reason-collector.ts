@@ -16,6 +16,7 @@ export interface ReasonCollector {
   /** `count` is how many times at once, 1 where not given. */
   add(problem: FoundProblem, count?: number): void;
   isEmpty(): boolean;
+  list(): readonly RejectionReason[];
   throwIfAny(): void;
 }
 
@@ -31,6 +32,7 @@ export function createReasonCollector(): ReasonCollector {
       else if (reasons.size < mostKinds) reasons.set(kind, { code, count, line, column, found: found === null ? null : shorten(found), expected });
     },
     isEmpty: () => reasons.size === 0,
+    list: () => [...reasons.values()],
     throwIfAny() {
       if (reasons.size > 0) throw new RejectedFile([...reasons.values()]);
     },

@@ -1,6 +1,12 @@
-import { readColumns } from '@/lib/readers/read-columns';
-import { createReasonCollector } from '@/lib/readers/reason-collector';
+import { createGridChecks } from '@/lib/readers/grid-checks';
+import { locateColumns } from '@/lib/readers/locate-columns';
+import { createChunkReader } from '@/lib/readers/read-chunk';
+import { readChunks } from '@/lib/readers/read-chunks';
+import { readJson } from '@/lib/readers/read-json';
+import { readSource } from '@/lib/readers/read-source';
 import { RejectedFile } from '@/lib/readers/rejected-file';
+import type { ColumnBatch } from '@/lib/readers/source';
+import { detectTableDialect } from '@/lib/readers/table-dialect';
 import { byteSource } from './byte-source';
 
 export interface ReadTable { columns: number[][]; lines: (number | null)[]; digits: number[] }
@@ -9,16 +15,31 @@ export interface ReadTable { columns: number[][]; lines: (number | null)[]; digi
 export async function readTable(content: string | Uint8Array, names: string[], cuts: readonly number[] = []): Promise<ReadTable> {
   const columns: number[][] = names.map(() => []);
   const lines: (number | null)[] = [];
-  const reasons = createReasonCollector();
-  const result = await readColumns(byteSource(content, cuts), {
-    columns: names, reasons,
-    onBatch(batch) {
-      for (let i = 0; i < batch.rows; i += 1) lines.push(batch.lines?.[i] ?? null);
-      for (const [slot, column] of batch.columns.entries()) columns[slot]?.push(...column.subarray(0, batch.rows));
+  const checks = createGridChecks(undefined);
+  const onBatch = (batch: ColumnBatch) => {
+    for (let i = 0; i < batch.rows; i += 1) lines.push(batch.lines?.[i] ?? null);
+    for (const [slot, column] of batch.columns.entries()) columns[slot]?.push(...column.subarray(0, batch.rows));
+  };
+  const digits = await readSource(byteSource(content, cuts), {
+    async json(pieces) {
+      const read = await readJson(pieces, { wanted: names, reasons: checks.rows, onBatch, onChunk: () => undefined });
+      return read.columns.map(({ significantDigits }) => significantDigits);
+    },
+    table(pieces, head) {
+      const dialect = detectTableDialect(head);
+      const reader = createChunkReader({ dialect, wanted: locateColumns(dialect.header, names, dialect.headerLine, checks.rows) });
+      const work = {
+        read: (bytes: Uint8Array, start: Parameters<typeof reader.read>[1]) => (
+          { part: null, ...reader.read(bytes, start, checks.rows, onBatch), digits: reader.significantDigits() }
+        ),
+        readAhead: () => null,
+      };
+      return readChunks(pieces, { dialect, work, checks, onPart: () => undefined });
     },
   });
-  reasons.throwIfAny();
-  return { columns, lines, digits: result.columns.map(({ significantDigits }) => significantDigits) };
+  if (lines.length === 0 && checks.isClean()) checks.rows.add({ code: 'too-few-rows', line: null, column: null, found: null, expected: null });
+  checks.throwIfAny(undefined);
+  return { columns, lines, digits };
 }
 
 /** The reasons for which a file is rejected; empty where it is taken. */

@@ -6,7 +6,8 @@ import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { ReadProgress } from '@/lib/readers/source';
-import type { ThreadMessage, ThreadResult, ThreadTask } from './thread-messages';
+import { openTableHelper } from './table-helper';
+import type { GivenTask, ThreadMessage, ThreadResult } from './thread-messages';
 
 const toldEveryMilliseconds = 200;
 
@@ -25,17 +26,18 @@ function sparingly(): (progress: ReadProgress) => void {
   };
 }
 
-async function run(task: ThreadTask): Promise<ThreadResult> {
+async function run(task: GivenTask): Promise<ThreadResult> {
   const source = await storage.read(task.storageKey);
   try {
     if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source) };
-    return { kind: 'read', result: await readGrid(source, task.reading, { onProgress: sparingly() }) };
+    const openHelper = task.mayHaveHelp ? openTableHelper : undefined;
+    return { kind: 'read', result: await readGrid(source, task.reading, { onProgress: sparingly(), openHelper }) };
   } finally {
     source.destroy();
   }
 }
 
-port.on('message', (task: ThreadTask) => {
+port.on('message', (task: GivenTask) => {
   run(task).then(
     (result) => tell({ type: 'done', result }),
     (error: unknown) => {

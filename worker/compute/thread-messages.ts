@@ -6,6 +6,9 @@ import type { ReadProgress, SourcePreview } from '@/lib/readers/source';
 /** What a thread is asked to do with one file in storage. */
 export type ThreadTask = { kind: 'preview'; storageKey: string } | { kind: 'read'; storageKey: string; reading: GridReading };
 
+/** A task on its way; whether a core is left for a second thread. */
+export type GivenTask = ThreadTask & { mayHaveHelp: boolean };
+
 export type ThreadResult = { kind: 'preview'; preview: SourcePreview } | { kind: 'read'; result: GridReadResult };
 
 /** What a thread says; every task ends in one message other than progress. */

@@ -76,7 +76,8 @@ export function createThreadPool(size: number): ThreadPool {
     thread.on('message', onMessage);
     thread.once('error', onError);
     thread.once('exit', onExit);
-    thread.postMessage(task);
+    const isAlone = all.size - idle.length < size;
+    thread.postMessage({ ...task, mayHaveHelp: isAlone && queue.length === 0 });
   }
 
   return {

@@ -1,7 +1,7 @@
-import { functions } from './functions';
 import type { Node, Variable } from './node';
 import { listNodes } from './list-nodes';
 import { evaluateBinary } from './evaluate-binary';
+import { evaluateUnary } from './evaluate-unary';
 
 /** A column of at least as many rows as are evaluated, or one value for all rows. */
 export type VariableValues = Partial<Record<Variable, Float64Array | number>>;
@@ -79,15 +79,5 @@ function makeStep(
     const exponent = node.operation === 'power' && node.b.kind === 'number' ? node.b.value : null;
     return (rows) => evaluateBinary(node.operation, exponent, a.values, b.values, to.values, rows);
   }
-  if (node.operation === 'negate') return (rows) => negate(a.values, to.values, rows);
-  const apply = functions[node.operation];
-  return (rows) => {
-    const from = a.values;
-    const into = to.values;
-    for (let i = 0; i < rows; i += 1) into[i] = apply(from[i] as number);
-  };
-}
-
-function negate(from: Float64Array, into: Float64Array, rows: number): void {
-  for (let i = 0; i < rows; i += 1) into[i] = -(from[i] as number);
+  return (rows) => evaluateUnary(node.operation, a.values, to.values, rows);
 }

@@ -1,5 +1,10 @@
+import type { SumPart } from './norm-part';
+
 export interface CompensatedSum {
   add(value: number): void;
+  /** Adds what another sum has gathered. */
+  addPart(part: SumPart): void;
+  part(): SumPart;
   value(): number;
 }
 
@@ -8,14 +13,21 @@ export interface CompensatedSum {
  * A. Neumaier, Rundungsfehleranalyse einiger Verfahren zur Summation endlicher Summen, ZAMM 54 (1974) 39–51, method IV.
  */
 export function createCompensatedSum(): CompensatedSum {
-  let sum = 0;
-  let lost = 0;
+  // Kept in an array, where the engine does not make an object of every new value.
+  const state = new Float64Array(2);
+  const add = (value: number) => {
+    const sum = state[0] as number;
+    const next = sum + value;
+    state[1] = (state[1] as number) + (Math.abs(sum) >= Math.abs(value) ? (sum - next) + value : (value - next) + sum);
+    state[0] = next;
+  };
   return {
-    add(value) {
-      const next = sum + value;
-      lost += Math.abs(sum) >= Math.abs(value) ? (sum - next) + value : (value - next) + sum;
-      sum = next;
+    add,
+    addPart({ sum, lost }) {
+      add(sum);
+      state[1] = (state[1] as number) + lost;
     },
-    value: () => sum + lost,
+    part: () => ({ sum: state[0] as number, lost: state[1] as number }),
+    value: () => (state[0] as number) + (state[1] as number),
   };
 }

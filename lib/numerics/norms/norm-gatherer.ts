@@ -1,6 +1,6 @@
 import type { Position } from '../assessment';
 import { createCompensatedSum, type CompensatedSum } from './compensated-sum';
-import type { FieldNorms, GridNorms } from './grid-norms';
+import type { FieldPart, NormPart } from './norm-part';
 
 interface NormBlock {
   rows: number;
@@ -26,8 +26,8 @@ export interface NormGatherer {
   add(block: NormBlock): void;
   rows(): number;
   problems(): readonly NormProblem[];
-  /** Digits per field, null where unknown. Null where there were problems or no rows. */
-  finish(significantDigits: readonly (number | null)[]): GridNorms | null;
+  /** What the rows so far come to. It means nothing where there were problems. */
+  part(): NormPart;
 }
 
 interface FieldSums {
@@ -45,7 +45,7 @@ const mostRows = 2 ** 40;
 /**
  * Gathers the norms of every field block by block, in one pass: with e = q − q_exact and weights w,
  * L1 = Σw|e|/Σw, L2 = √(Σwe²/Σw), L∞ = max|e| and where, the signed mean Σwe/Σw, and the norms of the exact field.
- * A weight that is not positive, or a value that is not finite, is a problem with its row, and there are no norms then.
+ * A weight that is not positive, or a value that is not finite, is a problem with its row, and there are no norms then. createNormTotal makes norms of parts.
  */
 export function createNormGatherer(fields: readonly string[]): NormGatherer {
   const weightSum = createCompensatedSum();
@@ -77,14 +77,7 @@ export function createNormGatherer(fields: readonly string[]): NormGatherer {
     },
     rows: () => rows,
     problems: () => [...problems.values()],
-    finish(significantDigits) {
-      if (rows === 0 || problems.size > 0) return null;
-      const total = equalWeights ? rows : weightSum.value();
-      return {
-        rows, weightSum: total, equalWeights,
-        fields: sums.map((sum, index) => finishSums(sum, total, rows, significantDigits[index] ?? null)),
-      };
-    },
+    part: () => ({ rows, equalWeights, weights: weightSum.part(), fields: sums.map(partOf) }),
   };
 }
 
@@ -97,10 +90,18 @@ function startSums(field: string): FieldSums {
 }
 
 function addWeights(weights: Float64Array, rows: number, sum: CompensatedSum, onBad: (i: number) => void): void {
-  for (let i = 0; i < rows; i += 1) {
-    const weight = weights[i] as number;
-    if (!(weight > 0 && weight < Infinity)) onBad(i);
-    sum.add(weight);
+  for (let from = 0; from < rows; from += run) {
+    const to = Math.min(from + run, rows);
+    let part = 0;
+    let isGood = true;
+    for (let i = from; i < to; i += 1) {
+      const weight = weights[i] as number;
+      part += weight;
+      isGood &&= weight > 0 && weight < Infinity;
+    }
+    sum.add(part);
+    if (isGood) continue;
+    for (let i = from; i < to; i += 1) if (!((weights[i] as number) > 0 && (weights[i] as number) < Infinity)) onBad(i);
   }
 }
 
@@ -166,16 +167,10 @@ function positionAt(block: NormBlock, i: number): Position {
   return at;
 }
 
-function finishSums(sum: FieldSums, total: number, count: number, significantDigits: number | null): FieldNorms {
-  const { field, at, min, max } = sum;
+function partOf(sum: FieldSums): FieldPart {
+  const { largest, at, exactLargest, min, max } = sum;
   return {
-    field,
-    L1: sum.absolute.value() / total,
-    L2: Math.sqrt(sum.square.value() / total),
-    Linf: sum.largest,
-    at,
-    mean: sum.signed.value() / total,
-    exact: { L1: sum.exactAbsolute.value() / total, L2: Math.sqrt(sum.exactSquare.value() / total), Linf: sum.exactLargest },
-    min, max, maxAbs: Math.max(Math.abs(min), Math.abs(max)), count, significantDigits,
+    absolute: sum.absolute.part(), square: sum.square.part(), signed: sum.signed.part(),
+    exactAbsolute: sum.exactAbsolute.part(), exactSquare: sum.exactSquare.part(), largest, at, exactLargest, min, max,
   };
 }

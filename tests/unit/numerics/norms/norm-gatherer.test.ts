@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { createNormTotal } from '@/lib/numerics/norms/combine-norms';
 import { createNormGatherer } from '@/lib/numerics/norms/norm-gatherer';
 
 interface Rows { x: number[]; q: number[]; exact: number[]; w?: number[] }
@@ -12,7 +13,9 @@ function gather({ x, q, exact, w }: Rows, blocks = [x.length]) {
     gatherer.add({ rows, x: cut(x), y: null, z: null, weights: w ? cut(w) : null, fields: [{ values: cut(q), exact: cut(exact) }] });
     from += rows;
   }
-  return { gatherer, norms: gatherer.finish([3]) };
+  const total = createNormTotal(['u']);
+  total.add(gatherer.part());
+  return { gatherer, norms: gatherer.problems().length > 0 ? null : total.finish([3]) };
 }
 
 describe('createNormGatherer(fields)', () => {
@@ -66,5 +69,5 @@ describe('createNormGatherer(fields)', () => {
     expect(gather({ x: large, q: large.map(() => 1e140), exact: large.map(() => 0) }).norms?.fields[0]?.L2).toBeCloseTo(1e140, -127);
   });
 
-  it('has no norms without rows', () => expect(createNormGatherer(['u']).finish([null])).toBeNull());
+  it('has no norms without rows', () => expect(createNormTotal(['u']).finish([null])).toBeNull());
 });

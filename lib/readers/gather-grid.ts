@@ -1,0 +1,55 @@
+import { createBlockEvaluator } from '../numerics/expression/block-evaluator';
+import type { Node } from '../numerics/expression/node';
+import type { NormPart } from '../numerics/norms/norm-part';
+import { createNormGatherer } from '../numerics/norms/norm-gatherer';
+import type { GridChecks } from './grid-checks';
+import type { ColumnPlan } from './plan-columns';
+import { createRowProblems } from './row-problems';
+import type { ColumnBatch } from './source';
+
+/** What norms are made from, beside columns: plain data, which a thread can hand to another. */
+export interface GridTask {
+  plan: ColumnPlan;
+  fields: string[];
+  /** The exact value of every field. */
+  exact: Node[];
+  /** The time of the grid, where the file has no column of times. */
+  t?: number;
+}
+
+/** Gathers some of the rows of a grid. */
+export interface GridGatherer {
+  add(batch: ColumnBatch): void;
+  /** What they come to; what is wrong with them goes to the checks. `indices` are the columns of the file, as planned. */
+  finish(indices: readonly number[]): NormPart;
+}
+
+/** Prepares the exact solution once, for gatherers one after another: what batches come to, with their checks. */
+export function prepareGathering({ plan, fields, exact, t: gridTime }: GridTask): (checks: GridChecks) => GridGatherer {
+  const evaluate = createBlockEvaluator(exact);
+  return (checks) => {
+    const gatherer = createNormGatherer(fields);
+    const rowProblems = createRowProblems();
+    return {
+      add({ rows, columns, lines }) {
+        const pick = (slot: number | null) => (slot === null ? null : columns[slot] as Float64Array);
+        const x = columns[plan.x] as Float64Array;
+        const y = pick(plan.y);
+        const z = pick(plan.z);
+        const t = pick(plan.t);
+        const known = evaluate(rows, { x, y: y ?? undefined, z: z ?? undefined, t: t ?? gridTime });
+        const before = gatherer.rows();
+        checks.times.note(t, { rows, before, lines });
+        gatherer.add({
+          rows, x, y, z, weights: pick(plan.weight),
+          fields: plan.fields.map((slot, at) => ({ values: columns[slot] as Float64Array, exact: known[at] as Float64Array })),
+        });
+        rowProblems.note(gatherer.problems(), { before, lines, coordinates: { x, y, z } });
+      },
+      finish(indices) {
+        for (const problem of gatherer.problems()) checks.values.add(rowProblems.explain(problem, plan, fields, indices), problem.count);
+        return gatherer.part();
+      },
+    };
+  };
+}

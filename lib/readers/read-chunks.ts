@@ -1,0 +1,69 @@
+import { createHelping, type OpenHelper } from './chunk-helping';
+import { createChunkTurns, type Turn } from './chunk-turns';
+import type { GridChecks } from './grid-checks';
+import { rejectAtOnce } from './reason-collector';
+import { longestLine } from './read-head';
+import { createChunkCutter, mostChunkBytes } from './table-chunks';
+import type { TableDialect } from './table-dialect';
+import type { ChunkWork } from './table-work';
+
+export interface ReadChunksOptions<Part> {
+  dialect: TableDialect;
+  work: ChunkWork<Part>;
+  openHelper?: OpenHelper<Part>;
+  checks: GridChecks;
+  /** Parts in the order of the file. */
+  onPart: (part: Part) => void;
+}
+
+const roomCount = 10;
+
+/**
+ * Reads a table chunk by chunk, with a helper where the file is large. A chunk comes to the same whoever reads it, and parts
+ * are handed over in the order of the file. Once something is wrong, all is read here and in turn. Gives the most
+ * significant digits per column.
+ */
+export async function readChunks<Part>(pieces: AsyncIterable<Buffer>, options: ReadChunksOptions<Part>): Promise<number[]> {
+  const { dialect, work, openHelper, checks, onPart } = options;
+  const rooms = Array.from({ length: roomCount }, () => new SharedArrayBuffer(mostChunkBytes));
+  const views = rooms.map((room) => new Uint8Array(room));
+  const free = rooms.map((_, room) => room);
+  const turns = createChunkTurns<Part>({
+    work, skipped: dialect.linesBefore,
+    onPart(part, room) {
+      free.push(room);
+      onPart(part);
+    },
+  });
+  const helping = createHelping(rooms, openHelper);
+
+  const untilHelped = async () => {
+    await helping.answered();
+    turns.settle();
+  };
+  const takeRoom = async () => {
+    while (free.length === 0) await untilHelped();
+    return free.pop() as number;
+  };
+  const cutter = createChunkCutter(dialect.lineEnd, { views, takeRoom });
+
+  try {
+    for await (const { room, length } of cutter.cut(pieces)) {
+      const bytes = (views[room] as Uint8Array).subarray(0, length);
+      const turn: Turn<Part> = { room, bytes, ahead: null };
+      const isFirst = turns.waiting() === 0;
+      turns.add(turn);
+      if (checks.isClean() && !helping.take(turn) && !isFirst) turn.ahead = work.readAhead(bytes);
+      turns.settle();
+    }
+    while (turns.waiting() > 0) await untilHelped();
+  } finally {
+    await helping.close();
+  }
+  if (cutter.isLineTooLong()) {
+    rejectAtOnce(checks.rows, {
+      code: 'line-too-long', line: turns.line() + 1, column: null, found: `more than ${longestLine} bytes in one line`, expected: 'lines of at most 1 MiB',
+    });
+  }
+  return turns.digits();
+}

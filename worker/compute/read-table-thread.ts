@@ -1,0 +1,30 @@
+import { parentPort } from 'node:worker_threads';
+import type { NormPart } from '@/lib/numerics/norms/norm-part';
+import { createGridChecks } from '@/lib/readers/grid-checks';
+import { createTableWork, type ChunkWork } from '@/lib/readers/table-work';
+import type { HelperAnswer, HelperMessage } from './table-helper';
+
+if (!parentPort) throw new Error('read-table-thread runs as a worker thread only.');
+const port = parentPort;
+let work: ChunkWork<NormPart> | null = null;
+let rooms: Uint8Array[] = [];
+
+function answer(message: HelperMessage): HelperAnswer {
+  if ('task' in message) {
+    // What is wrong with a chunk is told by the thread that is helped.
+    work = createTableWork(message.task, createGridChecks(undefined));
+    rooms = message.rooms.map((room) => new Uint8Array(room));
+    return 'ready';
+  }
+  const room = rooms[message.room];
+  if (work === null || room === undefined) throw new Error('read-table-thread was given a chunk before its task.');
+  return { result: work.readAhead(room.subarray(0, message.length)) };
+}
+
+port.on('message', (message: HelperMessage) => {
+  try {
+    port.postMessage(answer(message));
+  } catch (error) {
+    port.postMessage({ failed: error instanceof Error ? error.message : String(error) } satisfies HelperAnswer);
+  }
+});
