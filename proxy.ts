@@ -1,5 +1,7 @@
 import { NextResponse, type NextRequest } from 'next/server';
 
+const linkPages = new Set(['/accept-invitation', '/reset-password']);
+
 function policy(nonce: string): string {
   const isDevelopment = process.env.NODE_ENV === 'development';
   const storage = process.env.STORAGE_PUBLIC_URL ? ` ${new URL(process.env.STORAGE_PUBLIC_URL).origin}` : '';
@@ -28,7 +30,8 @@ export function proxy(request: NextRequest): NextResponse {
   headers.set('content-security-policy', csp);
   const response = NextResponse.next({ request: { headers } });
   response.headers.set('content-security-policy', csp);
-  response.headers.set('referrer-policy', 'same-origin');
+  // The address of these holds a secret.
+  response.headers.set('referrer-policy', linkPages.has(request.nextUrl.pathname) ? 'no-referrer' : 'same-origin');
   response.headers.set('x-content-type-options', 'nosniff');
   return response;
 }

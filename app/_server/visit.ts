@@ -2,6 +2,7 @@ import 'server-only';
 import { cookies, headers } from 'next/headers';
 import { notFound, redirect } from 'next/navigation';
 import { cache } from 'react';
+import { organisationToOpen } from '@/app/_components/organisation/last-organisation';
 import { AppError } from '@/lib/errors';
 import type { MemberContext, UserContext } from '@/lib/services/context';
 import { enterOrganisation } from '@/lib/services/people/enter-organisation';
@@ -24,7 +25,7 @@ export async function findHome(): Promise<string | null> {
   const visitor = await findVisitor();
   if (!visitor) return null;
   const { organisations } = await getMe(visitor);
-  return organisations[0] ? `/${organisations[0].slug}` : '/sign-out';
+  return `/${organisationToOpen(organisations, (await cookies()).toString())?.slug ?? 'account'}`;
 }
 
 /** The visitor as a member of the organisation of the page; others are sent to sign in, or find nothing here. */

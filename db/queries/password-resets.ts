@@ -17,6 +17,6 @@ export async function updateUnusedReset(db: Kysely<DB>, id: string, changes: Upd
 }
 
 /** Every other link of the person is void. */
-export function useUpResets(db: Kysely<DB>, userId: string, now: Date) {
+export function voidResets(db: Kysely<DB>, userId: string, now: Date) {
   return db.updateTable('password_resets').set({ used_at: now }).where('user_id', '=', userId).where('used_at', 'is', null).execute();
 }

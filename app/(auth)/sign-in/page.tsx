@@ -17,7 +17,7 @@ export default async function SignInPage({ searchParams }: { searchParams: Promi
   if (home) redirect(wanted ?? home);
   return (
     <PublicPage title="Sign in">
-      <Section note={<p>Somebody new starts with <TextLink href="/sign-up">an account and its organisation</TextLink>.</p>}>
+      <Section note={<><p>Somebody new starts with <TextLink href="/sign-up">an account and its organisation</TextLink>.</p><p><TextLink href="/reset-password">Password forgotten?</TextLink></p></>}>
         <PageTitle under={wanted ? 'The page you asked for is shown after signing in.' : undefined}>Sign in</PageTitle>
         <div className="mt-6"><SignInForm next={wanted} /></div>
       </Section>

@@ -9,8 +9,8 @@ interface OrganisationLayoutProps { params: Promise<{ org: string }>; children: 
 export default async function OrganisationLayout({ params, children }: OrganisationLayoutProps) {
   const { org } = await params;
   const member = await requireMember(org);
-  const { email, organisations } = await getMe(member);
-  const scope = { email, organisations, organisation: { ...member.organisation, roles: member.roles } };
+  const { id: userId, email, organisations } = await getMe(member);
+  const scope = { userId, email, organisations, organisation: { ...member.organisation, roles: member.roles } };
   return (
     <QueryProvider>
       <OrganisationProvider scope={scope}>{children}</OrganisationProvider>

@@ -7,12 +7,12 @@ import { signOutContract } from '@/lib/domain/people/schema';
 import { callApi } from '../api/call-api';
 import { goAfresh } from '../auth/go-afresh';
 import { useOrganisation } from './organisation-context';
-import { sectionLinks } from './section-links';
+import { sectionLinks, settingsLinks } from './section-links';
 
 const item = 'flex min-h-11 cursor-pointer items-center px-4 outline-none data-[highlighted]:bg-wash tablet:min-h-9';
 const rule = 'my-1 border-t border-hairline';
 
-/** Yourself: sections where the bar has no room for them, other organisations, tokens, the way out. */
+/** Yourself: sections where the bar has no room for them, other organisations, settings, your account, the way out. */
 export function AccountMenu() {
   const { email, slug, name, roles, organisations } = useOrganisation();
   const [fault, setFault] = useState(false);
@@ -54,8 +54,11 @@ export function AccountMenu() {
             </DropdownMenu.Group>
           )}
           <DropdownMenu.Separator className={rule} />
-          <DropdownMenu.Item asChild><Link prefetch={false} href={`/${slug}/settings/tokens`} className={item}>Tokens</Link></DropdownMenu.Item>
-          <DropdownMenu.Item asChild><Link prefetch={false} href={`/${slug}/settings/storage`} className={item}>Storage</Link></DropdownMenu.Item>
+          {settingsLinks(slug).map(({ label, href }) => (
+            <DropdownMenu.Item key={href} asChild><Link prefetch={false} href={href} className={item}>{label}</Link></DropdownMenu.Item>
+          ))}
+          <DropdownMenu.Separator className={rule} />
+          <DropdownMenu.Item asChild><Link prefetch={false} href="/account" className={item}>Account and mail</Link></DropdownMenu.Item>
           <DropdownMenu.Item asChild><Link prefetch={false} href="/docs/methods" className={item}>Methods and sources</Link></DropdownMenu.Item>
           <DropdownMenu.Item className={item} onSelect={(event) => { event.preventDefault(); void signOut(); }}>Sign out</DropdownMenu.Item>
           {fault && <p role="alert" className="px-4 py-2 text-note text-fail-text">Not signed out. The server did not answer; try again.</p>}

@@ -5,3 +5,10 @@ export const sectionLinks = (slug: string) => [
   { label: 'Cases', href: `/${slug}/cases` },
   { label: 'Studies', href: `/${slug}/studies` },
 ];
+
+/** The settings of an organisation. */
+export const settingsLinks = (slug: string) => [
+  { label: 'Members', href: `/${slug}/settings/members` },
+  { label: 'Tokens', href: `/${slug}/settings/tokens` },
+  { label: 'Storage', href: `/${slug}/settings/storage` },
+];

@@ -1,5 +1,5 @@
 import { deleteSessions } from '@/db/queries/sessions';
-import { useUpResets } from '@/db/queries/password-resets';
+import { voidResets } from '@/db/queries/password-resets';
 import { updatePassword } from '@/db/queries/users';
 import { queueMail } from '../mail/queue-mail';
 import type { Trx } from '../with-organisation';
@@ -9,7 +9,7 @@ interface PasswordChange { user: { id: string; email: string }; passwordHash: st
 /** A new password ends the other sessions, voids links to set one, and is told by mail. */
 export async function setPassword(trx: Trx, { user, passwordHash, now, keptSessionId }: PasswordChange): Promise<void> {
   await updatePassword(trx, user.id, passwordHash);
-  await useUpResets(trx, user.id, now);
+  await voidResets(trx, user.id, now);
   await deleteSessions(trx, user.id, keptSessionId);
   await queueMail(trx, {
     organisationId: null, userId: user.id, address: user.email, subjectId: null, facts: { kind: 'password-changed', at: now.toISOString() },
