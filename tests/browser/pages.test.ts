@@ -5,11 +5,12 @@ import { makeShownWork, type ShownWork } from '@/tests/support/shown-work';
 let work: ShownWork;
 beforeAll(async () => { work = await makeShownWork(); });
 
-const publicPages = ['/', '/quick-check', '/docs/methods', '/docs/problems', '/sign-in', '/sign-up', '/nothing-here'];
+const publicPages = ['/', '/quick-check', '/docs/methods', '/docs/problems', '/sign-in', '/sign-up', '/reset-password', '/reset-password?token=none', '/accept-invitation', '/nothing-here'];
 const memberPages = [
   ['', 'release matrix'], ['/codes', 'codes'], ['/codes/brack', 'a code'], ['/problems', 'problems'], ['/problems/new', 'a new problem'],
   ['/problems/heat-in-a-square', 'a problem'], ['/cases', 'cases'], ['/cases/new', 'a new case'], ['/cases/heat-second-order', 'a case'],
-  ['/studies', 'studies'], ['/studies/{study}', 'a study'], ['/studies/{spaceTime}', 'a study in space and time'], ['/settings/tokens', 'tokens'], ['/settings/storage', 'storage'],
+  ['/studies', 'studies'], ['/studies/{study}', 'a study'], ['/studies/{spaceTime}', 'a study in space and time'],
+  ['/settings/tokens', 'tokens'], ['/settings/members', 'members'], ['/settings/storage', 'storage'],
 ] as const;
 
 const looks = [{ size: 'wide', theme: 'light' }, { size: 'wide', theme: 'dark' }, { size: 'phone', theme: 'light' }] as const;

@@ -39,6 +39,12 @@ async function newContext(browser: Browser, { person, size = 'wide', theme = 'li
 /** Whether the page answers to keys and clicks: React leaves its marks on what it has taken over. */
 const isHydrated = () => Object.keys(document.querySelector('#content') ?? {}).some((key) => key.startsWith('__reactProps'));
 
+/** Waits until the page that was gone to answers to keys and clicks, with its title as its heading where one is named. */
+export async function arrived(page: Page, heading?: string | RegExp): Promise<void> {
+  await page.getByRole('heading', { level: 1, name: heading }).first().waitFor();
+  await page.waitForFunction(isHydrated);
+}
+
 interface BrowserFixtures { executable: string; browser: Browser; open: OpenPage }
 
 /** A test with a browser: `open` opens a page, and any error on its console fails the test. */

@@ -15,7 +15,7 @@ interface JoinFormProps { token: string; invitation: OpenInvitation; isSignedIn:
 
 function buttonText({ organisation, hasAccount }: OpenInvitation, isSignedIn: boolean): string {
   if (isSignedIn) return `Join ${organisation}`;
-  return hasAccount ? `Sign in and join ${organisation}` : `Make the account and join ${organisation}`;
+  return hasAccount ? 'Sign in and join' : 'Make the account and join';
 }
 
 /** Joins as the person signed in, with the password of the account there is, or with one chosen for a new account. */

@@ -55,7 +55,7 @@ export function InvitationList() {
                   const isOpen = invitation.state === 'pending' || invitation.state === 'expired';
                   return [
                     <Row key={invitation.id}>
-                      <RowHead className="break-all">{invitation.email}</RowHead>
+                      <RowHead className="min-w-48 [overflow-wrap:anywhere]">{invitation.email}</RowHead>
                       <Cell>{invitation.roles.join(', ')}</Cell>
                       <Cell><State invitation={invitation} />{underWay.has(invitation.mail?.state ?? '') && <span className="text-graphite">, mail on its way</span>}</Cell>
                       <Cell className="whitespace-nowrap">

@@ -24,7 +24,7 @@ export function MemberRow({ member, isLastOwner, onChoose }: MemberRowProps) {
   const isSelf = member.id === userId;
   return (
     <Row>
-      <RowHead className="break-all">{member.email}{isSelf && <span className="text-graphite"> (you)</span>}</RowHead>
+      <RowHead className="min-w-48 [overflow-wrap:anywhere]">{member.email}{isSelf && <span className="text-graphite"> (you)</span>}</RowHead>
       <Cell>{member.roles.join(', ')}</Cell>
       <Cell><DateTime value={member.since} /></Cell>
       <Cell><Sees member={member} /></Cell>
