@@ -29,20 +29,23 @@ export function OpenUploads({ uploads }: { uploads: readonly OpenUpload[] }) {
       <Table caption="Uploads in progress, the oldest first." hideCaption>
         <Head>
           <tr>
-            <HeadCell>File, grid</HeadCell><HeadCell num>Size</HeadCell><HeadCell afterNumber>By</HeadCell><HeadCell>Since</HeadCell><HeadCell>Last heard of</HeadCell>
+            <HeadCell>File, grid</HeadCell><HeadCell num>Size</HeadCell><HeadCell afterNumber className="max-tablet:hidden">By</HeadCell><HeadCell className="max-tablet:hidden">Since</HeadCell><HeadCell className="max-tablet:hidden">Last heard of</HeadCell>
             {may('work.write') && <HeadCell><span className="sr-only">Give up</span></HeadCell>}
           </tr>
         </Head>
         <tbody>
           {uploads.map((upload) => (
             <Row key={upload.id}>
-              <RowHead className="break-all"><NameLink href={`/${slug}/studies/${upload.study}`}>{upload.filename}</NameLink>, {upload.grid}</RowHead>
+              <RowHead className="[overflow-wrap:anywhere]">
+                <NameLink href={`/${slug}/studies/${upload.study}`}>{upload.filename}</NameLink>, {upload.grid}
+                <span className="block text-note text-graphite tablet:hidden">{upload.createdBy}, since <DateTime value={upload.createdAt} show="both" />, last heard of <DateTime value={upload.lastActivityAt} show="both" /></span>
+              </RowHead>
               <Cell num>{formatBytes(upload.bytes)}</Cell>
-              <Cell afterNumber className="break-all">{upload.createdBy}</Cell>
-              <Cell><DateTime value={upload.createdAt} show="both" /></Cell>
-              <Cell><DateTime value={upload.lastActivityAt} show="both" /></Cell>
+              <Cell afterNumber className="break-all max-tablet:hidden">{upload.createdBy}</Cell>
+              <Cell className="max-tablet:hidden"><DateTime value={upload.createdAt} show="both" /></Cell>
+              <Cell className="max-tablet:hidden"><DateTime value={upload.lastActivityAt} show="both" /></Cell>
               {may('work.write') && (
-                <Cell><TextButton className="max-tablet:min-h-11" aria-label={`Give up ${upload.filename}, grid ${upload.grid}`} disabled={giveUp.isPending} onClick={() => giveUp.mutate(upload)}>Give up</TextButton></Cell>
+                <Cell><TextButton className="whitespace-nowrap max-tablet:min-h-11" aria-label={`Give up ${upload.filename}, grid ${upload.grid}`} disabled={giveUp.isPending} onClick={() => giveUp.mutate(upload)}>Give up</TextButton></Cell>
               )}
             </Row>
           ))}

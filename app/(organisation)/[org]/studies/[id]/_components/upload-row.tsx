@@ -9,6 +9,7 @@ import { formatBytes } from '@/lib/domain/numbers/format-bytes';
 import type { Grid, GridState, Study } from '@/lib/domain/studies/schema';
 import { gridSize } from './grid-size';
 import { LeaveOut } from './leave-out';
+import { OpenState } from './sending/open-upload';
 import { SendQuestion } from './sending/send-question';
 import type { Transfer } from './sending/transfer';
 import { TransferActions } from './sending/transfer-actions';
@@ -69,7 +70,7 @@ export function UploadRow({ study, grid, transfer, reading, uploader, sender, ma
         <Cell num>{bytes === undefined ? '' : formatBytes(bytes)}</Cell>
         <Cell className="whitespace-nowrap" aria-live="polite">
           {isOut ? 'left out' : transfer ? <span className={transfer.state === 'failed' ? 'font-semibold text-fail-text' : ''}>{transferWords[transfer.state]}{transfer.isElsewhere && ' in another tab'}</span>
-            : <span className={isBad ? 'font-semibold text-fail-text' : grid.state === 'needs-columns' ? 'font-semibold' : ''}>{stateWords[grid.state]}</span>}
+            : <span className={isBad ? 'font-semibold text-fail-text' : grid.state === 'needs-columns' ? 'font-semibold' : ''}>{grid.state === 'receiving' && grid.upload ? <OpenState upload={grid.upload} /> : stateWords[grid.state]}</span>}
         </Cell>
         <Cell className="w-[34%] min-w-28 tablet:min-w-44"><UploadProgress grid={grid} transfer={transfer} reading={reading} /></Cell>
         <Cell className="min-w-32 max-tablet:hidden">{actions}</Cell>
