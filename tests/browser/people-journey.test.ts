@@ -26,6 +26,7 @@ browserTest('An owner invites by mail; somebody new and somebody known join, wor
   await page.getByRole('button', { name: 'Send invitation' }).click();
   await page.getByText('An auditor holds no other role.').waitFor();
   await page.getByLabel('engineer', { exact: true }).uncheck();
+  await page.getByRole('button', { name: 'Send invitation' }).click();
   await page.getByText('An auditor’s access has an end.').waitFor();
   await page.getByLabel('Access ends after').fill(dayIn(6));
   await page.getByRole('button', { name: 'Send invitation' }).click();
