@@ -11,21 +11,15 @@ function entriesIn(folder, name) {
 }
 
 /**
- * The worker, its threads and its commands as plain modules: threads cannot be started from TypeScript.
- * @param {string} outdir keeps the folders of worker/: main.mjs, compute/…-thread.mjs, commands/….mjs
+ * Bundles entries as plain modules, as the worker is: threads cannot be started from TypeScript.
+ * @param {Pick<import('esbuild').BuildOptions, 'entryPoints' | 'outbase' | 'outdir'>} options
  */
-export async function bundleWorker(outdir) {
+export async function bundle(options) {
   // Loaded here: this file is read before npm has installed anything.
   const { build } = await import('esbuild');
   await build({
+    ...options,
     absWorkingDir: root,
-    entryPoints: [
-      path.join(root, 'worker/main.ts'),
-      ...entriesIn('worker/compute', /-thread\.ts$/),
-      ...entriesIn('worker/commands', /\.ts$/),
-    ],
-    outbase: path.join(root, 'worker'),
-    outdir,
     outExtension: { '.js': '.mjs' },
     bundle: true,
     platform: 'node',
@@ -36,5 +30,21 @@ export async function bundleWorker(outdir) {
     alias: { mathjs: fileURLToPath(import.meta.resolve('mathjs')) },
     sourcemap: true,
     logLevel: 'warning',
+  });
+}
+
+/**
+ * The worker, its threads and its commands.
+ * @param {string} outdir keeps the folders of worker/: main.mjs, compute/…-thread.mjs, commands/….mjs
+ */
+export async function bundleWorker(outdir) {
+  await bundle({
+    entryPoints: [
+      path.join(root, 'worker/main.ts'),
+      ...entriesIn('worker/compute', /-thread\.ts$/),
+      ...entriesIn('worker/commands', /\.ts$/),
+    ],
+    outbase: path.join(root, 'worker'),
+    outdir,
   });
 }

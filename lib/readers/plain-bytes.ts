@@ -37,7 +37,7 @@ async function* rejoin(head: Buffer, iterator: AsyncIterator<Uint8Array>): Async
 async function* decompress(chunks: AsyncGenerator<Buffer, void>): AsyncGenerator<Buffer, void> {
   const gunzip = createGunzip({ chunkSize: 256 * 1024 });
   // What goes wrong in the source destroys the stream with that error, and the loop below throws it.
-  pipeline(Readable.from(chunks), gunzip, () => undefined);
+  pipeline(Readable.from(copies(chunks)), gunzip, () => undefined);
   try {
     for await (const chunk of gunzip) yield chunk as Buffer;
   } catch (error) {
@@ -46,6 +46,11 @@ async function* decompress(chunks: AsyncGenerator<Buffer, void>): AsyncGenerator
       code: 'damaged-gzip', count: 1, line: null, column: null, found: error.message, expected: 'a complete gzip file',
     }]);
   }
+}
+
+/** The stream holds on to what it is given, while a source may use its buffer again. */
+async function* copies(chunks: AsyncGenerator<Buffer, void>): AsyncGenerator<Buffer, void> {
+  for await (const chunk of chunks) yield Buffer.from(chunk);
 }
 
 function isGzipDamage(error: unknown): error is Error {
