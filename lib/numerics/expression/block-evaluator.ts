@@ -76,8 +76,9 @@ function makeStep(
   const a = columnOf(columns, node.a);
   if (node.kind === 'binary') {
     const b = columnOf(columns, node.b);
-    const exponent = node.operation === 'power' && node.b.kind === 'number' ? node.b.value : null;
-    return (rows) => evaluateBinary(node.operation, exponent, a.values, b.values, to.values, rows);
+    const aNumber = node.a.kind === 'number' ? node.a.value : null;
+    const bNumber = node.b.kind === 'number' ? node.b.value : null;
+    return (rows) => evaluateBinary(node.operation, { a: a.values, b: b.values, aNumber, bNumber }, to.values, rows);
   }
   return (rows) => evaluateUnary(node.operation, a.values, to.values, rows);
 }

@@ -1,25 +1,47 @@
 import type { BinaryOperation } from './node';
 
-/** Applies one operation row by row. `exponent` is the number where a power has one, else null. */
-export function evaluateBinary(
-  operation: BinaryOperation, exponent: number | null, a: Float64Array, b: Float64Array, into: Float64Array, rows: number,
-): void {
+/** The columns an operation takes, and the number that stands in all rows of one of them, null where it varies. */
+export interface Operands {
+  a: Float64Array;
+  b: Float64Array;
+  aNumber: number | null;
+  bNumber: number | null;
+}
+
+/** Applies one operation row by row. */
+export function evaluateBinary(operation: BinaryOperation, { a, b, aNumber, bNumber }: Operands, into: Float64Array, rows: number): void {
   switch (operation) {
     case 'add':
-      for (let i = 0; i < rows; i += 1) into[i] = (a[i] as number) + (b[i] as number);
+      // The graph puts numbers first where the order does not matter.
+      if (aNumber !== null) addNumber(aNumber, b, into, rows);
+      else addColumns(a, b, into, rows);
       return;
     case 'subtract':
-      for (let i = 0; i < rows; i += 1) into[i] = (a[i] as number) - (b[i] as number);
+      if (bNumber !== null) addNumber(-bNumber, a, into, rows);
+      else for (let i = 0; i < rows; i += 1) into[i] = (a[i] as number) - (b[i] as number);
       return;
     case 'multiply':
-      for (let i = 0; i < rows; i += 1) into[i] = (a[i] as number) * (b[i] as number);
+      if (aNumber !== null) multiplyByNumber(aNumber, b, into, rows);
+      else for (let i = 0; i < rows; i += 1) into[i] = (a[i] as number) * (b[i] as number);
       return;
     case 'divide':
       for (let i = 0; i < rows; i += 1) into[i] = (a[i] as number) / (b[i] as number);
       return;
     case 'power':
-      raise(exponent, a, b, into, rows);
+      raise(bNumber, a, b, into, rows);
   }
+}
+
+function addNumber(number: number, column: Float64Array, into: Float64Array, rows: number): void {
+  for (let i = 0; i < rows; i += 1) into[i] = number + (column[i] as number);
+}
+
+function addColumns(a: Float64Array, b: Float64Array, into: Float64Array, rows: number): void {
+  for (let i = 0; i < rows; i += 1) into[i] = (a[i] as number) + (b[i] as number);
+}
+
+function multiplyByNumber(number: number, column: Float64Array, into: Float64Array, rows: number): void {
+  for (let i = 0; i < rows; i += 1) into[i] = number * (column[i] as number);
 }
 
 /** Squares and cubes are products: exact to the last digit or two, and several times faster than a general power. */
