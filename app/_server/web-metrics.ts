@@ -27,6 +27,7 @@ export function createWebMetrics(pool: Parameters<typeof createRegistry>[1]): We
   const outbox = new Gauge({ name: 'fourfold_outbox_jobs', help: 'Jobs that are not done, by name and state.', labelNames: ['job', 'state'], registers });
   const oldest = new Gauge({ name: 'fourfold_outbox_oldest_seconds', help: 'Age of the oldest job that is not done.', labelNames: ['job'], registers });
   const uploads = new Gauge({ name: 'fourfold_uploads_open', help: 'Files on their way.', registers });
+  const mailGauge = new Gauge({ name: 'fourfold_mails', help: 'Mails that are not out, by state.', labelNames: ['state'], registers });
 
   return {
     registry,
@@ -37,7 +38,7 @@ export function createWebMetrics(pool: Parameters<typeof createRegistry>[1]): We
       sent.inc({ route }, bytesOut);
       if (error !== undefined) errors.inc({ code: error });
     },
-    setMeasures({ queue, jobs, openUploads }) {
+    setMeasures({ queue, jobs, openUploads, mails }) {
       for (const [state, count] of Object.entries(queue)) queued.set({ state }, count);
       outbox.reset();
       oldest.reset();
@@ -46,6 +47,7 @@ export function createWebMetrics(pool: Parameters<typeof createRegistry>[1]): We
         oldest.set({ job }, Math.max(oldestSeconds, 0));
       }
       uploads.set(openUploads);
+      for (const [state, count] of Object.entries(mails)) mailGauge.set({ state }, count);
     },
   };
 }

@@ -51,3 +51,9 @@ export function updateMail(db: Kysely<DB>, at: { organisationId: string | null; 
     .returningAll()
     .executeTakeFirst();
 }
+
+/** Mails that are not out, in every organisation, by state. */
+export async function countOpenMails(db: Kysely<DB>): Promise<{ state: string; count: string }[]> {
+  const { rows } = await sql<{ state: string; count: string }>`select state, count from count_open_mails()`.execute(db);
+  return rows;
+}

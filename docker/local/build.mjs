@@ -37,8 +37,8 @@ function dropOldBuilds(current) {
   }
 }
 
-/** @param {string} folder */
-async function buildInto(folder) {
+/** @param {string} folder of the web server in web/ and the worker in worker/ */
+export async function buildInto(folder) {
   const env = { ...process.env, NEXT_TELEMETRY_DISABLED: '1', NODE_ENV: 'production' };
   await run({
     command: npmBinary('next'),

@@ -13,12 +13,14 @@ function entriesIn(folder, name) {
 /**
  * Bundles entries as plain modules, as the worker is: threads cannot be started from TypeScript.
  * @param {Pick<import('esbuild').BuildOptions, 'entryPoints' | 'outbase' | 'outdir'>} options
+ * @returns {Promise<string[]>} the modules it imports that it does not hold
  */
 export async function bundle(options) {
   // Loaded here: this file is read before npm has installed anything.
   const { build } = await import('esbuild');
-  await build({
+  const { metafile } = await build({
     ...options,
+    metafile: true,
     absWorkingDir: root,
     outExtension: { '.js': '.mjs' },
     bundle: true,
@@ -31,14 +33,15 @@ export async function bundle(options) {
     sourcemap: true,
     logLevel: 'warning',
   });
+  return Object.values(metafile.outputs).flatMap(({ imports }) => imports.filter(({ external }) => external).map(({ path: name }) => name));
 }
 
 /**
  * The worker, its threads and its commands.
  * @param {string} outdir keeps the folders of worker/: main.mjs, compute/…-thread.mjs, commands/….mjs
  */
-export async function bundleWorker(outdir) {
-  await bundle({
+export function bundleWorker(outdir) {
+  return bundle({
     entryPoints: [
       path.join(root, 'worker/main.ts'),
       ...entriesIn('worker/compute', /-thread\.ts$/),
@@ -47,4 +50,9 @@ export async function bundleWorker(outdir) {
     outbase: path.join(root, 'worker'),
     outdir,
   });
+}
+
+/** @param {string} outdir of db/migrate.mjs and migrations/….mjs */
+export function bundleMigrations(outdir) {
+  return bundle({ entryPoints: [path.join(root, 'db/migrate.ts'), ...entriesIn('migrations', /\.ts$/)], outbase: root, outdir });
 }

@@ -3,7 +3,7 @@ import { SMTPServer } from 'smtp-server';
 import { listPage, messagePage } from './mail-pages.mjs';
 import { createMailStore } from './mail-store.mjs';
 
-const [folder, smtpPort, inboxPort] = process.argv.slice(2);
+const [folder, smtpPort, inboxPort, host = '127.0.0.1'] = process.argv.slice(2);
 if (!folder || !smtpPort || !inboxPort) throw new Error('Expected a folder, a mail port and a page port.');
 const store = createMailStore(folder);
 
@@ -66,6 +66,6 @@ const inbox = http.createServer((request, response) => {
     });
 });
 
-smtp.listen(Number(smtpPort), '127.0.0.1');
-inbox.listen(Number(inboxPort), '127.0.0.1');
+smtp.listen(Number(smtpPort), host);
+inbox.listen(Number(inboxPort), host);
 process.once('SIGTERM', () => process.exit(0));

@@ -56,11 +56,12 @@ describe('GET /api/v1/metrics', () => {
   it('counts refusals by their code', () => expect(grown('web', 'fourfold_errors_total', { code: 'not-found' })).toBe(1));
 
   it('tells what waits in the queue, the outbox and on the way, and the state of the process', () => {
-    for (const job of ['grid.read', 'study.assess']) {
+    for (const job of ['grid.read', 'study.assess', 'mail.send']) {
       for (const state of ['waiting', 'queued', 'failed']) expect(sumOf(after.web, 'fourfold_outbox_jobs', { job, state })).toBeGreaterThanOrEqual(0);
       expect(sumOf(after.web, 'fourfold_outbox_oldest_seconds', { job })).toBeGreaterThanOrEqual(0);
     }
     for (const state of ['wait', 'active', 'delayed']) expect(sumOf(after.web, 'fourfold_queue_jobs', { state })).toBeGreaterThanOrEqual(0);
+    for (const state of ['queued', 'sending', 'failed']) expect(after.web.some(({ name, labels }) => name === 'fourfold_mails' && labels.state === state)).toBe(true);
     expect(sumOf(after.web, 'fourfold_uploads_open')).toBeGreaterThanOrEqual(0);
     expect(sumOf(after.web, 'fourfold_database_connections', { state: 'open' })).toBeGreaterThan(0);
     expect(sumOf(after.web, 'process_resident_memory_bytes')).toBeGreaterThan(1e7);
