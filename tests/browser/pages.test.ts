@@ -5,7 +5,7 @@ import { makeShownWork, type ShownWork } from '@/tests/support/shown-work';
 let work: ShownWork;
 beforeAll(async () => { work = await makeShownWork(); });
 
-const publicPages = ['/', '/quick-check', '/docs/methods', '/docs/problems', '/sign-in', '/sign-up', '/reset-password', '/reset-password?token=none', '/accept-invitation', '/nothing-here'];
+const publicPages = ['/', '/quick-check', '/docs/methods', '/docs/problems', '/docs/production', '/sign-in', '/sign-up', '/reset-password', '/reset-password?token=none', '/accept-invitation', '/nothing-here'];
 const memberPages = [
   ['', 'release matrix'], ['/codes', 'codes'], ['/codes/brack', 'a code'], ['/problems', 'problems'], ['/problems/new', 'a new problem'],
   ['/problems/heat-in-a-square', 'a problem'], ['/cases', 'cases'], ['/cases/new', 'a new case'], ['/cases/heat-second-order', 'a case'],

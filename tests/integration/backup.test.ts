@@ -18,7 +18,7 @@ import { awaitOutcome, awaitStudy, putFile } from '../support/study';
 import { makeWork } from '../support/work';
 
 const folder = fs.mkdtempSync(path.join(os.tmpdir(), 'fourfold-backup-'));
-const port = Number(new URL(need('WEB_URL')).port) + 5;
+const port = Number(new URL(need('WEB_URL')).port) + 30;
 let engineer: Person;
 let study = '';
 let upload = '';

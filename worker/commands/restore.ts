@@ -2,25 +2,25 @@ import fs from 'node:fs';
 import { isDeepStrictEqual } from 'node:util';
 import { Client } from 'pg';
 import { readBackupEnv } from '@/lib/env';
-import { createStorage } from '@/lib/platform/storage';
+import { createStorage, type Storage } from '@/lib/platform/storage';
 import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { atOnce } from './backup/at-once';
 import { createMeter, faultOf } from './backup/hash-file';
 import { placesOf, readManifest, type BackupObject, type Manifest } from './backup/manifest';
 import { listObjects, placeOf } from './backup/object-list';
 import { runPostgresClient } from './backup/postgres-client';
+import { runCommand } from './backup/run-command';
 import { countTables } from './backup/snapshot';
 
 const copiesAtOnce = 4;
 
 const [folder = ''] = process.argv.slice(2);
-if (folder === '') throw new Error('Say where from: npm run restore -- FOLDER.');
-const env = readBackupEnv(process.env);
-const storage = createStorage(storageOptionsOf(env));
 const places = placesOf(folder);
 
+interface Given { env: ReturnType<typeof readBackupEnv>; storage: Storage }
+
 /** Nothing is put over what is there: a wrong address must not cost anybody their work. */
-async function refuseUnlessEmpty(): Promise<void> {
+async function refuseUnlessEmpty({ env, storage }: Given): Promise<void> {
   const client = new Client({ connectionString: env.MIGRATION_DATABASE_URL });
   await client.connect();
   try {
@@ -44,7 +44,7 @@ async function checkBackup(manifest: Manifest): Promise<void> {
   if (faults.length > 0) throw new Error(`The backup is damaged, and nothing was restored.\n${faults.sort().join('\n')}`);
 }
 
-async function restoreObject({ key, bytes, sha256 }: BackupObject): Promise<void> {
+async function restoreObject(storage: Storage, { key, bytes, sha256 }: BackupObject): Promise<void> {
   const { stream, facts } = createMeter();
   const file = fs.createReadStream(placeOf(folder, key));
   file.once('error', (error) => stream.destroy(error));
@@ -54,17 +54,26 @@ async function restoreObject({ key, bytes, sha256 }: BackupObject): Promise<void
   if (stored !== bytes) throw new Error(`The store kept ${stored ?? 'no'} bytes of ${key}; it has ${bytes}.`);
 }
 
-const begun = performance.now();
-const manifest = readManifest(folder);
-await refuseUnlessEmpty();
-await checkBackup(manifest);
-await runPostgresClient('pg_restore', ['--exit-on-error', '--single-transaction', '--no-password', '--dbname', '', places.database], env.MIGRATION_DATABASE_URL);
-const tables = await countTables(env.MAINTENANCE_DATABASE_URL);
-if (!isDeepStrictEqual(tables, manifest.tables)) {
+async function restoreDatabase({ env }: Given, manifest: Manifest): Promise<void> {
+  await runPostgresClient('pg_restore', ['--exit-on-error', '--single-transaction', '--no-password', '--dbname', '', places.database], env.MIGRATION_DATABASE_URL);
+  const tables = await countTables(env.MAINTENANCE_DATABASE_URL);
+  if (isDeepStrictEqual(tables, manifest.tables)) return;
   const differing = Object.keys(manifest.tables).filter((name) => tables[name] !== manifest.tables[name]);
   throw new Error(`Restored tables have another number of rows than the backup says: ${differing.join(', ')}.`);
 }
-await atOnce(listObjects(folder), copiesAtOnce, restoreObject);
-console.log(`Restored the backup of ${manifest.createdAt}: schema ${manifest.schema}, ${Object.keys(tables).length} tables, ${manifest.objects.count} files of ${manifest.objects.totalBytes} bytes.`);
-for (const key of manifest.missing) console.error(`Not in the backup, since it was not in the store: ${key}`);
-console.log(`It took ${((performance.now() - begun) / 1000).toFixed(1)} s.`);
+
+await runCommand(async () => {
+  if (folder === '') throw new Error('Say where from: npm run restore -- FOLDER.');
+  const env = readBackupEnv(process.env);
+  const given = { env, storage: createStorage(storageOptionsOf(env)) };
+  const begun = performance.now();
+  const manifest = readManifest(folder);
+  await refuseUnlessEmpty(given);
+  await checkBackup(manifest);
+  await restoreDatabase(given, manifest);
+  await atOnce(listObjects(folder), copiesAtOnce, (object) => restoreObject(given.storage, object));
+  const { createdAt, schema, tables, objects, missing } = manifest;
+  console.log(`Restored the backup of ${createdAt}: schema ${schema}, ${Object.keys(tables).length} tables, ${objects.count} files of ${objects.totalBytes} bytes.`);
+  for (const key of missing) console.error(`Not in the backup, since it was not in the store: ${key}`);
+  console.log(`It took ${((performance.now() - begun) / 1000).toFixed(1)} s.`);
+});
