@@ -15,7 +15,9 @@ export interface ExtraProcess {
 function startExtra(name: string, args: string[], env: Record<string, string>): ExtraProcess {
   const log = path.join(need('TEST_LOG_FOLDER'), `${name}.log`);
   const out = fs.openSync(log, 'a');
-  const child = spawn('setpriv', ['--pdeathsig', 'KILL', '--', process.execPath, ...args], { env: { ...process.env, ...env, NODE_ENV: 'production' }, stdio: ['ignore', out, out] });
+  // The kernel ends it with the test run, even one that is killed.
+  const [file, ...rest] = ['setpriv', '--pdeathsig', 'KILL', '--', process.execPath, ...args] as const;
+  const child = spawn(file, rest, { env: { ...process.env, ...env, NODE_ENV: 'production' }, stdio: ['ignore', out, out] });
   fs.closeSync(out);
   const ended = new Promise<number | null>((resolve) => child.once('exit', resolve));
   return {

@@ -5,6 +5,19 @@ import { need } from './environment';
 
 const withDatabase = (url: string, name: string) => Object.assign(new URL(url), { pathname: `/${name}` }).toString();
 
+/** Asks something of the second database, as the role of the address. */
+export async function askSecondHome(url: string, queries: string[]): Promise<object[][]> {
+  const client = new Client({ connectionString: url });
+  await client.connect();
+  try {
+    const answers: object[][] = [];
+    for (const query of queries) answers.push((await client.query<object>(query)).rows);
+    return answers;
+  } finally {
+    await client.end();
+  }
+}
+
 /** A database of its own on the same server, made as docker/postgres/roles.sql makes one, and a bucket of its own. */
 export async function makeSecondHome(name: string): Promise<Record<string, string>> {
   const admin = adminDatabase();
@@ -12,11 +25,9 @@ export async function makeSecondHome(name: string): Promise<Record<string, strin
   await admin.query(`create database ${name} owner fourfold_owner`);
   await admin.query(`revoke all on database ${name} from public`);
   await admin.query(`grant connect on database ${name} to fourfold_app, fourfold_maintenance`);
-  const inside = new Client({ connectionString: withDatabase(need('TEST_ADMIN_DATABASE_URL'), name) });
-  await inside.connect();
-  await inside.query('grant usage on schema public to fourfold_app, fourfold_maintenance');
-  await inside.query('grant usage, create on schema public to fourfold_lookup');
-  await inside.end();
+  await askSecondHome(withDatabase(need('TEST_ADMIN_DATABASE_URL'), name), [
+    'grant usage on schema public to fourfold_app, fourfold_maintenance', 'grant usage, create on schema public to fourfold_lookup',
+  ]);
 
   const bucket = name.replaceAll('_', '-');
   const client = new S3Client({
