@@ -47,6 +47,10 @@ describe('docker/compose.yaml', () => {
     expect(Object.keys(compose.services[name]?.environment ?? {}).sort()).toEqual(known.sort());
   });
 
+  it('sets none that has no meaning to be read on the production page', () => {
+    expect(variables.filter(({ meaning }) => !/^[A-Z].*\.$/.test(meaning)).map(({ name }) => name)).toEqual([]);
+  });
+
   it.each(oneShot)('hands %s no variable that nothing reads', (name) => {
     const known = variables.map((variable) => variable.name);
     expect(Object.keys(compose.services[name]?.environment ?? {}).filter((variable) => !known.includes(variable))).toEqual([]);
