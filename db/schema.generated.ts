@@ -223,6 +223,21 @@ export interface Problems {
   slug: string;
 }
 
+export interface Rechecks {
+  created_at: Generated<Timestamp>;
+  differences: Generated<Json>;
+  finished_at: Timestamp | null;
+  id: string;
+  largest_difference: number | null;
+  numerics_version: string;
+  organisation_id: string;
+  requested_by: string;
+  result: string | null;
+  state: Generated<string>;
+  study_id: string;
+  study_revision: number;
+}
+
 export interface Releases {
   code_id: string;
   commit: string | null;
@@ -317,6 +332,7 @@ export interface DB {
   password_resets: PasswordResets;
   problem_revisions: ProblemRevisions;
   problems: Problems;
+  rechecks: Rechecks;
   releases: Releases;
   sessions: Sessions;
   studies: Studies;

@@ -8,8 +8,8 @@ export const jobPayloadSchema = z.strictObject({
 });
 export type JobPayload = z.infer<typeof jobPayloadSchema>;
 
-/** `grid.read`: subject is a grid. `study.assess`: a study in a revision. `mail.send`: a mail, of an organisation or of none. */
-export const jobNameSchema = z.enum(['grid.read', 'study.assess', 'mail.send']);
+/** `grid.read`: subject is a grid. `study.assess`: a study in a revision. `study.recheck`: a re-check. `mail.send`: a mail, of an organisation or of none. */
+export const jobNameSchema = z.enum(['grid.read', 'study.assess', 'study.recheck', 'mail.send']);
 export type JobName = z.infer<typeof jobNameSchema>;
 
 export const queueName = 'fourfold';

@@ -1,7 +1,7 @@
-import type { ColumnMapping } from '../domain/columns/column-mapping';
+import type { ReaderMapping } from '../domain/columns/column-mapping';
 
 export interface GridReading {
-  mapping: ColumnMapping;
+  mapping: ReaderMapping;
   problem: {
     dimension: 1 | 2 | 3;
     exact: Readonly<Record<string, string>>;

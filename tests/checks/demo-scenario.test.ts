@@ -26,7 +26,8 @@ async function readStudy(theCase: ScenarioCase, study: ScenarioStudy, problem: R
     const header = file.slice(0, file.indexOf('\n')).split(',');
     const mapping = definition.columns ?? matchColumns(header, { dimension: problem.dimension, fields }).mapping;
     if (mapping === null) throw new Error(`${definition.slug}: the columns ${header.join(', ')} do not map themselves`);
-    const reading = { mapping, problem: { dimension: problem.dimension, exact: problem.exact ?? {}, constants: problem.constants }, fields: definition.fields };
+    const columns = Object.fromEntries(Object.entries(mapping.fields).map(([name, column]) => [name, String(column)]));
+    const reading = { mapping: { ...mapping, fields: columns }, problem: { dimension: problem.dimension, exact: problem.exact ?? {}, constants: problem.constants }, fields: definition.fields };
     const { norms } = await readGrid(Readable.from([Buffer.from(file)]), reading);
     return { label, h, norms, values: {} };
   }));

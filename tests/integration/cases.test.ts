@@ -57,10 +57,8 @@ describe('POST /api/v1/cases', () => {
   });
 
   it.each([
-    ['fields.0.compare', { fields: [{ field: 'T', compare: 'd(T, x)', norms: [{ norm: 'L2' }] }] }],
-    ['fields.0.datum', { fields: [{ field: 'T', datum: 'mean', norms: [{ norm: 'L2' }] }] }],
+    ['fields.0.datum', { fields: [{ field: 'T', datum: 'rigid', norms: [{ norm: 'L2' }] }] }],
     ['sampling', { sampling: 'average' }],
-    ['sampling', { sampling: 'quadrature' }],
     ['fields.0.norms.0.backing.scheme', norm({ backing: { scheme: 'central-2' } })],
     ['boundaryBand', { boundaryBand: { thickness: 0.1 } }],
   ])('answers 422 not available for %s', async (path, changes) => {

@@ -13,6 +13,7 @@ import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
   getStudyContract, listStudiesContract, reviseStudyContract, updateGridContract,
 } from '@/lib/domain/studies/schema';
+import { listRechecksContract, requestRecheckContract } from '@/lib/domain/studies/recheck-schema';
 import { getStorageContract } from '@/lib/domain/storage/schema';
 import { createTokenContract, deleteTokenContract, listTokensContract } from '@/lib/domain/tokens/schema';
 import {
@@ -118,4 +119,5 @@ export const roleRows: RoleRow[] = [
   read(getStorageContract, nothing, 'answer'),
   write(reviseStudyContract, study),
   write(assessStudyContract, study),
+  read(requestRecheckContract, study), read(listRechecksContract, study),
 ];

@@ -41,7 +41,7 @@ function typedCase(values: CaseValues): unknown {
     code: values.code, problem: values.problem, name: values.name, slug: someText(values.slug), kind: values.kind,
     options: Object.fromEntries(options) as Record<string, string>,
     fields: values.kind === 'solution' ? [] : values.fields.map((field) => ({
-      ...field.kept, field: field.field.trim(),
+      ...field.kept, field: field.field.trim(), compare: someText(field.compare), datum: field.datum,
       norms: field.norms.filter(isDeclared).map((norm) => declaredNorm(norm, field, values.kind === 'exactness')),
     })),
     quantities: values.quantities.map(({ kept, name, unit, formalOrder, knownValue, target, procedure, uNumFactor }) => ({

@@ -7,7 +7,7 @@ export type SpacingAs = 'cellsPerDirection' | 'cells' | 'h';
 
 /** One norm of a field as it is typed; `kept` holds what the form does not ask for. */
 export interface NormValues { norm: Norm; formalOrder: string; tolerance: string; derivedOrder: string; regularity: string; logFactor: string; exactLimit: string; counts: boolean; kept: DeclaredNorm | null }
-export interface FieldValues { field: string; citation: string; norms: NormValues[]; kept: DeclaredField | null }
+export interface FieldValues { field: string; citation: string; compare: string; datum: DeclaredField['datum']; norms: NormValues[]; kept: DeclaredField | null }
 export interface QuantityValues { name: string; unit: string; formalOrder: string; knownValue: string; target: string; procedure: Procedure; uNumFactor: string; kept: DeclaredQuantity | null }
 export interface GridValues { label: string; spacing: string; dt: string; kept: PlannedGrid | null }
 
@@ -16,7 +16,7 @@ export interface CaseValues {
   code: string; problem: string; name: string; slug: string; kind: CaseKind;
   options: { name: string; text: string }[];
   fields: FieldValues[]; quantities: QuantityValues[];
-  sampling: '' | 'point'; minimumGrids: string;
+  sampling: '' | NonNullable<CaseDefinition['sampling']>; minimumGrids: string;
   spacingAs: SpacingAs; gridPlan: GridValues[];
   requirements: string;
 }
@@ -27,7 +27,7 @@ export function newField(field: string): FieldValues {
   const empty = norms.map((norm) => ({
     norm, formalOrder: '', tolerance: '', derivedOrder: '', regularity: '', logFactor: '', exactLimit: '', counts: norm !== 'H1' && norm !== 'energy', kept: null,
   }));
-  return { field, citation: '', norms: empty, kept: null };
+  return { field, citation: '', compare: '', datum: 'none', norms: empty, kept: null };
 }
 
 export const newQuantity: QuantityValues = { name: '', unit: '', formalOrder: '', knownValue: '', target: '', procedure: 'three-grid', uNumFactor: '', kept: null };
@@ -43,7 +43,7 @@ export function emptyCase(given: { code: string; problem: string }): CaseValues 
 function valuesOfField(field: DeclaredField): FieldValues {
   const cited = field.norms.map(({ backing }) => backing).find((backing) => backing !== undefined && 'citation' in backing);
   return {
-    field: field.field, citation: cited && 'citation' in cited ? cited.citation : '', kept: field,
+    field: field.field, compare: field.compare ?? '', datum: field.datum, citation: cited && 'citation' in cited ? cited.citation : '', kept: field,
     norms: norms.map((norm) => {
       const kept = field.norms.find((each) => each.norm === norm) ?? null;
       return {
@@ -70,7 +70,7 @@ export function valuesOfCase(found: Case): CaseValues {
       name: kept.name, unit: kept.unit ?? '', formalOrder: text(kept.formalOrder), knownValue: text(kept.knownValue), target: text(kept.target),
       procedure: kept.procedure, uNumFactor: text(kept.uNumFactor), kept,
     })),
-    sampling: found.sampling === 'point' ? 'point' : '', minimumGrids: text(found.minimumGrids),
+    sampling: found.sampling ?? '', minimumGrids: text(found.minimumGrids),
     spacingAs, gridPlan: found.gridPlan.map((kept) => ({ label: kept.label, spacing: spacingText(kept, spacingAs), dt: text(kept.dt), kept })),
     requirements: found.requirements.join('\n'),
   };

@@ -9,7 +9,7 @@ const coordinates = ['x', 'y', 'z', 't', 'dx', 'dy', 'dz', 'distance', 'flag'] a
 export function ColumnsTable({ columns }: { columns: ColumnMapping }) {
   const rows = [
     ...coordinates.flatMap((name) => (columns[name] === undefined ? [] : [{ name, column: columns[name] }])),
-    ...Object.entries(columns.fields).map(([name, column]) => ({ name, column })),
+    ...Object.entries(columns.fields).map(([name, column]) => ({ name, column: [column].flat().join(', ') })),
   ];
   return (
     <Table caption="Columns of solver output." hideCaption>

@@ -21,7 +21,7 @@ export function FieldRows({ form, isExactness, known }: FieldRowsProps) {
       {fault && <FaultText text={fault} />}
       <p className="flex flex-wrap gap-3">
         {missing.map((name) => <Button key={name} onClick={() => append(newField(name))}>Add field {name}</Button>)}
-        {known.length === 0 && <Button onClick={() => append(newField(''))}>Add a field</Button>}
+        {known.length === 0 ? <Button onClick={() => append(newField(''))}>Add a field</Button> : <Button onClick={() => append(newField(''))}>Add a compared field</Button>}
         {known.length > 0 && missing.length === 0 && <span className="text-note text-graphite">Every field of the exact solution is declared.</span>}
       </p>
     </div>

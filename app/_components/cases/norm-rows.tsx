@@ -2,6 +2,7 @@
 
 import type { CaseForm } from './case-form-type';
 import { FaultText } from '../forms/fault-text';
+import { SelectField } from '../forms/select-field';
 import { TableInput } from '../forms/table-input';
 import { TextField } from '../forms/text-field';
 import { Cell, HeadCell, RowHead } from '../tables/cells';
@@ -28,6 +29,10 @@ export function NormRows({ form, place, isExactness, onRemove }: NormRowsProps) 
       <div className="flex flex-wrap items-start gap-x-5 gap-y-2">
         <TextField label="Field" autoComplete="off" spellCheck={false} className="w-32 [&_input]:font-mono" error={faults?.field?.message} {...register(`fields.${place}.field`)} />
         {!isExactness && <TextField label="Where its formal order comes from" autoComplete="off" className="min-w-0 flex-1 basis-60" hint="A citation or the name of the scheme." error={faults?.citation?.message} {...register(`fields.${place}.citation`)} />}
+        <TextField label="Compared with" autoComplete="off" spellCheck={false} className="w-48 [&_input]:font-mono" hint="Such as k*d(T, x); empty: the field." error={faults?.compare?.message} {...register(`fields.${place}.compare`)} />
+        <SelectField label="Known up to" className="w-40" error={faults?.datum?.message} {...register(`fields.${place}.datum`)}>
+          <option value="none">nothing</option><option value="mean">a constant</option><option value="scale">a factor</option>
+        </SelectField>
         <TextButton className="min-h-11 tablet:mt-7 tablet:min-h-9" onClick={onRemove}>Remove field</TextButton>
       </div>
       <Table caption={<>Norms of <Sym>{field.field}</Sym>.</>} hideCaption>

@@ -16,6 +16,7 @@ import {
 import { createOrganisationContract, meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '../people/schema';
 import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '../problems/schema';
 import { getStorageContract } from '../storage/schema';
+import { listRechecksContract, requestRecheckContract } from '../studies/recheck-schema';
 import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
   getStudyContract, listStudiesContract, reviseStudyContract, updateGridContract,
@@ -39,7 +40,7 @@ export const allContracts: readonly ContractShape[] = [
   createReleaseContract, listReleasesContract, updateReleaseContract, getMatrixContract,
   createProblemContract, listProblemsContract, getProblemContract, updateProblemContract,
   createCaseContract, listCasesContract, getCaseContract, updateCaseContract, putColumnsContract,
-  createStudyContract, listStudiesContract, getStudyContract, addGridContract, updateGridContract, reviseStudyContract, assessStudyContract,
+  createStudyContract, listStudiesContract, getStudyContract, addGridContract, updateGridContract, reviseStudyContract, assessStudyContract, requestRecheckContract, listRechecksContract,
   getOutcomeContract, getOutcomeXmlContract, getEventsContract, getGridResultContract,
   putDataContract, startUploadContract, signPartsContract, completeUploadContract, getUploadContract, deleteUploadContract, previewContract, getStorageContract,
   assessContract, healthContract, readyContract, metricsContract, openApiContract,

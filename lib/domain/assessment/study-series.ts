@@ -75,11 +75,14 @@ function fieldSeries({ definition, dimension, volume }: Pick<StudyToAssess, 'def
 export function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm, significantDigits }: { norm: Norm; significantDigits: number | null }): ErrorSeries['grids'][number] | null {
   const iterativeError = grid.iterativeError?.[field]?.[norm] ?? 0;
   const column = norms?.fields.find((candidate) => candidate.field === field);
-  const fromFile = column && norm !== 'H1' && norm !== 'energy' ? { error: column[norm], exactNorm: column.exact[norm] } : null;
-  if (column && fromFile) {
+  if (norm === 'H1' || norm === 'energy') {
+    const gradient = norms?.gradients?.find((candidate) => candidate.field === field);
+    const stored = gradient && { largest: gradient.maxAbs, significantDigits: gradient.significantDigits, precision: grid.run?.precision };
+    if (stored) return { label: grid.label, h, error: gradient.H1, knownError: knownError(stored, iterativeError), exactNorm: gradient.exactH1, at: null };
+  } else if (column) {
     const stored = { largest: column.maxAbs, significantDigits, precision: grid.run?.precision };
     return {
-      label: grid.label, h, ...fromFile, knownError: knownError(stored, iterativeError),
+      label: grid.label, h, error: column[norm], knownError: knownError(stored, iterativeError), exactNorm: column.exact[norm],
       at: norm === 'Linf' ? column.at : null,
     };
   }

@@ -15,7 +15,11 @@ export function checkColumns(mapping: ColumnMapping, definition: CaseDefinition,
   });
   if (mapping.t !== undefined && !problem.unsteady) faults.push({ path: 't', message: 'The problem is steady and has no t.' });
   const declared = definition.fields.map((field) => field.field);
-  for (const name of Object.keys(mapping.fields)) {
+  for (const [name, columns] of Object.entries(mapping.fields)) {
+    const { dimension } = problem;
+    if (Array.isArray(columns) && columns.length !== dimension && columns.length !== dimension + 1) {
+      faults.push({ path: `fields.${name}`, message: `Found ${columns.length} columns. Expected the ${dimension} of the gradient, with or without that of the field before them.` });
+    }
     if (declared.includes(name)) continue;
     const known = declared.length === 0 ? 'The case declares no field' : `The case declares ${declared.join(', ')}`;
     faults.push({ path: `fields.${name}`, message: `${known}; found ${name}.` });

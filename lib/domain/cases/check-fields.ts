@@ -1,7 +1,9 @@
 import type { FieldProblem } from '@/lib/errors';
 import { defaultTolerance } from '@/lib/numerics/outcome/default-tolerance';
 import { regularOrder } from '@/lib/numerics/outcome/regular-order';
+import { compileExpressions } from '@/lib/numerics/expression/compile-expressions';
 import type { ProblemDefinition } from '../problems/schema';
+import { variablesOf } from '../problems/variables';
 import type { DeclaredField, DeclaredNorm } from './definition';
 import { repeated } from './repeated';
 
@@ -12,15 +14,26 @@ export function checkFields(fields: readonly DeclaredField[], problem: ProblemDe
     ...repeated(fields.map((field) => field.field), (index) => `fields.${index}.field`, 'Field'),
     ...fields.flatMap((field, index): FieldProblem[] => {
       const path = `fields.${index}`;
-      const isUnknown = known.length > 0 && !known.includes(field.field);
+      const isUnknown = known.length > 0 && !known.includes(field.field) && field.compare === undefined;
       return [
         ...(isUnknown ? [{ path: `${path}.field`, message: `Found ${field.field}. The problem’s exact solution has ${known.join(', ')}.` }] : []),
         ...repeated(field.norms.map((norm) => norm.norm), (at) => `${path}.norms.${at}.norm`, 'Norm'),
+        ...checkCompared(field, problem, path),
         ...checkCounting(field.norms, `${path}.norms`),
         ...field.norms.flatMap((norm, at) => checkNorm(norm, `${path}.norms.${at}`)),
       ];
     }),
   ];
+}
+
+/** What a field is compared with must be an expression of the exact fields; its gradient is that of an exact field. */
+function checkCompared({ field, compare, norms }: DeclaredField, problem: ProblemDefinition, path: string): FieldProblem[] {
+  if (compare === undefined) return [];
+  const { constants, exact = {} } = problem;
+  const compiled = compileExpressions({ constants, fields: exact, variables: variablesOf(problem), compared: { [field]: compare } });
+  const faults = compiled.ok ? [] : compiled.errors.filter(({ name }) => name === field).map(({ position, message }) => ({ path: `${path}.compare`, message: `Character ${position}: ${message}` }));
+  const gradient = norms.findIndex(({ norm }) => norm === 'H1' || norm === 'energy');
+  return gradient === -1 ? faults : [...faults, { path: `${path}.norms.${gradient}.norm`, message: 'H1 and energy norms are of exact fields. Leave the comparison out, or compare each derivative as a field of its own.' }];
 }
 
 /** A band of one cell with error h leaves L1 at its order: L1 proves nothing alone. */

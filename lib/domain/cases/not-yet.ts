@@ -16,13 +16,12 @@ export function notYetOfCase(definition: CaseDefinition): NotAvailableYet | null
 }
 
 function isAveraged(sampling: CaseDefinition['sampling']): boolean {
-  return sampling === 'average' || sampling === 'quadrature';
+  return sampling === 'average';
 }
 
-function askedByField({ compare, datum, norms }: DeclaredField, path: string): Asked[] {
+function askedByField({ datum, norms }: DeclaredField, path: string): Asked[] {
   return [
-    compare !== undefined && { path: `${path}.compare`, what: 'Comparing with another expression than the field' },
-    datum !== 'none' && { path: `${path}.datum`, what: `Removing the datum (${datum})` },
+    datum === 'rigid' && { path: `${path}.datum`, what: `Removing the datum (${datum})` },
     ...norms.flatMap((norm, index) => askedByNorm(norm, `${path}.norms.${index}`)),
   ];
 }

@@ -14,7 +14,11 @@ export const columnMappingSchema = z.strictObject({
   dz: column.optional(),
   distance: column.optional(),
   flag: column.optional(),
-  fields: z.record(z.string().min(1), column),
+  fields: z.record(z.string().min(1), z.union([column, z.array(column).min(1).max(4)]))
+    .meta({ description: 'The column of each field; the columns of its gradient, one for each direction; or both, the field’s first.' }),
 });
 
 export type ColumnMapping = z.infer<typeof columnMappingSchema>;
+
+/** A mapping as the reader takes it: one column for everything that has one. */
+export type ReaderMapping = Omit<ColumnMapping, 'fields'> & { fields: Record<string, string> };

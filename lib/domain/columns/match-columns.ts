@@ -8,11 +8,13 @@ const weightNames = ['w', 'weight', 'vol', 'volume', 'area'];
 export interface ColumnNeeds {
   dimension: 1 | 2 | 3;
   fields: readonly string[];
+  /** Fields whose gradient is asked for too. */
+  gradients?: readonly string[];
 }
 
 export interface ColumnMatch {
   /** What the names tell by themselves; `weight` is absent where no column or several could be it. */
-  found: Partial<ColumnMapping> & { fields: Record<string, string> };
+  found: Partial<ColumnMapping> & { fields: ColumnMapping['fields'] };
   /** What a person must still choose: x y z, weight, names of fields. */
   missing: string[];
   /** The mapping where nothing is missing, else null. */
@@ -29,10 +31,12 @@ export function matchColumns(header: readonly string[], needs: ColumnNeeds): Col
   const missing: string[] = [];
   for (const field of needs.fields) {
     const column = find(field);
-    if (column === undefined) missing.push(field);
+    const gradient = needs.gradients?.includes(field) ? findGradient(field, needs.dimension, find) : null;
+    if (gradient !== null) found.fields[field] = column === undefined ? gradient : [column, ...gradient];
+    else if (column === undefined) missing.push(field);
     else found.fields[field] = column;
   }
-  const taken = new Set(Object.values(found.fields));
+  const taken = new Set(Object.values(found.fields).flat());
   const findFree = (name: string): string | undefined => {
     const column = find(name);
     return column === undefined || taken.has(column) ? undefined : column;
@@ -59,4 +63,10 @@ export function matchColumns(header: readonly string[], needs: ColumnNeeds): Col
   const { x, weight } = found;
   const mapping = missing.length === 0 && x !== undefined && weight !== undefined ? { ...found, x, weight } : null;
   return { found, missing, mapping };
+}
+
+/** Columns called T_x, T_y or dTdx, dTdy; null unless every direction has one. */
+function findGradient(field: string, dimension: number, find: (name: string) => string | undefined): string[] | null {
+  const columns = coordinates.slice(0, dimension).flatMap((axis) => find(`${field}_${axis}`) ?? find(`d${field}d${axis}`) ?? []);
+  return columns.length === dimension ? columns : null;
 }

@@ -78,10 +78,14 @@ const fieldResultSchema = z.strictObject({
   at: z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() }),
   signedMean: z.number(), exact: z.strictObject({ L1: z.number(), L2: z.number(), Linf: z.number() }),
   minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().int().nullable(),
+  datum: z.strictObject({ kind: z.enum(['mean', 'scale']), value: z.number() }).optional()
+    .meta({ description: 'What was taken out of the field before its norms: the constant, or the factor it was multiplied by.' }),
 });
 const gridResultSchema = z.strictObject({
   label: z.string(), upload: z.string(), sha256: z.string(), rows: z.number().int(), weightSum: z.number(), equalWeights: z.boolean(),
-  mapping: columnMappingSchema, fields: z.array(fieldResultSchema), numericsVersion: z.string(),
+  mapping: columnMappingSchema, fields: z.array(fieldResultSchema),
+  gradients: z.array(z.strictObject({ field: z.string(), H1: z.number(), exactH1: z.number() })).meta({ description: 'H1 seminorms, of fields with columns of their gradient.' }),
+  numericsVersion: z.string(),
 });
 export type GridResult = z.infer<typeof gridResultSchema>;
 

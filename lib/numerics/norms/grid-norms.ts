@@ -17,11 +17,17 @@ export interface FieldNorms {
   count: number;
   /** Most significant digits seen in the column, null where the source does not print digits. */
   significantDigits: number | null;
+  /** What was taken out of the field before its norms: the constant of q − q_exact, or the factor q was multiplied by. */
+  datum?: { kind: 'mean' | 'scale'; value: number };
 }
+
+/** The H1 seminorm of the error, √(Σw|∇q − ∇q_exact|²/Σw), from columns of the gradient. */
+export interface GradientNorms { field: string; H1: number; exactH1: number; maxAbs: number; significantDigits: number | null }
 
 export interface GridNorms {
   rows: number;
   weightSum: number;
   equalWeights: boolean;
   fields: FieldNorms[];
+  gradients?: GradientNorms[];
 }

@@ -9,8 +9,8 @@ import type { JobContext } from './job-context';
 const retryMilliseconds = 5 * 60_000;
 
 async function concerned(trx: Trx, name: JobName, { organisationId, subjectId, subjectRevision }: JobPayload): Promise<{ at: RevisionKey; what: string } | null> {
-  // A mail has a state of its own, and no study to tell.
-  if (name === 'mail.send' || organisationId === null) return null;
+  // A mail and a re-check have states of their own, and no study to tell.
+  if (name === 'mail.send' || name === 'study.recheck' || organisationId === null) return null;
   if (name === 'study.assess') return { at: { organisationId, studyId: subjectId, revision: subjectRevision ?? 0 }, what: 'The assessment could not be made yet' };
   const grid = await findGrid(trx, organisationId, subjectId);
   // Nothing is wrong with the file: it lies there to be read.

@@ -11,8 +11,10 @@ interface Surroundings { mapping: ColumnMapping | null; bound: BoundRevision; gr
 /** The columns of a file: what the case says, completed by names that match. A time is needed where the grid states none. */
 export function mapColumns(header: readonly string[], { mapping, bound, grid }: Surroundings): ColumnMatch {
   const problem = problemDefinitionSchema.parse(bound.problem_definition);
-  const fields = caseDefinitionSchema.parse(bound.case_definition).fields.map(({ field }) => field);
-  const matched = matchColumns(header, { dimension: problem.dimension, fields });
+  const declared = caseDefinitionSchema.parse(bound.case_definition).fields;
+  const fields = declared.map(({ field }) => field);
+  const gradients = declared.filter(({ norms }) => norms.some(({ norm }) => norm === 'H1' || norm === 'energy')).map(({ field }) => field);
+  const matched = matchColumns(header, { dimension: problem.dimension, fields, gradients });
   const found = { ...matched.found, ...mapping, fields: { ...matched.found.fields, ...mapping?.fields } };
   const missing = [
     ...fields.filter((field) => !Object.hasOwn(found.fields, field)),

@@ -11,7 +11,6 @@ import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import type { GridState } from '@/lib/domain/studies/schema';
 import type { RejectionReason } from '@/lib/domain/uploads/rejection';
 import { numericsVersion } from '@/lib/numerics/version';
-import type { GridReading } from '@/lib/readers/grid-reading';
 import type { GridReadResult } from '@/lib/readers/read-grid';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import { enqueueJob } from '../outbox/enqueue-job';
@@ -23,6 +22,7 @@ import { withOrganisation } from '../with-organisation';
 import { beginReading, whileReading, type Reading } from './begin-reading';
 import type { GridReader } from './grid-reader';
 import { mapColumns } from './map-columns';
+import { readNorms } from './read-norms';
 import { reportProgress } from './report-progress';
 
 function tellState(ctx: JobContext, { grid }: Reading, gridState: GridState): Promise<void> {
@@ -74,15 +74,6 @@ async function findMapping(ctx: JobContext, reading: Reading, reader: GridReader
   return null;
 }
 
-function toGridReading({ bound, grid }: Reading, mapping: ColumnMapping): GridReading {
-  const { dimension, exact, constants } = problemDefinitionSchema.parse(bound.problem_definition);
-  return {
-    mapping, problem: { dimension, exact: exact ?? {}, constants },
-    fields: caseDefinitionSchema.parse(bound.case_definition).fields.map(({ field, compare }) => ({ field, compare })),
-    t: definitionOf(grid).t,
-  };
-}
-
 /**
  * Reads the file of a grid into norms. What is wrong with the file is kept as reasons; what is wrong with a service is
  * thrown, so that the job runs again.
@@ -94,11 +85,12 @@ export async function readGridFile(ctx: JobContext, gridId: string, reader: Grid
   try {
     const mapping = await findMapping(ctx, reading, reader);
     if (!mapping) return;
-    const result = await reader.read(reading.upload.storage_key, toGridReading(reading, mapping), reportProgress(ctx, reading));
-    const stated = reading.upload.stated_sha256;
-    if (stated !== null && stated !== result.sha256) {
-      throw new RejectedFile([{ code: 'checksum-differs', count: 1, line: null, column: null, found: result.sha256, expected: stated }]);
-    }
+    const onProgress = reportProgress(ctx, reading);
+    const { bound, grid, upload } = reading;
+    const result = await readNorms({
+      definition: caseDefinitionSchema.parse(bound.case_definition), problem: problemDefinitionSchema.parse(bound.problem_definition), mapping,
+      t: definitionOf(grid).t, statedSha256: upload.stated_sha256,
+    }, (asked) => reader.read(upload.storage_key, asked, onProgress));
     await keepResult(ctx, reading, mapping, result);
   } catch (error) {
     if (!(error instanceof RejectedFile)) throw error;

@@ -17,9 +17,10 @@ export async function getGridResult(ctx: MemberContext, key: { id: string; label
   return {
     label: row.label, upload: row.upload_id ?? '', sha256: row.sha256 ?? '', rows: norms.rows, weightSum: norms.weightSum,
     equalWeights: norms.equalWeights, mapping: row.mapping as unknown as ColumnMapping,
-    fields: norms.fields.map(({ field, L1, L2, Linf, at, mean, exact, min, max, count, significantDigits }) => ({
-      field, L1, L2, Linf, at, signedMean: mean, exact, minimum: min, maximum: max, count, significantDigits,
+    fields: norms.fields.map(({ field, L1, L2, Linf, at, mean, exact, min, max, count, significantDigits, datum }) => ({
+      field, L1, L2, Linf, at, signedMean: mean, exact, minimum: min, maximum: max, count, significantDigits, ...(datum && { datum }),
     })),
+    gradients: (norms.gradients ?? []).map(({ field, H1, exactH1 }) => ({ field, H1, exactH1 })),
     numericsVersion: row.numerics_version ?? '',
   };
 }

@@ -20,9 +20,9 @@ export function columnNeeds({ dimension, needsTime, fields }: Needs): ColumnNeed
 
 /** The choices to begin with: the mapping in force, else what names propose. Nothing is chosen that the file does not have. */
 export function firstChoices(needs: readonly ColumnNeed[], { mapping, proposal, header }: Pick<UploadPreview, 'mapping' | 'proposal' | 'header'>): Record<string, string> {
-  const known: Partial<ColumnMapping> = { ...proposal, ...mapping, fields: { ...proposal.fields, ...mapping?.fields } };
+  const known = { ...proposal, ...mapping, fields: { ...proposal.fields, ...mapping?.fields } };
   const columnOf = ({ key, kind }: ColumnNeed): string | null | undefined => {
-    if (kind === 'field') return known.fields?.[key.slice('field '.length)];
+    if (kind === 'field') return [known.fields[key.slice('field '.length)]].flat()[0];
     return known[key as 'x' | 'y' | 'z' | 't' | 'weight'];
   };
   return Object.fromEntries(needs.map((need) => {
@@ -36,8 +36,13 @@ export function firstChoices(needs: readonly ColumnNeed[], { mapping, proposal, 
 export function mappingOf(choices: Readonly<Record<string, string>>, kept: ColumnMapping | null): ColumnMapping | null {
   if (Object.values(choices).some((column) => column === '')) return null;
   const coordinates = Object.fromEntries(Object.entries(choices).filter(([key]) => key !== 'weight' && !key.startsWith('field ')));
-  const fields = Object.fromEntries(Object.entries(choices).flatMap(([key, column]) => (key.startsWith('field ') ? [[key.slice('field '.length), column]] : [])));
+  const fields = Object.fromEntries(Object.entries(choices).flatMap(([key, column]) => (key.startsWith('field ') ? [[key.slice('field '.length), withGradient(column, kept?.fields[key.slice('field '.length)])]] : [])));
   const weight = choices.weight === equalWeights ? null : choices.weight;
   const parsed = columnMappingSchema.safeParse({ ...kept, ...coordinates, weight, fields: { ...kept?.fields, ...fields } });
   return parsed.success ? parsed.data : null;
+}
+
+/** Columns of a gradient mapped besides stay with the field. */
+function withGradient(column: string, kept: string | string[] | undefined): string | string[] {
+  return Array.isArray(kept) ? [column, ...kept.slice(1)] : column;
 }

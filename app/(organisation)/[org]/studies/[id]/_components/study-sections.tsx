@@ -23,6 +23,7 @@ import { GridTable } from './grid-table';
 import { GridsNotes, GridsWork } from './grids-work';
 import { OutcomeTable } from './outcome-table';
 import { QuantityTable, TripleTable } from './quantity-table';
+import { RecheckSection } from './recheck-section';
 import { RunRecordSection } from './run-record';
 import { SpaceTimeParts, SpaceTimeTable } from './space-time-table';
 import { StudyMargin } from './study-margin';
@@ -62,6 +63,7 @@ export function StudySections({ study, readings }: StudySectionsProps) {
       {collects && <CollectingSections study={study} isTyping={isTyping} />}
       <DefinitionSection study={study} />
       <RunRecordSection grids={study.grids} number={assessment ? lastTable(assessment) + 1 : 1} />
+      {assessment && study.revision === study.currentRevision && <RecheckSection study={study} />}
       <WayOn study={study} />
       <Cautions hasOrders={study.definition.fields.length > 0} hasQuantities={study.definition.quantities.length > 0} />
     </>

@@ -1,0 +1,29 @@
+import type { CaseDefinition } from '@/lib/domain/cases/definition';
+import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
+import type { ProblemDefinition } from '@/lib/domain/problems/schema';
+import type { GridReading } from '@/lib/readers/grid-reading';
+import type { GridReadResult } from '@/lib/readers/read-grid';
+import { RejectedFile } from '@/lib/readers/rejected-file';
+import { findDatums, joinNorms, planReading, planSecondReading } from './plan-reading';
+
+interface ToRead {
+  definition: CaseDefinition;
+  problem: ProblemDefinition;
+  mapping: ColumnMapping;
+  t?: number;
+  statedSha256: string | null;
+}
+
+/** Reads a file into norms; a second time where a constant or a factor of a field is free and was found by the first. */
+export async function readNorms({ statedSha256, ...asked }: ToRead, read: (reading: GridReading) => Promise<GridReadResult>): Promise<GridReadResult> {
+  const { definition } = asked;
+  const reading = planReading(asked);
+  const first = await read(reading);
+  if (statedSha256 !== null && statedSha256 !== first.sha256) {
+    throw new RejectedFile([{ code: 'checksum-differs', count: 1, line: null, column: null, found: first.sha256, expected: statedSha256 }]);
+  }
+  const datums = findDatums(definition, first.norms);
+  const again = planSecondReading(reading, definition, datums);
+  const second = again ? (await read(again)).norms : null;
+  return { ...first, norms: joinNorms(definition, first.norms, { second, datums }) };
+}
