@@ -1,5 +1,3 @@
-import type { Pattern } from './patterns/pattern';
-
 /** The shapes that an assessment is computed from and answered in. Grids run from the finest to the coarsest. */
 
 export const norms = ['L1', 'L2', 'Linf', 'H1', 'energy'] as const;
@@ -147,6 +145,14 @@ export interface SpaceTimeAssessment {
   /** The parts Ah^p and BΔt^q on every grid, null without a fit. */
   points: { label: string; h: number; dt: number; error: number; space: number | null; time: number | null }[];
 }
+
+export const patternCodes = [
+  'one-field-flat', 'all-flat', 'datum', 'boundary-closure', 'shock', 'contact', 'limiter', 'first-order', 'falling-order', 'stuck-at-two', 'corner', 'alternating',
+] as const;
+export type PatternCode = (typeof patternCodes)[number];
+
+/** A hint, never an outcome: what the orders look like, with the figures that say so. */
+export interface Pattern { code: PatternCode; field?: string; norm?: SeriesNorm; evidence: Record<string, number> }
 
 export interface SeriesAssessment {
   outcome: Outcome | null; reasons: ReasonCode[];

@@ -1,4 +1,4 @@
-import type { Pattern, PatternCode } from '@/lib/numerics/patterns/pattern';
+import type { Pattern, PatternCode } from '@/lib/numerics/assessment';
 import { formatOrder } from '../numbers/format-order';
 
 type PatternText = (of: string, evidence: (name: string) => string) => string;

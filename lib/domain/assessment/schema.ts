@@ -1,6 +1,5 @@
 import { z } from 'zod';
-import { procedureBranches, procedures, reasonCodes, regions, norms } from '@/lib/numerics/assessment';
-import { patternCodes } from '@/lib/numerics/patterns/pattern';
+import { norms, patternCodes, procedureBranches, procedures, reasonCodes, regions } from '@/lib/numerics/assessment';
 
 const nullableNumber = z.number().nullable();
 const pointSchema = z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() });

@@ -1,5 +1,5 @@
-import type { SeriesNorm } from '../assessment';
-import type { FieldOrders, Pattern } from './pattern';
+import type { Pattern, SeriesNorm } from '../assessment';
+import type { FieldOrders } from './field-orders';
 
 /** How near an order must lie to the one a pattern predicts. */
 const near = 0.15;

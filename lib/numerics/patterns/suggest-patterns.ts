@@ -1,7 +1,7 @@
-import type { FieldAssessment, Position } from '../assessment';
+import type { FieldAssessment, Pattern, Position } from '../assessment';
 import { pairwiseOrder } from '../order/pairwise-order';
+import { fieldOrders, type FieldOrders } from './field-orders';
 import { normPatterns } from './norm-patterns';
-import { fieldOrders, type FieldOrders, type Pattern } from './pattern';
 import { trendPatterns } from './trend-patterns';
 
 /** What is known beside the norms. */

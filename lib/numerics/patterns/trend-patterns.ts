@@ -1,5 +1,5 @@
-import type { SeriesNorm } from '../assessment';
-import type { FieldOrders, Pattern } from './pattern';
+import type { Pattern, SeriesNorm } from '../assessment';
+import type { FieldOrders } from './field-orders';
 
 interface Seen { code: 'falling-order' | 'alternating'; norm: SeriesNorm; size: number; evidence: Record<string, number> }
 

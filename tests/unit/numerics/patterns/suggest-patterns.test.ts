@@ -1,8 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { explainPattern } from '@/lib/domain/assessment/explain-pattern';
-import type { Norm } from '@/lib/numerics/assessment';
+import { patternCodes, type Norm } from '@/lib/numerics/assessment';
 import { judgeErrorSeries } from '@/lib/numerics/outcome/judge-error-series';
-import { patternCodes } from '@/lib/numerics/patterns/pattern';
 import { suggestPatterns, type Surroundings } from '@/lib/numerics/patterns/suggest-patterns';
 import { errorSeries } from '../../../support/series';
 

@@ -1,13 +1,5 @@
 import type { FieldAssessment, SeriesNorm } from '../assessment';
 
-export const patternCodes = [
-  'one-field-flat', 'all-flat', 'datum', 'boundary-closure', 'shock', 'contact', 'limiter', 'first-order', 'falling-order', 'stuck-at-two', 'corner', 'alternating',
-] as const;
-export type PatternCode = (typeof patternCodes)[number];
-
-/** A hint, never an outcome: what the orders look like, with the figures that say so. */
-export interface Pattern { code: PatternCode; field?: string; norm?: SeriesNorm; evidence: Record<string, number> }
-
 /** What a field shows over all its norms: the last order of each, null where there is none. */
 export interface FieldOrders {
   field: string;
