@@ -29,7 +29,7 @@ export async function up(db: Kysely<unknown>): Promise<void> {
     create policy rechecks_tenant on rechecks to fourfold_app
       using (organisation_id = current_organisation()) with check (organisation_id = current_organisation());
     create policy rechecks_maintenance on rechecks for select to fourfold_maintenance using (true);
-    grant select, insert, update on rechecks to fourfold_app;
+    grant select, insert, update, delete on rechecks to fourfold_app;
     grant select on rechecks to fourfold_maintenance;
   `.execute(db);
 }

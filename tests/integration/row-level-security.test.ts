@@ -27,6 +27,8 @@ async function insertStudy(person: Person, work: Work): Promise<void> {
   await run("insert into grid_results (organisation_id, grid_id, upload_id, mapping, norms, numerics_version) values ($1, $2, $3, '{}', '{}', '1')", [at, grid, upload]);
   await run("insert into assessments (organisation_id, id, study_id, study_revision, body, inputs_sha256, numerics_version) values ($1, $2, $3, 1, '{}', '', '1')",
     [at, randomUUID(), study]);
+  await run("insert into rechecks (organisation_id, id, study_id, study_revision, numerics_version, requested_by) values ($1, $2, $3, 1, '1', $4)",
+    [at, randomUUID(), study, by]);
   await run("insert into invitations (organisation_id, id, email, roles, expires_at, invited_by) values ($1, $2, 'guest@northmoor.example', '{engineer}', now(), $3)",
     [at, randomUUID(), by]);
   await run('insert into auditor_grants (organisation_id, user_id, code_id) values ($1, $2, $3)', [at, by, work.code.id]);
