@@ -21,8 +21,8 @@ export function AlertTable() {
       <tbody>
         {alerts.map(({ when, means }) => (
           <Row key={when}>
-            <Cell className="min-w-[16em]"><code className="font-mono text-code [overflow-wrap:anywhere]">{when}</code></Cell>
-            <Cell className="min-w-[14em]">{means}</Cell>
+            <Cell><code className="font-mono text-code [overflow-wrap:anywhere]">{when}</code></Cell>
+            <Cell>{means}</Cell>
           </Row>
         ))}
       </tbody>

@@ -14,12 +14,15 @@ function standardWords(standard: string | null): string {
 export function VariableTable({ number, caption, variables }: VariableTableProps) {
   return (
     <Table number={number} caption={caption}>
-      <Head><tr><HeadCell>Variable</HeadCell><HeadCell>Meaning</HeadCell></tr></Head>
+      <Head><tr><HeadCell className="hidden tablet:table-cell">Variable</HeadCell><HeadCell>Meaning</HeadCell></tr></Head>
       <tbody>
         {variables.map(({ name, meaning, standard }) => (
           <Row key={name}>
-            <Cell><code className="font-mono text-code">{name}</code></Cell>
-            <Cell className="min-w-[20em]">{meaning} <span className="text-graphite">({standardWords(standard)})</span></Cell>
+            <Cell className="hidden tablet:table-cell"><code className="font-mono text-code">{name}</code></Cell>
+            <Cell>
+              <code className="block font-mono text-code tablet:hidden">{name}</code>
+              {meaning} <span className="text-graphite">({standardWords(standard)})</span>
+            </Cell>
           </Row>
         ))}
       </tbody>
