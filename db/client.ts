@@ -6,7 +6,7 @@ export type Database = Kysely<DB>;
 
 /** A pool and its query builder; the URL is handed in, so that nothing here reads the environment. */
 export function openDatabase(url: string, onError: (error: Error) => void): { pool: Pool; db: Database } {
-  const pool = new Pool({ connectionString: url, max: 10 });
+  const pool = new Pool({ connectionString: url, max: 10, connectionTimeoutMillis: 5000, keepAlive: true });
   // An idle connection that breaks would otherwise end the process.
   pool.on('error', onError);
   return { pool, db: new Kysely<DB>({ dialect: new PostgresDialect({ pool }) }) };

@@ -7,12 +7,15 @@ import { createThreadReader } from './compute/thread-reader';
 import { openWorkerContext } from './context';
 import { createDispatcher } from './outbox/dispatcher';
 import { listenToOutbox } from './outbox/listener';
+import { watchQueue } from './outbox/queue-watch';
 import { serveMetrics } from './metrics-server';
 import { createQueueWorker } from './queue-worker';
 import { startSweeps } from './schedules/sweeps';
 import { createWorkerMetrics } from './worker-metrics';
 
 const sweepEveryMilliseconds = 60_000;
+/** Rows that failed become due with nobody to say so. */
+const dispatchEveryMilliseconds = 5000;
 /** The supervisor kills what has not ended ten seconds after it was asked to. */
 const finishWithinMilliseconds = 7000;
 
@@ -31,9 +34,9 @@ const dispatcher = createDispatcher(context, queue);
 // More jobs than threads, so that assessments pass by files that wait for one.
 const worker = createQueueWorker(context, redis, { reader: metrics.counting(createThreadReader(pool)), metrics, concurrency: threads + 2 });
 const stopListening = listenToOutbox(openListener, log, () => dispatcher.dispatch());
-adding.on('ready', () => dispatcher.sweep());
+const stopWatching = watchQueue(adding, log, () => dispatcher.sweep());
 dispatcher.sweep();
-const schedule = setInterval(() => dispatcher.sweep(), sweepEveryMilliseconds);
+const schedules = [setInterval(() => dispatcher.sweep(), sweepEveryMilliseconds), setInterval(() => dispatcher.dispatch(), dispatchEveryMilliseconds)];
 const stopSweeps = startSweeps(context);
 const stopServing = env.METRICS_PORT === undefined ? () => undefined : serveMetrics(metrics.registry, { port: env.METRICS_PORT, token: env.METRICS_TOKEN, log });
 log.info({ threads }, 'worker ready');
@@ -45,7 +48,8 @@ async function stop(signal: string): Promise<void> {
   if (isStopping) return;
   isStopping = true;
   log.info({ signal }, 'worker stopping');
-  clearInterval(schedule);
+  schedules.forEach((schedule) => clearInterval(schedule));
+  stopWatching();
   stopServing();
   await Promise.all([stopListening(), dispatcher.close()]);
   const swept = stopSweeps();

@@ -30,13 +30,13 @@ export function createWorkerMetrics(pool: Parameters<typeof createRegistry>[1]):
     },
     counting: (reader) => ({
       preview: (storageKey) => reader.preview(storageKey),
-      async read(storageKey, reading, onProgress) {
+      async read(file, reading, onProgress) {
         let counted = 0;
         const countTo = (total: number) => {
           bytes.inc(Math.max(0, total - counted));
           counted = Math.max(counted, total);
         };
-        const result = await reader.read(storageKey, reading, (progress) => {
+        const result = await reader.read(file, reading, (progress) => {
           countTo(progress.bytes);
           onProgress(progress);
         });

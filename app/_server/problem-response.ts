@@ -2,21 +2,12 @@ import 'server-only';
 import { AppError } from '@/lib/errors';
 import type { Logger } from '@/lib/platform/logger';
 import { currentRequest } from './request-record';
-
-const unreachableCodes = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'ENOTFOUND', 'EPIPE', '57P01', '57P03']);
-
-function isServiceFault(error: unknown): boolean {
-  if (!(error instanceof Error)) return false;
-  const code = (error as Error & { code?: unknown }).code;
-  if (typeof code === 'string' && unreachableCodes.has(code)) return true;
-  return error.message === 'Command timed out' || error.name === 'MaxRetriesPerRequestError';
-}
+import { serviceFault } from './service-fault';
 
 function toAppError(error: unknown, log: Logger, requestId: string): AppError {
   if (error instanceof AppError) return error;
   log.error({ requestId, err: error }, 'request failed');
-  if (isServiceFault(error)) return new AppError('unavailable', 'A service behind Fourfold is not reachable. Nothing was changed; try again in a moment.');
-  return new AppError('unexpected', `The fault is in Fourfold and has been logged as ${requestId}. Try again; if it stays, report that number.`);
+  return serviceFault(error) ?? new AppError('unexpected', `The fault is in Fourfold and has been logged as ${requestId}. Try again; if it stays, report that number.`);
 }
 
 /** An error as application/problem+json (RFC 9457); what nobody foresaw is logged and told without its inner message. */

@@ -4,6 +4,7 @@ import type { ContractShape, ParsedBodyOf, ParsedQueryOf, PathParameters, Respon
 import { isStorable } from '@/lib/domain/api/storable-text';
 import { AppError } from '@/lib/errors';
 import type { Context, MemberContext, UserContext } from '@/lib/services/context';
+import { answerInSteps } from '@/lib/services/idempotency/answer-in-steps';
 import { answerOnce } from '@/lib/services/idempotency/answer-once';
 import { clientAddress } from './client-address';
 import { getServer } from './context';
@@ -117,8 +118,9 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
   }
   if (key.length > longestKey) throw new AppError('bad-request', `The Idempotency-Key has ${key.length} characters. Expected at most ${longestKey}.`);
   const requestSha256 = createHash('sha256').update(`${contract.method} ${url.pathname}\n${text}`).digest('hex');
-  const kept = await answerOnce(ctx as MemberContext, key, requestSha256, async () => {
-    const result = await handler(call);
+  const answered = contract.inSteps ? answerInSteps : answerOnce;
+  const kept = await answered(ctx as MemberContext, { key, requestSha256 }, async (ctx) => {
+    const result = await handler({ ...call, ctx: ctx as ContextOf<C> });
     if (result instanceof Response) throw new Error(`${contract.path} answers with a stream and cannot be kept.`);
     return { status: contract.status, body: result };
   });

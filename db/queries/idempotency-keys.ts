@@ -2,10 +2,10 @@ import type { Kysely } from 'kysely';
 import type { DB } from '../schema.generated';
 import { json } from '../json';
 
-interface KeyOf { organisationId: string; actorId: string; key: string }
+export interface IdempotencyKeyAt { organisationId: string; actorId: string; key: string }
 
 /** True where the key was free and is now claimed. */
-export async function claimIdempotencyKey(db: Kysely<DB>, at: KeyOf, requestSha256: string, olderThan: Date): Promise<boolean> {
+export async function claimIdempotencyKey(db: Kysely<DB>, at: IdempotencyKeyAt, requestSha256: string, olderThan: Date): Promise<boolean> {
   await db
     .deleteFrom('idempotency_keys')
     .where('organisation_id', '=', at.organisationId).where('actor_id', '=', at.actorId).where('key', '=', at.key)
@@ -20,7 +20,7 @@ export async function claimIdempotencyKey(db: Kysely<DB>, at: KeyOf, requestSha2
   return inserted !== undefined;
 }
 
-export function getIdempotencyKey(db: Kysely<DB>, at: KeyOf) {
+export function getIdempotencyKey(db: Kysely<DB>, at: IdempotencyKeyAt) {
   return db
     .selectFrom('idempotency_keys')
     .select(['request_sha256', 'status', 'body', 'created_at'])
@@ -28,7 +28,7 @@ export function getIdempotencyKey(db: Kysely<DB>, at: KeyOf) {
     .executeTakeFirst();
 }
 
-export function updateIdempotencyKey(db: Kysely<DB>, at: KeyOf, status: number, body: unknown) {
+export function updateIdempotencyKey(db: Kysely<DB>, at: IdempotencyKeyAt, status: number, body: unknown) {
   return db
     .updateTable('idempotency_keys')
     .set({ status, body: json(body ?? null) })
@@ -36,7 +36,7 @@ export function updateIdempotencyKey(db: Kysely<DB>, at: KeyOf, status: number, 
     .execute();
 }
 
-export function deleteIdempotencyKey(db: Kysely<DB>, at: KeyOf) {
+export function deleteIdempotencyKey(db: Kysely<DB>, at: IdempotencyKeyAt) {
   return db
     .deleteFrom('idempotency_keys')
     .where('organisation_id', '=', at.organisationId).where('actor_id', '=', at.actorId).where('key', '=', at.key)

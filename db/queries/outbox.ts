@@ -28,6 +28,18 @@ export function listQueuedOutboxRows(db: Kysely<DB>, before: Date) {
   return db.selectFrom('outbox').selectAll().where('state', '=', 'queued').where('queued_at', '<', before).execute();
 }
 
+/** Of an attempt that is still the last one and has not ended: failed, and due again later; whether it was so. */
+export async function failOutboxRow(db: Kysely<DB>, { id, attempt }: { id: string; attempt: number }, changes: { last_error: string; due_at: Date }): Promise<boolean> {
+  const changed = await db
+    .updateTable('outbox')
+    .set({ state: 'failed', ...changes })
+    .where('id', '=', id)
+    .where('attempt', '=', attempt)
+    .where('state', '=', 'queued')
+    .executeTakeFirst();
+  return changed.numUpdatedRows > 0n;
+}
+
 /** Back to waiting, unless the attempt has moved on meanwhile. */
 export function requeueOutboxRow(db: Kysely<DB>, id: string, attempt: number) {
   return db

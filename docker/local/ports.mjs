@@ -1,6 +1,7 @@
 import net from 'node:net';
 
 /** @typedef {'start' | 'test' | 'validate'} RunName */
+/** @typedef {{ postgres: number, redis: number, storage: number, smtp: number }} NetworkPorts where one client reaches the services */
 /** @typedef {{ postgres: number, redis: number, storage: number, storageObject: number, storageContainer: number,
  *   storageAccount: number, smtp: number, inbox: number, metrics: number, web: number }} Ports */
 
@@ -49,6 +50,16 @@ export function portsOf(name) {
     metrics: base + 8,
     web: name === 'start' ? readPort('PORT', 3000, 65535) : base + 10,
   };
+}
+
+/**
+ * Of a test run: the doors through which web and worker reach the services, which tests can close, and their control.
+ * @returns {{ web: NetworkPorts, worker: NetworkPorts, control: number }}
+ */
+export function networkPorts() {
+  const first = portsOf('test').web + 1;
+  const doors = (/** @type {number} */ port) => ({ postgres: port, redis: port + 1, storage: port + 2, smtp: port + 3 });
+  return { web: doors(first), worker: doors(first + 4), control: first + 8 };
 }
 
 /** @param {number} port @returns {Promise<boolean>} */

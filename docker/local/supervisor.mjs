@@ -30,9 +30,9 @@ export async function awaitEarlierProcesses(folder) {
 /**
  * Keeps services running: starts them, waits until each is ready, starts one again when it ends by itself
  * (waiting longer each time), stops them in reverse order.
- * @param {{ pidFolder: string, log: import('./logs.mjs').LogSink }} options @returns {Supervisor}
+ * @param {{ pidFolder: string, log: import('./logs.mjs').LogSink, longestBackoff?: number }} options @returns {Supervisor}
  */
-export function createSupervisor({ pidFolder, log }) {
+export function createSupervisor({ pidFolder, log, longestBackoff = LONGEST_BACKOFF }) {
   let isStopping = false;
   /** @type {{ service: Service, child: ReturnType<typeof launch> }[]} */
   const entries = [];
@@ -59,7 +59,7 @@ export function createSupervisor({ pidFolder, log }) {
       setTimeout(() => {
         if (isStopping) return;
         entry.child = spawnService(entry.service);
-        keepAlive(entry, Math.min(wait * 2, LONGEST_BACKOFF));
+        keepAlive(entry, Math.min(wait * 2, longestBackoff));
       }, wait);
     });
   }

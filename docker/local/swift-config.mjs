@@ -45,7 +45,14 @@ function proxyConfig(ports, folder, webOrigins) {
       strict_cors_mode: 'true',
     },
     'pipeline:main': { pipeline },
-    'app:proxy-server': { use: 'egg:swift#proxy', account_autocreate: 'true', allow_account_management: 'true' },
+    'app:proxy-server': {
+      use: 'egg:swift#proxy',
+      account_autocreate: 'true',
+      allow_account_management: 'true',
+      // There is no other server to turn to: one that was away is asked again at once, not after a minute.
+      error_suppression_interval: '0',
+      error_suppression_limit: 1_000_000,
+    },
     'filter:s3api': { use: 'egg:swift#s3api', location: 'us-east-1', cors_preflight_allow_origin: origins },
     'filter:tempauth': {
       use: 'egg:swift#tempauth',

@@ -7,12 +7,13 @@ import { onInterruption } from './interruption.mjs';
 import { acquireLock } from './lock.mjs';
 import { logToFolder } from './logs.mjs';
 import { npmBinary, root } from './places.mjs';
-import { assertPortsFree, portsOf } from './ports.mjs';
+import { assertPortsFree, networkPorts, portsOf } from './ports.mjs';
 import { migrate, webService, workerService } from './product.mjs';
 import { run, stopRunning } from './processes.mjs';
 import { runFolder, startServices } from './services.mjs';
 import { awaitEarlierProcesses, createSupervisor } from './supervisor.mjs';
 import { readCounts } from './test-counts.mjs';
+import { networkService, throughNetwork } from './test-network.mjs';
 import { needsProduct } from './test-selection.mjs';
 
 const NAME = 'test';
@@ -20,7 +21,8 @@ const folder = runFolder(NAME);
 const pidFolder = path.join(folder, 'pids');
 const logFolder = path.join(folder, 'logs');
 const reportFolder = path.join(folder, 'reports');
-const supervisor = createSupervisor({ pidFolder, log: logToFolder(logFolder) });
+// What tests kill again and again comes back quickly every time.
+const supervisor = createSupervisor({ pidFolder, log: logToFolder(logFolder), longestBackoff: 500 });
 
 /** @returns {Promise<Record<string, string>>} what the tests need to know */
 async function startProduct() {
@@ -38,10 +40,14 @@ async function startProduct() {
   const env = productEnvironment(ports, { LOG_LEVEL: process.env.LOG_LEVEL });
   const [build] = await Promise.all([ensureBuild(), startServices(NAME, supervisor, ports, env)]);
   await migrate(env);
-  await supervisor.start(workerService(build, env));
-  await supervisor.start(webService(build, ports.web, env));
+  await supervisor.start(networkService(ports));
+  await supervisor.start(workerService(build, throughNetwork(env, 'worker')));
+  await supervisor.start(webService(build, ports.web, throughNetwork(env, 'web')));
   console.log(`The product runs for the tests on port ${ports.web} after ${performance.now().toFixed(0)} ms.`);
-  return { ...env, ...testEnvironment(ports), TEST_BUILD_FOLDER: build, TEST_PID_FOLDER: pidFolder, TEST_LOG_FOLDER: logFolder };
+  return {
+    ...env, ...testEnvironment(ports), TEST_BUILD_FOLDER: build, TEST_PID_FOLDER: pidFolder, TEST_LOG_FOLDER: logFolder,
+    TEST_NETWORK_URL: `http://127.0.0.1:${networkPorts().control}`,
+  };
 }
 
 /** @param {string[]} args @param {Record<string, string>} env */

@@ -16,13 +16,16 @@ interface StorageOptions {
   partLifetimeSeconds: number;
 }
 
+/** Storage that says nothing for so long has failed; without a limit a request or a reading thread would wait for good. */
+const patience = { connectionTimeout: 3000, socketTimeout: 10_000 };
+
 export type Storage = ReturnType<typeof createStorage>;
 
 /** Files in an S3-compatible bucket. Part addresses are signed for the URL at which browsers reach storage. */
 export function createStorage(options: StorageOptions) {
   const { bucket, region, accessKeyId, secretAccessKey, partLifetimeSeconds } = options;
   const clientAt = (endpoint: string) => new S3Client({
-    endpoint, region, forcePathStyle: true, credentials: { accessKeyId, secretAccessKey },
+    requestHandler: patience, endpoint, region, forcePathStyle: true, credentials: { accessKeyId, secretAccessKey },
     requestChecksumCalculation: 'WHEN_REQUIRED', responseChecksumValidation: 'WHEN_REQUIRED',
   });
   const client = clientAt(options.endpoint);

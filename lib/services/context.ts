@@ -5,6 +5,7 @@ import type { Logger } from '@/lib/platform/logger';
 import type { RateLimits } from '@/lib/platform/rate-limits';
 import type { Storage } from '@/lib/platform/storage';
 import type { StudyEvents } from '@/lib/platform/study-events';
+import type { Trx } from './with-organisation';
 
 /** What every service is handed; tests hand in a fixed clock. */
 export interface Context {
@@ -18,6 +19,8 @@ export interface Context {
   log: Logger;
   /** Of the request that is answered, or that caused the job. */
   requestId?: string | null;
+  /** The transaction that everything of this call is part of, where there is one. */
+  within?: Trx;
 }
 
 export interface TokenActor { id: string; name: string; scopes: TokenScope[]; codeId: string | null }

@@ -8,6 +8,7 @@ import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { ReadProgress } from '@/lib/readers/source';
 import { openTableHelper } from './table-helper';
 import type { GivenTask, ThreadMessage, ThreadResult } from './thread-messages';
+import { wholeFile } from './whole-file';
 
 const toldEveryMilliseconds = 200;
 
@@ -31,7 +32,7 @@ async function run(task: GivenTask): Promise<ThreadResult> {
   try {
     if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source) };
     const openHelper = task.mayHaveHelp ? openTableHelper : undefined;
-    return { kind: 'read', result: await readGrid(source, task.reading, { onProgress: sparingly(), openHelper }) };
+    return { kind: 'read', result: await readGrid(wholeFile(source, task.bytes), task.reading, { onProgress: sparingly(), openHelper }) };
   } finally {
     source.destroy();
   }

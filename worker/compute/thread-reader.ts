@@ -9,8 +9,8 @@ export function createThreadReader(pool: ThreadPool): GridReader {
       if (answer.kind !== 'preview') throw new Error(`A preview was asked for; the thread answered ${answer.kind}.`);
       return answer.preview;
     },
-    async read(storageKey, reading, onProgress) {
-      const answer = await pool.run({ kind: 'read', storageKey, reading }, onProgress);
+    async read(file, reading, onProgress) {
+      const answer = await pool.run({ kind: 'read', ...file, reading }, onProgress);
       if (answer.kind !== 'read') throw new Error(`A reading was asked for; the thread answered ${answer.kind}.`);
       return answer.result;
     },

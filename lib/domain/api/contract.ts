@@ -23,6 +23,8 @@ export interface ContractShape {
   secret?: true;
   /** A write that needs `If-Match` with the revision that was read. */
   conditional?: true;
+  /** It waits for storage, so it is no single transaction; carried out twice under one Idempotency-Key it does no harm. */
+  inSteps?: true;
   /** The body is not JSON and is handed on as a stream. */
   rawBody?: true;
   /** Statuses of refusals that do not follow from the rest. */

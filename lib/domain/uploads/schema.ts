@@ -58,7 +58,7 @@ export const putDataContract = contract({
   query: putDataQuerySchema, response: uploadSchema, rawBody: true,
 });
 export const startUploadContract = contract({
-  method: 'POST', path: '/studies/{id}/grids/{label}/upload', summary: 'Start an upload in parts', access: 'organisation', status: 201,
+  method: 'POST', path: '/studies/{id}/grids/{label}/upload', summary: 'Start an upload in parts', access: 'organisation', inSteps: true, status: 201,
   body: startUploadSchema, response: startedUploadSchema,
 });
 export const getUploadContract = contract({
@@ -72,7 +72,7 @@ export const signPartsContract = contract({
   body: signPartsSchema, response: signedPartsSchema, secret: true,
 });
 export const completeUploadContract = contract({
-  method: 'POST', path: '/uploads/{id}/complete', summary: 'Close an upload', access: 'organisation', status: 200,
+  method: 'POST', path: '/uploads/{id}/complete', summary: 'Close an upload', access: 'organisation', inSteps: true, status: 200,
   body: completeUploadSchema, response: uploadSchema,
 });
 export const previewContract = contract({

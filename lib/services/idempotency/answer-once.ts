@@ -1,42 +1,40 @@
-import {
-  claimIdempotencyKey, deleteIdempotencyKey, getIdempotencyKey, updateIdempotencyKey,
-} from '@/db/queries/idempotency-keys';
-import { AppError } from '@/lib/errors';
+import { updateIdempotencyKey } from '@/db/queries/idempotency-keys';
+import type { StudyEvents } from '@/lib/platform/study-events';
 import type { MemberContext } from '../context';
 import { withOrganisation } from '../with-organisation';
+import { claimKey, keyAt, type Answer, type KeyedRequest } from './keyed-request';
 
-interface Answer { status: number; body: unknown }
+/** Events told only when the transaction they tell of stands. */
+function holdEvents(events: StudyEvents): { held: StudyEvents; tell: () => Promise<void> } {
+  const messages: [string, string][] = [];
+  return {
+    held: {
+      ...events,
+      publish: (studyId, message) => {
+        messages.push([studyId, message]);
+        return Promise.resolve();
+      },
+    },
+    tell: async () => {
+      for (const [studyId, message] of messages) await events.publish(studyId, message);
+    },
+  };
+}
 
-const keptMilliseconds = 24 * 3600 * 1000;
-/** A claim this old without an answer belongs to a process that died. */
-const claimMilliseconds = 60 * 1000;
-
-/** The same key and request get the same answer for a day; a request that failed leaves the key free. */
-export async function answerOnce(ctx: MemberContext, key: string, requestSha256: string, work: () => Promise<Answer>): Promise<Answer> {
-  const at = { organisationId: ctx.organisation.id, actorId: ctx.token?.id ?? ctx.userId, key };
-  const now = ctx.clock().getTime();
-
-  const kept = await withOrganisation(ctx, async (trx) => {
-    if (await claimIdempotencyKey(trx, at, requestSha256, new Date(now - keptMilliseconds))) return null;
-    const present = await getIdempotencyKey(trx, at);
-    if (!present) return null;
-    if (present.request_sha256 !== requestSha256) {
-      throw new AppError('key-reused', 'This Idempotency-Key came with another request before. Use a new key.');
-    }
-    if (present.status !== null) return { status: present.status, body: present.body };
-    if (present.created_at.getTime() > now - claimMilliseconds) {
-      throw new AppError('request-in-flight', 'The same request is still being answered. Ask again in a moment.');
-    }
-    return null;
+/**
+ * The same key and request get the same answer for a day. The work, its answer and the key are one transaction: whatever
+ * dies, all three are kept or none, and a second call under the key waits for the first.
+ */
+export async function answerOnce(ctx: MemberContext, request: KeyedRequest, work: (ctx: MemberContext) => Promise<Answer>): Promise<Answer> {
+  const { held, tell } = holdEvents(ctx.events);
+  const answer = await withOrganisation(ctx, async (trx) => {
+    const kept = await claimKey(ctx, trx, request);
+    if (kept) return kept;
+    const made = await work({ ...ctx, events: held, within: trx });
+    await updateIdempotencyKey(trx, keyAt(ctx, request), made.status, made.body);
+    return made;
   });
-  if (kept) return kept;
-
-  try {
-    const answer = await work();
-    await withOrganisation(ctx, (trx) => updateIdempotencyKey(trx, at, answer.status, answer.body));
-    return answer;
-  } catch (error) {
-    await withOrganisation(ctx, (trx) => deleteIdempotencyKey(trx, at));
-    throw error;
-  }
+  // Pages read again by themselves: what is done is not undone because nobody could be told.
+  await tell().catch((error: unknown) => ctx.log.warn({ fault: error instanceof Error ? error.message : 'unknown' }, 'event not told'));
+  return answer;
 }

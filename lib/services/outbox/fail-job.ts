@@ -1,12 +1,15 @@
 import { findGrid, updateGrid } from '@/db/queries/grids';
-import { updateOutboxRow } from '@/db/queries/outbox';
+import { failOutboxRow } from '@/db/queries/outbox';
 import { updateRevisionFailure, type RevisionKey } from '@/db/queries/study-revisions';
 import type { JobName, JobPayload } from '@/lib/jobs/jobs';
 import { announce } from '../studies/announce';
 import { withOrganisation, type Trx } from '../with-organisation';
 import type { JobContext } from './job-context';
 
-const retryMilliseconds = 5 * 60_000;
+/** After the first, the second and every later time that a job was given up. */
+const retrySeconds = [10, 60, 300];
+
+const retryAfter = (attempt: number) => 1000 * (retrySeconds[attempt - 1] ?? 300);
 
 async function concerned(trx: Trx, name: JobName, { organisationId, subjectId, subjectRevision }: JobPayload): Promise<{ at: RevisionKey; what: string } | null> {
   // A mail and a re-check have states of their own, and no study to tell.
@@ -18,10 +21,12 @@ async function concerned(trx: Trx, name: JobName, { organisationId, subjectId, s
   return grid ? { at: { organisationId, studyId: grid.study_id, revision: grid.study_revision }, what: `The file of grid ${grid.label} could not be read yet` } : null;
 }
 
-/** Every try of a job has failed: its study says so, nothing is given up, and the job comes again in five minutes. */
+/** Every try of a job has failed: its study says so, nothing is given up, and the job comes again, after a while that grows to five minutes. */
 export async function failJob(ctx: JobContext, name: JobName, payload: JobPayload, error: Error): Promise<void> {
   const now = ctx.clock();
-  await updateOutboxRow(ctx.db, payload.outboxId, { state: 'failed', last_error: error.message, due_at: new Date(now.getTime() + retryMilliseconds) });
+  const row = { id: payload.outboxId, attempt: payload.attempt };
+  // A job taken for dead may have ended well elsewhere, or be queued anew: then nothing has failed.
+  if (!await failOutboxRow(ctx.db, row, { last_error: error.message, due_at: new Date(now.getTime() + retryAfter(payload.attempt)) })) return;
   const studyId = await withOrganisation(ctx, async (trx) => {
     const found = await concerned(trx, name, payload);
     if (!found) return null;

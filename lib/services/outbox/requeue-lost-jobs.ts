@@ -1,8 +1,8 @@
 import type { Database } from '@/db/client';
 import { listQueuedOutboxRows, requeueOutboxRow } from '@/db/queries/outbox';
 
-/** Long enough that a row just queued is not taken for lost. */
-const graceMilliseconds = 10_000;
+/** A row reads as queued only after the queue has taken its job; a job that just ended may still be about to say so. */
+const graceMilliseconds = 1000;
 
 /** Rows said to be queued whose job the queue does not know wait again: it was emptied, or its process died in between. */
 export async function requeueLostJobs(db: Database, now: Date, isAlive: (jobId: string) => Promise<boolean>): Promise<number> {

@@ -2,8 +2,14 @@ import type { GridReading } from '@/lib/readers/grid-reading';
 import type { GridReadResult } from '@/lib/readers/read-grid';
 import type { ReadProgress, SourcePreview } from '@/lib/readers/source';
 
-/** Reads files in storage away from the caller's event loop. Both throw RejectedFile where the file cannot be taken. */
+/** A file in storage, and how long it is. */
+export interface StoredFile { storageKey: string; bytes: number }
+
+/**
+ * Reads files in storage away from the caller's event loop. Both throw RejectedFile where the file cannot be taken;
+ * `read` throws another error where storage does not give the whole of it.
+ */
 export interface GridReader {
   preview(storageKey: string): Promise<SourcePreview>;
-  read(storageKey: string, reading: GridReading, onProgress: (progress: ReadProgress) => void): Promise<GridReadResult>;
+  read(file: StoredFile, reading: GridReading, onProgress: (progress: ReadProgress) => void): Promise<GridReadResult>;
 }
