@@ -120,7 +120,7 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
   const requestSha256 = createHash('sha256').update(`${contract.method} ${url.pathname}\n${text}`).digest('hex');
   const answered = contract.inSteps ? answerInSteps : answerOnce;
   const kept = await answered(ctx as MemberContext, { key, requestSha256 }, async (ctx) => {
-    const result = await handler({ ...call, ctx: ctx as ContextOf<C> });
+    const result = await handler({ ...call, ctx: ctx });
     if (result instanceof Response) throw new Error(`${contract.path} answers with a stream and cannot be kept.`);
     return { status: contract.status, body: result };
   });

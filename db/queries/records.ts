@@ -67,9 +67,14 @@ const idleOutbox = (only: RawBuilder<unknown>) => sql<RecordFault>`
     (o.job = 'grid.read' and not exists (select from grids g where g.id = o.subject_id))
     or (o.job = 'study.assess' and not exists (select from study_revisions v where v.study_id = o.subject_id and v.revision = o.subject_revision)))`;
 
+/** A mail that waits has a job that sends it. */
+const forgottenMails = (only: RawBuilder<unknown>) => sql<RecordFault>`
+  select 'mails' as place, m.id::text as id, 'waits to be sent, and no job will send it' as fault
+  from mails m where ${only} and m.state = 'queued' and not exists (select from outbox o where o.subject_id = m.id and o.job = 'mail.send' and o.state <> 'done')`;
+
 const checks: { alias: string; statement: (only: RawBuilder<unknown>) => RawBuilder<RecordFault> }[] = [
   { alias: 'g', statement: unreadGrids }, { alias: 'g', statement: forgottenFiles }, { alias: 'v', statement: stuckRevisions },
-  { alias: 'v', statement: missingAssessments }, { alias: 'a', statement: foreignInputs }, { alias: 'o', statement: idleOutbox },
+  { alias: 'v', statement: missingAssessments }, { alias: 'a', statement: foreignInputs }, { alias: 'o', statement: idleOutbox }, { alias: 'm', statement: forgottenMails },
 ];
 
 const mostFaults = 1000;
@@ -82,6 +87,19 @@ export async function listRecordFaults(db: Kysely<DB>, organisationId: string | 
     found.push(...rows);
   }
   return found;
+}
+
+/** Mails that were being sent when it was last heard of them, long ago: whether they went out nobody knows. */
+export function listUnsureMails(db: Kysely<DB>, organisationId: string | null) {
+  return db
+    .selectFrom('mails')
+    .select(['id', 'address', 'claimed_at'])
+    .where('state', '=', 'sending')
+    .where('claimed_at', '<', sql<Date>`now() - interval '10 minutes'`)
+    .$if(organisationId !== null, (query) => query.where('organisation_id', '=', organisationId))
+    .orderBy('claimed_at')
+    .limit(mostFaults)
+    .execute();
 }
 
 /** A page of whole files in the order of their ids. */

@@ -57,7 +57,7 @@ export function portsOf(name) {
  * @returns {{ web: NetworkPorts, worker: NetworkPorts, control: number }}
  */
 export function networkPorts() {
-  const first = portsOf('test').web + 1;
+  const first = portsOf('test').web + 20;
   const doors = (/** @type {number} */ port) => ({ postgres: port, redis: port + 1, storage: port + 2, smtp: port + 3 });
   return { web: doors(first), worker: doors(first + 4), control: first + 8 };
 }

@@ -7,7 +7,6 @@ import { addressOf, headersOf, type SentTo, type Who } from '../api';
 const patience = 75_000;
 const oneCall = 35_000;
 
-export interface Refusal { status: number; text: string }
 /** Thrown for an answer that trying again will not change. */
 export class Refused extends Error {
   constructor(readonly status: number, text: string) {
@@ -27,7 +26,7 @@ async function persist(what: string, attempt: () => Promise<Response>): Promise<
       heard = `${response.status} ${await response.text()}`;
     } catch (error) {
       const { cause } = error as { cause?: unknown };
-      heard = `${String(error)} ${String(cause ?? '')}`;
+      heard = `${String(error)} ${cause instanceof Error ? cause.message : ''}`;
     }
     if (Date.now() > deadline) throw new Error(`${what} got no answer in ${patience / 1000} s; the last was ${heard}`);
     await pause(wait);

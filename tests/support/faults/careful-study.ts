@@ -8,7 +8,7 @@ import type { Work } from '../work';
 import { insist, insistOnPart, Refused } from './careful-client';
 import type { Lane } from './plan';
 
-export const sizes = [4, 8, 16, 32];
+const sizes = [4, 8, 16, 32];
 export interface Site { engineer: Person; work: Work }
 export interface Acknowledged { label: string; sha256: string }
 
@@ -17,7 +17,7 @@ const sha256Of = (bytes: Buffer) => createHash('sha256').update(bytes).digest('h
 const badTable = Buffer.from('x,y,w,T\n0.1,0.1,0.5,one\n');
 
 /** The L2 norm of the error that the table of n × n cells was given, by the definition. */
-export function expectedNorm(n: number, converges: boolean): number {
+function expectedNorm(n: number, converges: boolean): number {
   const h = 1 / n;
   let sum = 0;
   for (let i = 0; i < n; i += 1) sum += n * h * h * (errorOf(converges)(h) * (1 + 0.5 * Math.sin(Math.PI * (i + 0.5) * h))) ** 2;
@@ -52,7 +52,7 @@ async function sendFile(who: Person, params: { id: string; label: string }, { by
   }
 }
 
-export async function awaitState(who: Person, id: string, isWanted: (study: Study) => boolean): Promise<Study> {
+async function awaitState(who: Person, id: string, isWanted: (study: Study) => boolean): Promise<Study> {
   const deadline = Date.now() + 75_000;
   for (;;) {
     const study = await insist(who, getStudyContract, { params: { id } });

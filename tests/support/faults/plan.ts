@@ -1,7 +1,7 @@
 import type { Fault } from '../network/faults.mjs';
 import { randomOf, type Random } from './random';
 
-export const killable = ['web', 'worker', 'redis', 'storage', 'storage-object', 'postgres'] as const;
+const killable = ['web', 'worker', 'redis', 'storage', 'storage-object', 'postgres'] as const;
 type Killable = (typeof killable)[number];
 
 export type PlannedFault = { at: number } & (

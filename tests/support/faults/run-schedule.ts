@@ -7,10 +7,11 @@ import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { checkRecords } from '@/lib/services/records/check-records';
 import { adminDatabase } from '../admin-database';
 import { need } from '../environment';
+import { startWorker } from '../extra-process';
 import { breakNetwork, mendNetwork } from '../network/break-network';
 import { carryOut, faultsSeen, type Site } from './careful-study';
 import type { PlannedFault, Schedule } from './plan';
-import { signal, startWorker } from './processes';
+import { signal } from './processes';
 
 async function emptyQueue(): Promise<void> {
   const redis = new Redis(need('REDIS_URL'), { maxRetriesPerRequest: 3 });
@@ -49,7 +50,7 @@ export async function recordFaults(organisationId: string): Promise<string[]> {
 async function openRows(organisationId: string): Promise<string[]> {
   const read = async () => (await adminDatabase().query<{ job: string; state: string; last_error: string | null }>(
     "select job, state, last_error from outbox where organisation_id = $1 and state <> 'done'", [organisationId])).rows;
-  for (let tries = 0; tries < 100 && (await read()).length > 0; tries += 1) await pause(200);
+  for (let tries = 0; tries < 300 && (await read()).length > 0; tries += 1) await pause(200);
   return (await read()).map(({ job, state, last_error }) => `${job} is still ${state}${last_error ? `: ${last_error}` : ''}`);
 }
 
@@ -61,7 +62,7 @@ async function studiesOf(organisationId: string): Promise<number> {
 /** Carries out a schedule, lets everything come to rest, and tells what is wrong afterwards; nothing where all holds. */
 export async function runSchedule(schedule: Schedule, sites: Site[]): Promise<string[]> {
   const before = await Promise.all(sites.map(({ engineer }) => studiesOf(engineer.at.id)));
-  const second = schedule.secondWorker ? startWorker() : null;
+  const second = schedule.secondWorker ? await startWorker('worker-2', Number(new URL(need('WEB_URL')).port) + 15) : null;
   try {
     const lanes = schedule.lanes.map((lane, index) => ({ lane, site: sites[index] as Site }));
     const faulty = Promise.all(schedule.faults.map(inflict));
@@ -84,6 +85,6 @@ export async function runSchedule(schedule: Schedule, sites: Site[]): Promise<st
     return seen.flat();
   } finally {
     await mendNetwork();
-    await second?.end();
+    await second?.end('SIGKILL');
   }
 }
