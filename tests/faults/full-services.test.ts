@@ -4,6 +4,7 @@ import { createCodeContract, listCodesContract } from '@/lib/domain/codes/schema
 import { signInContract } from '@/lib/domain/people/schema';
 import { createStudyContract } from '@/lib/domain/studies/schema';
 import { putDataContract, startUploadContract } from '@/lib/domain/uploads/schema';
+import { adminDatabase } from '@/tests/support/admin-database';
 import { ok, refused } from '@/tests/support/api';
 import { need } from '@/tests/support/environment';
 import { recordFaults } from '@/tests/support/faults/run-schedule';
@@ -77,19 +78,23 @@ describe('services that are out of reach', () => {
   });
 });
 
-describe('a call under an Idempotency-Key whose answer was lost', () => {
-  it('is carried out once, however often it is sent and whatever breaks meanwhile', async () => {
-    const before = (await ok(engineer, listCodesContract, {})).items.length;
-    const call = () => ok(engineer, createCodeContract, { body: { name: 'Tarn' }, headers: { 'idempotency-key': 'tarn' } });
-    const slow = breakNetwork({ client: 'web', service: 'postgres', kind: 'latency', delay: 40, milliseconds: 3000 });
-    await slow;
-    const first = call().catch(() => null);
-    await new Promise((resolve) => setTimeout(resolve, 350));
-    await breakNetwork({ client: 'web', service: 'postgres', kind: 'cut', milliseconds: 50 });
-    await first;
-    await mendNetwork();
-    const answers = await Promise.all([call(), call(), call()]);
+describe('a call under an Idempotency-Key whose answer cannot be kept', () => {
+  it('leaves nothing behind, and is carried out once when it is sent again', async () => {
+    const count = async () => (await ok(engineer, listCodesContract, {})).items.length;
+    const before = await count();
+    const sent = { body: { name: 'Tarn' }, headers: { 'idempotency-key': 'tarn' } };
+    const database = adminDatabase();
+    await database.query(`create function lose_answer() returns trigger language plpgsql as $$ begin raise exception 'gone' using errcode = '57P01'; end $$;
+      create trigger lose_answer before update on idempotency_keys for each row when (new.key = 'tarn') execute function lose_answer()`);
+    try {
+      const problem = await refused(engineer, createCodeContract, sent);
+      expect([problem.status, problem.detail]).toEqual([503, expect.stringMatching(/^The database is not reachable/)]);
+      expect(await count()).toBe(before);
+    } finally {
+      await database.query('drop trigger lose_answer on idempotency_keys; drop function lose_answer()');
+    }
+    const answers = await Promise.all([sent, sent, sent].map((again) => ok(engineer, createCodeContract, again)));
     expect(new Set(answers.map(({ id }) => id)).size).toBe(1);
-    expect((await ok(engineer, listCodesContract, {})).items.length).toBe(before + 1);
+    expect(await count()).toBe(before + 1);
   });
 });
