@@ -1,8 +1,10 @@
+import { createAverageEvaluator } from '../numerics/expression/average-evaluator';
 import { createBlockEvaluator } from '../numerics/expression/block-evaluator';
 import type { Node } from '../numerics/expression/node';
 import type { NormPart } from '../numerics/norms/norm-part';
 import { createNormGatherer } from '../numerics/norms/norm-gatherer';
 import type { GridChecks } from './grid-checks';
+import type { GridReading } from './grid-reading';
 import type { ColumnPlan } from './plan-columns';
 import { createRowProblems } from './row-problems';
 import type { ColumnBatch } from './source';
@@ -13,6 +15,7 @@ export interface GridTask {
   fields: string[];
   /** The exact value of every field. */
   exact: Node[];
+  average?: GridReading['average'];
   /** The time of the grid, where the file has no column of times. */
   t?: number;
 }
@@ -25,8 +28,9 @@ export interface GridGatherer {
 }
 
 /** Prepares the exact solution once, for gatherers one after another: what batches come to, with their checks. */
-export function prepareGathering({ plan, fields, exact, t: gridTime }: GridTask): (checks: GridChecks) => GridGatherer {
-  const evaluate = createBlockEvaluator(exact);
+export function prepareGathering({ plan, fields, exact, average, t: gridTime }: GridTask): (checks: GridChecks) => GridGatherer {
+  const evaluate = average ? null : createBlockEvaluator(exact);
+  const evaluateAverage = average ? createAverageEvaluator(exact, average.points) : null;
   return (checks) => {
     const gatherer = createNormGatherer(fields);
     const rowProblems = createRowProblems();
@@ -37,12 +41,14 @@ export function prepareGathering({ plan, fields, exact, t: gridTime }: GridTask)
         const y = pick(plan.y);
         const z = pick(plan.z);
         const t = pick(plan.t);
-        const known = evaluate(rows, { x, y: y ?? undefined, z: z ?? undefined, t: t ?? gridTime });
+        const at = { x, y: y ?? undefined, z: z ?? undefined, t: t ?? gridTime };
+        const size = (axis: number) => (plan.extents.length > 0 ? columns[plan.extents[axis] as number] : average?.extents?.[axis]);
+        const known = evaluateAverage?.(rows, at, { x: size(0), y: size(1), z: size(2) }) ?? evaluate?.(rows, at) ?? [];
         const before = gatherer.rows();
         checks.times.note(t, { rows, before, lines });
         gatherer.add({
           rows, x, y, z, weights: pick(plan.weight),
-          fields: plan.fields.map((slot, at) => ({ values: columns[slot] as Float64Array, exact: known[at] as Float64Array })),
+          fields: plan.fields.map((slot, index) => ({ values: columns[slot] as Float64Array, exact: known[index] as Float64Array })),
         });
         rowProblems.note(gatherer.problems(), { before, lines, coordinates: { x, y, z } });
       },

@@ -9,6 +9,11 @@ export interface GridReading {
   };
   /** What each field of the file is compared with: an expression of the exact fields, or the exact field of its name. */
   fields: readonly { field: string; compare?: string }[];
+  /**
+   * Where the file holds cell averages: points per direction to average the exact expressions by, and the size of the cells
+   * along each direction where no columns dx, dy, dz hold it.
+   */
+  average?: { points: number; extents: readonly number[] | null };
   /** The time of the grid, where the file has no column of times. */
   t?: number;
 }

@@ -9,10 +9,12 @@ export interface ColumnPlan {
   t: number | null;
   weight: number | null;
   fields: number[];
+  /** Columns of the size of the cell along x, y and z; none unless the file holds averages. */
+  extents: number[];
 }
 
 /** Lays out what a grid needs of its file. Throws TypeError where the mapping leaves something needed without a column. */
-export function planColumns({ mapping, problem, fields }: GridReading): ColumnPlan {
+export function planColumns({ mapping, problem, fields, average }: GridReading): ColumnPlan {
   const names: string[] = [];
   const place = (name: string): number => {
     const at = names.indexOf(name);
@@ -30,5 +32,6 @@ export function planColumns({ mapping, problem, fields }: GridReading): ColumnPl
     t: mapping.t === undefined ? null : place(mapping.t),
     weight: mapping.weight === null ? null : place(mapping.weight),
     fields: fields.map(({ field }) => need(field, mapping.fields[field])),
+    extents: average?.extents === null ? (['dx', 'dy', 'dz'] as const).slice(0, problem.dimension).map((name) => need(name, mapping[name])) : [],
   };
 }

@@ -43,7 +43,7 @@ interface Gathering { task: GridTask; checks: GridChecks; total: NormTotal; onPi
 export async function readGrid(source: ByteSource, reading: GridReading, options: GridReadOptions = {}): Promise<GridReadResult> {
   const plan = planColumns(reading);
   const fields = reading.fields.map(({ field }) => field);
-  const task: GridTask = { plan, fields, exact: compileExact(reading), t: reading.t };
+  const task: GridTask = { plan, fields, exact: compileExact(reading), average: reading.average, t: reading.t };
   const checks = createGridChecks(reading.t);
   const total = createNormTotal(fields);
   const hash = createHash('sha256');

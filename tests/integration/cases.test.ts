@@ -58,7 +58,6 @@ describe('POST /api/v1/cases', () => {
 
   it.each([
     ['fields.0.datum', { fields: [{ field: 'T', datum: 'rigid', norms: [{ norm: 'L2' }] }] }],
-    ['sampling', { sampling: 'average' }],
     ['fields.0.norms.0.backing.scheme', norm({ backing: { scheme: 'central-2' } })],
     ['boundaryBand', { boundaryBand: { thickness: 0.1 } }],
   ])('answers 422 not available for %s', async (path, changes) => {

@@ -64,7 +64,7 @@ export function CaseFields({ form, codes, problems, isNew }: CaseFieldsProps) {
         <div className="grid max-w-[600px] gap-5 tablet:grid-cols-2">
           <NumberField label="Grids needed for an outcome" hint={`Left empty: ${builtInRule.minimumGrids}, as the rule says.`} error={errors.minimumGrids?.message} {...register('minimumGrids')} />
           <SelectField label="Values in the output are" hint="Must be stated for a formal order of 3 or more." {...register('sampling')}>
-            <option value="">not stated</option><option value="point">values at points</option><option value="quadrature">values at quadrature points</option>
+            <option value="">not stated</option><option value="point">values at points</option><option value="average">cell averages</option><option value="quadrature">values at quadrature points</option>
           </SelectField>
           <TextArea label="Requirement ids, one a line" rows={3} className="tablet:col-span-2" error={errors.requirements?.message} {...register('requirements')} />
         </div>

@@ -5,18 +5,12 @@ type Asked = NotAvailableYet | false;
 
 /** The first member that asks for what is not available yet. */
 export function notYetOfCase(definition: CaseDefinition): NotAvailableYet | null {
-  const { fields, sampling, sourceSampling, boundaryBand } = definition;
+  const { fields, boundaryBand } = definition;
   const asked: Asked[] = [
-    isAveraged(sampling) && { path: 'sampling', what: `Sampling by ${sampling}` },
-    isAveraged(sourceSampling) && { path: 'sourceSampling', what: `Source sampling by ${sourceSampling}` },
     boundaryBand !== undefined && { path: 'boundaryBand', what: 'A boundary band' },
     ...fields.flatMap((field, index) => askedByField(field, `fields.${index}`)),
   ];
   return asked.find((each) => each !== false) ?? null;
-}
-
-function isAveraged(sampling: CaseDefinition['sampling']): boolean {
-  return sampling === 'average';
 }
 
 function askedByField({ datum, norms }: DeclaredField, path: string): Asked[] {

@@ -4,9 +4,10 @@ import { splitColumns } from '@/lib/domain/columns/split-columns';
 import type { ProblemDefinition } from '@/lib/domain/problems/schema';
 import type { FieldNorms, GradientNorms, GridNorms } from '@/lib/numerics/norms/grid-norms';
 import { bestScale } from '@/lib/numerics/norms/best-scale';
+import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { GridReading } from '@/lib/readers/grid-reading';
 
-interface Asked { definition: CaseDefinition; problem: ProblemDefinition; mapping: ColumnMapping; t?: number }
+interface Asked { definition: CaseDefinition; problem: ProblemDefinition; mapping: ColumnMapping; t?: number; cellsPerDirection?: number | number[] }
 type ReadField = GridReading['fields'][number];
 
 const axes = ['x', 'y', 'z'] as const;
@@ -17,7 +18,7 @@ const squareName = (field: string) => `${field} squared`;
  * What is read of a file: every field against what it is compared with, its gradient columns against the derivatives of
  * the exact field, and what the best factor of a field up to a scale is made of.
  */
-export function planReading({ definition, problem, mapping, t }: Asked): GridReading {
+export function planReading({ definition, problem, mapping, t, cellsPerDirection }: Asked): GridReading {
   const { dimension, exact = {}, constants } = problem;
   const columns: Record<string, string> = {};
   const fields: ReadField[] = [];
@@ -31,7 +32,31 @@ export function planReading({ definition, problem, mapping, t }: Asked): GridRea
     if (value !== undefined && datum === 'scale') add(squareName(field), value, '0');
     gradient.forEach((column, at) => add(derivativeName(field, axes[at] ?? 'x'), column, derivativeName(field, axes[at] ?? 'x')));
   }
-  return { mapping: { ...mapping, fields: columns }, problem: { dimension, exact, constants }, fields, t };
+  return { mapping: { ...mapping, fields: columns }, problem: { dimension, exact, constants }, fields, t,
+    ...(definition.sampling === 'average' && { average: { points: averagingPoints(definition), extents: uniformExtents(problem, mapping, cellsPerDirection) } }),
+  };
+}
+
+/** max(3, ⌈(pf + 3)/2⌉) per direction, so that averaging errs well below the highest order declared. */
+function averagingPoints({ fields }: CaseDefinition): number {
+  const highest = Math.max(0, ...fields.flatMap(({ norms }) => norms.map(({ formalOrder = 0, derivedOrder = 0 }) => Math.max(formalOrder, derivedOrder))));
+  return Math.max(3, Math.ceil((highest + 3) / 2));
+}
+
+/** Cells of one size, from the box of the problem and the cells along each direction; null where columns tell the sizes. */
+function uniformExtents({ domain = {}, dimension }: ProblemDefinition, mapping: ColumnMapping, counts: number | number[] | undefined): number[] | null {
+  const columns = [mapping.dx, mapping.dy, mapping.dz].slice(0, dimension);
+  if (columns.every((column) => column !== undefined)) return null;
+  const sizes = axes.slice(0, dimension).flatMap((axis, at) => {
+    const [side, count] = [domain[axis], Array.isArray(counts) ? counts[at] : counts];
+    return side === undefined || count === undefined ? [] : [(side[1] - side[0]) / count];
+  });
+  if (sizes.length === dimension) return sizes;
+  const expected = ['dx', 'dy', 'dz'].slice(0, dimension).join(', ');
+  throw new RejectedFile([{
+    code: 'column-missing', count: 1, line: null, column: null, found: 'cell averages without the size of their cells',
+    expected: `columns ${expected}, or the box of the problem and the cells per direction of the grid`,
+  }]);
 }
 
 /** What the first reading found to be free in each field: the constant or the factor that fits best. */

@@ -89,7 +89,7 @@ export async function readGridFile(ctx: JobContext, gridId: string, reader: Grid
     const { bound, grid, upload } = reading;
     const result = await readNorms({
       definition: caseDefinitionSchema.parse(bound.case_definition), problem: problemDefinitionSchema.parse(bound.problem_definition), mapping,
-      t: definitionOf(grid).t, statedSha256: upload.stated_sha256,
+      t: definitionOf(grid).t, cellsPerDirection: definitionOf(grid).cellsPerDirection, statedSha256: upload.stated_sha256,
     }, (asked) => reader.read({ storageKey: upload.storage_key, bytes: Number(upload.bytes) }, asked, onProgress));
     // As it was when it was received or last read: other bytes are a fault of storage, and not to be believed.
     if (upload.sha256 !== null && upload.sha256 !== result.sha256) throw new Error(`Storage gave a file with SHA-256 ${result.sha256}; ${upload.sha256} was stored.`);

@@ -11,6 +11,7 @@ interface ToRead {
   problem: ProblemDefinition;
   mapping: ColumnMapping;
   t?: number;
+  cellsPerDirection?: number | number[];
   statedSha256: string | null;
 }
 

@@ -29,7 +29,7 @@ async function readAgain(ctx: JobContext, row: GridRow, { bound, reader }: { bou
   try {
     const result = await readNorms({
       definition: caseDefinitionSchema.parse(bound.case_definition), problem: problemDefinitionSchema.parse(bound.problem_definition),
-      mapping: mapping as unknown as ColumnMapping, t: definitionOf(row).t, statedSha256: null,
+      mapping: mapping as unknown as ColumnMapping, t: definitionOf(row).t, cellsPerDirection: definitionOf(row).cellsPerDirection, statedSha256: null,
     }, (reading) => reader.read({ storageKey: upload.storage_key, bytes: Number(upload.bytes) }, reading, () => undefined));
     const differences = result.sha256 === row.sha256 ? [] : [{ path: `${path}.sha256`, before: row.sha256, after: result.sha256 }];
     return { row: { ...row, norms: JSON.parse(JSON.stringify(result.norms)) as GridRow['norms'] }, differences };

@@ -70,6 +70,24 @@ describe('reading the fields of a case', () => {
   });
 });
 
+describe('cell averages', () => {
+  const u = problemDefinitionSchema.parse({ equation: 'none', dimension: 1, exact: { u: 'exp(x)' }, domain: { x: [0, 1] } });
+  const definition = caseDefinitionSchema.parse({ sampling: 'average', fields: [{ field: 'u', norms: [{ norm: 'L2', formalOrder: 4 }] }] });
+  const cells = Array.from({ length: 8 }, (_, i) => ({ x: (i + 0.5) / 8, mean: 8 * (Math.exp((i + 1) / 8) - Math.exp(i / 8)) }));
+  const plan = (extents: object, cellsPerDirection?: number) => planReading({ definition, problem: u, mapping: { x: 'x', weight: null, fields: { u: 'u' }, ...extents }, cellsPerDirection });
+  const L2 = async (reading: ReturnType<typeof plan>) => (await readGrid(byteSource(['x,u,dx', ...cells.map(({ x, mean }) => `${x},${mean},0.125`)].join('\n')), reading)).norms.fields[0]?.L2;
+
+  it('are compared with the average of the exact field over each cell, of stated size or uniform', async () => {
+    expect(await L2(plan({ dx: 'dx' }))).toBeLessThan(1e-11);
+    expect(await L2(plan({}, 8))).toBeLessThan(1e-11);
+    expect(await L2({ ...plan({}, 8), average: undefined })).toBeGreaterThan(1e-4);
+    expect(plan({}, 8).average).toEqual({ points: 4, extents: [0.125] });
+  });
+  it('are rejected where nothing tells the size of the cells', () => {
+    expect(() => plan({})).toThrow();
+  });
+});
+
 describe('bestScale(root means)', () => {
   it('is 1 where there is nothing to scale', () => {
     expect(bestScale({ error: 1, exact: 1, value: 0 })).toBe(1);
