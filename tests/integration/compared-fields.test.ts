@@ -3,7 +3,7 @@ import { createCaseContract } from '@/lib/domain/cases/schema';
 import { createStudyContract, getGridResultContract } from '@/lib/domain/studies/schema';
 import { ok, refused } from '@/tests/support/api';
 import { signUp, type Person } from '@/tests/support/people';
-import { awaitOutcome, putFile } from '@/tests/support/study';
+import { awaitOutcome, awaitStudy, putFile } from '@/tests/support/study';
 import { makeWork, type Work } from '@/tests/support/work';
 
 let engineer: Person;
@@ -45,6 +45,25 @@ describe('a study of files with gradients, compared fields and a free constant',
     expect(result.fields.map(({ field }) => field)).toEqual(['T', 'flux']);
     expect(result.gradients).toMatchObject([{ field: 'T', H1: expect.closeTo(1 / 64, 3) as number }]);
     expect(result.mapping.fields.T).toEqual(['T', 'T_x', 'T_y']);
+  });
+
+  it('compares cell averages with averages, and rejects a file that does not tell the size of its cells', async () => {
+    const made = await ok(engineer, createCaseContract, { body: {
+      code: work.code.slug, problem: work.problem.slug, name: 'Heat, cell averages', kind: 'order', sampling: 'average',
+      fields: [{ field: 'T', norms: [second('L2')] }],
+    } });
+    const study = await ok(engineer, createStudyContract, { body: { case: made.slug, release: '1.0.0', grids: [{ label: 'n8', cellsPerDirection: 8 }, { label: 'n16', cells: 256 }] } });
+    const mean = (i: number, n: number) => (n / Math.PI) * (Math.cos((Math.PI * i) / n) - Math.cos((Math.PI * (i + 1)) / n));
+    const averages = (n: number) => Buffer.from(`${['x,y,w,T', ...Array.from({ length: n * n }, (_, at) => {
+      const [i, j] = [at % n, Math.floor(at / n)];
+      return [(i + 0.5) / n, (j + 0.5) / n, n ** -2, mean(i, n) * mean(j, n) + (0.5 * (i + 0.5)) / n].join(',');
+    })].join('\n')}\n`);
+    await putFile(engineer, { id: study.id, label: 'n8' }, averages(8));
+    await putFile(engineer, { id: study.id, label: 'n16' }, averages(16));
+    const { grids } = await awaitStudy(engineer, study.id, (found) => found.grids.every(({ state }) => state === 'read' || state === 'rejected'));
+    expect(grids.find(({ label }) => label === 'n16')?.upload?.reasons).toMatchObject([{ code: 'column-missing' }]);
+    const { fields } = await ok(engineer, getGridResultContract, { params: { id: study.id, label: 'n8' } });
+    expect(fields[0]?.L2).toBeLessThan(1e-6);
   });
 
   it('answers 422 naming the character of a comparison that cannot be read', async () => {

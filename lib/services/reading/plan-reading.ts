@@ -52,10 +52,9 @@ function uniformExtents({ domain = {}, dimension }: ProblemDefinition, mapping: 
     return side === undefined || count === undefined ? [] : [(side[1] - side[0]) / count];
   });
   if (sizes.length === dimension) return sizes;
-  const expected = ['dx', 'dy', 'dz'].slice(0, dimension).join(', ');
   throw new RejectedFile([{
-    code: 'column-missing', count: 1, line: null, column: null, found: 'cell averages without the size of their cells',
-    expected: `columns ${expected}, or the box of the problem and the cells per direction of the grid`,
+    code: 'column-missing', count: dimension, line: null, column: null,
+    found: 'neither sizes of cells nor, with the box of the problem, cells per direction of the grid', expected: ['dx', 'dy', 'dz'].slice(0, dimension).join(', '),
   }]);
 }
 
