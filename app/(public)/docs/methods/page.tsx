@@ -4,6 +4,8 @@ import { PublicPage } from '@/app/_components/public/public-page';
 import { Formula } from '@/app/_components/ui/formula';
 import { OutcomeWord } from '@/app/_components/ui/outcome-word';
 import { PageTitle } from '@/app/_components/ui/page-title';
+import { procedureNames, procedureSources } from '@/lib/domain/assessment/explain-procedure';
+import { procedures } from '@/lib/numerics/assessment';
 import { findHome } from '@/app/_server/visit';
 import { Section } from '@/app/_components/ui/section';
 import { NormSymbol, Sym } from '@/app/_components/ui/symbols';
@@ -49,6 +51,15 @@ export default async function MethodsPage() {
           <Formula tex="\varphi_0 = \frac{r_{21}^{\,p}\varphi_1 - \varphi_2}{r_{21}^{\,p}-1}" />
           <Formula tex="\mathrm{GCI} = F_s\,\frac{|(\varphi_1-\varphi_2)/\varphi_1|}{r_{21}^{\,p}-1}" />
           <p>The safety factor is 1.25 with an order observed on three grids, and 3 with two grids and the formal order. Where values oscillate or the order is not positive, half their range is given instead.</p>
+        </div>
+      </Section>
+      <Section heading="Procedures" note={procedures.map((procedure) => <p key={procedure}><b>{procedureNames[procedure]}.</b> {procedureSources[procedure]}</p>)}>
+        <div className={prose}>
+          <p><b>Three-grid.</b> The observed order of the three finest grids, with a safety factor of 1.25.</p>
+          <p><b>Guarded order.</b> Within 10 % of the formal order, that and a factor of 1.25; otherwise a factor of 3 and the observed order, kept between 0.5 and the formal one.</p>
+          <p><b>Least squares.</b> A fit over all grids, four or more; its uncertainty is called U. Made for nominally second-order codes.</p>
+          <p><b>Correction factor.</b> U from how far the observed order is from the formal one.</p>
+          <p>Two grids show no order: the formal one is taken with a factor of 3, whatever the procedure.</p>
         </div>
       </Section>
       <Section heading="Outcome" note={<><p>A pass needs the last two orders in the band, and errors that still fall.</p><p>A plateau is evidence. It is never left out.</p></>}>
