@@ -1,12 +1,19 @@
 import { sha256 } from '@noble/hashes/sha2.js';
 import { toHex } from './fingerprint';
 
-const chunk = 4 * 1024 * 1024;
+const chunk = 1024 * 1024;
 
-/** Reads the file once, a piece at a time, beside whoever sends it. */
+/** Reads the file once, beside whoever sends it, always into the same memory: a file may be larger than all there is. */
 async function hash(file: Blob): Promise<void> {
   const sum = sha256.create();
-  for (let from = 0; from < file.size; from += chunk) sum.update(new Uint8Array(await file.slice(from, from + chunk).arrayBuffer()));
+  const reader = file.stream().getReader({ mode: 'byob' });
+  let memory = new Uint8Array(chunk);
+  for (;;) {
+    const { value, done } = await reader.read(memory);
+    if (value) sum.update(value);
+    if (done) break;
+    memory = new Uint8Array(value.buffer);
+  }
   self.postMessage({ sha256: toHex(sum.digest()) });
 }
 
