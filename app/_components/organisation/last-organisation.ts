@@ -2,7 +2,7 @@ const cookieName = 'fourfold_organisation';
 const yearSeconds = 365 * 24 * 3600;
 
 /** The organisation somebody worked in last, from the cookies of a request or of the page; only a hint where to go on. */
-export function lastOrganisation(cookies: string): string | null {
+function lastOrganisation(cookies: string): string | null {
   return new RegExp(`(?:^|; ?)${cookieName}=([a-z0-9-]+)`).exec(cookies)?.[1] ?? null;
 }
 

@@ -19,4 +19,3 @@ export const letterFactsSchema = z.discriminatedUnion('kind', [
 export type LetterFacts = z.infer<typeof letterFactsSchema>;
 
 export const mailKindSchema = z.enum(['invitation', 'password-reset', 'password-changed', 'membership-changed', 'study-failed']);
-export type MailKind = z.infer<typeof mailKindSchema>;

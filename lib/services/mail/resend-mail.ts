@@ -12,7 +12,7 @@ import { mapMail } from './map-mail';
 const sendingMilliseconds = 2 * 60_000;
 
 /** Queues a mail once more, as a message of its own. */
-export async function queueAgain(trx: Trx, mail: MailRow): Promise<MailRow | undefined> {
+async function queueAgain(trx: Trx, mail: MailRow): Promise<MailRow | undefined> {
   const { id, organisation_id: organisationId } = mail;
   const changes = { state: 'queued', resends: mail.resends + 1, fault: null, claimed_at: null, sent_at: null };
   const queued = await updateMail(trx, { organisationId, id, from: [mail.state] }, changes);
