@@ -2,3 +2,4 @@
 import './peer-address.mjs';
 import './draining.mjs';
 import './request-record.mjs';
+import './slow-clients.mjs';

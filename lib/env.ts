@@ -26,6 +26,13 @@ const envSchema = z.object({
   METRICS_TOKEN: z.string().min(16).optional().describe('Whoever sends it as a bearer token may read the metrics. Unless set, only the machine itself may.'),
   METRICS_PORT: port.optional().describe('Where a worker serves its metrics: on 127.0.0.1, or with METRICS_TOKEN on every address. Unless set it serves none.'),
   WORKER_THREADS: z.coerce.number<string>().int().min(1).max(64).optional().describe('Files a worker reads at once. Unless set, one for each processor.'),
+  BODY_SECONDS: seconds(1).default(30).describe('How long a client may send nothing of a body, or too little of it, before it is refused.'),
+  IDLE_READER_SECONDS: seconds(1).default(60).describe('How long a client may take nothing of an answer before its connection is ended.'),
+  TOKEN_REQUESTS_A_MINUTE: z.coerce.number<string>().int().min(1).default(600).describe('Requests a token may make in a minute.'),
+  PERSON_REQUESTS_A_MINUTE: z.coerce.number<string>().int().min(1).default(3000).describe('Requests a person signed in may make in a minute, all sessions together.'),
+  READ_STALL_SECONDS: seconds(1).default(30).describe('How long storage may send nothing of a file that is read before the reading is given up and tried again.'),
+  READ_MEMORY_MB: z.coerce.number<string>().int().min(16).default(256).describe('Memory of a thread that reads a file, without its columns of numbers. A file that needs more is rejected.'),
+  READ_COMPUTE_SECONDS: seconds(1).default(120).describe('Computing time a file may take at least. A second is added for every 2 MB of it.'),
   DRAIN_SECONDS: seconds(1).default(8).describe('How long a web process that is told to end waits for requests in flight. Whoever stops it must wait two seconds longer.'),
 });
 

@@ -7,6 +7,7 @@ export const errorTable = {
   'not-allowed': { status: 403, title: 'Not allowed' },
   'foreign-origin': { status: 403, title: 'Sent from another site' },
   'not-found': { status: 404, title: 'Not found' },
+  'too-slow': { status: 408, title: 'Sent too slowly' },
   'wrong-state': { status: 409, title: 'Not possible in this state' },
   'already-exists': { status: 409, title: 'Already there' },
   'request-in-flight': { status: 409, title: 'The same request is still being answered' },

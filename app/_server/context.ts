@@ -6,6 +6,7 @@ import { readEnv, type Env } from '@/lib/env';
 import { createLogger } from '@/lib/platform/logger';
 import { createQueueCounts } from '@/lib/platform/queue-counts';
 import { createRateLimits } from '@/lib/platform/rate-limits';
+import { createRequestLimits, type RequestLimits } from '@/lib/platform/request-limits';
 import { openRedis } from '@/lib/platform/redis';
 import { createSessions, type Sessions } from '@/lib/platform/sessions';
 import { createStorage } from '@/lib/platform/storage';
@@ -22,6 +23,7 @@ interface Server {
   pool: Pool;
   redis: Redis;
   metrics: WebMetrics;
+  requests: RequestLimits;
   countQueue: () => Promise<Record<string, number>>;
 }
 
@@ -46,8 +48,9 @@ function openServer(): Server {
   };
   const metrics = createWebMetrics(pool);
   watchRequests(log, metrics);
+  const requests = createRequestLimits({ redis, log, aMinute: { token: env.TOKEN_REQUESTS_A_MINUTE, person: env.PERSON_REQUESTS_A_MINUTE } });
   return {
-    env, context, sessions: createSessions(pool, env.PUBLIC_URL.startsWith('https:')), pool, redis, metrics, countQueue: createQueueCounts(redis, log),
+    requests, env, context, sessions: createSessions(pool, env.PUBLIC_URL.startsWith('https:')), pool, redis, metrics, countQueue: createQueueCounts(redis, log),
   };
 }
 

@@ -5,6 +5,9 @@ const heartbeatMilliseconds = 15_000;
 /** What a page waits before it asks again, when this process ends and another is there. */
 const comeBackMilliseconds = 500;
 
+/** What waits for a reader who does not take it; beyond, the stream ends and the page, if it lives, comes again. */
+const mostWaiting = 256 * 1024;
+
 type Send = (event: string, data: string) => void;
 
 /**
@@ -15,12 +18,14 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
   const encoder = new TextEncoder();
   let stream: ReadableStreamDefaultController<Uint8Array> | null = null;
   let early: Uint8Array[] = [];
+  let dropReader = (): void => undefined;
   const ended = new AbortController();
   const isLeft = AbortSignal.any([signal, ended.signal]);
   const write = (text: string) => {
     const bytes = encoder.encode(text);
-    if (stream) stream.enqueue(bytes);
-    else early.push(bytes);
+    if (!stream) early.push(bytes);
+    else if ((stream.desiredSize ?? 0) > 0) stream.enqueue(bytes);
+    else dropReader();
   };
 
   const draining = drainSignal();
@@ -36,6 +41,11 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
       stream = null;
       early = [];
       stop();
+    };
+    dropReader = () => {
+      const slow = stream;
+      end();
+      slow?.error(new Error('The reader of the events does not take them.'));
     };
     function leave(): void {
       const ending = stream;
@@ -57,7 +67,7 @@ export function eventStream(signal: AbortSignal, headers: Headers, begin: (send:
         draining.addEventListener('abort', takeLeave);
       },
       cancel: end,
-    });
+    }, new ByteLengthQueuingStrategy({ highWaterMark: mostWaiting }));
     headers.set('content-type', 'text/event-stream; charset=utf-8');
     headers.set('cache-control', 'no-store, no-transform');
     headers.set('x-accel-buffering', 'no');

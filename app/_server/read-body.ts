@@ -1,24 +1,38 @@
 import 'server-only';
 import { z } from 'zod';
 import { faultMessage } from '@/lib/domain/api/fault-message';
+import { findJsonExcess, jsonBounds, type JsonExcess } from '@/lib/domain/api/json-bounds';
 import { isStorable } from '@/lib/domain/api/storable-text';
 import { AppError, type FieldProblem } from '@/lib/errors';
+import { paceOfJson, timelyBody } from './timely-body';
 
 // A script reads the same sentences as a person at a form.
 z.config({ customError: faultMessage });
 
 const jsonLimit = 1024 * 1024;
 
-async function readText(request: Request): Promise<string> {
+function refuseExcess({ what, byte }: JsonExcess): AppError {
+  const at = `at byte ${byte}`;
+  switch (what) {
+    case 'depth': return new AppError('bad-request', `The body is nested deeper than ${jsonBounds.depth} levels ${at}. No call takes more than a few: send it flatter.`);
+    case 'members': return new AppError('too-large', `The body holds more than ${jsonBounds.members} members and values, which is passed ${at}. Send it in several calls, or tables as files.`);
+    case 'text': return new AppError('too-large', `The text that begins ${at} is longer than ${jsonBounds.text} characters. Shorten it.`);
+  }
+}
+
+async function readText(request: Request, seconds: number): Promise<string> {
   if (!request.body) return '';
   const chunks: Uint8Array[] = [];
   let bytes = 0;
-  for await (const chunk of request.body as unknown as AsyncIterable<Uint8Array>) {
+  for await (const chunk of timelyBody(request.body as unknown as AsyncIterable<Uint8Array>, paceOfJson(seconds))) {
     bytes += chunk.length;
     if (bytes > jsonLimit) throw new AppError('too-large', 'The body is over 1 MiB. Send files to the data or upload call of a grid.');
     chunks.push(chunk);
   }
-  return Buffer.concat(chunks).toString('utf8');
+  const whole = Buffer.concat(chunks);
+  const excess = findJsonExcess(whole);
+  if (excess) throw refuseExcess(excess);
+  return whole.toString('utf8');
 }
 
 /** What zod found, each with the path of the member it is about. */
@@ -34,14 +48,14 @@ function storable(key: string, value: unknown): unknown {
   throw new AppError('invalid', `${isStorable(key) ? key : 'A name in the body'}: ${message}`, { fields: [{ path: isStorable(key) ? key : '', message }] });
 }
 
-export async function readJson(request: Request): Promise<{ text: string; value: unknown }> {
-  const text = await readText(request);
+/** The body as JSON, within bounds of size, shape and time: `seconds` without a byte end it. */
+export async function readJson(request: Request, seconds: number): Promise<{ text: string; value: unknown }> {
+  const text = await readText(request, seconds);
   if (text === '') return { text, value: undefined };
   try {
     return { text, value: JSON.parse(text, storable) as unknown };
   } catch (cause) {
     if (cause instanceof AppError) throw cause;
-    if (cause instanceof RangeError) throw new AppError('bad-request', 'The body is nested deeper than anything that could be meant.', { cause });
     throw new AppError('bad-request', `The body is not JSON: ${cause instanceof Error ? cause.message : 'unreadable'}.`, { cause });
   }
 }

@@ -85,13 +85,14 @@ function toResponse(status: number, body: unknown, headers: Headers): Response {
 }
 
 async function answer<C extends ContractShape>(contract: C, handler: Handler<C>, request: Request, route: RouteArguments): Promise<Response> {
-  const { env } = getServer();
+  const { env, requests } = getServer();
   const url = new URL(request.url);
   const headers = new Headers({ 'cache-control': 'no-store' });
   const hasCookie = request.headers.has('cookie') && !request.headers.has('authorization');
   if (contract.method !== 'GET') requireSameOrigin(request, env.PUBLIC_URL, hasCookie);
 
   const caller = contract.access === 'public' ? null : await identify(request.headers);
+  if (caller) await requests.count(caller.user.token ? { kind: 'token', id: caller.user.token.id } : { kind: 'person', id: caller.user.userId });
   const ctx = await contextFor(contract, caller, url);
   const params = (await route.params) ?? {};
   requireStorable([...Object.values(params), ...url.searchParams.values()]);
@@ -101,7 +102,7 @@ async function answer<C extends ContractShape>(contract: C, handler: Handler<C>,
   let text = '';
   let body: unknown;
   if (contract.body) {
-    const read = await readJson(request);
+    const read = await readJson(request, env.BODY_SECONDS);
     const parsed = contract.body.safeParse(read.value);
     if (!parsed.success) throw invalid(parsed.error);
     ({ text } = read);

@@ -5,7 +5,7 @@ import { root } from './places.mjs';
 
 const FOLDERS = ['app', 'lib', 'db', 'worker', 'public'];
 /** What is loaded before the web server. */
-export const startFiles = ['web-start.mjs', 'peer-address.mjs', 'draining.mjs', 'request-record.mjs'];
+export const startFiles = ['web-start.mjs', 'peer-address.mjs', 'draining.mjs', 'request-record.mjs', 'slow-clients.mjs'];
 // Root files that no build reads, or that the build itself writes.
 const NOT_BUILT = new Set(['vitest.config.ts', 'eslint.config.mjs', 'knip.json', 'next-env.d.ts']);
 

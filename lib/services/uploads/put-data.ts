@@ -51,6 +51,7 @@ async function* unbroken(body: AsyncIterable<Uint8Array>): AsyncGenerator<Uint8A
   try {
     yield* body;
   } catch (cause) {
+    if (cause instanceof AppError) throw cause;
     throw new AppError('bad-request', 'The body broke off. Nothing was kept; send the file again.', { cause });
   }
 }
