@@ -23,7 +23,7 @@ const env = readEnv(process.env);
 const connections = openWorkerContext(env);
 const { context, log, redis, adding, openListener } = connections;
 const threads = env.WORKER_THREADS ?? os.availableParallelism();
-const pool = createThreadPool(threads);
+const pool = createThreadPool(threads, { memoryMb: env.READ_MEMORY_MB, silenceSeconds: 4 * env.READ_STALL_SECONDS });
 const metrics = createWorkerMetrics(connections.pool);
 // The queue sends its first command as it is made; on a connection that is not ready that fails for good.
 if (adding.status !== 'ready') await new Promise<void>((resolve) => adding.once('ready', resolve));

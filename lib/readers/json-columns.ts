@@ -1,3 +1,4 @@
+import { refuseManyColumns } from './column-limit';
 import { createJsonStructure, type JsonScalar, type JsonStructure } from './json-structure';
 import { rejectAtOnce, type ReasonCollector } from './reason-collector';
 
@@ -41,6 +42,7 @@ export function createJsonColumns(begin: (name: string, column: number) => Colum
       if (depth === 1 && kind === 'object' && name === 'columns') columnDepth = 2;
       else if (depth === columnDepth && kind === 'array' && !inColumn) {
         header.push(name);
+        refuseManyColumns(header.length);
         inColumn = true;
         row = 0;
         sink = begin(name, header.length);

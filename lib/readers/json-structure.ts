@@ -17,6 +17,7 @@ export interface JsonStructure {
 
 type Expected = 'a value' | 'a value or “]”' | 'a name or “}”' | 'a name' | '“:”' | '“,” or the end of the list' | 'the end of the file';
 const longestScalar = 64 * 1024;
+const deepest = 64;
 const inScalar = /[-+.\w]/;
 const isScalarByte = Uint8Array.from({ length: 256 }, (_, byte) => Number(byte < 128 && inScalar.test(String.fromCharCode(byte))));
 
@@ -37,6 +38,7 @@ export function createJsonStructure(events: JsonEvents, reasons: ReasonCollector
     const found = String.fromCharCode(byte);
     if (found === '{' || found === '[') {
       if (!wantsValue()) fail(`“${found}”`);
+      if (stack.length >= deepest) fail(`more than ${deepest} lists inside each other`);
       const kind = found === '{' ? 'object' : 'array';
       stack.push(kind);
       expected = kind === 'object' ? 'a name or “}”' : 'a value or “]”';

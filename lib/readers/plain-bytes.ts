@@ -1,5 +1,6 @@
 import { Readable, pipeline } from 'node:stream';
 import { createGunzip } from 'node:zlib';
+import { createExpansionLimit } from './expansion-limit';
 import { RejectedFile } from './rejected-file';
 import type { ByteSource } from './source';
 
@@ -36,21 +37,27 @@ async function* rejoin(head: Buffer, iterator: AsyncIterator<Uint8Array>): Async
 
 async function* decompress(chunks: AsyncGenerator<Buffer, void>): AsyncGenerator<Buffer, void> {
   const gunzip = createGunzip({ chunkSize: 256 * 1024 });
+  const limit = createExpansionLimit();
+  async function* counted(): AsyncGenerator<Buffer, void> {
+    for await (const chunk of chunks) {
+      limit.noteStored(chunk.length);
+      // The stream holds on to what it is given, while a source may use its buffer again.
+      yield Buffer.from(chunk);
+    }
+  }
   // What goes wrong in the source destroys the stream with that error, and the loop below throws it.
-  pipeline(Readable.from(copies(chunks)), gunzip, () => undefined);
+  pipeline(Readable.from(counted()), gunzip, () => undefined);
   try {
-    for await (const chunk of gunzip) yield chunk as Buffer;
+    for await (const chunk of gunzip as AsyncIterable<Buffer>) {
+      limit.noteExpanded(chunk.length);
+      yield chunk;
+    }
   } catch (error) {
     if (!isGzipDamage(error)) throw error;
     throw new RejectedFile([{
       code: 'damaged-gzip', count: 1, line: null, column: null, found: error.message, expected: 'a complete gzip file',
     }]);
   }
-}
-
-/** The stream holds on to what it is given, while a source may use its buffer again. */
-async function* copies(chunks: AsyncGenerator<Buffer, void>): AsyncGenerator<Buffer, void> {
-  for await (const chunk of chunks) yield Buffer.from(chunk);
 }
 
 function isGzipDamage(error: unknown): error is Error {

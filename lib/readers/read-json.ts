@@ -57,7 +57,10 @@ export async function readJson(chunks: AsyncIterable<Buffer>, { wanted, reasons,
     });
   }
   reasons.throwIfAny();
-  deliver(found, rows, onBatch);
+  deliver(found, rows, (batch) => {
+    onBatch(batch);
+    onChunk();
+  });
   return { columns: found.map((spool, slot) => ({ index: indices[slot] ?? 0, significantDigits: spool.digits() })) };
 }
 

@@ -7,6 +7,8 @@ import type { ByteSource, SourcePreview } from './source';
 import { detectTableDialect } from './table-dialect';
 
 const shownRows = 10;
+/** A value is shown so far, in bytes. */
+const shownBytes = 200;
 
 /**
  * The header and first rows of a file. Of a table only the beginning is read; of JSON all of it, since its columns stand
@@ -30,7 +32,7 @@ async function previewJson(head: Buffer, rest: AsyncIterable<Buffer>): Promise<O
     const values: string[] = [];
     first.push(values);
     return (kind, bytes, from, to) => {
-      if (values.length < shownRows) values.push(kind === 'list' ? '[ … ]' : bytes.toString('utf8', from, to));
+      if (values.length < shownRows) values.push(kind === 'list' ? '[ … ]' : bytes.toString('utf8', from, Math.min(to, from + shownBytes)));
     };
   }, createReasonCollector());
   columns.push(head[0] === 0xef ? head.subarray(3) : head);

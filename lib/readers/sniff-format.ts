@@ -12,6 +12,7 @@ const signatures: readonly { bytes: string; name: string }[] = [
   { bytes: 'CDF\x05', name: 'netCDF' },
   { bytes: '\x93NUMPY', name: 'a numpy array' },
   { bytes: 'PK\x03\x04', name: 'a ZIP archive or a spreadsheet' },
+  { bytes: '\x1f\x8b', name: 'a compressed file inside another' },
   { bytes: 'BZh', name: 'bzip2' },
   { bytes: '\xfd7zXZ', name: 'xz' },
   { bytes: '\x28\xb5\x2f\xfd', name: 'Zstandard' },

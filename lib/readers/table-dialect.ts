@@ -1,3 +1,4 @@
+import { refuseManyColumns } from './column-limit';
 import { parseNumber, type NumberReading } from './parse-number';
 import type { Head } from './read-head';
 import { RejectedFile } from './rejected-file';
@@ -36,6 +37,7 @@ export function detectTableDialect(head: Head): TableDialect {
   }
   const delimiter = detectDelimiter(content);
   const fields = splitFields(first.text, delimiter);
+  refuseManyColumns(fields.length);
   const names = (text: string, row: NumberedLine | undefined) => splitNames(text, delimiter, row ? splitFields(row.text, delimiter).length : null);
   const rows = (lines: NumberedLine[]) => lines.slice(0, shownRows).map((line) => splitFields(line.text, delimiter));
   if (!fields.some(isNumeric) && fields.some((field) => field !== '')) {

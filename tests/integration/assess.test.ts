@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { procedures } from '@/lib/numerics/assessment';
 import { assessContract } from '@/lib/domain/assessment/quick-schema';
 import { readReference } from '../checks/reference';
 import { ok, refused } from '../support/api';
@@ -103,5 +104,17 @@ describe('POST /api/v1/assess', () => {
     const grids = [1, 2, 4, 8].map((n) => ({ h: 1 / n, errors: { H1: 0.3 / n, energy: 0.1 / n } }));
     const { fields } = await ok(null, assessContract, { body: { grids, formalOrder: 1 } });
     expect(fields.map(({ norm, outcome }) => [norm, outcome])).toEqual([['H1', 'pass'], ['energy', 'pass']]);
+  });
+});
+
+describe('POST /api/v1/assess, at its largest', () => {
+  it('answers every procedure on fifty grids in far less than a second', async () => {
+    const grids = Array.from({ length: 50 }, (_, index) => ({ h: 0.001 * 1.3 ** index, value: 1 + 1e-5 * 1.3 ** index * Math.sin(index) }));
+    for (const procedure of procedures) {
+      const begun = performance.now();
+      await ok(null, assessContract, { body: { grids, formalOrder: 2, target: 0.01, procedure } });
+      expect(performance.now() - begun).toBeLessThan(1000);
+    }
+    expect((await refused(null, assessContract, { body: { grids: [...grids, { h: 1000, value: 1 }] } })).status).toBe(422);
   });
 });

@@ -50,12 +50,25 @@ describe('requests that no database could take', () => {
     expect(await ok(person, createCodeContract, { body: { name: 'Long key' }, headers: key(255) })).toEqual(first);
   });
 
-  it('refuses JSON nested deeper than anything it knows', async () => {
+  it('refuses JSON nested deeper than anything it knows, or of more members or longer texts', async () => {
     const headers = { 'content-type': 'application/json' };
-    expect(await refused(person, createCodeContract, { body: `{"name":${'['.repeat(200_000)}${']'.repeat(200_000)}}`, headers }))
-      .toMatchObject({ status: 400, detail: expect.stringContaining('nested deeper') as string });
+    const refusal = (value: string) => refused(person, createCodeContract, { body: `{"name":${value}}`, headers });
+    expect(await refusal(`${'['.repeat(200_000)}${']'.repeat(200_000)}`))
+      .toMatchObject({ status: 400, detail: 'The body is nested deeper than 32 levels at byte 40. No call takes more than a few: send it flatter.' });
+    expect(await refusal(`[${'0,'.repeat(60_000)}0]`)).toMatchObject({ status: 413, detail: expect.stringContaining('more than 50000 members and values') as string });
+    expect(await refusal(`"${'a'.repeat(100_001)}"`)).toMatchObject({ status: 413, detail: 'The text that begins at byte 9 is longer than 100000 characters. Shorten it.' });
     expect((await refused(person, createProblemContract, { body: '{"name":"n","equation":"none","dimension":1,"constants":{"k":1e999}}', headers })))
       .toMatchObject({ status: 422, errors: [{ path: 'constants.k' }] });
+  });
+
+  it('refuses expressions that would keep it busy, and at once', async () => {
+    const refusal = (constants: Record<string, string>) => refused(person, createProblemContract, { body: { name: 'Busy', equation: 'none', dimension: 1, constants } });
+    const many = (count: number, source: (index: number) => string) => Object.fromEntries(Array.from({ length: count }, (_, index) => [`c${index}`, source(index)]));
+    const begun = performance.now();
+    expect(await refusal(many(20_000, () => 'q'))).toMatchObject({ status: 422, detail: expect.stringContaining('at most 300 are read') as string });
+    expect(await refusal(many(200, (index) => (index === 199 ? 'x' : `c${index + 1}`)))).toMatchObject({ status: 422, errors: expect.any(Array) as [] });
+    expect(await refusal({ a: `${'('.repeat(500)}x${')'.repeat(500)}` })).toMatchObject({ status: 422, detail: expect.stringContaining('100 parentheses') as string });
+    expect(performance.now() - begun).toBeLessThan(3000);
   });
 });
 

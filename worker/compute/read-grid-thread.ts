@@ -6,36 +6,45 @@ import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { ReadProgress } from '@/lib/readers/source';
+import { createComputeLimit } from './compute-limit';
+import { steadySource } from './steady-source';
 import { openTableHelper } from './table-helper';
 import type { GivenTask, ThreadMessage, ThreadResult } from './thread-messages';
 import { wholeFile } from './whole-file';
 
 const toldEveryMilliseconds = 200;
+const aliveEveryMilliseconds = 1000;
 
 if (!parentPort) throw new Error('read-grid-thread runs as a worker thread only.');
 const port = parentPort;
-const storage = createStorage(storageOptionsOf(readEnv(process.env)));
+const env = readEnv(process.env);
+const storage = createStorage(storageOptionsOf(env));
 const tell = (message: ThreadMessage) => port.postMessage(message);
 
-/** Passes progress on five times a second at most. */
-function sparingly(): (progress: ReadProgress) => void {
+/** Does it at most so often. */
+function sparingly<Parts extends unknown[]>(milliseconds: number, tellOf: (...parts: Parts) => void): (...parts: Parts) => void {
   let toldAt = 0;
-  return (progress) => {
-    if (Date.now() - toldAt < toldEveryMilliseconds) return;
+  return (...parts) => {
+    if (Date.now() - toldAt < milliseconds) return;
     toldAt = Date.now();
-    tell({ type: 'progress', progress });
+    tellOf(...parts);
   };
 }
 
 async function run(task: GivenTask): Promise<ThreadResult> {
-  const source = await storage.read(task.storageKey);
-  try {
-    if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source) };
-    const openHelper = task.mayHaveHelp ? openTableHelper : undefined;
-    return { kind: 'read', result: await readGrid(wholeFile(source, task.bytes), task.reading, { onProgress: sparingly(), openHelper }) };
-  } finally {
-    source.destroy();
-  }
+  const source = steadySource({
+    open: (signal) => storage.read(task.storageKey, signal), stallSeconds: env.READ_STALL_SECONDS,
+    onPiece: sparingly(aliveEveryMilliseconds, () => tell({ type: 'alive' })),
+  });
+  if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source) };
+  const openHelper = task.mayHaveHelp ? openTableHelper : undefined;
+  const limit = createComputeLimit(env.READ_COMPUTE_SECONDS, task.bytes);
+  const tellProgress = sparingly(toldEveryMilliseconds, (progress: ReadProgress) => tell({ type: 'progress', progress }));
+  const onProgress = (progress: ReadProgress) => {
+    limit(progress);
+    tellProgress(progress);
+  };
+  return { kind: 'read', result: await readGrid(wholeFile(source, task.bytes), task.reading, { onProgress, openHelper }) };
 }
 
 port.on('message', (task: GivenTask) => {

@@ -11,8 +11,9 @@ export type GivenTask = ThreadTask & { mayHaveHelp: boolean };
 
 export type ThreadResult = { kind: 'preview'; preview: SourcePreview } | { kind: 'read'; result: GridReadResult };
 
-/** What a thread says; every task ends in one message other than progress. */
+/** What a thread says; every task ends in one message of the last three. */
 export type ThreadMessage =
+  | { type: 'alive' }
   | { type: 'progress'; progress: ReadProgress }
   | { type: 'done'; result: ThreadResult }
   | { type: 'rejected'; reasons: RejectionReason[] }

@@ -15,17 +15,30 @@ export interface ThreadPool {
   close(): Promise<void>;
 }
 
+export interface ThreadLimits {
+  /** Of what a thread holds beside columns of numbers. */
+  memoryMb: number;
+  /** A thread that has said nothing for so long is ended: it goes round in circles. */
+  silenceSeconds: number;
+}
+
 /** Beside the bundled main file, or beside this source. */
-function threadFile(): URL {
+function readingThread(): URL {
   const isSource = new URL(import.meta.url).pathname.endsWith('.ts');
   return isSource ? new URL('./read-grid-thread.ts', import.meta.url) : new URL('./compute/read-grid-thread.mjs', import.meta.url);
+}
+
+function outOfMemory({ memoryMb }: ThreadLimits): RejectedFile {
+  return new RejectedFile([{
+    code: 'too-much-memory', count: 1, line: null, column: null, found: `more than ${memoryMb} MB of memory`, expected: 'a file that can be read piece by piece',
+  }]);
 }
 
 /**
  * Threads that are started when first needed and used again; tasks wait in line for the next free one. What nothing
  * needed for a while ends, and gives its memory back.
  */
-export function createThreadPool(size: number): ThreadPool {
+export function createThreadPool(size: number, limits: ThreadLimits, file = readingThread()): ThreadPool {
   const idle: Worker[] = [];
   const all = new Set<Worker>();
   const queue: Waiting[] = [];
@@ -42,7 +55,7 @@ export function createThreadPool(size: number): ThreadPool {
   }
 
   function start(): Worker {
-    const thread = new Worker(threadFile());
+    const thread = new Worker(file, { resourceLimits: { maxOldGenerationSizeMb: limits.memoryMb } });
     all.add(thread);
     // Between tasks an error ends in the exit below; within one it is heard in `give`.
     thread.on('error', () => undefined);
@@ -56,7 +69,12 @@ export function createThreadPool(size: number): ThreadPool {
   }
 
   function give(thread: Worker, { task, onProgress, resolve, reject }: Waiting): void {
+    const silence = setTimeout(() => {
+      end(() => reject(new Error(`The thread said nothing for ${limits.silenceSeconds} s while it was reading, and was ended.`)), false);
+      void thread.terminate();
+    }, limits.silenceSeconds * 1000);
     const end = (settle: () => void, isAlive: boolean) => {
+      clearTimeout(silence);
       thread.off('message', onMessage);
       thread.off('error', onError);
       thread.off('exit', onExit);
@@ -66,12 +84,14 @@ export function createThreadPool(size: number): ThreadPool {
       next();
     };
     const onMessage = (message: ThreadMessage) => {
+      silence.refresh();
+      if (message.type === 'alive') return;
       if (message.type === 'progress') onProgress(message.progress);
       else if (message.type === 'done') end(() => resolve(message.result), true);
       else if (message.type === 'rejected') end(() => reject(new RejectedFile(message.reasons)), true);
       else end(() => reject(new Error(message.message)), true);
     };
-    const onError = (error: Error) => end(() => reject(error), false);
+    const onError = (error: Error & { code?: string }) => end(() => reject(error.code === 'ERR_WORKER_OUT_OF_MEMORY' ? outOfMemory(limits) : error), false);
     const onExit = () => end(() => reject(new Error('The thread ended while it was reading.')), false);
     thread.on('message', onMessage);
     thread.once('error', onError);

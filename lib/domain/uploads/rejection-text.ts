@@ -32,6 +32,14 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`The file is not text: it contains ${found}.`, `Write ${expected}.`);
     case 'damaged-gzip':
       return text(`The compressed file cannot be unpacked: ${found}.`, 'Test it with gzip -t, compress it anew, and upload it again.');
+    case 'expands-too-far':
+      return text(`The compressed file expands to ${found}; expected ${expected}.`, 'Check that it holds one table of numbers, and upload it uncompressed or in a smaller form.');
+    case 'too-many-columns':
+      return text(`The file has ${found}; expected ${expected}.`, 'Write one column per coordinate, weight and field, with the rows below each other.');
+    case 'too-much-computing':
+      return text(`Computing was given up ${found}; expected ${expected}.`, 'Simplify the exact solution of the problem, whose expressions are computed at every row, or upload a smaller file.');
+    case 'too-much-memory':
+      return text(`The file needs ${found} to be read; expected ${expected}.`, 'Write it as a text table with one row per line, which is read piece by piece.');
     case 'checksum-differs':
       return text(`The stored bytes differ from the file that was sent: their SHA-256 is ${found}, that of the file ${expected}.`, 'Send the file again.');
     case 'malformed-json':

@@ -2,9 +2,11 @@ import { differentiate } from './differentiate';
 import { ExpressionProblem } from './expression-problem';
 import { functionNames, isFunctionName, notSmooth, otherSpelling } from './functions';
 import type { BinaryOperation, Graph, Node, Variable } from './node';
-import { parseTree, positionOf, type Tree } from './parse-tree';
+import { listNodes } from './list-nodes';
+import { positionOf, type Tree } from './parse-tree';
 
-const largestGraph = 50_000;
+/** A column of numbers is held for nearly every node while a file is read. */
+const largestGraph = 10_000;
 const operations = { '+': 'add', '-': 'subtract', '*': 'multiply', '/': 'divide', '^': 'power' } as const satisfies Record<string, BinaryOperation>;
 
 /** What names stand for where an expression is read. */
@@ -15,11 +17,19 @@ export interface Scope {
   find(name: string, position: number): Node | null;
   /** Names to offer when one is not known. */
   names(): string[];
+  /** Counts one level more of parts inside parts, through names as well; refuses what no stack of calls would hold. */
+  enter(position: number): void;
+  leave(): void;
+  /** Counts the nodes that a derivative goes through; refuses what would take too long. */
+  spend(nodes: number, position: number): void;
 }
 
-/** Builds an expression on the graph. Throws an ExpressionProblem naming the character where it is not in the grammar. */
-export function buildNode(graph: Graph, text: string, scope: Scope): Node {
-  return build(graph, parseTree(text), scope);
+/** Builds an expression on the graph. Throws an ExpressionProblem naming the character of what has no meaning. */
+export function buildNode(graph: Graph, tree: Tree, scope: Scope): Node {
+  scope.enter(tree.kind === 'leaf' ? tree.token.position : 1);
+  const node = build(graph, tree, scope);
+  scope.leave();
+  return node;
 }
 
 function build(graph: Graph, tree: Tree, scope: Scope): Node {
@@ -27,12 +37,12 @@ function build(graph: Graph, tree: Tree, scope: Scope): Node {
     case 'leaf':
       return tree.token.kind === 'number' ? graph.number(tree.token.value) : findName(tree.token.text, tree.token.position, scope);
     case 'negate':
-      return graph.unary('negate', build(graph, tree.part, scope));
+      return graph.unary('negate', buildNode(graph, tree.part, scope));
     case 'call':
       return buildCall(graph, tree, scope);
     case 'operation': {
-      const left = build(graph, tree.left, scope);
-      const right = build(graph, tree.right, scope);
+      const left = buildNode(graph, tree.left, scope);
+      const right = buildNode(graph, tree.right, scope);
       return checked(graph, graph.binary(operations[tree.operator], left, right), positionOf(tree));
     }
   }
@@ -46,7 +56,7 @@ function buildCall(graph: Graph, tree: Extract<Tree, { kind: 'call' }>, scope: S
   if (part === undefined || extra !== undefined) {
     throw new ExpressionProblem(position, `${name} takes one value and was given ${tree.parts.length}.`);
   }
-  return checked(graph, graph.unary(name, build(graph, part, scope)), position);
+  return checked(graph, graph.unary(name, buildNode(graph, part, scope)), position);
 }
 
 function buildDerivative(graph: Graph, tree: Extract<Tree, { kind: 'call' }>, scope: Scope): Node {
@@ -62,7 +72,9 @@ function buildDerivative(graph: Graph, tree: Extract<Tree, { kind: 'call' }>, sc
   if (!isDerivative && !(field.kind === 'leaf' && scope.isField(field.token.text))) {
     throw new ExpressionProblem(positionOf(field), 'Only a field, or a derivative of one, is differentiated, such as d(u, x).');
   }
-  return checked(graph, differentiate(graph, build(graph, field, scope), variable), tree.token.position);
+  const node = buildNode(graph, field, scope);
+  scope.spend(listNodes([node]).length, tree.token.position);
+  return checked(graph, differentiate(graph, node, variable), tree.token.position);
 }
 
 /** Refuses what has no finite value at any point, and what has grown beyond any use. */

@@ -3,6 +3,10 @@ import { ExpressionProblem } from './expression-problem';
 import { isFunctionName } from './functions';
 import { createGraph } from './graph';
 import type { Graph, Node, Variable } from './node';
+import { parseTree, type Tree } from './parse-tree';
+
+/** Bounds on the work of reading a set, far beyond what anybody writes: a set at all of them takes a second. */
+const most = { names: 300, characters: 100_000, levels: 2500, chain: 100, derivedNodes: 300_000, errors: 20, listed: 30 } as const;
 
 export interface ExpressionSet {
   /** Numbers, or expressions of other constants and of the coordinates. */
@@ -41,27 +45,36 @@ export function compileExpressions(set: ExpressionSet): CompileResult {
   const sources = new Map<string, string>();
   for (const [name, source] of Object.entries(set.fields)) sources.set(name, source);
   for (const [name, value] of Object.entries(set.constants)) sources.set(name, typeof value === 'number' ? literal(value) : value);
+  const excess = findExcess(sources, set.compared ?? {});
+  if (excess !== null) return { ok: false, errors: [excess] };
 
   const errors: ExpressionError[] = [];
-  const attempt = (name: string, run: () => Node): Node | null => {
+  let levels = 0;
+  let derivedNodes = 0;
+  const attempt = <T>(name: string, run: () => T): T | null => {
+    const before = levels;
     try {
       return run();
     } catch (problem) {
       if (!(problem instanceof ExpressionProblem)) throw problem;
-      errors.push({ name, position: problem.position, message: problem.message });
+      levels = before;
+      if (errors.length < most.errors) errors.push({ name, position: problem.position, message: problem.message });
       return null;
     }
   };
 
+  // All are parsed before any is built: a parser that is called from within another's parts would run out of stack.
+  const trees = new Map<string, Tree | null>();
+  for (const [name, source] of sources) trees.set(name, attempt(name, () => parseTree(source)));
   const built = new Map<string, Node | null>();
   const underWay: string[] = [];
-  const buildNamed = (name: string, source: string): Node | null => {
+  const buildNamed = (name: string, tree: Tree | null): Node | null => {
     const known = built.get(name);
     if (known !== undefined) return known;
     underWay.push(name);
-    const node = attempt(name, () => {
+    const node = tree === null ? null : attempt(name, () => {
       checkName(name, set);
-      return buildNode(graph, source, scope);
+      return buildNode(graph, tree, scope);
     });
     underWay.pop();
     built.set(name, node);
@@ -71,24 +84,36 @@ export function compileExpressions(set: ExpressionSet): CompileResult {
   const scope: Scope = {
     variables: set.variables,
     isField: (name) => Object.hasOwn(set.fields, name) && !Object.hasOwn(set.constants, name),
-    names: () => [...sources.keys(), ...set.variables, 'pi'],
+    names: () => [...[...sources.keys()].slice(0, most.listed), ...set.variables, 'pi'],
+    enter(position) {
+      levels += 1;
+      if (levels > most.levels) throw new ExpressionProblem(position, `More than ${most.levels} operations inside each other. Write it as a sum or product of shorter parts.`);
+    },
+    leave() {
+      levels -= 1;
+    },
+    spend(nodes, position) {
+      derivedNodes += nodes;
+      if (derivedNodes > most.derivedNodes) throw new ExpressionProblem(position, 'The derivatives asked for are too large to be formed. Ask for fewer, or of simpler fields.');
+    },
     find(name, position) {
-      const source = sources.get(name);
-      if (source === undefined) return findOwn(graph, name, set.variables);
+      const tree = trees.get(name);
+      if (tree === undefined) return findOwn(graph, name, set.variables);
       if (underWay.includes(name)) {
         const circle = [...underWay.slice(underWay.indexOf(name)), name].join(' → ');
         throw new ExpressionProblem(position, `This goes round in a circle: ${circle}.`);
       }
-      const node = buildNamed(name, source);
+      if (underWay.length >= most.chain) throw new ExpressionProblem(position, `More than ${most.chain} names lead from one to the next here. Put some of them together.`);
+      const node = buildNamed(name, tree);
       if (node === null) throw new ExpressionProblem(position, `${name} has an error of its own.`);
       return node;
     },
   };
 
-  for (const [name, source] of sources) buildNamed(name, source);
+  for (const [name, tree] of trees) buildNamed(name, tree);
   const compared = Object.create(null) as Record<string, Node>;
   for (const [name, source] of Object.entries(set.compared ?? {})) {
-    const node = attempt(name, () => buildNode(graph, source, scope));
+    const node = attempt(name, () => buildNode(graph, parseTree(source), scope));
     if (node !== null) compared[name] = node;
   }
   if (errors.length > 0) return { ok: false, errors };
@@ -99,6 +124,23 @@ export function compileExpressions(set: ExpressionSet): CompileResult {
     if (node) fields[name] = node;
   }
   return { ok: true, compiled: { graph, variables: set.variables, fields, compared } };
+}
+
+/** Whether there is more than is read at all, told at the first that is too much. */
+function findExcess(sources: ReadonlyMap<string, string>, compared: Readonly<Record<string, string>>): ExpressionError | null {
+  const all = [...sources, ...Object.entries(compared)];
+  const beyond = all[most.names];
+  if (beyond !== undefined) {
+    return { name: beyond[0], position: 1, message: `There are ${all.length} constants and fields; at most ${most.names} are read. Leave out what is not used.` };
+  }
+  let characters = 0;
+  for (const [name, source] of all) {
+    characters += source.length;
+    if (characters > most.characters) {
+      return { name, position: 1, message: `The expressions have more than ${most.characters} characters together. Leave out what is not used.` };
+    }
+  }
+  return null;
 }
 
 function findOwn(graph: Graph, name: string, variables: readonly Variable[]): Node | null {
