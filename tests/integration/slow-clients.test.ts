@@ -41,7 +41,7 @@ describe('a client that sends too slowly', () => {
     expect(silent).toMatchObject({ status: 408, body: { type: '/docs/problems#too-slow', detail: expect.stringContaining('8 bytes arrived') as string } });
     expect(trickling).toMatchObject({ status: 408, body: { detail: expect.stringContaining('the whole within 2 s') as string } });
     expect(file).toMatchObject({ status: 408, body: { detail: expect.stringContaining('at least 32 KiB in every 1 s') as string } });
-    expect((await ok(token, getStudyContract, { params: { id: study.id } })).grids[0]?.state).toBe('awaiting');
+    expect((await ok(token, getStudyContract, { params: { id: study.id } })).grids[0]?.state).toBe('expected');
   });
 
   it('may take as long as it likes over a file that keeps coming', async () => {
