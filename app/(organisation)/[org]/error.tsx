@@ -1,24 +1,18 @@
 'use client';
 
+import { useOrganisation } from '@/app/_components/organisation/organisation-context';
 import { OrganisationPage } from '@/app/_components/organisation/organisation-page';
-import { Button } from '@/app/_components/ui/button';
-import { Notice } from '@/app/_components/ui/notice';
+import { PageFault } from '@/app/_components/standing/page-fault';
 import { PageTitle } from '@/app/_components/ui/page-title';
 import { Section } from '@/app/_components/ui/section';
 
-interface OrganisationErrorProps { error: Error & { digest?: string }; reset: () => void }
-
-export default function OrganisationError({ error, reset }: OrganisationErrorProps) {
+export default function OrganisationError({ error }: { error: Error & { digest?: string } }) {
+  const { slug } = useOrganisation();
   return (
-    <OrganisationPage>
+    <OrganisationPage isFault>
       <Section>
         <PageTitle>This page could not be shown</PageTitle>
-        <div className="mt-6">
-          <Notice title="Not shown." actions={<Button kind="primary" onClick={reset}>Try again</Button>}>
-            Something went wrong on our side; what was saved before is safe.
-            {error.digest && <> If it happens again, quote <code className="font-mono text-code">{error.digest}</code>.</>}
-          </Notice>
-        </div>
+        <div className="mt-6"><PageFault error={error} home={`/${slug}`} homeName="Go to the release matrix" /></div>
       </Section>
     </OrganisationPage>
   );

@@ -1,12 +1,17 @@
 import type { FieldProblem } from '@/lib/errors';
 
-interface ProblemBody { title: string; status: number; detail: string; errors: FieldProblem[] }
+interface ProblemBody { type?: string; title: string; status: number; detail: string; errors: FieldProblem[] }
 
 /** What the server answered instead of a result (RFC 9457). */
 export class ApiProblem extends Error {
   constructor(readonly problem: ProblemBody) {
     super(problem.detail);
     this.name = 'ApiProblem';
+  }
+
+  /** The code of the table of problems, such as not-signed-in. */
+  get code(): string | undefined {
+    return this.problem.type?.split('#')[1];
   }
 
   static async from(response: Response): Promise<ApiProblem> {

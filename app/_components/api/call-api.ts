@@ -1,4 +1,7 @@
 import type { BodyOf, ContractShape, PathParameters, QueryOf, ResponseOf } from '@/lib/domain/api/contract';
+import { noteRefusal } from '../standing/access-watch';
+import { noteTrouble } from '../standing/service-watch';
+import { signedInAgain } from '../standing/session-gate';
 import { ApiProblem } from './api-problem';
 
 interface CallOptions<C extends ContractShape> {
@@ -25,16 +28,37 @@ export function apiAddress<C extends ContractShape>(contract: C, options: CallOp
   return `/api/v1${path}${text === '' ? '' : `?${text}`}`;
 }
 
-/** Calls the API from the browser; throws `ApiProblem` with what the server said. */
-export async function callApi<C extends ContractShape>(contract: C, options: CallOptions<C>): Promise<ResponseOf<C>> {
+async function answerTo<C extends ContractShape>(contract: C, options: CallOptions<C>): Promise<Response> {
   const headers: Record<string, string> = { accept: 'application/json' };
   if (options.body !== undefined) headers['content-type'] = 'application/json';
   if (options.revision !== undefined) headers['if-match'] = `"${options.revision}"`;
   if (options.idempotencyKey !== undefined) headers['idempotency-key'] = options.idempotencyKey;
-  const response = await fetch(apiAddress(contract, options), {
-    method: contract.method, headers, signal: options.signal,
-    body: options.body === undefined ? undefined : JSON.stringify(options.body),
-  });
-  if (!response.ok) throw await ApiProblem.from(response);
+  try {
+    return await fetch(apiAddress(contract, options), {
+      method: contract.method, headers, signal: options.signal,
+      body: options.body === undefined ? undefined : JSON.stringify(options.body),
+    });
+  } catch (error) {
+    if (error instanceof TypeError) noteTrouble();
+    throw error;
+  }
+}
+
+/**
+ * Calls the API from the browser; throws `ApiProblem` with what the server said. Where the session has ended the call waits
+ * until the same person is signed in again, and is then made once more.
+ */
+export async function callApi<C extends ContractShape>(contract: C, options: CallOptions<C>): Promise<ResponseOf<C>> {
+  let response = await answerTo(contract, options);
+  let problem = response.ok ? null : await ApiProblem.from(response);
+  if (problem?.code === 'not-signed-in' && (await signedInAgain(contract.method !== 'GET', options.signal))) {
+    response = await answerTo(contract, options);
+    problem = response.ok ? null : await ApiProblem.from(response);
+  }
+  if (problem) {
+    if (problem.problem.status === 503) noteTrouble();
+    noteRefusal(problem.problem.status, contract.access);
+    throw problem;
+  }
   return (response.status === 204 ? undefined : await response.json()) as ResponseOf<C>;
 }

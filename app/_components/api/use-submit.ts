@@ -7,9 +7,13 @@ import { ApiProblem } from './api-problem';
 
 interface SubmitProblem { title: string; status: number; detail: string; errors: FieldProblem[] }
 
-export interface Submit { onSubmit: (event?: BaseSyntheticEvent) => Promise<void>; problem: SubmitProblem | null }
+export interface Submit { onSubmit: (event?: BaseSyntheticEvent) => Promise<void>; problem: SubmitProblem | null; clear: () => void }
 
-const unreachable: SubmitProblem = { title: 'Not sent', status: 0, detail: 'The server did not answer. What you typed is still here; try again in a moment.', errors: [] };
+/** No answer at all: the reader is offline, or the server is not there. */
+const unanswered = (): SubmitProblem => ({
+  title: 'Not sent', status: 0, errors: [],
+  detail: navigator.onLine ? 'The server did not answer. What you typed is still here; try again in a moment.' : 'You are offline. What you typed is still here; send it again once the connection is back.',
+});
 
 function hasField(values: unknown, path: string): boolean {
   const [head = '', ...rest] = path.split('.');
@@ -45,9 +49,9 @@ export function useSubmit<Input extends FieldValues, Typed, Answer>({ form, send
       onDone(await send(typed));
     } catch (error) {
       if (error instanceof ApiProblem) showProblem(error.problem);
-      else if (error instanceof TypeError) setProblem(unreachable);
+      else if (error instanceof TypeError) setProblem(unanswered());
       else throw error;
     }
   });
-  return { onSubmit, problem };
+  return { onSubmit, problem, clear: () => setProblem(null) };
 }

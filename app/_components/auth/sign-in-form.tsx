@@ -1,8 +1,9 @@
 'use client';
 
 import { zodResolver } from '@hookform/resolvers/zod';
+import type { ReactNode } from 'react';
 import { useForm } from 'react-hook-form';
-import { signInContract, signInSchema } from '@/lib/domain/people/schema';
+import { signInContract, signInSchema, type Me } from '@/lib/domain/people/schema';
 import { callApi } from '../api/call-api';
 import '../api/configure-zod';
 import { useSubmit } from '../api/use-submit';
@@ -13,13 +14,21 @@ import { Button } from '../ui/button';
 import { arrivalAddress } from './arrive';
 import { goAfresh } from './go-afresh';
 
-export function SignInForm({ next }: { next: string | null }) {
-  const form = useForm({ resolver: zodResolver(signInSchema), defaultValues: { email: '', password: '' } });
+interface SignInFormProps {
+  next: string | null;
+  email?: string;
+  /** What follows, where it is not going on to a page. */
+  onSignedIn?: (me: Me) => void;
+  others?: ReactNode;
+}
+
+export function SignInForm({ next, email = '', onSignedIn = (me) => goAfresh(arrivalAddress(me, next)), others }: SignInFormProps) {
+  const form = useForm({ resolver: zodResolver(signInSchema), defaultValues: { email, password: '' } });
   const { errors, isSubmitting } = form.formState;
   const { onSubmit, problem } = useSubmit({
     form,
     send: (typed) => callApi(signInContract, { body: typed }),
-    onDone: (me) => goAfresh(arrivalAddress(me, next)),
+    onDone: onSignedIn,
   });
   return (
     <form onSubmit={onSubmit} noValidate className="max-w-80">
@@ -28,7 +37,7 @@ export function SignInForm({ next }: { next: string | null }) {
         <TextField label="Password" type="password" autoComplete="current-password" error={errors.password?.message} {...form.register('password')} />
       </div>
       <ProblemNotice problem={problem} />
-      <FormActions answer={isSubmitting ? 'Signing in.' : null}><Button kind="primary" type="submit">Sign in</Button></FormActions>
+      <FormActions answer={isSubmitting ? 'Signing in.' : null}><Button kind="primary" type="submit">Sign in</Button>{others}</FormActions>
     </form>
   );
 }

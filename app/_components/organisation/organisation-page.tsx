@@ -1,6 +1,7 @@
 'use client';
 
 import type { ReactNode } from 'react';
+import { StandingLine } from '../standing/standing-line';
 import { Page } from '../ui/page';
 import { TopBar, type PlacePart } from '../ui/top-bar';
 import { AccountMenu } from './account-menu';
@@ -12,11 +13,13 @@ interface OrganisationPageProps {
   /** Where the page is, below the organisation. */
   place?: readonly PlacePart[];
   stateLine?: ReactNode;
+  /** The page itself says what does not answer. */
+  isFault?: boolean;
   children: ReactNode;
 }
 
 /** A page of an organisation: its bar, then the sections. */
-export function OrganisationPage({ place = [], stateLine, children }: OrganisationPageProps) {
+export function OrganisationPage({ place = [], stateLine, isFault, children }: OrganisationPageProps) {
   const { slug, name } = useOrganisation();
   const home = `/${slug}`;
   const bar = (
@@ -27,5 +30,5 @@ export function OrganisationPage({ place = [], stateLine, children }: Organisati
       <AccountMenu />
     </TopBar>
   );
-  return <Page bar={bar} stateLine={stateLine}>{children}</Page>;
+  return <Page bar={<>{bar}{!isFault && <StandingLine />}</>} stateLine={stateLine}>{children}</Page>;
 }
