@@ -18,9 +18,10 @@ function withLatestRevision(db: Kysely<DB>, organisationId: string) {
       .onRef('problem.organisation_id', '=', 'problems.organisation_id')
       .onRef('problem.problem_id', '=', 'problems.id')
       .onRef('problem.revision', '=', 'problems.revision'))
+    .innerJoin('users as changer', 'changer.id', 'latest.created_by')
     .select([
       'cases.id', 'cases.slug', 'cases.kind', 'cases.revision', 'cases.columns', 'cases.created_at', 'latest.name', 'latest.definition',
-      'latest.created_at as changed_at', 'cases.code_id', 'codes.slug as code_slug', 'codes.name as code_name', 'latest.problem_id',
+      'latest.created_at as changed_at', 'changer.email as changed_by', 'cases.code_id', 'codes.slug as code_slug', 'codes.name as code_name', 'latest.problem_id',
       'problems.slug as problem_slug', 'problem.name as problem_name', 'problem.definition as problem_definition',
     ])
     .where('cases.organisation_id', '=', organisationId);

@@ -9,7 +9,8 @@ function withLatestRevision(db: Kysely<DB>, organisationId: string) {
       .onRef('latest.organisation_id', '=', 'problems.organisation_id')
       .onRef('latest.problem_id', '=', 'problems.id')
       .onRef('latest.revision', '=', 'problems.revision'))
-    .select(['problems.id', 'problems.slug', 'problems.revision', 'problems.created_at', 'latest.name', 'latest.definition', 'latest.created_at as changed_at'])
+    .innerJoin('users as changer', 'changer.id', 'latest.created_by')
+    .select(['problems.id', 'problems.slug', 'problems.revision', 'problems.created_at', 'latest.name', 'latest.definition', 'latest.created_at as changed_at', 'changer.email as changed_by'])
     .where('problems.organisation_id', '=', organisationId);
 }
 

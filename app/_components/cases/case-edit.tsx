@@ -1,12 +1,15 @@
 'use client';
 
 import { useQueryClient } from '@tanstack/react-query';
+import { useState } from 'react';
 import { getCaseContract, listCasesContract, updateCaseContract, type Case } from '@/lib/domain/cases/schema';
 import { getMatrixContract } from '@/lib/domain/matrix/schema';
 import { listProblemsContract, type Problem } from '@/lib/domain/problems/schema';
 import { Answered } from '../api/answered';
 import { apiKey } from '../api/api-key';
 import { callApi } from '../api/call-api';
+import { ConflictNotice } from '../conflict/conflict-notice';
+import { useConflict } from '../conflict/use-conflict';
 import { useApi } from '../api/use-api';
 import { useSubmit } from '../api/use-submit';
 import { useOrganisation } from '../organisation/organisation-context';
@@ -15,24 +18,34 @@ import { PageTitle } from '../ui/page-title';
 import { Section } from '../ui/section';
 import { caseField } from './case-field';
 import { CaseForm } from './case-form';
+import { caseRows } from './case-rows';
 import { valuesOfCase } from './case-values';
 import { useCaseForm } from './use-case-form';
 
 /** Changing a case makes a new revision; studies keep the one they ran with. */
-export function CaseEdit({ found, onClose }: { found: Case; onClose: () => void }) {
+export function CaseEdit({ opened, onClose }: { opened: Case; onClose: () => void }) {
   const { slug } = useOrganisation();
+  const [found, setFound] = useState(opened);
   const problems = useApi(listProblemsContract, { organisation: slug, query: { limit: 200 } });
   return (
     <>
       <Section note={<p>Saving makes <b>revision {found.revision + 1}</b>. Studies that have data stay with the revision they ran with.</p>}>
         <PageTitle>{found.name}</PageTitle>
       </Section>
-      <Answered query={problems} inSection>{({ items }) => <CaseEditForm found={found} problems={items} onClose={onClose} />}</Answered>
+      <Answered query={problems} inSection>{({ items }) => <CaseEditForm found={found} onMoved={setFound} problems={items} onClose={onClose} />}</Answered>
     </>
   );
 }
 
-function CaseEditForm({ found, problems, onClose }: { found: Case; problems: readonly Problem[]; onClose: () => void }) {
+interface CaseEditFormProps {
+  /** The revision that is changed. */
+  found: Case;
+  /** It is another one now. */
+  onMoved: (present: Case) => void;
+  problems: readonly Problem[]; onClose: () => void;
+}
+
+function CaseEditForm({ found, onMoved, problems, onClose }: CaseEditFormProps) {
   const { slug } = useOrganisation();
   const queries = useQueryClient();
   const form = useCaseForm(valuesOfCase(found), problems);
@@ -46,12 +59,17 @@ function CaseEditForm({ found, problems, onClose }: { found: Case; problems: rea
       }),
     onDone: () => { void refresh().then(onClose); },
   });
-  const isStale = submit.problem?.status === 412;
+  const conflict = useConflict({
+    submit, base: found, onMoved,
+    readPresent: () => callApi(getCaseContract, { organisation: slug, params: { case: found.slug } }),
+    takeTheirs: (present) => form.reset(valuesOfCase(present)),
+    rowsOf: (side) => caseRows(side === 'mine' ? form.getValues() : valuesOfCase(side)),
+  });
   return (
     <CaseForm
       form={form} submit={submit} codes={[]} problems={problems} isNew={false} action="Save as a new revision"
       others={<Button onClick={onClose}>Leave it as it was</Button>}
-      wayOn={isStale ? <Button onClick={() => void refresh()}>Show the revision that is there now</Button> : undefined}
+      conflict={conflict && <ConflictNotice what="case" conflict={conflict} />}
     />
   );
 }

@@ -14,18 +14,18 @@ import type { CaseForm as CaseFormState } from './case-form-type';
 interface CaseFormProps {
   form: CaseFormState; submit: Submit; codes: readonly Code[]; problems: readonly Problem[]; isNew: boolean; action: string;
   others?: ReactNode;
-  /** What a refusal offers. */
-  wayOn?: ReactNode;
+  /** Stands in place of the refusal where somebody else saved meanwhile. */
+  conflict?: ReactNode;
 }
 
-export function CaseForm({ form, submit, codes, problems, isNew, action, others, wayOn }: CaseFormProps) {
+export function CaseForm({ form, submit, codes, problems, isNew, action, others, conflict }: CaseFormProps) {
   const { isSubmitting, isSubmitted, isValid } = form.formState;
   const answer = isSubmitting ? 'Saving.' : isSubmitted && !isValid ? 'Not saved. The faults stand at their fields.' : null;
   return (
     <form onSubmit={submit.onSubmit} noValidate className="mt-12">
       <CaseFields form={form} codes={codes} problems={problems} isNew={isNew} />
       <Section>
-        <ProblemNotice problem={submit.problem} actions={wayOn} />
+        {conflict ?? <ProblemNotice problem={submit.problem} />}
         <FormActions answer={answer}><Button kind="primary" type="submit">{action}</Button>{others}</FormActions>
       </Section>
     </form>

@@ -26,7 +26,8 @@ import { ReleaseStudies } from './release-studies';
 export function CaseView({ caseKey }: { caseKey: string }) {
   const { slug } = useOrganisation();
   const query = useApi(getCaseContract, { organisation: slug, params: { case: caseKey } });
-  const [isEdited, setIsEdited] = useState(false);
+  // The revision that was opened, so that a later one does not sweep away what is typed.
+  const [edited, setEdited] = useState<Case | null>(null);
   const found = query.data;
   const place = found
     ? [{ label: found.code.name, href: `/${slug}/codes/${found.code.slug}` }, { label: found.name }]
@@ -34,9 +35,9 @@ export function CaseView({ caseKey }: { caseKey: string }) {
   return (
     <OrganisationPage place={place} stateLine={found && `Revision ${found.revision}`}>
       <Answered query={query} inSection>
-        {(each) => isEdited
-          ? <CaseEdit key={each.revision} found={each} onClose={() => setIsEdited(false)} />
-          : <CaseDefinitionView found={each} onEdit={() => setIsEdited(true)} />}
+        {(each) => edited
+          ? <CaseEdit opened={edited} onClose={() => setEdited(null)} />
+          : <CaseDefinitionView found={each} onEdit={() => setEdited(each)} />}
       </Answered>
     </OrganisationPage>
   );

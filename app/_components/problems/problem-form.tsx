@@ -16,17 +16,18 @@ interface ProblemFormProps {
   submit: Submit;
   isNew: boolean;
   action: string;
-  /** Other ways on than sending, and what a refusal offers. */
+  /** Other ways on than sending. */
   others?: ReactNode;
-  wayOn?: ReactNode;
+  /** Stands in place of the refusal where somebody else saved meanwhile. */
+  conflict?: ReactNode;
 }
 
-export function ProblemForm({ form, submit, isNew, action, others, wayOn }: ProblemFormProps) {
+export function ProblemForm({ form, submit, isNew, action, others, conflict }: ProblemFormProps) {
   return (
     <form onSubmit={submit.onSubmit} noValidate className="mt-12">
       <ProblemFields form={form} isNew={isNew} />
       <Section>
-        <ProblemNotice problem={submit.problem} actions={wayOn} />
+        {conflict ?? <ProblemNotice problem={submit.problem} />}
         <FormActions answer={form.formState.isSubmitting ? 'Saving.' : null}>
           <Button kind="primary" type="submit">{action}</Button>
           {others}

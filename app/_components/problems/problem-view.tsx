@@ -24,16 +24,17 @@ import { ProblemEdit } from './problem-edit';
 export function ProblemView({ problem: key }: { problem: string }) {
   const { slug } = useOrganisation();
   const problem = useApi(getProblemContract, { organisation: slug, params: { problem: key } });
-  const [isEdited, setIsEdited] = useState(false);
+  // The revision that was opened, so that a later one does not sweep away what is typed.
+  const [edited, setEdited] = useState<Problem | null>(null);
   return (
     <OrganisationPage
       place={[{ label: 'Problems', href: `/${slug}/problems` }, { label: problem.data?.name ?? key }]}
       stateLine={problem.data && `Revision ${problem.data.revision}`}
     >
       <Answered query={problem} inSection>
-        {(found) => isEdited
-          ? <ProblemEdit key={found.revision} problem={found} onClose={() => setIsEdited(false)} />
-          : <ProblemDefinition problem={found} onEdit={() => setIsEdited(true)} />}
+        {(found) => edited
+          ? <ProblemEdit opened={edited} onClose={() => setEdited(null)} />
+          : <ProblemDefinition problem={found} onEdit={() => setEdited(found)} />}
       </Answered>
     </OrganisationPage>
   );

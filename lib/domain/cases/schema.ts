@@ -26,7 +26,7 @@ const linkSchema = z.strictObject({ id: z.string(), slug: z.string(), name: z.st
 export const caseSchema = caseDefinitionSchema.extend({
   id: z.string(), slug: z.string(), name: z.string(), kind: caseKindSchema, revision: z.number().int(),
   code: linkSchema, problem: linkSchema, columns: columnMappingSchema.nullable(),
-  createdAt: timestampSchema, changedAt: timestampSchema,
+  createdAt: timestampSchema, changedAt: timestampSchema, changedBy: z.string().meta({ description: 'E-mail address of who made this revision.' }),
 });
 export type Case = z.infer<typeof caseSchema>;
 

@@ -38,7 +38,7 @@ export type UpdateProblemInput = z.infer<typeof updateProblemSchema>;
 export const problemSchema = problemDefinitionSchema.extend({
   unsteady: z.boolean(), constants: problemDefinitionSchema.shape.constants.unwrap(),
   id: z.string(), slug: z.string(), name: z.string(), revision: z.number().int(),
-  createdAt: timestampSchema, changedAt: timestampSchema,
+  createdAt: timestampSchema, changedAt: timestampSchema, changedBy: z.string().meta({ description: 'E-mail address of who made this revision.' }),
   usedBy: z.array(z.strictObject({ id: z.string(), slug: z.string(), name: z.string() })).meta({ description: 'Cases on this problem.' }),
 });
 export type Problem = z.infer<typeof problemSchema>;

@@ -10,6 +10,6 @@ export function mapCase(row: CaseRow): Case {
     code: { id: row.code_id, slug: row.code_slug, name: row.code_name },
     problem: { id: row.problem_id, slug: row.problem_slug, name: row.problem_name },
     columns: columnMappingSchema.nullable().parse(row.columns),
-    createdAt: row.created_at.toISOString(), changedAt: row.changed_at.toISOString(),
+    createdAt: row.created_at.toISOString(), changedAt: row.changed_at.toISOString(), changedBy: row.changed_by,
   };
 }

@@ -7,7 +7,7 @@ export function mapProblem(row: ProblemRow, cases: readonly CaseRow[]): Problem 
   return {
     ...problemDefinitionSchema.parse(row.definition),
     id: row.id, slug: row.slug, name: row.name, revision: row.revision,
-    createdAt: row.created_at.toISOString(), changedAt: row.changed_at.toISOString(),
+    createdAt: row.created_at.toISOString(), changedAt: row.changed_at.toISOString(), changedBy: row.changed_by,
     usedBy: cases.filter((each) => each.problem_id === row.id).map(({ id, slug, name }) => ({ id, slug, name })),
   };
 }
