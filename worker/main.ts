@@ -2,6 +2,7 @@ import os from 'node:os';
 import { Queue } from 'bullmq';
 import { readEnv } from '@/lib/env';
 import { queueName, type JobPayload } from '@/lib/jobs/jobs';
+import { startHeartbeat } from '@/lib/platform/worker-heartbeat';
 import { createThreadPool } from './compute/thread-pool';
 import { createThreadReader } from './compute/thread-reader';
 import { openWorkerContext } from './context';
@@ -38,6 +39,7 @@ const stopWatching = watchQueue(adding, log, () => dispatcher.sweep());
 dispatcher.sweep();
 const schedules = [setInterval(() => dispatcher.sweep(), sweepEveryMilliseconds), setInterval(() => dispatcher.dispatch(), dispatchEveryMilliseconds)];
 const stopSweeps = startSweeps(context);
+const stopHeartbeat = startHeartbeat(adding, log);
 const stopServing = env.METRICS_PORT === undefined ? () => undefined : serveMetrics(metrics.registry, { port: env.METRICS_PORT, token: env.METRICS_TOKEN, log });
 log.info({ threads }, 'worker ready');
 
@@ -50,6 +52,7 @@ async function stop(signal: string): Promise<void> {
   log.info({ signal }, 'worker stopping');
   schedules.forEach((schedule) => clearInterval(schedule));
   stopWatching();
+  stopHeartbeat();
   stopServing();
   await Promise.all([stopListening(), dispatcher.close()]);
   const swept = stopSweeps();

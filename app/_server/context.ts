@@ -12,6 +12,7 @@ import { createSessions, type Sessions } from '@/lib/platform/sessions';
 import { createStorage } from '@/lib/platform/storage';
 import { storageOptionsOf } from '@/lib/platform/storage-options';
 import { createStudyEvents } from '@/lib/platform/study-events';
+import { createWorkerWatch } from '@/lib/platform/worker-heartbeat';
 import type { Context } from '@/lib/services/context';
 import { watchRequests } from './watch-requests';
 import { createWebMetrics, type WebMetrics } from './web-metrics';
@@ -30,7 +31,9 @@ interface Server {
 function openServer(): Server {
   const env = readEnv(process.env);
   const log = createLogger('web', env.LOG_LEVEL);
-  const { pool, db } = openDatabase(env.DATABASE_URL, (error) => log.warn({ fault: error.message }, 'database connection'));
+  const { pool, db } = openDatabase(env.DATABASE_URL, (error) => log.warn({ fault: error.message }, 'database connection'), {
+    connectionTimeoutMillis: 3000, statement_timeout: 10_000, query_timeout: 12_000,
+  });
   // The first request waits for the connection. When Redis is away answers fail within a second, when it hangs within
   // three; the outbox keeps the work.
   const redis = openRedis(env.REDIS_URL, log, {
@@ -43,6 +46,7 @@ function openServer(): Server {
     storageQuotaBytes: env.STORAGE_QUOTA_BYTES,
     events: createStudyEvents(redis, subscriber),
     limits: createRateLimits(redis),
+    isWorkerSeen: createWorkerWatch(redis),
     clock: () => new Date(),
     log,
   };

@@ -15,6 +15,8 @@ export interface Context {
   storageQuotaBytes: number;
   events: StudyEvents;
   limits: RateLimits;
+  /** Whether a worker was there within half a minute; null where the queue cannot be asked. */
+  isWorkerSeen: () => Promise<boolean | null>;
   clock: () => Date;
   log: Logger;
   /** Of the request that is answered, or that caused the job. */

@@ -45,6 +45,12 @@ export const studySchema = z.strictObject({
   definition: caseDefinitionSchema.meta({ description: 'The case as this revision of the study is bound to it.' }),
   problemDefinition: problemDefinitionSchema,
   grids: z.array(gridSchema).meta({ description: 'Finest first where spacings are known.' }),
+  waiting: z.strictObject({
+    ahead: z.number().int().meta({ description: 'Files of the whole installation that were sent before the first of this study that waits.' }),
+    seconds: z.number().int().meta({ description: 'How long that first one has waited.' }),
+    oldestSeconds: z.number().int().meta({ description: 'How long the oldest of all has waited.' }),
+    workerSeen: z.boolean().nullable().meta({ description: 'Whether a worker was there within 30 seconds; null where the queue cannot be asked.' }),
+  }).nullable().meta({ description: 'Where files of this study wait to be read; null where none does.' }),
   assessment: assessmentSchema.nullable(),
   failure: z.string().nullable().meta({ description: 'Why the assessment could not be made.' }),
   createdBy: z.string(), createdAt: timestampSchema, revisedAt: timestampSchema,

@@ -64,6 +64,6 @@ export async function createStudy(ctx: MemberContext, input: CreateStudyInput): 
       state: isTyped(definition) ? 'typed' : 'expected',
     })));
     await settleStudy(trx, at, now);
-    return mapStudy(trx, await requireStudy(ctx, trx, at.studyId));
+    return mapStudy(ctx, trx, await requireStudy(ctx, trx, at.studyId));
   });
 }

@@ -7,5 +7,8 @@ import { requireStudy } from './require-study';
 
 export async function getStudy(ctx: MemberContext, id: string, revision?: number): Promise<Study> {
   permit(ctx, 'work.read');
-  return withOrganisation(ctx, async (trx) => mapStudy(trx, await requireStudy(ctx, trx, id, revision)));
+  const study = await withOrganisation(ctx, async (trx) => mapStudy(ctx, trx, await requireStudy(ctx, trx, id, revision)));
+  // Asked when the transaction is over: the queue may take seconds to say nothing.
+  if (study.waiting) study.waiting.workerSeen = await ctx.isWorkerSeen();
+  return study;
 }

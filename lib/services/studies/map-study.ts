@@ -9,18 +9,21 @@ import { refinementSchema } from '@/lib/domain/studies/input';
 import { studyStateSchema, type Study } from '@/lib/domain/studies/schema';
 import { statedSpacing } from '@/lib/domain/studies/stated-spacing';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
+import type { MemberContext } from '../context';
 import type { Trx } from '../with-organisation';
 import { definitionOf, normsOf } from './grid-definition';
 import { mapGrid } from './map-grid';
+import { placeInLine } from './place-in-line';
 import type { LoadedStudy } from './require-study';
 
 /** A study as it is shown, with its grids and, once there, its assessment. */
-export async function mapStudy(trx: Trx, { head, bound, at }: LoadedStudy): Promise<Study> {
+export async function mapStudy(ctx: MemberContext, trx: Trx, { head, bound, at }: LoadedStudy): Promise<Study> {
   const problemDefinition = problemDefinitionSchema.parse(bound.problem_definition);
   const dimension = dimensionSchema.parse(head.dimension);
   const refinement = refinementSchema.parse(head.refinement);
   const spacing = { refinement: refinement === 'time' ? 'time' as const : 'space' as const, dimension, volume: domainVolume(problemDefinition, dimension) };
   const assessment = await findAssessment(trx, at);
+  const grids = await listGrids(trx, at);
   return {
     id: head.id,
     code: { id: head.code_id, slug: head.code_slug, name: head.code_name },
@@ -38,7 +41,8 @@ export async function mapStudy(trx: Trx, { head, bound, at }: LoadedStudy): Prom
     revision: bound.revision, currentRevision: head.revision, planFrozenAt: bound.plan_frozen_at?.toISOString() ?? null,
     definitionAfterData: bound.definition_after_data,
     definition: caseDefinitionSchema.parse(bound.case_definition), problemDefinition,
-    grids: finestFirst(await listGrids(trx, at), spacing).map(mapGrid),
+    grids: finestFirst(grids, spacing).map(mapGrid),
+    waiting: await placeInLine(ctx, trx, grids),
     assessment: (assessment?.body ?? null) as unknown as Assessment | null,
     failure: bound.failure, createdBy: head.created_by, createdAt: head.created_at.toISOString(), revisedAt: bound.created_at.toISOString(),
   };

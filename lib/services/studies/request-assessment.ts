@@ -33,7 +33,7 @@ export async function requestAssessment(ctx: MemberContext, id: string): Promise
     } else if (bound.state !== 'assessing') {
       throw new AppError('wrong-state', `The study is ${bound.state}, and an assessment never changes. Open a new revision to have it assessed again.`);
     }
-    return mapStudy(trx, await requireStudy(ctx, trx, id));
+    return mapStudy(ctx, trx, await requireStudy(ctx, trx, id));
   });
   await announce(ctx, study.id, { event: 'state', state: study.state });
   return study;

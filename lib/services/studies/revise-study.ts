@@ -61,7 +61,7 @@ export async function reviseStudy(ctx: MemberContext, id: string): Promise<Study
     const isSameDefinition = latest.case_revision === bound.case_revision && latest.problem_id === bound.problem_id
       && latest.problem_revision === bound.problem_revision;
     for (const row of await listGrids(trx, before)) await copyGrid(trx, row, { at, isSameDefinition });
-    return mapStudy(trx, await requireStudy(ctx, trx, id));
+    return mapStudy(ctx, trx, await requireStudy(ctx, trx, id));
   });
   await announce(ctx, study.id, { event: 'state', state: study.state });
   return study;

@@ -4,6 +4,7 @@ import { Statement } from '@/app/_components/ui/page-title';
 import { TextLink } from '@/app/_components/ui/text-link';
 import { joinWords } from '@/lib/domain/assessment/series-name';
 import { formatCount } from '@/lib/domain/numbers/format-count';
+import { waitWords } from '@/lib/domain/numbers/wait-words';
 import type { Grid, Study } from '@/lib/domain/studies/schema';
 import type { Reading } from './use-study-events';
 
@@ -26,10 +27,27 @@ export function StudyProgress({ study, readings }: StudyProgressProps) {
   }
   const now = reading && (readings.get(reading.label) ?? { rowsRead: reading.upload?.rowsRead ?? 0, share: null });
   return (
-    <Statement lead={<WhatIsNeeded taking={taking} />}>
+    <Statement lead={<><WhatIsNeeded taking={taking} /><PlaceInLine waiting={study.waiting} /></>}>
       {headline(taking, done.length)}
       {reading && now && now.rowsRead > 0 && <span aria-live="polite"> Reading grid {reading.label}, {formatCount(now.rowsRead)} rows.</span>}
     </Statement>
+  );
+}
+
+/** Said once it takes longer than usual. */
+const patienceSeconds = 5;
+
+function PlaceInLine({ waiting }: Pick<Study, 'waiting'>) {
+  if (!waiting || waiting.seconds < patienceSeconds) return null;
+  const { ahead, seconds, oldestSeconds, workerSeen } = waiting;
+  return (
+    <span role="status" className="mt-2 block">
+      {ahead === 0
+        ? `The file that waits is the next to be read; it has waited ${waitWords(seconds)}. `
+        : `${formatCount(ahead)} ${ahead === 1 ? 'file is' : 'files are'} before the one that waits here; the oldest has waited ${waitWords(oldestSeconds)}. `}
+      {workerSeen === false && <><b>No worker has been seen for 30 seconds.</b> Files are kept and read once one is there; tell who runs this installation. </>}
+      {workerSeen === null && <><b>The queue does not answer.</b> Files are kept and read once it is back. </>}
+    </span>
   );
 }
 

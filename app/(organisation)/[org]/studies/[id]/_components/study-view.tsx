@@ -23,13 +23,16 @@ function placeOf(slug: string, study: Study) {
 /** The page of a study: kept up to date by its events while it changes by itself. */
 export function StudyView({ id, revision }: StudyViewProps) {
   const { slug } = useOrganisation();
-  const study = useApi(getStudyContract, { organisation: slug, params: { id }, query: revision === undefined ? {} : { revision } });
-  const readings = useStudyEvents(study.data);
+  const study = useApi(getStudyContract, { organisation: slug, params: { id }, query: revision === undefined ? {} : { revision } }, {
+    refetchEvery: ({ waiting }) => (waiting ? 5000 : false),
+  });
+  const { readings, isInterrupted } = useStudyEvents(study.data);
   return (
     <OrganisationPage
       place={study.data ? placeOf(slug, study.data) : [{ label: 'Studies', href: `/${slug}/studies` }, { label: 'study' }]}
       stateLine={study.data && `${stateWords[study.data.state]}, revision ${study.data.revision}`}
     >
+      {isInterrupted && <p role="status" className="screen-only mb-4 border-y border-rule py-[7px]"><b>Live updates are interrupted.</b> What stands here may be behind; they go on by themselves.</p>}
       <Answered query={study} inSection>{(found) => <StudySections study={found} readings={readings} />}</Answered>
     </OrganisationPage>
   );
