@@ -5,9 +5,9 @@ type Service = 'database' | 'queue' | 'storage';
 interface Fault { service: Service | null; isFull: boolean }
 
 const names: Record<Service, string> = { database: 'The database', queue: 'Redis', storage: 'Storage for files' };
-/** Connections that break, a server that shuts down or starts, no space, no memory, too many connections. */
-const databaseClasses = /^(08|53|57P|58)/;
-const databaseWords = /^(Connection terminated|timeout exceeded when trying to connect|Client has encountered a connection error)/;
+/** Connections that break, a server that shuts down or starts, no space, no memory, too many connections, a statement past its time. */
+const databaseClasses = /^(08|53|57P|57014|58)/;
+const databaseWords = /^(Connection terminated|Query read timeout|timeout exceeded when trying to connect|Client has encountered a connection error)/;
 const networkCodes = new Set(['ECONNREFUSED', 'ECONNRESET', 'ETIMEDOUT', 'ENOTFOUND', 'EPIPE', 'EHOSTUNREACH', 'EAI_AGAIN']);
 
 function ofDatabase(code: string, { message }: Error): Fault | null {
