@@ -8,7 +8,7 @@ import { adminDatabase } from '@/tests/support/admin-database';
 import { ok } from '@/tests/support/api';
 import { browserTest, overflowOf, seriousFindings } from '@/tests/support/browser';
 import { addMember, signUp, type Person } from '@/tests/support/people';
-import { makeWork } from '@/tests/support/work';
+import { makeWork, orderCase } from '@/tests/support/work';
 
 const nameField = (page: Page) => page.getByLabel('Name', { exact: true }).first();
 
@@ -67,7 +67,7 @@ async function makeLine(person: Person, gridId: string, ahead: number): Promise<
 browserTest('a file that waits says how many are before it and how long the oldest has waited', async ({ open }) => {
   const person = await signUp();
   const { case: made, release } = await makeWork(person);
-  const study = await ok(person, createStudyContract, { body: { case: made.slug, release: release.version } });
+  const study = await ok(person, createStudyContract, { body: { case: made.slug, release: release.version, grids: orderCase.gridPlan } });
   const { rows: [grid] } = await adminDatabase().query<{ id: string }>('update grids set state = $2 where study_id = $1 and label = $3 returning id', [study.id, 'stored', 'n8']);
   const removeLine = await makeLine(person, grid?.id ?? '', 12);
   try {

@@ -1,3 +1,6 @@
+'use client';
+
+import { useCallback } from 'react';
 import { Cell, HeadCell, RowHead } from '../tables/cells';
 import { Head, Row, Table } from '../tables/table';
 import { Button } from '../ui/button';
@@ -15,8 +18,10 @@ export function ConflictNotice({ what, conflict: { present, began, differences, 
   const actions = isSame
     ? <Button onClick={takeTheirs}>Go on from revision {present.revision}</Button>
     : <><Button onClick={keepMine}>Keep mine as revision {present.revision + 1}</Button><Button onClick={takeTheirs}>Take theirs</Button></>;
+  // It takes the place of the button that was pressed, which then lies below the window.
+  const show = useCallback((notice: HTMLElement | null) => notice?.scrollIntoView({ block: 'nearest' }), []);
   return (
-    <div className="mt-4">
+    <div ref={show} className="mt-4 scroll-my-6">
       <Notice title="Not saved." actions={actions} below={isSame ? undefined : <Differences of={present.revision} differences={differences} />}>
         {present.changedBy} saved revision {present.revision} of this {what} on <DateTime value={present.changedAt} show="both" />; you began from revision {began}.
         {isSame ? ' It holds just what you typed.' : ' Yours is still in the form. Where the two differ:'}

@@ -26,7 +26,13 @@ export function SignInAgain() {
       <Dialog.Portal>
         <Dialog.Overlay className="screen-only fixed inset-0 z-20 bg-paper/80" />
         <Dialog.Content
-          onOpenAutoFocus={() => { before.current = document.activeElement; }}
+          onOpenAutoFocus={(event) => {
+            before.current = document.activeElement;
+            const secret = event.currentTarget instanceof HTMLElement ? event.currentTarget.querySelector<HTMLInputElement>('input[type=password]') : null;
+            if (!secret) return;
+            event.preventDefault();
+            secret.focus();
+          }}
           onCloseAutoFocus={(event) => {
             event.preventDefault();
             if (before.current instanceof HTMLElement) before.current.focus();
@@ -34,7 +40,7 @@ export function SignInAgain() {
           className="screen-only fixed top-1/2 left-1/2 z-20 max-h-[calc(100vh-16px)] w-[min(420px,calc(100vw-32px))] -translate-x-1/2 -translate-y-1/2 overflow-y-auto border-[1.5px] border-ink bg-paper p-5 tablet:p-6"
         >
           <Dialog.Title className="font-serif text-section font-semibold">Sign in again</Dialog.Title>
-          <Dialog.Description className="mt-2 mb-5">Your session has ended. What you typed is still on the page and is sent once you are signed in.</Dialog.Description>
+          <Dialog.Description className="mt-2 mb-5">Your session has ended. What you typed is still on the page, and what you were doing goes on once you are signed in.</Dialog.Description>
           <SignInForm next={null} email={email} onSignedIn={arrive} others={<Dialog.Close asChild><Button>Not now</Button></Dialog.Close>} />
         </Dialog.Content>
       </Dialog.Portal>

@@ -5,7 +5,7 @@ import { roleWords } from '@/lib/domain/people/role-words';
 import { arrivalAddress } from '../auth/arrive';
 import { goAfresh } from '../auth/go-afresh';
 import { useOrganisation } from '../organisation/organisation-context';
-import { TextButton, TextLink } from '../ui/text-link';
+import { TextButton } from '../ui/text-link';
 import { accessLoss, type AccessLoss } from './access-loss';
 import { useStore } from './create-store';
 import { missingWords } from './services-words';
@@ -45,7 +45,7 @@ function MissingServices() {
   return (
     <Line title={missingWords[names[0] ?? first].title} action={<TextButton onClick={askAgain}>Try again now</TextButton>}>
       {missingWords[names[0] ?? first].text}{names.slice(1).map((name) => ` ${missingWords[name].title} ${missingWords[name].text}`)}
-      {isNothingLeft && <> What you typed is still here. The <TextLink href="/quick-check" target="_blank">quick check</TextLink> works where it is open: it stays in the browser.</>} This page tries again by itself.
+      {isNothingLeft && <> What you typed is still here; a quick check that is open goes on, it stays in the browser.</>} This page tries again by itself.
     </Line>
   );
 }
