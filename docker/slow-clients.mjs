@@ -22,9 +22,10 @@ const isFile = ({ method, url = '' }) => method === 'PUT' && /\/data(?:\?|$)/.te
 
 /** @param {http.IncomingMessage} request @param {http.ServerResponse} response */
 function limitBody(request, response) {
-  if (request.complete) return;
+  // Held here: a request that is over may have lost it.
+  const { socket } = request;
   const end = () => {
-    if (!request.complete) request.socket.destroy();
+    if (!request.complete) socket.destroy();
   };
   const late = isFile(request) ? undefined : setTimeout(end, bodySeconds * 1000).unref();
   response.once('finish', () => setTimeout(end, lingerMilliseconds).unref());

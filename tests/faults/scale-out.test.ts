@@ -14,7 +14,7 @@ import { makeToken, signUp, type Person } from '../support/people';
 import { awaitOutcome } from '../support/study';
 import { makeWork, type Work } from '../support/work';
 
-const firstPort = Number(new URL(need('WEB_URL')).port) + 20;
+const firstPort = Number(new URL(need('WEB_URL')).port) + 40;
 const webPorts = [firstPort, firstPort + 1];
 const workerPorts = [firstPort + 2, firstPort + 3];
 const balanced = createBalanced(webPorts.map((port) => `http://127.0.0.1:${port}`));
