@@ -1,9 +1,11 @@
 import fs from 'node:fs';
 import { isDeepStrictEqual } from 'node:util';
 import { Client } from 'pg';
+import { openDatabase } from '@/db/client';
 import { readBackupEnv } from '@/lib/env';
 import { createStorage, type Storage } from '@/lib/platform/storage';
 import { storageOptionsOf } from '@/lib/platform/storage-options';
+import { checkRecords } from '@/lib/services/records/check-records';
 import { atOnce } from './backup/at-once';
 import { createMeter, faultOf } from './backup/hash-file';
 import { placesOf, readManifest, type BackupObject, type Manifest } from './backup/manifest';
@@ -62,6 +64,18 @@ async function restoreDatabase({ env }: Given, manifest: Manifest): Promise<void
   throw new Error(`Restored tables have another number of rows than the backup says: ${differing.join(', ')}.`);
 }
 
+/** Whether files and records go together; faults found here were in what was backed up, and are named for whoever looks after it. */
+async function tellFaults({ env, storage }: Given): Promise<void> {
+  const { db } = openDatabase(env.MAINTENANCE_DATABASE_URL, (error) => console.error(`database connection: ${error.message}`));
+  try {
+    const check = { db, storage, organisationId: null, isHashed: false, clock: () => new Date() };
+    const { files, faults } = await checkRecords(check, ({ place, id, fault }) => console.error(`As backed up: ${place} ${id} ${fault}`));
+    console.log(`${files} files checked against their records, ${faults} faults.`);
+  } finally {
+    await db.destroy();
+  }
+}
+
 await runCommand(async () => {
   if (folder === '') throw new Error('Say where from: npm run restore -- FOLDER.');
   const env = readBackupEnv(process.env);
@@ -75,5 +89,6 @@ await runCommand(async () => {
   const { createdAt, schema, tables, objects, missing } = manifest;
   console.log(`Restored the backup of ${createdAt}: schema ${schema}, ${Object.keys(tables).length} tables, ${objects.count} files of ${objects.totalBytes} bytes.`);
   for (const key of missing) console.error(`Not in the backup, since it was not in the store: ${key}`);
+  await tellFaults(given);
   console.log(`It took ${((performance.now() - begun) / 1000).toFixed(1)} s.`);
 });
