@@ -42,10 +42,10 @@ afterAll(() => Promise.all([...webs, ...workers].map((process) => process.end())
 
 /** A new study of the case, made through whichever web process has its turn. */
 async function startStudy(): Promise<string> {
-  const response = await balanced.fetch('/api/v1/studies', {
+  const response = await balanced.fetch('/api/v1/studies', () => ({
     method: 'POST', headers: { ...headers, 'content-type': 'application/json' },
     body: JSON.stringify({ case: work.case.slug, release: '1.0.0', grids: heatSizes.map((n) => ({ label: `n${n}`, cellsPerDirection: n })) }),
-  });
+  }));
   if (response.status !== createStudyContract.status) throw new Error(`A study was answered ${response.status}: ${await response.text()}`);
   return ((await response.json()) as { id: string }).id;
 }
@@ -57,8 +57,8 @@ async function sendFile(study: string, { label, bytes }: { label: string; bytes:
     await pause(milliseconds);
     yield bytes.subarray(1000);
   }
-  const body = milliseconds > 0 ? Readable.toWeb(Readable.from(slowly())) : new Uint8Array(bytes);
-  const init = { method: 'PUT', headers, body, ...(milliseconds > 0 ? { duplex: 'half' } : {}) } as RequestInit;
+  const body = () => (milliseconds > 0 ? Readable.toWeb(Readable.from(slowly())) : new Uint8Array(bytes));
+  const init = () => ({ method: 'PUT', headers, body: body(), ...(milliseconds > 0 ? { duplex: 'half' } : {}) }) as RequestInit;
   const response = await balanced.fetch(`/api/v1/studies/${study}/grids/${label}/data?filename=${label}.csv`, init);
   if (!response.ok) throw new Error(`${label} was answered ${response.status}: ${await response.text()}`);
   await response.arrayBuffer();
@@ -120,7 +120,7 @@ function keepBusy() {
         const study = await startStudy();
         studies.push(study);
         for (const [index, table] of tables.entries()) await sendFile(study, table, index === 0 ? 1200 : 0);
-        const response = await balanced.fetch(`/api/v1/studies/${study}/outcome?wait=2`, { headers });
+        const response = await balanced.fetch(`/api/v1/studies/${study}/outcome?wait=2`, () => ({ headers }));
         if (![200, 202].includes(response.status)) throw new Error(`The outcome was answered ${response.status}.`);
         await response.arrayBuffer();
       } catch (error) {
@@ -131,7 +131,7 @@ function keepBusy() {
   const readers = Array.from({ length: 2 }, async () => {
     while (!isOver) {
       try {
-        const response = await balanced.fetch('/api/v1/studies', { headers });
+        const response = await balanced.fetch('/api/v1/studies', () => ({ headers }));
         if (!response.ok) throw new Error(`Studies were answered ${response.status}.`);
         await response.arrayBuffer();
         requests += 1;

@@ -7,7 +7,8 @@ function isRefused(error: unknown): boolean {
 }
 
 export interface Balanced {
-  fetch(path: string, init?: RequestInit): Promise<Response>;
+  /** `init` is made anew for every try, since a body that streams can be sent once. */
+  fetch(path: string, init: () => RequestInit): Promise<Response>;
   /** Reads a stream of server-sent events until told to stop, coming back each time it ends, as a browser does. */
   listen(path: string, init: RequestInit): { events: string[]; endings: string[]; stop: () => Promise<void> };
 }
@@ -15,11 +16,11 @@ export interface Balanced {
 /** Sends each request to the next of several web processes, and past one that takes no connections: what a load balancer does. */
 export function createBalanced(addresses: string[]): Balanced {
   let turn = 0;
-  const ask = async (path: string, init?: RequestInit): Promise<Response> => {
+  const ask = async (path: string, init: () => RequestInit): Promise<Response> => {
     for (let tries = 1; ; tries += 1) {
       turn += 1;
       try {
-        return await fetch(`${addresses[turn % addresses.length] ?? ''}${path}`, init);
+        return await fetch(`${addresses[turn % addresses.length] ?? ''}${path}`, init());
       } catch (error) {
         if (!isRefused(error) || tries > 2 * addresses.length) throw error;
       }
@@ -33,7 +34,7 @@ export function createBalanced(addresses: string[]): Balanced {
       const events: string[] = [];
       const endings: string[] = [];
       const once = async () => {
-        const response = await ask(path, { ...init, signal: abort.signal });
+        const response = await ask(path, () => ({ ...init, signal: abort.signal }));
         if (response.status !== 200 || !response.body) throw new Error(`Events answered ${response.status}.`);
         let text = '';
         const reader = response.body.pipeThrough(new TextDecoderStream()).getReader();
