@@ -12,6 +12,7 @@ const page = (title, body) => `<!doctype html>
 <meta name="viewport" content="width=device-width, initial-scale=1">
 <meta name="color-scheme" content="light dark">
 <title>${escape(title)}</title>
+<link rel="icon" href="data:,">
 <style>
 body { font: 1rem/1.5 system-ui, sans-serif; max-width: 60rem; margin: 2rem auto; padding: 0 1rem; }
 table { border-collapse: collapse; width: 100%; }

@@ -1,5 +1,6 @@
 'use client';
 
+import { useEffect } from 'react';
 import { useFormContext, useWatch } from 'react-hook-form';
 import { listCodesContract } from '@/lib/domain/codes/schema';
 import { useApi } from '../api/use-api';
@@ -15,6 +16,8 @@ const boxes = [
   { role: 'owner', label: 'owner', hint: 'Looks after members, tokens and the organisation.' },
   { role: 'auditor', label: 'auditor', hint: 'Sees only what is signed, until a day you set. Holds no other role.' },
 ] as const;
+
+const roleNames = ['auditor', 'engineer', 'reviewer', 'owner'] as const;
 
 function AuditorFields() {
   const { slug } = useOrganisation();
@@ -35,13 +38,19 @@ function AuditorFields() {
 
 /** What somebody may do; an auditor's end and codes appear once that box is ticked. */
 export function RoleFields() {
-  const { register, formState: { errors } } = useFormContext<RoleValues>();
-  const isAuditor = useWatch<RoleValues, 'auditor'>({ name: 'auditor' });
+  const { register, trigger, formState: { errors, isSubmitted } } = useFormContext<RoleValues>();
+  const chosen = useWatch<RoleValues, typeof roleNames>({ name: roleNames });
+  const [isAuditor] = chosen;
+  const together = chosen.join();
+  // What is wrong with the roles together changes with each of them, and an end is missing as soon as somebody audits.
+  useEffect(() => {
+    if (isSubmitted) void trigger(['engineer', 'until']);
+  }, [together, isSubmitted, trigger]);
   return (
     <>
       <fieldset>
         <legend className="mb-1 text-note text-graphite">Is</legend>
-        {boxes.map(({ role, label, hint }) => <CheckField key={role} label={label} hint={hint} {...register(role, { deps: ['engineer'] })} />)}
+        {boxes.map(({ role, label, hint }) => <CheckField key={role} label={label} hint={hint} {...register(role)} />)}
         {errors.engineer?.message && <FaultText text={errors.engineer.message} />}
       </fieldset>
       {isAuditor && <div className="grid content-start gap-5"><AuditorFields /></div>}
