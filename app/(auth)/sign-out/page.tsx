@@ -15,7 +15,7 @@ export default async function SignOutPage() {
     <PublicPage title="Sign out">
       <Section>
         <PageTitle under={`You are signed in as ${visitor.email}.`}>Sign out</PageTitle>
-        <SignOutButton />
+        <SignOutButton>Sign out</SignOutButton>
       </Section>
     </PublicPage>
   );

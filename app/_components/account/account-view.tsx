@@ -2,13 +2,13 @@
 
 import type { Me } from '@/lib/domain/people/schema';
 import { roleWords } from '@/lib/domain/people/role-words';
+import { SignOutButton } from '../auth/sign-out-button';
 import { PageTitle } from '../ui/page-title';
 import { Section } from '../ui/section';
 import { NameLink } from '../ui/text-link';
 import { ChangePasswordForm } from './change-password-form';
 import { MailChoices } from './mail-choices';
 import { NewOrganisationForm } from './new-organisation-form';
-import { SignOutEverywhere } from './sign-out-everywhere';
 
 function Organisations({ organisations }: Pick<Me, 'organisations'>) {
   if (organisations.length === 0) return <p className="text-graphite">You belong to no organisation. An invitation brings you into one; or make your own below.</p>;
@@ -35,7 +35,7 @@ export function AccountView({ me }: { me: Me }) {
       <Section heading="Password"><ChangePasswordForm email={me.email} /></Section>
       <Section heading="Sessions">
         <p>Somebody else may have a browser in which you are signed in? End every session, this one too.</p>
-        <SignOutEverywhere />
+        <SignOutButton everywhere address="/sign-in">Sign out everywhere</SignOutButton>
       </Section>
     </>
   );

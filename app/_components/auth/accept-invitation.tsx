@@ -9,7 +9,7 @@ import { Section } from '../ui/section';
 import { TextLink } from '../ui/text-link';
 import { DateTime } from '../ui/date-time';
 import { JoinForm } from './join-form';
-import { SignOutAndGoOn } from './sign-out-and-go-on';
+import { SignOutButton } from './sign-out-button';
 import { useLinkToken } from './use-link-token';
 
 const ended = {
@@ -52,7 +52,12 @@ export function AcceptInvitation({ token: given, signedInAs }: AcceptInvitationP
               <PageTitle>Join {invitation.organisation}</PageTitle>
               <Offer invitation={invitation} />
               {signedInAs !== null && signedInAs !== invitation.email
-                ? <SignOutAndGoOn signedInAs={signedInAs} neededEmail={invitation.email} address={`/accept-invitation?token=${encodeURIComponent(token)}`} />
+                ? (
+                  <>
+                    <p className="mt-3">You are signed in as {signedInAs}; the invitation is for {invitation.email}.</p>
+                    <SignOutButton address={`/accept-invitation?token=${encodeURIComponent(token)}`}>Sign out and go on as {invitation.email}</SignOutButton>
+                  </>
+                )
                 : <JoinForm token={token} invitation={invitation} isSignedIn={signedInAs !== null} />}
             </>
           )}
