@@ -22,11 +22,11 @@ export interface Mailer { deliver(mail: OutgoingMail): Promise<Delivery> }
 const connectWithin = 10_000;
 const answerWithin = 30_000;
 
-function connectionOptions(url: URL) {
+function connectionOptions(url: URL, patience: number) {
   const isSecure = url.protocol === 'smtps:';
   return {
     host: url.hostname, port: Number(url.port) || (isSecure ? 465 : 25), secure: isSecure,
-    connectionTimeout: connectWithin, greetingTimeout: connectWithin, socketTimeout: answerWithin,
+    connectionTimeout: connectWithin, greetingTimeout: connectWithin, socketTimeout: patience,
   };
 }
 
@@ -37,8 +37,16 @@ function compose(mail: OutgoingMail, from: string): Promise<Buffer> {
   return new MailComposer({ from, to, subject, text, html, messageId, date, headers }).compile().build();
 }
 
-/** Mail over SMTP, one connection a message; `from` is an address, with or without a name. */
-export function createMailer({ smtpUrl, from }: { smtpUrl: string; from: string }): Mailer {
+interface MailerOptions {
+  smtpUrl: string;
+  /** An address, with or without a name. */
+  from: string;
+  /** Milliseconds that the server may be silent. */
+  patience?: number;
+}
+
+/** Mail over SMTP, one connection a message. */
+export function createMailer({ smtpUrl, from, patience = answerWithin }: MailerOptions): Mailer {
   const url = new URL(smtpUrl);
   const user = decodeURIComponent(url.username);
   const sender = /<([^>]+)>/.exec(from)?.[1] ?? from;
@@ -46,7 +54,7 @@ export function createMailer({ smtpUrl, from }: { smtpUrl: string; from: string 
   return {
     async deliver(mail) {
       const source = await compose(mail, from);
-      const connection = new SMTPConnection(connectionOptions(url));
+      const connection = new SMTPConnection(connectionOptions(url, patience));
       // Read from only once the server has said that it takes the message.
       let hasBegun = false;
       const message = new Readable({

@@ -58,7 +58,7 @@ describe('a mail', () => {
   it('whose connection breaks while it goes out is not sent again by itself; the owner sees it and may send it again', async () => {
     const address = newEmail();
     const id = await insertWaitingMail(owner.at.id, address);
-    const server = await openMailServer({ onData: (stream) => { stream.once('data', () => stream.destroy()); } , onConnect: (session, done) => done(), closeTimeout: 100, socketTimeout: 300 });
+    const server = await openMailServer({ onData: (stream) => { stream.once('data', () => stream.destroy()); }, closeTimeout: 100 });
     await sendBy(id, server.url);
     await server.close();
     expect(await stateOf(id)).toMatchObject({ state: 'sending', fault: /ended while it was sent/ });

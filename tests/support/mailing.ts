@@ -10,7 +10,7 @@ type MailContext = Pick<MailJobContext, 'mailer' | 'publicUrl'>;
 
 /** What a worker sends with: to the inbox of the test run, or to the port of another server. */
 export function mailContext(smtpUrl = need('SMTP_URL')): MailContext {
-  return { mailer: createMailer({ smtpUrl, from: need('MAIL_FROM') }), publicUrl: need('PUBLIC_URL') };
+  return { mailer: createMailer({ smtpUrl, from: need('MAIL_FROM'), patience: 2000 }), publicUrl: need('PUBLIC_URL') };
 }
 
 /** A mail server that misbehaves as told, on a port of its own. */
