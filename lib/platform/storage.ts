@@ -18,6 +18,8 @@ interface StorageOptions {
 
 /** Storage that says nothing for so long has failed; without a limit a request or a reading thread would wait for good. */
 const patience = { connectionTimeout: 3000, socketTimeout: 10_000 };
+/** Somebody waits for this call, with all its tries. */
+const startWithin = 8000;
 
 export type Storage = ReturnType<typeof createStorage>;
 
@@ -33,7 +35,7 @@ export function createStorage(options: StorageOptions) {
 
   return {
     async startMultipart(key: string): Promise<string> {
-      const answer = await client.send(new CreateMultipartUploadCommand({ Bucket: bucket, Key: key }));
+      const answer = await client.send(new CreateMultipartUploadCommand({ Bucket: bucket, Key: key }), { abortSignal: AbortSignal.timeout(startWithin) });
       if (!answer.UploadId) throw new Error(`Storage gave no upload id for ${key}.`);
       return answer.UploadId;
     },

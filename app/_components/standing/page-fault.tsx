@@ -27,8 +27,12 @@ function useMissing(): readonly Missing[] | null {
   return missing;
 }
 
-/** In place of a page that could not be made: why, as far as that can be told, and the ways on. */
-export function PageFault({ error, home, homeName }: PageFaultProps) {
+/** In place of a page that could not be made, which has no title of its own: why, as far as that can be told, and the ways on. */
+export function PageFault(fault: PageFaultProps) {
+  return <><title>Not shown · Fourfold</title><Reason {...fault} /></>;
+}
+
+function Reason({ error, home, homeName }: PageFaultProps) {
   const missing = useMissing();
   const again = <Button kind="primary" onClick={() => window.location.reload()}>Load the page again</Button>;
   if (isOfBefore(error)) {
