@@ -46,6 +46,18 @@ export async function recordFaults(organisationId: string): Promise<string[]> {
   }
 }
 
+/** What was killed last may still be starting: who looks at everything waits for it, for a while. */
+async function onceReachable<T>(work: () => Promise<T>): Promise<T> {
+  for (let tries = 1; ; tries += 1) {
+    try {
+      return await work();
+    } catch (error) {
+      if (tries === 40) throw error;
+      await pause(500);
+    }
+  }
+}
+
 /** Rows of the outbox that are not done, once there has been a moment to end them. */
 async function openRows(organisationId: string): Promise<string[]> {
   const read = async () => (await adminDatabase().query<{ job: string; state: string; last_error: string | null }>(
@@ -80,7 +92,7 @@ export async function runSchedule(schedule: Schedule, sites: Site[]): Promise<st
       const faults = await faultsSeen(site, lane, done);
       const made = (await studiesOf(site.engineer.at.id)) - (before[index] ?? 0);
       if (made !== 1) faults.push(`${made} studies were made; one was asked for`);
-      return [...faults, ...await openRows(site.engineer.at.id), ...await recordFaults(site.engineer.at.id)];
+      return [...faults, ...await openRows(site.engineer.at.id), ...await onceReachable(() => recordFaults(site.engineer.at.id))];
     }));
     return seen.flat();
   } finally {
