@@ -14,16 +14,15 @@ interface Options {
 export async function* steadySource({ open, stallSeconds, onPiece }: Options): AsyncGenerator<Uint8Array> {
   const abort = new AbortController();
   let bytes = 0;
-  let late: NodeJS.Timeout | undefined;
-  const stalled = new Promise<never>((_resolve, reject) => {
-    abort.signal.addEventListener('abort', () => reject(abort.signal.reason as Error));
+  // A promise of its own for each piece: a race against one that lasts would keep every piece for as long.
+  const within = <T>(work: Promise<T>): Promise<T> => new Promise((resolve, reject) => {
+    const late = setTimeout(() => {
+      const error = new Error(`Storage sent nothing for ${stallSeconds} s after ${bytes} bytes of the file.`);
+      reject(error);
+      abort.abort(error);
+    }, stallSeconds * 1000);
+    work.then(resolve, reject).finally(() => clearTimeout(late));
   });
-  // Heard below, or by nobody where the reader ended before it.
-  stalled.catch(() => undefined);
-  const within = <T>(work: Promise<T>): Promise<T> => {
-    late = setTimeout(() => abort.abort(new Error(`Storage sent nothing for ${stallSeconds} s after ${bytes} bytes of the file.`)), stallSeconds * 1000);
-    return Promise.race([work, stalled]).finally(() => clearTimeout(late));
-  };
   let source: Readable | undefined;
   try {
     source = await within(open(abort.signal));
