@@ -15,7 +15,7 @@ import { fileInput, makeUploadStudy, rowOf } from '@/tests/support/uploading';
 
 const bytes = Number(process.env.BYTES ?? 5e9);
 /** What each may have at its peak above its beginning, whatever the size of the file. */
-const mostGrowth = { browser: 500e6, web: 250e6, worker: 500e6 };
+const mostGrowth = { browser: 200e6, renderer: 150e6, web: 100e6, worker: 200e6 };
 const hours = 3_600_000;
 
 /** A table of whole rows repeated up to the size, with its header once. */
