@@ -1,58 +1,38 @@
 import fs from 'node:fs';
 import path from 'node:path';
-import { ensureBuild } from './build.mjs';
-import { productEnvironment, testEnvironment } from './environment.mjs';
+import { testEnvironment } from './environment.mjs';
+import { startFreshServices, TEST_RUN, testLogFolder, testPidFolder, testReportFolder } from './fresh-services.mjs';
 import { install } from './install.mjs';
 import { onInterruption } from './interruption.mjs';
-import { acquireLock } from './lock.mjs';
 import { logToFolder } from './logs.mjs';
 import { npmBinary, root } from './places.mjs';
-import { assertPortsFree, networkPorts, portsOf } from './ports.mjs';
-import { migrate, webService, workerService } from './product.mjs';
+import { networkPorts } from './ports.mjs';
+import { webService, workerService } from './product.mjs';
 import { run, stopRunning } from './processes.mjs';
-import { runFolder, startServices } from './services.mjs';
-import { awaitEarlierProcesses, createSupervisor } from './supervisor.mjs';
+import { createSupervisor } from './supervisor.mjs';
 import { readCounts } from './test-counts.mjs';
 import { networkService, throughNetwork } from './test-network.mjs';
 import { needsProduct } from './test-selection.mjs';
 
-const NAME = 'test';
-const folder = runFolder(NAME);
-const pidFolder = path.join(folder, 'pids');
-const logFolder = path.join(folder, 'logs');
-const reportFolder = path.join(folder, 'reports');
 // What tests kill again and again comes back quickly every time.
-const supervisor = createSupervisor({ pidFolder, log: logToFolder(logFolder), longestBackoff: 500 });
+const supervisor = createSupervisor({ pidFolder: testPidFolder, log: logToFolder(testLogFolder), longestBackoff: 500 });
 
 /** @returns {Promise<Record<string, string>>} what the tests need to know */
 async function startProduct() {
-  const ports = portsOf(NAME);
-  await acquireLock(NAME, {
-    wait: true,
-    whenBusy: (holder) => `Waiting for another test run in this folder (process ${holder}) …`,
-  });
-  await awaitEarlierProcesses(pidFolder);
-  await assertPortsFree(NAME, ports);
-  for (const name of ['postgres', 'redis', 'storage', 'mail', 'logs']) {
-    fs.rmSync(path.join(folder, name), { recursive: true, force: true });
-  }
-  fs.mkdirSync(logFolder, { recursive: true });
-  const env = productEnvironment(ports, { LOG_LEVEL: process.env.LOG_LEVEL });
-  const [build] = await Promise.all([ensureBuild(), startServices(NAME, supervisor, ports, env)]);
-  await migrate(env);
+  const { ports, env, build } = await startFreshServices(supervisor);
   await supervisor.start(networkService(ports));
   await supervisor.start(workerService(build, throughNetwork(env, 'worker')));
   await supervisor.start(webService(build, ports.web, throughNetwork(env, 'web')));
   console.log(`The product runs for the tests on port ${ports.web} after ${performance.now().toFixed(0)} ms.`);
   return {
-    ...env, ...testEnvironment(ports), TEST_BUILD_FOLDER: build, TEST_PID_FOLDER: pidFolder, TEST_LOG_FOLDER: logFolder,
+    ...env, ...testEnvironment(ports), TEST_BUILD_FOLDER: build, TEST_PID_FOLDER: testPidFolder, TEST_LOG_FOLDER: testLogFolder,
     TEST_NETWORK_URL: `http://127.0.0.1:${networkPorts().control}`,
   };
 }
 
 /** @param {string[]} args @param {Record<string, string>} env */
 async function runVitest(args, env) {
-  const report = path.join(reportFolder, `${process.pid}.json`);
+  const report = path.join(testReportFolder, `${process.pid}.json`);
   fs.rmSync(report, { force: true });
   const reporters = ['--reporter=default', '--reporter=json', `--outputFile.json=${report}`];
   let endedWell = true;
@@ -74,8 +54,8 @@ async function runVitest(args, env) {
 }
 
 function printLogs() {
-  for (const name of fs.existsSync(logFolder) ? fs.readdirSync(logFolder) : []) {
-    const lines = fs.readFileSync(path.join(logFolder, name), 'utf8').trim().split('\n').slice(-20);
+  for (const name of fs.existsSync(testLogFolder) ? fs.readdirSync(testLogFolder) : []) {
+    const lines = fs.readFileSync(path.join(testLogFolder, name), 'utf8').trim().split('\n').slice(-20);
     if (lines.join('') !== '') console.log(`The last lines of ${name}:\n${lines.join('\n')}`);
   }
 }
@@ -83,7 +63,7 @@ function printLogs() {
 async function test() {
   const args = process.argv.slice(2);
   try {
-    await install(needsProduct(args) ? NAME : null);
+    await install(needsProduct(args) ? TEST_RUN : null);
     const env = needsProduct(args) ? await startProduct() : {};
     return await runVitest(args, env);
   } catch (error) {

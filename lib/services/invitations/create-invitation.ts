@@ -1,6 +1,6 @@
 import { insertInvitation, revokeExpiredInvitations } from '@/db/queries/invitations';
 import { findMemberByEmail } from '@/db/queries/memberships';
-import { invitationDays } from '@/lib/domain/invitations/days';
+import { invitationEnd } from '@/lib/domain/invitations/days';
 import type { CreateInvitationInput, Invitation } from '@/lib/domain/invitations/schema';
 import { AppError } from '@/lib/errors';
 import type { MemberContext } from '../context';
@@ -12,8 +12,6 @@ import { refuseDuplicate } from '../unique-violation';
 import { withOrganisation } from '../with-organisation';
 import { queueInvitationMail } from './queue-invitation-mail';
 import { readInvitation, requireInvitation } from './require-invitation';
-
-const dayMilliseconds = 24 * 3600_000;
 
 /** Invites an address by mail. */
 export async function createInvitation(ctx: MemberContext, input: CreateInvitationInput): Promise<Invitation> {
@@ -31,7 +29,7 @@ export async function createInvitation(ctx: MemberContext, input: CreateInvitati
     const id = newId();
     await insertInvitation(trx, {
       organisation_id: ctx.organisation.id, id, email: input.email, roles: input.roles, code_ids: await codeIdsOf(ctx, trx, input.codes), until,
-      expires_at: new Date(now.getTime() + invitationDays * dayMilliseconds), invited_by: ctx.userId,
+      expires_at: invitationEnd(now), invited_by: ctx.userId,
     });
     await queueInvitationMail(ctx, trx, await requireInvitation(ctx, trx, id));
     return readInvitation(ctx, trx, id);

@@ -1,5 +1,5 @@
 import { updatePendingInvitation } from '@/db/queries/invitations';
-import { invitationDays } from '@/lib/domain/invitations/days';
+import { invitationEnd } from '@/lib/domain/invitations/days';
 import type { Invitation } from '@/lib/domain/invitations/schema';
 import { AppError } from '@/lib/errors';
 import type { MemberContext } from '../context';
@@ -8,16 +8,13 @@ import { withOrganisation } from '../with-organisation';
 import { queueInvitationMail } from './queue-invitation-mail';
 import { readInvitation, requireInvitation } from './require-invitation';
 
-const dayMilliseconds = 24 * 3600_000;
-
 /** Sends an invitation again, also one that has expired; the link of the mail before is void once the new one goes out. */
 export async function resendInvitation(ctx: MemberContext, key: string): Promise<Invitation> {
   permit(ctx, 'people.manage');
   await ctx.limits.take('invitation', ctx.organisation.id);
   return withOrganisation(ctx, async (trx) => {
     const row = await requireInvitation(ctx, trx, key);
-    const expires_at = new Date(ctx.clock().getTime() + invitationDays * dayMilliseconds);
-    if (!(await updatePendingInvitation(trx, ctx.organisation.id, row.id, { expires_at }))) {
+    if (!(await updatePendingInvitation(trx, ctx.organisation.id, row.id, { expires_at: invitationEnd(ctx.clock()) }))) {
       throw new AppError('wrong-state', `The invitation of ${row.email} is ${row.state}. Invite ${row.email} anew instead.`);
     }
     await queueInvitationMail(ctx, trx, row);

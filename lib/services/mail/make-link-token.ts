@@ -1,11 +1,10 @@
 import { updatePendingInvitation } from '@/db/queries/invitations';
 import type { MailRow } from '@/db/queries/mails';
 import { updateUnusedReset } from '@/db/queries/password-resets';
-import { invitationDays } from '@/lib/domain/invitations/days';
+import { invitationEnd } from '@/lib/domain/invitations/days';
 import { newSecretToken } from '../secret-token';
 import type { Trx } from '../with-organisation';
 
-const dayMilliseconds = 24 * 3600_000;
 const resetMilliseconds = 3600_000;
 
 /**
@@ -16,8 +15,7 @@ export async function makeLinkToken(trx: Trx, mail: MailRow, now: Date): Promise
   const { organisation_id: organisationId, subject_id: subjectId, kind } = mail;
   const { token, sha256 } = newSecretToken();
   if (kind === 'invitation' && organisationId !== null && subjectId !== null) {
-    const expires_at = new Date(now.getTime() + invitationDays * dayMilliseconds);
-    return { isNeeded: await updatePendingInvitation(trx, organisationId, subjectId, { token_sha256: sha256, expires_at }), token };
+    return { isNeeded: await updatePendingInvitation(trx, organisationId, subjectId, { token_sha256: sha256, expires_at: invitationEnd(now) }), token };
   }
   if (kind === 'password-reset' && subjectId !== null) {
     const expires_at = new Date(now.getTime() + resetMilliseconds);
