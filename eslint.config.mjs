@@ -5,7 +5,7 @@ import tseslint from 'typescript-eslint';
 const counted = { skipBlankLines: false, skipComments: false };
 
 export default tseslint.config(
-  { ignores: ['.next/', '.fourfold/', 'node_modules/', 'next-env.d.ts', 'db/schema.generated.ts', 'lib/readers/table-rows/'] },
+  { ignores: ['.next/', '.fourfold/', 'node_modules/', 'next-env.d.ts', 'db/schema.generated.ts', 'lib/readers/table/table-rows/'] },
   { linterOptions: { reportUnusedDisableDirectives: 'error' } },
   ...next,
   ...nextTypescript,

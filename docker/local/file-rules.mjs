@@ -7,7 +7,7 @@ const MOST_LINES = 300;
 const MOST_LINES_TESTS = 500;
 const MOST_BYTES = 1_000_000;
 const SOURCE = /\.(tsx?|mjs|cjs|js|css|sql|py|sh)$/;
-const GENERATED = new Set(['db/schema.generated.ts', 'lib/readers/table-rows.generated.ts']);
+const GENERATED = new Set(['db/schema.generated.ts', 'lib/readers/table/table-rows.generated.ts']);
 // Spelt in halves, or this file would find itself.
 const SILENCED = new RegExp(['eslint-dis' + 'able', '@ts-ig' + 'nore', '@ts-exp' + 'ect-error', '\\bTO' + 'DO\\b'].join('|'));
 

@@ -2,8 +2,8 @@ import fs from 'node:fs';
 import path from 'node:path';
 import { root } from './places.mjs';
 
-const source = 'lib/readers/table-rows/read-rows.ts';
-const target = 'lib/readers/table-rows.generated.ts';
+const source = 'lib/readers/table/table-rows/read-rows.ts';
+const target = 'lib/readers/table/table-rows.generated.ts';
 
 /** @returns {Promise<string>} the WebAssembly module, in base64 */
 async function compile() {

@@ -2,20 +2,19 @@ import { createHash } from 'node:crypto';
 import { createNormTotal, type NormTotal } from '../numerics/norms/combine-norms';
 import type { GridNorms } from '../numerics/norms/grid-norms';
 import type { NormPart } from '../numerics/norms/norm-part';
-import type { OpenHelper } from './chunk-helping';
+import type { OpenHelper } from './table/chunk-helping';
 import { compileExact } from './compile-exact';
 import { prepareGathering, type GridTask } from './gather-grid';
 import { createGridChecks, type GridChecks } from './grid-checks';
 import type { GridReading } from './grid-reading';
 import { locateColumns } from './locate-columns';
 import { planColumns } from './plan-columns';
-import { readChunks } from './read-chunks';
-import type { Head } from './read-head';
-import { readJson } from './read-json';
-import { readSource } from './read-source';
+import { readChunks } from './table/read-chunks';
+import type { ColumnFormat } from './column-format';
+import { readSource, type OpenSource } from './read-source';
 import type { ByteSource, ReadProgress } from './source';
-import { detectTableDialect } from './table-dialect';
-import { createTableWork, type TableTask } from './table-work';
+import { detectTableDialect } from './table/table-dialect';
+import { createTableWork, type TableTask } from './table/table-work';
 
 export interface GridReadResult {
   norms: GridNorms;
@@ -32,7 +31,7 @@ export interface GridReadOptions {
 }
 
 /** The columns of the file and their most significant digits, in the order of the plan. */
-interface ColumnsRead { indices: number[]; digits: number[] }
+interface ColumnsRead { indices: number[]; digits: (number | null)[] }
 
 interface Gathering { task: GridTask; checks: GridChecks; total: NormTotal; onPiece: () => void }
 
@@ -56,8 +55,8 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   const gathering: Gathering = { task, checks, total, onPiece };
 
   const { indices, digits } = await readSource(source, {
-    json: (pieces) => readJsonGrid(pieces, gathering),
-    table: (pieces, head) => readTableGrid(pieces, head, { ...gathering, openHelper: options.openHelper }),
+    table: (opened) => readTableGrid(opened, { ...gathering, openHelper: options.openHelper }),
+    columns: (reader, { pieces }) => readColumnsGrid(reader, pieces, gathering),
   }, { onBytes, signal: options.signal });
   onPiece();
   if (total.rows() === 0 && checks.isClean()) {
@@ -69,9 +68,11 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   return { norms, sha256: hash.digest('hex'), bytes };
 }
 
-async function readJsonGrid(pieces: AsyncGenerator<Buffer, void>, { task, checks, total, onPiece }: Gathering): Promise<ColumnsRead> {
+async function readColumnsGrid(
+  reader: ColumnFormat, pieces: AsyncIterable<Buffer>, { task, checks, total, onPiece }: Gathering,
+): Promise<ColumnsRead> {
   const gatherer = prepareGathering(task)(checks);
-  const { columns } = await readJson(pieces, { wanted: task.plan.names, reasons: checks.rows, onBatch: (batch) => gatherer.add(batch), onChunk: onPiece });
+  const { columns } = await reader.read(pieces, { wanted: task.plan.names, reasons: checks.rows, onBatch: (batch) => gatherer.add(batch), onPiece });
   const indices = columns.map(({ index }) => index);
   total.add(gatherer.finish(indices));
   return { indices, digits: columns.map(({ significantDigits }) => significantDigits) };
@@ -80,7 +81,7 @@ async function readJsonGrid(pieces: AsyncGenerator<Buffer, void>, { task, checks
 interface TableGathering extends Gathering { openHelper: GridReadOptions['openHelper'] }
 
 async function readTableGrid(
-  pieces: AsyncGenerator<Buffer, void>, head: Head, { task: grid, checks, total, onPiece, openHelper }: TableGathering,
+  { pieces, head }: OpenSource, { task: grid, checks, total, onPiece, openHelper }: TableGathering,
 ): Promise<ColumnsRead> {
   const dialect = detectTableDialect(head);
   const indices = locateColumns(dialect.header, grid.plan.names, dialect.headerLine, checks.rows);

@@ -1,10 +1,23 @@
+import type { ColumnFormat } from './column-format';
+import { columnFormats } from './column-formats';
 import { openPlainBytes } from './plain-bytes';
 import { readHead, type Head } from './read-head';
 import { sniffFormat } from './sniff-format';
 import type { ByteSource, SourceFormat } from './source';
 
-/** What reads a file of each format; `pieces` are all of its bytes, decompressed, without a byte order mark. */
-export type FormatReaders<Result> = Record<SourceFormat, (pieces: AsyncGenerator<Buffer, void>, head: Head) => Promise<Result>>;
+export interface OpenSource {
+  format: SourceFormat;
+  compressed: boolean;
+  /** All bytes, decompressed, without a byte order mark. */
+  pieces: AsyncGenerator<Buffer, void>;
+  head: Head;
+}
+
+/** What reads a file: text tables one way, formats that have columns in another. */
+export interface SourceReaders<Result> {
+  table(source: OpenSource): Promise<Result>;
+  columns(reader: ColumnFormat, source: OpenSource): Promise<Result>;
+}
 
 export interface ReadSourceOptions {
   /** Told before bytes are read on, as stored. */
@@ -13,11 +26,13 @@ export interface ReadSourceOptions {
 }
 
 /** Opens a file and has it read by what its content calls for. Throws RejectedFile where it is nothing that is read. */
-export async function readSource<Result>(source: ByteSource, readers: FormatReaders<Result>, options: ReadSourceOptions = {}): Promise<Result> {
-  const { chunks } = await openPlainBytes(told(source, options));
+export async function readSource<Result>(source: ByteSource, readers: SourceReaders<Result>, options: ReadSourceOptions = {}): Promise<Result> {
+  const { compressed, chunks } = await openPlainBytes(told(source, options));
   try {
     const head = await readHead(chunks);
-    return await readers[sniffFormat(head)](join(head, chunks), head);
+    const format = sniffFormat(head);
+    const opened: OpenSource = { format, compressed, head, pieces: join(head, chunks) };
+    return await (format === 'table' ? readers.table(opened) : readers.columns(columnFormats[format], opened));
   } finally {
     await chunks.return();
   }

@@ -1,6 +1,6 @@
 import { createGridChecks } from '@/lib/readers/grid-checks';
-import { createChunkReader } from '@/lib/readers/read-chunk';
-import type { TableDialect } from '@/lib/readers/table-dialect';
+import { createChunkReader } from '@/lib/readers/table/read-chunk';
+import type { TableDialect } from '@/lib/readers/table/table-dialect';
 
 type Random = () => number;
 

@@ -1,15 +1,14 @@
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import { locateColumns } from '@/lib/readers/locate-columns';
-import { createChunkReader } from '@/lib/readers/read-chunk';
-import { readChunks } from '@/lib/readers/read-chunks';
-import { readJson } from '@/lib/readers/read-json';
+import { createChunkReader } from '@/lib/readers/table/read-chunk';
+import { readChunks } from '@/lib/readers/table/read-chunks';
 import { readSource } from '@/lib/readers/read-source';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { ColumnBatch } from '@/lib/readers/source';
-import { detectTableDialect } from '@/lib/readers/table-dialect';
+import { detectTableDialect } from '@/lib/readers/table/table-dialect';
 import { byteSource } from './byte-source';
 
-export interface ReadTable { columns: number[][]; lines: (number | null)[]; digits: number[] }
+export interface ReadTable { columns: number[][]; lines: (number | null)[]; digits: (number | null)[] }
 
 /** Reads whole columns, as nobody but a test should. */
 export async function readTable(content: string | Uint8Array, names: string[], cuts: readonly number[] = []): Promise<ReadTable> {
@@ -20,12 +19,12 @@ export async function readTable(content: string | Uint8Array, names: string[], c
     for (let i = 0; i < batch.rows; i += 1) lines.push(batch.lines?.[i] ?? null);
     for (const [slot, column] of batch.columns.entries()) columns[slot]?.push(...column.subarray(0, batch.rows));
   };
-  const digits = await readSource(byteSource(content, cuts), {
-    async json(pieces) {
-      const read = await readJson(pieces, { wanted: names, reasons: checks.rows, onBatch, onChunk: () => undefined });
+  const digits = await readSource<(number | null)[]>(byteSource(content, cuts), {
+    async columns(reader, { pieces }) {
+      const read = await reader.read(pieces, { wanted: names, reasons: checks.rows, onBatch, onPiece: () => undefined });
       return read.columns.map(({ significantDigits }) => significantDigits);
     },
-    table(pieces, head) {
+    table({ pieces, head }) {
       const dialect = detectTableDialect(head);
       const reader = createChunkReader({ dialect, wanted: locateColumns(dialect.header, names, dialect.headerLine, checks.rows) });
       const work = {

@@ -1,7 +1,7 @@
 import { parentPort } from 'node:worker_threads';
 import type { NormPart } from '@/lib/numerics/norms/norm-part';
 import { createGridChecks } from '@/lib/readers/grid-checks';
-import { createTableWork, type ChunkWork } from '@/lib/readers/table-work';
+import { createTableWork, type ChunkWork } from '@/lib/readers/table/table-work';
 import type { HelperAnswer, HelperMessage } from './table-helper';
 
 if (!parentPort) throw new Error('read-table-thread runs as a worker thread only.');

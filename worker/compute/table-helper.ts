@@ -1,7 +1,7 @@
 import { Worker } from 'node:worker_threads';
 import type { NormPart } from '@/lib/numerics/norms/norm-part';
-import type { ChunkHelper, OpenHelper } from '@/lib/readers/chunk-helping';
-import type { ChunkResult, TableTask } from '@/lib/readers/table-work';
+import type { ChunkHelper, OpenHelper } from '@/lib/readers/table/chunk-helping';
+import type { ChunkResult, TableTask } from '@/lib/readers/table/table-work';
 
 /** What the helping thread is told: first the task, then chunk after chunk, each of which it answers in order. */
 export type HelperMessage = { task: TableTask; rooms: readonly SharedArrayBuffer[] } | { room: number; length: number };

@@ -1,12 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import { gzipSync } from 'node:zlib';
 import type { NormPart } from '@/lib/numerics/norms/norm-part';
-import type { OpenHelper } from '@/lib/readers/chunk-helping';
+import type { OpenHelper } from '@/lib/readers/table/chunk-helping';
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import { readGrid } from '@/lib/readers/read-grid';
 import { RejectedFile } from '@/lib/readers/rejected-file';
-import { createTableWork, type TableTask } from '@/lib/readers/table-work';
+import { createTableWork, type TableTask } from '@/lib/readers/table/table-work';
 import { byteSource } from '@/tests/support/byte-source';
 
 const reading: GridReading = {

@@ -1,29 +1,18 @@
-import { resolveColumn } from '../domain/columns/resolve-column';
+import type { ColumnsAsked, ColumnsFound } from '../column-format';
+import { resolveColumn } from '../../domain/columns/resolve-column';
 import { createJsonColumns, type ColumnSink } from './json-columns';
-import { locateColumns } from './locate-columns';
+import { locateColumns } from '../locate-columns';
 import { createNumberSpool, type NumberSpool } from './number-spool';
-import { parseNumber, type NumberReading } from './parse-number';
-import { rejectAtOnce, type ReasonCollector } from './reason-collector';
-import type { ColumnBatch } from './source';
+import { parseNumber, type NumberReading } from '../parse-number';
+import { rejectAtOnce, type ReasonCollector } from '../reason-collector';
+import type { ColumnBatch } from '../source';
 
 const batchRows = 2048;
 /** Columns arrive one after another, so all their numbers are held: 32 MB of them. */
 const mostNumbers = 4_000_000;
 
-interface ReadColumnsResult {
-  /** In the order asked for. */
-  columns: { index: number; significantDigits: number }[];
-}
-
-interface ReadJsonOptions {
-  wanted: readonly string[];
-  reasons: ReasonCollector;
-  onBatch: (batch: ColumnBatch) => void;
-  onChunk: () => void;
-}
-
 /** Reads columns from JSON. Memory grows with the rows here, up to a limit beyond which the file is rejected. */
-export async function readJson(chunks: AsyncIterable<Buffer>, { wanted, reasons, onBatch, onChunk }: ReadJsonOptions): Promise<ReadColumnsResult> {
+export async function readJson(pieces: AsyncIterable<Buffer>, { wanted, reasons, onBatch, onPiece }: ColumnsAsked): Promise<ColumnsFound> {
   const spools = new Map<number, NumberSpool>();
   let held = 0;
   const columns = createJsonColumns((name, column) => {
@@ -40,9 +29,9 @@ export async function readJson(chunks: AsyncIterable<Buffer>, { wanted, reasons,
     });
   }, reasons);
 
-  for await (const chunk of chunks) {
-    columns.push(chunk);
-    onChunk();
+  for await (const piece of pieces) {
+    columns.push(piece);
+    onPiece();
   }
   columns.end();
   const header = columns.header();
@@ -59,7 +48,7 @@ export async function readJson(chunks: AsyncIterable<Buffer>, { wanted, reasons,
   reasons.throwIfAny();
   deliver(found, rows, (batch) => {
     onBatch(batch);
-    onChunk();
+    onPiece();
   });
   return { columns: found.map((spool, slot) => ({ index: indices[slot] ?? 0, significantDigits: spool.digits() })) };
 }

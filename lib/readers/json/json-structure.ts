@@ -1,4 +1,4 @@
-import { rejectAtOnce, type ReasonCollector } from './reason-collector';
+import { rejectAtOnce, type ReasonCollector } from '../reason-collector';
 
 export type JsonScalar = 'number' | 'string' | 'word';
 

@@ -1,8 +1,8 @@
 import { createHelping, type OpenHelper } from './chunk-helping';
 import { createChunkTurns, type Turn } from './chunk-turns';
-import type { GridChecks } from './grid-checks';
-import { rejectAtOnce } from './reason-collector';
-import { longestLine } from './read-head';
+import type { GridChecks } from '../grid-checks';
+import { rejectAtOnce } from '../reason-collector';
+import { longestLine } from '../read-head';
 import { createChunkCutter, mostChunkBytes } from './table-chunks';
 import type { TableDialect } from './table-dialect';
 import type { ChunkWork } from './table-work';

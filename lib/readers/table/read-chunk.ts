@@ -1,7 +1,7 @@
 import { explainRow, type DecimalMark, type RowRules } from './explain-row';
-import type { ReasonCollector } from './reason-collector';
+import type { ReasonCollector } from '../reason-collector';
 import { delimiterCharacter } from './split-fields';
-import type { ColumnBatch } from './source';
+import type { ColumnBatch } from '../source';
 import type { TableDialect } from './table-dialect';
 import { mostChunkBytes } from './table-chunks';
 import { createTableRows } from './table-rows';

@@ -1,4 +1,4 @@
-import { powersOfFive } from './powers-of-five';
+import { powersOfFive } from '../powers-of-five';
 import { tableRowsModule } from './table-rows.generated';
 
 /** What table-rows/read-rows.ts exports, which says what each does. */

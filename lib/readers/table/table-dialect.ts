@@ -1,9 +1,9 @@
-import { refuseManyColumns } from './column-limit';
-import { parseNumber, type NumberReading } from './parse-number';
-import type { Head } from './read-head';
-import { RejectedFile } from './rejected-file';
+import { refuseManyColumns } from '../column-limit';
+import { parseNumber, type NumberReading } from '../parse-number';
+import type { Head } from '../read-head';
+import { RejectedFile } from '../rejected-file';
 import { splitFields, splitNames } from './split-fields';
-import type { Delimiter } from './source';
+import type { Delimiter } from '../source';
 
 export interface TableDialect {
   delimiter: Delimiter;

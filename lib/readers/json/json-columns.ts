@@ -1,6 +1,6 @@
-import { refuseManyColumns } from './column-limit';
+import { refuseManyColumns } from '../column-limit';
 import { createJsonStructure, type JsonScalar, type JsonStructure } from './json-structure';
-import { rejectAtOnce, type ReasonCollector } from './reason-collector';
+import { rejectAtOnce, type ReasonCollector } from '../reason-collector';
 
 /** What is done with the values of one column: its place among the columns counts from 1. */
 export type ColumnSink = (kind: JsonScalar | 'list', bytes: Buffer, from: number, to: number, line: number, row: number) => void;

@@ -1,4 +1,4 @@
-import { longestLine } from './read-head';
+import { longestLine } from '../read-head';
 
 /** A chunk is the lines that begin within this many bytes: the same whatever pieces the bytes came in. */
 const chunkBytes = 256 * 1024;

@@ -1,7 +1,7 @@
-import { parseNumber, type NumberReading } from './parse-number';
-import type { ReasonCollector } from './reason-collector';
+import { parseNumber, type NumberReading } from '../parse-number';
+import type { ReasonCollector } from '../reason-collector';
 import { splitFields } from './split-fields';
-import type { Delimiter } from './source';
+import type { Delimiter } from '../source';
 
 /** The decimal mark of the file and the line it was first seen in. */
 export interface DecimalMark { mark: 'point' | 'comma'; line: number }

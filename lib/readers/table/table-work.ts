@@ -1,7 +1,7 @@
-import type { NormPart } from '../numerics/norms/norm-part';
+import type { NormPart } from '../../numerics/norms/norm-part';
 import type { DecimalMark } from './explain-row';
-import { prepareGathering, type GridTask } from './gather-grid';
-import { createGridChecks, type GridChecks } from './grid-checks';
+import { prepareGathering, type GridTask } from '../gather-grid';
+import { createGridChecks, type GridChecks } from '../grid-checks';
 import { createChunkReader, type ChunkStart } from './read-chunk';
 import type { TableDialect } from './table-dialect';
 
