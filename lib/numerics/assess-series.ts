@@ -29,7 +29,7 @@ export function assessSeries(input: SeriesToAssess): SeriesAssessment {
   }
   const fields = input.errors.map((series) => judgeErrorSeries({ ...series, grids: finestFirst(series.grids) }));
   const quantities = input.quantities.map((series) => judgeQuantity({ ...series, grids: finestFirst(series.grids) }));
-  return { ...studyOutcome(fields, quantities), fields, quantities, patterns: suggestPatterns(fields, input.around), numericsVersion };
+  return { ...studyOutcome(fields, quantities), fields, quantities, patterns: suggestPatterns(fields.filter((field) => field.comparedTo === undefined), input.around), numericsVersion };
 }
 
 function finestFirst<Grid extends { h: number }>(grids: readonly Grid[]): Grid[] {

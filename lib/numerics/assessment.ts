@@ -24,6 +24,8 @@ export interface ErrorSeries {
   norm: SeriesNorm;
   /** The whole domain where it is left out. */
   region?: Region;
+  /** Where there is no exact solution: every error is the norm of the difference to the next coarser grid, the last one to this. */
+  comparedTo?: { label: string; h: number };
   /** `exactNorm` is the same norm of the exact field, null where unknown; `knownError` is δ in the unit of the error. */
   grids: { label: string; h: number; error: number; knownError: number; exactNorm: number | null; at: Position | null }[];
   formalOrder: number | null;
@@ -86,6 +88,8 @@ export interface FieldAssessment {
   statedOrder?: number; regularity?: number;
   logFactor?: number;
   derivedOrder: number | null; tolerance: number | null; counts: boolean;
+  /** Where errors are norms of the difference to the next coarser grid: the coarsest of all, which has no row of its own. */
+  comparedTo?: { label: string; h: number };
   grids: FieldGrid[]; orders: PairOrder[]; fit: OrderFit | null;
   /** Null where there is no formal order to judge by. */
   outcome: Outcome | null; reasons: ReasonCode[];

@@ -19,6 +19,8 @@ interface Verdict { outcome: Outcome | null; reason: ReasonCode }
  * observed orders against the formal one (orderRule), of the errors without their logarithm where they have one. A declared
  * derived order replaces the formal one in every step; the regularity may lower it.
  *
+ * Norms of differences of consecutive solutions (`comparedTo`) are judged as errors are; their orders take three grids each.
+ *
  * The outcome is null with `no-target` where there is no formal order to judge by. Orders of grids left out are not
  * given; an order is null where an error is 0. Throws where spacings do not rise or an error is negative or not finite.
  */
@@ -29,11 +31,11 @@ export function judgeErrorSeries(series: ErrorSeries): FieldAssessment {
   const tolerance = series.tolerance ?? (judgedBy === null ? null : defaultTolerance(series.norm, judgedBy));
   const grids = dropFloor(series).map((grid) => withoutLogarithm(grid, series.logFactor));
   const used = grids.filter((grid) => grid.used).map(asJudged);
-  const orders = pairOrders(used);
+  const orders = pairOrders(used, series.comparedTo);
   const { outcome, reason } = judgeExactness(series, judgedBy) ?? judgeOrders(series, { used, orders, judgedBy, tolerance });
   return {
     field: series.field, norm: series.norm, region: series.region ?? 'all', formalOrder, ...limited,
-    ...(series.logFactor && { logFactor: series.logFactor.power }), derivedOrder: series.derivedOrder, tolerance, counts: series.counts, grids, orders, fit: leastSquaresOrder(used), ...(isPart(series) ? { outcome: null, reasons: [] } : { outcome, reasons: [reason] }),
+    ...(series.logFactor && { logFactor: series.logFactor.power }), derivedOrder: series.derivedOrder, tolerance, counts: series.counts, grids, orders, fit: leastSquaresOrder(used), ...(series.comparedTo && { comparedTo: series.comparedTo, fit: null }), ...(isPart(series) ? { outcome: null, reasons: [] } : { outcome, reasons: [reason] }),
   };
 }
 
@@ -71,7 +73,8 @@ interface Orders { used: FieldGrid[]; orders: PairOrder[]; judgedBy: number | nu
 function judgeOrders(series: ErrorSeries, { used, orders, judgedBy, tolerance }: Orders): Verdict {
   if (judgedBy === null || tolerance === null) return { outcome: null, reason: 'no-target' };
   if (!series.samplingStated && judgedBy >= samplingMatters) return { outcome: 'inconclusive', reason: 'sampling-not-stated' };
-  const enough = used.length >= series.minimumGrids && spansRatio(used.map((grid) => grid.h)) && orders.length >= 2;
+  const spacings = [...used.map((grid) => grid.h), ...(series.comparedTo ? [series.comparedTo.h] : [])];
+  const enough = spacings.length >= series.minimumGrids && spansRatio(spacings) && orders.length >= 2;
   if (!enough) return { outcome: 'inconclusive', reason: 'too-few-grids' };
   const errors = used.map((grid) => grid.error).reverse();
   const pairs = orders.flatMap(({ order, uncertainty }) => (order === null || uncertainty === null ? [] : { order, uncertainty })).reverse();
@@ -79,7 +82,9 @@ function judgeOrders(series: ErrorSeries, { used, orders, judgedBy, tolerance }:
   return orderRule({ pairs, errors }, judgedBy, tolerance);
 }
 
-function checkSeries({ field, norm, grids }: ErrorSeries): void {
+function checkSeries({ field, norm, grids, comparedTo }: ErrorSeries): void {
+  const last = grids.at(-1);
+  if (comparedTo && last && !(comparedTo.h > last.h)) throw new RangeError(`h of ${field} (${norm}) on grid ${comparedTo.label} must exceed that of the finer grid, got ${comparedTo.h}`);
   grids.forEach(({ label, h, error, knownError }, index) => {
     const where = `of ${field} (${norm}) on grid ${label}`;
     if (!(h > (grids[index - 1]?.h ?? 0) && Number.isFinite(h))) throw new RangeError(`h ${where} must exceed that of the finer grid, got ${h}`);
