@@ -1,9 +1,7 @@
-import { create, parseDependencies, type MathNode } from 'mathjs';
-import { ExpressionProblem } from './expression-problem';
 import { checkOrder } from './check-order';
+import { parsePlain, type PlainNode } from './plain-parser';
 import { tokenize, type Token } from './tokenize';
 
-const { parse } = create(parseDependencies ?? {});
 type Leaf = Exclude<Token, { kind: 'sign' }>;
 
 /** The shape of an expression as written, every leaf with its place in the text. */
@@ -23,7 +21,7 @@ export function parseTree(text: string): Tree {
   const tokens = tokenize(text);
   checkOrder(tokens, text.length);
   const standIns = tokens.map((token, index) => (token.kind === 'sign' ? token.text : `v${index}`));
-  return readNode(parse(standIns.join(' ')), tokens);
+  return readNode(parsePlain(standIns.join(' ')), tokens);
 }
 
 /** The first character of a tree, counted from 1. */
@@ -35,34 +33,22 @@ export function positionOf(tree: Tree): number {
   }
 }
 
-interface SymbolLike extends MathNode { name: string }
-interface CallLike extends MathNode { fn: SymbolLike; args: MathNode[] }
-interface OperatorLike extends MathNode { op: string; fn: string; implicit: boolean; args: MathNode[] }
-
-function readNode(node: MathNode, tokens: readonly Token[]): Tree {
-  switch (node.type) {
-    case 'ParenthesisNode':
-      return readNode((node as MathNode & { content: MathNode }).content, tokens);
-    case 'SymbolNode':
-      return { kind: 'leaf', token: leafOf(node as SymbolLike, tokens) };
-    case 'FunctionNode': {
-      const call = node as CallLike;
-      return { kind: 'call', token: leafOf(call.fn, tokens), parts: call.args.map((part) => readNode(part, tokens)) };
-    }
-    case 'OperatorNode':
-      return readOperator(node as OperatorLike, tokens);
-    default:
-      throw new ExpressionProblem(1, 'The expression is not plain algebra; expected numbers, names, + - * / ^ and functions.');
+function readNode(node: PlainNode, tokens: readonly Token[]): Tree {
+  switch (node.kind) {
+    case 'parentheses': return readNode(node.content, tokens);
+    case 'symbol': return { kind: 'leaf', token: leafOf(node, tokens) };
+    case 'call': return { kind: 'call', token: leafOf(node.fn, tokens), parts: node.args.map((part) => readNode(part, tokens)) };
+    case 'operation': return readOperator(node, tokens);
   }
 }
 
-function leafOf(node: SymbolLike, tokens: readonly Token[]): Leaf {
-  const token = tokens[Number(node.name.slice(1))];
-  if (token === undefined || token.kind === 'sign') throw new Error(`parseTree: no token stands behind ${node.name}`);
+function leafOf(node: PlainNode, tokens: readonly Token[]): Leaf {
+  const token = node.kind === 'symbol' ? tokens[Number(node.name.slice(1))] : undefined;
+  if (token === undefined || token.kind === 'sign') throw new Error(`parseTree: no token stands behind ${node.kind === 'symbol' ? node.name : node.kind}`);
   return token;
 }
 
-function readOperator(node: OperatorLike, tokens: readonly Token[]): Tree {
+function readOperator(node: Extract<PlainNode, { kind: 'operation' }>, tokens: readonly Token[]): Tree {
   const [left, right] = node.args;
   if (left !== undefined && right === undefined) {
     const part = readNode(left, tokens);
