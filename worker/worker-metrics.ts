@@ -29,7 +29,7 @@ export function createWorkerMetrics(pool: Parameters<typeof createRegistry>[1]):
       seconds.observe({ job }, milliseconds / 1000);
     },
     counting: (reader) => ({
-      preview: (storageKey) => reader.preview(storageKey),
+      preview: (storageKey, given) => reader.preview(storageKey, given),
       async read(file, reading, onProgress) {
         let counted = 0;
         const countTo = (total: number) => {

@@ -55,7 +55,7 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   const gathering: Gathering = { task, checks, total, onPiece };
 
   const { indices, digits } = await readSource(source, {
-    table: (opened) => readTableGrid(opened, { ...gathering, openHelper: options.openHelper }),
+    table: (opened) => readTableGrid(opened, { ...gathering, given: reading.mapping.table, openHelper: options.openHelper }),
     columns: (reader, { pieces }) => readColumnsGrid(reader, pieces, gathering),
   }, { onBytes, signal: options.signal });
   onPiece();
@@ -78,12 +78,12 @@ async function readColumnsGrid(
   return { indices, digits: columns.map(({ significantDigits }) => significantDigits) };
 }
 
-interface TableGathering extends Gathering { openHelper: GridReadOptions['openHelper'] }
+interface TableGathering extends Gathering { given: GridReading['mapping']['table']; openHelper: GridReadOptions['openHelper'] }
 
 async function readTableGrid(
-  { pieces, head }: OpenSource, { task: grid, checks, total, onPiece, openHelper }: TableGathering,
+  { pieces, head }: OpenSource, { task: grid, checks, total, onPiece, given, openHelper }: TableGathering,
 ): Promise<ColumnsRead> {
-  const dialect = detectTableDialect(head);
+  const dialect = detectTableDialect(head, given);
   const indices = locateColumns(dialect.header, grid.plan.names, dialect.headerLine, checks.rows);
   const task: TableTask = { dialect, indices, grid };
   const work = createTableWork(task, checks);

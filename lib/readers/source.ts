@@ -1,8 +1,9 @@
+import type { DecimalMarkName, Delimiter, GivenDialect } from '../domain/columns/given-dialect';
+
 /** The bytes of a file as they are stored, compressed or not. */
 export type ByteSource = AsyncIterable<Uint8Array>;
 
 export type SourceFormat = 'table' | 'json';
-export type Delimiter = 'comma' | 'semicolon' | 'tab' | 'white space';
 
 /** What the beginning of a file shows. A file without a header names its columns c1, c2 … */
 export interface SourcePreview {
@@ -13,6 +14,11 @@ export interface SourcePreview {
   hasHeader: boolean;
   header: string[];
   firstRows: string[][];
+  /** Of a text table only, and absent from what was kept before they were known: the line of the names, the mark of the first numbers. */
+  headerLine?: number;
+  decimalMark?: DecimalMarkName | null;
+  /** What was said of the table before it was looked into. */
+  given?: GivenDialect;
 }
 
 /** Up to 2048 rows. The arrays are used again for the next batch: copy what is kept. */

@@ -1,5 +1,7 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import { createCaseContract, putColumnsContract, type Case } from '@/lib/domain/cases/schema';
+import type { QueryOf } from '@/lib/domain/api/contract';
+import { listRechecksContract, requestRecheckContract } from '@/lib/domain/studies/recheck-schema';
 import { createStudyContract, getGridResultContract, type Study } from '@/lib/domain/studies/schema';
 import { previewContract } from '@/lib/domain/uploads/schema';
 import { ok, refused } from '@/tests/support/api';
@@ -21,6 +23,49 @@ const make = (of: Case): Promise<Study> => ok(engineer, createStudyContract, {
   body: { case: of.slug, release: '1.0.0', grids: heatSizes.map((n) => ({ label: `n${n}`, cellsPerDirection: n })) },
 });
 const settled = (study: Study) => study.grids.every(({ state }) => !['stored', 'reading'].includes(state));
+
+/** The heat table with semicolons, decimal commas, and numbers for names, which looks as if it had none. */
+const numberedTable = (n: number): Buffer => Buffer.from(heatTable(n, { header: '1,2,3,4' }).toString()
+  .replaceAll(',', ';').replaceAll('.', ','));
+
+describe('a table that is written otherwise than it looks', () => {
+  it('is shown as it would be read, before that is kept, and then read so', async () => {
+    const made = await makeCase('Numbers for names');
+    const study = await make(made);
+    const { id } = await putFile(engineer, { id: study.id, label: 'n8' }, numberedTable(8));
+    await awaitStudy(engineer, study.id, settled);
+    const look = (query: QueryOf<typeof previewContract>) => ok(engineer, previewContract, { params: { id }, query });
+    expect(await look({})).toMatchObject({
+      header: ['c1', 'c2', 'c3', 'c4'], dialect: 'Semicolon between columns, decimal comma, no line of names',
+      table: { delimiter: 'semicolon', hasHeader: false, headerLine: null, decimalMark: 'comma', given: {} },
+    });
+    expect(await look({ header: 'yes' })).toMatchObject({
+      header: ['1', '2', '3', '4'], firstRows: { 0: { 0: '0,0625' } }, dialect: 'Semicolon between columns, decimal comma, names in line 1', table: { given: { hasHeader: true } },
+    });
+    expect(await look({ delimiter: 'tab' })).toMatchObject({ header: ['1;2;3;4'], table: { delimiter: 'tab', given: { delimiter: 'tab' } } });
+    const both = await refused(engineer, previewContract, { params: { id }, query: { delimiter: 'comma', decimal: 'comma' } });
+    expect(both).toMatchObject({ status: 422, errors: [{ path: 'decimal' }] });
+
+    const body = { x: '1', y: '2', weight: '3', fields: { T: '4' } };
+    const refusedBody = await refused(engineer, putColumnsContract, { params: { case: made.slug }, body: { ...body, table: { delimiter: 'comma', decimalMark: 'comma' } } });
+    expect(refusedBody).toMatchObject({ status: 422, errors: [{ path: 'table.decimalMark' }] });
+    const table = { hasHeader: true, decimalMark: 'point' } as const;
+    await ok(engineer, putColumnsContract, { params: { case: made.slug }, body: { ...body, table } });
+    const rejected = await awaitStudy(engineer, study.id, ({ grids }) => grids.some(({ state }) => state === 'rejected'));
+    expect(rejected.grids.find(({ label }) => label === 'n8')?.upload?.reasons).toMatchObject([{ code: 'mixed-decimal', line: 2, column: 1, found: '0,0625' }]);
+    expect(await look({ header: 'auto' })).toMatchObject({ header: ['c1', 'c2', 'c3', 'c4'], table: { given: {} } });
+
+    await ok(engineer, putColumnsContract, { params: { case: made.slug }, body: { ...body, table: { hasHeader: true } } });
+    for (const n of heatSizes.slice(1)) await putFile(engineer, { id: study.id, label: `n${n}` }, numberedTable(n));
+    expect((await awaitOutcome(engineer, study.id)).outcome).toBe('pass');
+    const result = await ok(engineer, getGridResultContract, { params: { id: study.id, label: 'n8' } });
+    expect(result.mapping).toEqual({ ...body, table: { hasHeader: true } });
+    expect(await look({})).toMatchObject({ header: ['1', '2', '3', '4'], table: { given: { hasHeader: true } } });
+
+    const again = await ok(engineer, requestRecheckContract, { params: { id: study.id } });
+    await expect.poll(async () => (await ok(engineer, listRechecksContract, { params: { id: study.id } })).items.find((item) => item.id === again.id)?.result, { timeout: 20_000 }).toBe('identical');
+  });
+});
 
 describe('a file whose columns have other names', () => {
   it('waits with its header and first rows, goes on when they are mapped, and the next study knows them', async () => {

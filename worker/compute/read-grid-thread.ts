@@ -36,7 +36,7 @@ async function run(task: GivenTask): Promise<ThreadResult> {
     open: (signal) => storage.read(task.storageKey, signal), stallSeconds: env.READ_STALL_SECONDS,
     onPiece: sparingly(aliveEveryMilliseconds, () => tell({ type: 'alive' })),
   });
-  if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source) };
+  if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source, task.given) };
   const openHelper = task.mayHaveHelp ? openTableHelper : undefined;
   const limit = createComputeLimit(env.READ_COMPUTE_SECONDS, task.bytes);
   const tellProgress = sparingly(toldEveryMilliseconds, (progress: ReadProgress) => tell({ type: 'progress', progress }));

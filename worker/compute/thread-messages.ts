@@ -1,10 +1,11 @@
+import type { GivenDialect } from '@/lib/domain/columns/given-dialect';
 import type { RejectionReason } from '@/lib/domain/uploads/rejection';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import type { GridReadResult } from '@/lib/readers/read-grid';
 import type { ReadProgress, SourcePreview } from '@/lib/readers/source';
 
 /** What a thread is asked to do with one file in storage. */
-export type ThreadTask = { kind: 'preview'; storageKey: string } | { kind: 'read'; storageKey: string; bytes: number; reading: GridReading };
+export type ThreadTask = { kind: 'preview'; storageKey: string; given: GivenDialect } | { kind: 'read'; storageKey: string; bytes: number; reading: GridReading };
 
 /** A task on its way; whether a core is left for a second thread. */
 export type GivenTask = ThreadTask & { mayHaveHelp: boolean };

@@ -4,8 +4,8 @@ import type { ThreadPool } from './thread-pool';
 /** Reads files in the threads of the pool. */
 export function createThreadReader(pool: ThreadPool): GridReader {
   return {
-    async preview(storageKey) {
-      const answer = await pool.run({ kind: 'preview', storageKey });
+    async preview(storageKey, given) {
+      const answer = await pool.run({ kind: 'preview', storageKey, given });
       if (answer.kind !== 'preview') throw new Error(`A preview was asked for; the thread answered ${answer.kind}.`);
       return answer.preview;
     },

@@ -1,5 +1,6 @@
 import type { FieldProblem } from '@/lib/errors';
 import type { ColumnMapping } from '../columns/column-mapping';
+import { refuseDialect } from '../columns/given-dialect';
 import type { CaseDefinition } from './definition';
 
 /** What is wrong with a mapping for a case: a coordinate missing or too many, or a field that the case does not declare. */
@@ -14,6 +15,8 @@ export function checkColumns(mapping: ColumnMapping, definition: CaseDefinition,
     }
   });
   if (mapping.t !== undefined && !problem.unsteady) faults.push({ path: 't', message: 'The problem is steady and has no t.' });
+  const dialectFault = refuseDialect(mapping.table ?? {});
+  if (dialectFault !== null) faults.push({ path: 'table.decimalMark', message: dialectFault });
   const declared = definition.fields.map((field) => field.field);
   for (const [name, columns] of Object.entries(mapping.fields)) {
     const { dimension } = problem;

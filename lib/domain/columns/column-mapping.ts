@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { givenDialectSchema } from './given-dialect';
 
 const column = z.string().min(1).max(200);
 
@@ -16,6 +17,7 @@ export const columnMappingSchema = z.strictObject({
   flag: column.optional(),
   fields: z.record(z.string().min(1), z.union([column, z.array(column).min(1).max(4)]))
     .meta({ description: 'The column of each field; the columns of its gradient, one for each direction; or both, the field’s first.' }),
+  table: givenDialectSchema.optional().meta({ description: 'How text tables are written, where it is not to be found out from each file.' }),
 });
 
 export type ColumnMapping = z.infer<typeof columnMappingSchema>;

@@ -68,7 +68,7 @@ function describeCode(reason: RejectionReason): RejectionText {
     case 'not-finite':
       return text(`${place}: found ${found}; expected ${expected}.`, 'The run has diverged or divided by zero there. Mend the run, and upload its file again.');
     case 'mixed-decimal':
-      return text(`${place}: found “${found}”; expected ${expected}. With both marks in one file a number can be read in two ways.`, 'Write all numbers with one decimal mark.');
+      return text(`${place}: found “${found}”; expected ${expected}. With both marks in one file a number can be read in two ways.`, 'Write all numbers with one decimal mark, or say in the columns of the case which it is.');
     case 'weight-not-positive':
       return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights.');
     case 'time-differs':

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { contract } from '../api/contract';
 import { timestampSchema } from '../api/names';
 import { columnMappingSchema } from '../columns/column-mapping';
+import { decimalMarkSchema, delimiterSchema, givenDialectSchema } from '../columns/given-dialect';
 import { rejectionReasonSchema } from './rejection';
 
 export const uploadStateSchema = z.enum(['receiving', 'stored', 'needs-columns', 'reading', 'read', 'rejected']);
@@ -42,8 +43,21 @@ export const completeUploadSchema = z.strictObject({
 });
 export type CompleteUploadInput = z.infer<typeof completeUploadSchema>;
 
+const previewQuerySchema = z.strictObject({
+  delimiter: z.union([delimiterSchema, z.literal('auto')]).optional(),
+  header: z.enum(['yes', 'no', 'auto']).optional(),
+  decimal: z.union([decimalMarkSchema, z.literal('auto')]).optional(),
+}).meta({ description: 'Text tables only: shows the table read so, before it is kept with the columns. `auto`, or absent beside another, is found out from the file; with none of them the table is read as the columns of the case say.' });
+export type PreviewQuery = z.infer<typeof previewQuerySchema>;
+
 export const previewSchema = z.strictObject({
   format: z.string(), dialect: z.string().meta({ description: 'What was recognised, in words.' }),
+  table: z.strictObject({
+    delimiter: delimiterSchema, hasHeader: z.boolean(),
+    headerLine: z.int().min(1).nullable().meta({ description: 'The line that names the columns, null where none does.' }),
+    decimalMark: decimalMarkSchema.nullable().meta({ description: 'Null where the first rows hold none.' }),
+    given: givenDialectSchema.meta({ description: 'What of this was said; the rest was found out.' }),
+  }).nullable().meta({ description: 'How a text table is written; null for other formats.' }),
   header: z.array(z.string()), firstRows: z.array(z.array(z.string())),
   mapping: columnMappingSchema.nullable().meta({ description: 'The mapping in force for the case, if any.' }),
   proposal: columnMappingSchema.partial().meta({ description: 'What matching names propose.' }),
@@ -76,5 +90,5 @@ export const completeUploadContract = contract({
   body: completeUploadSchema, response: uploadSchema,
 });
 export const previewContract = contract({
-  method: 'GET', path: '/uploads/{id}/preview', summary: 'Header and first rows', access: 'organisation', status: 200, response: previewSchema,
+  method: 'GET', path: '/uploads/{id}/preview', summary: 'Header and first rows', access: 'organisation', status: 200, query: previewQuerySchema, response: previewSchema,
 });

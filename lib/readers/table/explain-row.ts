@@ -1,7 +1,7 @@
 import { parseNumber, type NumberReading } from '../parse-number';
 import type { ReasonCollector } from '../reason-collector';
 import { splitFields } from './split-fields';
-import type { Delimiter } from '../source';
+import type { Delimiter } from '../../domain/columns/given-dialect';
 
 /** The decimal mark of the file and the line it was first seen in. */
 export interface DecimalMark { mark: 'point' | 'comma'; line: number }
@@ -15,6 +15,8 @@ export interface RowRules {
   digits: number[];
   /** Null until a number has one. */
   mark: DecimalMark | null;
+  /** Whether it was said beforehand. */
+  isMarkGiven: boolean;
   reasons: ReasonCollector;
 }
 
@@ -63,7 +65,8 @@ function readField(rules: RowRules, field: string, line: number, column: number,
   rules.mark ??= { mark: reading.mark, line };
   if (reading.mark === rules.mark.mark) return value;
   rules.reasons.add({
-    code: 'mixed-decimal', line, column, found: field, expected: `a decimal ${rules.mark.mark}, as from line ${rules.mark.line} on`,
+    code: 'mixed-decimal', line, column, found: field,
+    expected: `a decimal ${rules.mark.mark}, ${rules.isMarkGiven ? 'as said in the columns of the case' : `as from line ${rules.mark.line} on`}`,
   });
   return null;
 }

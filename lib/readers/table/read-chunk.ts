@@ -47,6 +47,7 @@ export function createChunkReader({ dialect, wanted }: ChunkReaderOptions): Chun
   const table = createTableRows({ lineEnd: dialect.lineEnd, delimiter, allowComma, width, wanted, rows: batchRows, bytes: mostChunkBytes });
   const { rows, columns, lines, input, inputAt } = table;
   const digits = wanted.map(() => 0);
+  const given: DecimalMark | null = dialect.decimalMark === undefined ? null : { mark: dialect.decimalMark, line: 0 };
   const numberAt = (global: WebAssembly.Global) => global.value as number;
 
   const readMark = (known: DecimalMark | null): DecimalMark | null => {
@@ -67,8 +68,9 @@ export function createChunkReader({ dialect, wanted }: ChunkReaderOptions): Chun
   return {
     read(bytes, start, reasons, onBatch) {
       input.set(bytes);
-      rows.begin(inputAt, start.line, start.mark === null ? 0 : marks.indexOf(start.mark.mark));
-      const rules: RowRules = { delimiter: dialect.delimiter, width, wanted, allowComma, digits, mark: start.mark, reasons };
+      const known = start.mark ?? given;
+      rows.begin(inputAt, start.line, known === null ? 0 : marks.indexOf(known.mark));
+      const rules: RowRules = { delimiter: dialect.delimiter, width, wanted, allowComma, digits, mark: known, isMarkGiven: given !== null, reasons };
       for (;;) {
         const state = rows.readRows(inputAt + bytes.length, start.skipped);
         const row = numberAt(rows.row);

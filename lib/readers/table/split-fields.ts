@@ -1,4 +1,4 @@
-import type { Delimiter } from '../source';
+import type { Delimiter } from '../../domain/columns/given-dialect';
 
 export const delimiterCharacter = { comma: ',', semicolon: ';', tab: '\t' } as const satisfies Partial<Record<Delimiter, string>>;
 

@@ -1,3 +1,4 @@
+import type { GivenDialect } from '@/lib/domain/columns/given-dialect';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import type { GridReadResult } from '@/lib/readers/read-grid';
 import type { ReadProgress, SourcePreview } from '@/lib/readers/source';
@@ -10,6 +11,6 @@ export interface StoredFile { storageKey: string; bytes: number }
  * `read` throws another error where storage does not give the whole of it.
  */
 export interface GridReader {
-  preview(storageKey: string): Promise<SourcePreview>;
+  preview(storageKey: string, given: GivenDialect): Promise<SourcePreview>;
   read(file: StoredFile, reading: GridReading, onProgress: (progress: ReadProgress) => void): Promise<GridReadResult>;
 }

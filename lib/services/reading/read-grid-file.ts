@@ -58,15 +58,16 @@ async function keepResult(ctx: JobContext, reading: Reading, mapping: ColumnMapp
 /** Looks into the file and finds its columns; null where some are missing and the grid now waits for them. */
 async function findMapping(ctx: JobContext, reading: Reading, reader: GridReader): Promise<ColumnMapping | null> {
   const { upload, head, bound, grid } = reading;
-  const preview = await reader.preview(upload.storage_key);
+  const columns = head.case_columns as unknown as ColumnMapping | null;
+  const preview = await reader.preview(upload.storage_key, columns?.table ?? {});
   await withOrganisation(ctx, (trx) => updateUpload(trx, ctx.organisation.id, upload.id, { preview: json(preview) }));
-  const { mapping } = mapColumns(preview.header, { mapping: head.case_columns as unknown as ColumnMapping | null, bound, grid });
+  const { mapping } = mapColumns(preview.header, { mapping: columns, bound, grid });
   if (mapping) return mapping;
   let state: GridState = 'needs-columns';
   const isHeard = await whileReading(ctx, reading, async (trx) => {
     // Columns mapped since the reading began have resumed only grids that waited by then: this one resumes itself.
-    const columns = await lockCaseColumns(trx, ctx.organisation.id, head.case_id);
-    if (!isDeepStrictEqual(columns, head.case_columns)) state = 'stored';
+    const now = await lockCaseColumns(trx, ctx.organisation.id, head.case_id);
+    if (!isDeepStrictEqual(now, head.case_columns)) state = 'stored';
     await updateGrid(trx, ctx.organisation.id, grid.id, { state, rows_read: null });
     if (state === 'stored') await enqueueJob(trx, { organisationId: ctx.organisation.id, job: 'grid.read', subjectId: grid.id, subjectRevision: null });
   });

@@ -1,6 +1,12 @@
+import { isDeepStrictEqual } from 'node:util';
 import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
-import type { UploadPreview } from '@/lib/domain/uploads/schema';
+import { refuseDialect, type GivenDialect } from '@/lib/domain/columns/given-dialect';
+import { describeTable } from '@/lib/domain/uploads/dialect-text';
+import { describeRejection } from '@/lib/domain/uploads/rejection-text';
+import type { PreviewQuery, UploadPreview } from '@/lib/domain/uploads/schema';
 import { AppError } from '@/lib/errors';
+import { previewTable } from '@/lib/readers/preview-table';
+import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { SourcePreview } from '@/lib/readers/source';
 import type { MemberContext } from '../context';
 import { permit } from '../permit';
@@ -9,22 +15,62 @@ import { requireStudy } from '../studies/require-study';
 import { withOrganisation } from '../with-organisation';
 import { requireUpload } from './require-upload';
 
-function describeDialect({ format, compressed, delimiter, hasHeader }: SourcePreview): string {
-  const packed = compressed ? ', gzip-compressed' : '';
-  if (format === 'json') return `JSON, columns of arrays${packed}`;
-  return `Table separated by ${delimiter ?? 'white space'}, ${hasHeader ? 'with' : 'without'} a header${packed}`;
+const storagePatience = 8000;
+
+function tableOf({ format, delimiter, hasHeader, headerLine, decimalMark, given }: SourcePreview): UploadPreview['table'] {
+  if (format !== 'table') return null;
+  return {
+    delimiter: delimiter ?? 'white space', hasHeader, headerLine: hasHeader ? (headerLine ?? null) : null, decimalMark: decimalMark ?? null, given: given ?? {},
+  };
 }
 
-/** Header and first rows of a file that was looked into, with what its columns are taken for. */
-export async function getPreview(ctx: MemberContext, id: string): Promise<UploadPreview> {
+function describeDialect(preview: SourcePreview): string {
+  const table = tableOf(preview);
+  return `${table ? describeTable(table) : 'JSON, columns of arrays'}${preview.compressed ? ', gzip-compressed' : ''}`;
+}
+
+/** What of the dialect is said by the call, null where it says nothing. */
+function saidBy({ delimiter, header, decimal }: PreviewQuery): GivenDialect | null {
+  if (delimiter === undefined && header === undefined && decimal === undefined) return null;
+  return {
+    ...(delimiter !== undefined && delimiter !== 'auto' && { delimiter }),
+    ...(header !== undefined && header !== 'auto' && { hasHeader: header === 'yes' }),
+    ...(decimal !== undefined && decimal !== 'auto' && { decimalMark: decimal }),
+  };
+}
+
+function requireDialect(given: GivenDialect): void {
+  const fault = refuseDialect(given);
+  if (fault !== null) throw new AppError('invalid', fault, { fields: [{ path: 'decimal', message: fault }] });
+}
+
+/** The beginning of the stored file, read as a table written so. */
+async function lookAgain(ctx: MemberContext, storageKey: string, given: GivenDialect): Promise<SourcePreview> {
+  try {
+    return await previewTable(await ctx.storage.read(storageKey, AbortSignal.timeout(storagePatience)), given);
+  } catch (error) {
+    if (!(error instanceof RejectedFile)) throw error;
+    throw new AppError('invalid', error.reasons.map((reason) => describeRejection(reason).sentence).join(' '), { cause: error });
+  }
+}
+
+/** Header and first rows of a file that was looked into, with what its columns are taken for; a text table also as the query has it. */
+export async function getPreview(ctx: MemberContext, id: string, query: PreviewQuery = {}): Promise<UploadPreview> {
   permit(ctx, 'work.read');
-  return withOrganisation(ctx, async (trx) => {
+  const said = saidBy(query);
+  const { upload, kept, of } = await withOrganisation(ctx, async (trx) => {
     const { upload, grid } = await requireUpload(ctx, trx, id);
-    const preview = upload.preview as unknown as SourcePreview | null;
-    if (!preview) throw new AppError('wrong-state', `The file has not been looked into; grid ${grid.label} is ${grid.state}.`);
+    const kept = upload.preview as unknown as SourcePreview | null;
+    if (!kept) throw new AppError('wrong-state', `The file has not been looked into; grid ${grid.label} is ${grid.state}.`);
     const { head, bound } = await requireStudy(ctx, trx, grid.study_id, grid.study_revision);
-    const mapping = head.case_columns as unknown as ColumnMapping | null;
-    const { found, missing } = mapColumns(preview.header, { mapping, bound, grid });
-    return { format: preview.format, dialect: describeDialect(preview), header: preview.header, firstRows: preview.firstRows, mapping, proposal: found, missing };
+    return { upload, kept, of: { mapping: head.case_columns as unknown as ColumnMapping | null, bound, grid } };
   });
+  requireDialect(said ?? {});
+  const wanted = said ?? of.mapping?.table ?? {};
+  const preview = kept.format !== 'table' || isDeepStrictEqual(wanted, kept.given ?? {}) ? kept : await lookAgain(ctx, upload.storage_key, wanted);
+  const { found, missing } = mapColumns(preview.header, of);
+  return {
+    format: preview.format, dialect: describeDialect(preview), table: tableOf(preview),
+    header: preview.header, firstRows: preview.firstRows, mapping: of.mapping, proposal: found, missing,
+  };
 }

@@ -22,7 +22,7 @@ const thread = new URL(`data:text/javascript,${encodeURIComponent(`
 let pool: ThreadPool;
 const open = (size: number, silenceSeconds = 20) => {
   pool = createThreadPool(size, { memoryMb: 32, silenceSeconds }, thread);
-  return (storageKey: string) => pool.run({ kind: 'preview', storageKey });
+  return (storageKey: string) => pool.run({ kind: 'preview', storageKey, given: {} });
 };
 const done = (storageKey: string) => ({ kind: 'preview', preview: storageKey });
 afterEach(() => pool.close());
