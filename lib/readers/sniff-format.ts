@@ -3,7 +3,7 @@ import type { Head } from './read-head';
 import { RejectedFile } from './rejected-file';
 import type { SourceFormat } from './source';
 
-const readable = 'a text table, or JSON with one array of numbers per column';
+const readable = 'a text table, or JSON with one array of numbers per column, with records, or in the HDF5/JSON layout';
 
 const signatures: readonly { bytes: string; name: string }[] = [
   { bytes: '\x89HDF\r\n\x1a\n', name: 'HDF5' },

@@ -32,6 +32,8 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`The file is not text: it contains ${found}.`, `Write ${expected}.`);
     case 'damaged-gzip':
       return text(`The compressed file cannot be unpacked: ${found}.`, 'Test it with gzip -t, compress it anew, and upload it again.');
+    case 'damaged-file':
+      return text(`The file cannot be read: ${found}; expected ${expected}.`, 'It may have been cut off while it was written or copied. Open it where it was written, and upload it again.');
     case 'expands-too-far':
       return text(`The compressed file expands to ${found}; expected ${expected}.`, 'Check that it holds one table of numbers, and upload it uncompressed or in a smaller form.');
     case 'too-many-columns':
@@ -51,6 +53,8 @@ function describeCode(reason: RejectionReason): RejectionText {
     case 'column-missing':
       return text(`${place}: ${reason.count === 1 ? 'the column' : 'the columns'} ${expected} ${reason.count === 1 ? 'is' : 'are'} not in the file. Found: ${found}.`,
         'Name the column in the file, or change the mapping of the case.');
+    case 'column-type':
+      return text(`${place}: a column that is needed holds no numbers that are read. Found ${found}; expected ${expected}.`, 'Write the column as numbers, or change the mapping of the case.');
     case 'duplicate-column':
       return text(`${place}: expected ${expected}, found several in ${found}.`, 'Give every column a name of its own, or map the full path.');
     case 'too-few-rows':

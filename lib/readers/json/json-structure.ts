@@ -4,7 +4,7 @@ export type JsonScalar = 'number' | 'string' | 'word';
 
 /** What a document is made of, in its order. `bytes[from, to)` is the scalar as written, a string without its quotes. */
 export interface JsonEvents {
-  open(kind: 'object' | 'array'): void;
+  open(kind: 'object' | 'array', line: number): void;
   close(): void;
   key(name: string): void;
   scalar(kind: JsonScalar, bytes: Buffer, from: number, to: number, line: number): void;
@@ -42,7 +42,7 @@ export function createJsonStructure(events: JsonEvents, reasons: ReasonCollector
       const kind = found === '{' ? 'object' : 'array';
       stack.push(kind);
       expected = kind === 'object' ? 'a name or “}”' : 'a value or “]”';
-      events.open(kind);
+      events.open(kind, line);
     } else if (found === '}' || found === ']') {
       const kind = found === '}' ? 'object' : 'array';
       const mayClose = expected === '“,” or the end of the list' || expected === (kind === 'object' ? 'a name or “}”' : 'a value or “]”');
@@ -125,6 +125,7 @@ function endOfString(bytes: Buffer, from: number): number {
 }
 
 function decode(bytes: Buffer, from: number, to: number): string | null {
+  if (!bytes.subarray(from, to).includes(92)) return bytes.toString('utf8', from, to);
   try {
     return JSON.parse(`"${bytes.toString('utf8', from, to)}"`) as string;
   } catch (error) {

@@ -1,11 +1,13 @@
+import { createColumnStore, type ColumnStore } from '../column-store';
 import type { ColumnsAsked, ColumnsFound } from '../column-format';
-import { resolveColumn } from '../../domain/columns/resolve-column';
-import { createColumnStore, deliverColumns, type ColumnStore, type StoredColumn } from '../column-store';
-import { createJsonColumns } from './json-columns';
-import { locateColumns } from '../locate-columns';
-import { createNumberSink } from './number-sink';
+import { createHdf5Document } from '../hdf5-json/hdf5-document';
+import { readArrays } from '../hdf5-json/read-arrays';
+import { createStoredColumns } from './stored-columns';
+import { createJsonDocument } from './json-document';
+import { createScalarReader } from './read-scalar';
+import { createRecordRows } from './record-rows';
 
-/** Reads columns from JSON, which come one after another: what memory does not hold of them waits on disk. */
+/** Reads columns from JSON. Records are read row by row; of columns that come one after another, what memory does not hold waits on disk. */
 export async function readJson(pieces: AsyncIterable<Buffer>, asked: ColumnsAsked): Promise<ColumnsFound> {
   const store = createColumnStore();
   try {
@@ -15,36 +17,20 @@ export async function readJson(pieces: AsyncIterable<Buffer>, asked: ColumnsAske
   }
 }
 
-interface WantedColumn { values: StoredColumn; digits: () => number }
-
-async function readInto(store: ColumnStore, pieces: AsyncIterable<Buffer>, { wanted, reasons, onBatch, onPiece }: ColumnsAsked): Promise<ColumnsFound> {
-  const stored = new Map<number, WantedColumn>();
-  const columns = createJsonColumns((name, column) => {
-    if (!wanted.some((each) => resolveColumn([name], each) === 0)) return null;
-    const values = store.addColumn();
-    const { sink, digits } = createNumberSink(values, column, reasons);
-    stored.set(column - 1, { values, digits });
-    return sink;
-  }, reasons);
+async function readInto(store: ColumnStore, pieces: AsyncIterable<Buffer>, asked: ColumnsAsked): Promise<ColumnsFound> {
+  const reader = createScalarReader();
+  const columns = createStoredColumns(store, reader, asked);
+  const records = createRecordRows(reader, asked);
+  const hdf5 = createHdf5Document({ store, reader, keepsFirst: false }, asked.reasons);
+  const document = createJsonDocument({ column: columns.begin, records: records.begin, hdf5: hdf5.member }, asked.reasons);
   for await (const piece of pieces) {
-    columns.push(piece);
-    onPiece();
+    document.push(piece);
+    asked.onPiece();
   }
-  columns.end();
-  const indices = locateColumns(columns.header(), wanted, 1, reasons);
-  const found = indices.flatMap((index) => stored.get(index) ?? []);
-  const rows = found[0]?.values.length() ?? 0;
-  for (const [slot, { values }] of found.entries()) {
-    if (values.length() === rows) continue;
-    reasons.add({
-      code: 'column-length', line: null, column: (indices[slot] ?? 0) + 1, found: `${values.length()} values`,
-      expected: `${rows} values, as in ${wanted[0] ?? 'the first column'}`,
-    });
+  document.end();
+  switch (document.layout()) {
+    case 'records': return records.finish();
+    case 'hdf5': return readArrays(hdf5.arrays(), asked);
+    case 'columns': return columns.finish(document.header());
   }
-  reasons.throwIfAny();
-  deliverColumns(found.map(({ values }) => values), rows, (batch) => {
-    onBatch(batch);
-    onPiece();
-  });
-  return { columns: found.map(({ digits }, slot) => ({ index: indices[slot] ?? 0, significantDigits: digits() })) };
 }

@@ -1,0 +1,33 @@
+import { resolveColumn } from '../../domain/columns/resolve-column';
+import { locateColumns } from '../locate-columns';
+import type { ReasonCollector } from '../reason-collector';
+import { elementsOf, type ArrayColumn, type NamedArray } from './array-columns';
+
+/**
+ * The columns wanted, all of one length. What is asked for but holds no numbers, is not there, or has another length than
+ * the first goes to the reasons, and is thrown.
+ */
+export function locateArrayColumns(arrays: readonly NamedArray[], columns: readonly ArrayColumn[], { wanted, reasons }: { wanted: readonly string[]; reasons: ReasonCollector }): number[] {
+  const header = columns.map(({ name }) => name);
+  for (const name of wanted.filter((each) => resolveColumn(header, each) === 'absent')) {
+    const unread = arrays.flatMap(({ path, members }) => members.flatMap(({ suffix, problem }) => (problem === null ? [] : [{ name: `${path}${suffix}`, problem }])));
+    const at = resolveColumn(unread.map((each) => each.name), name);
+    const found = typeof at === 'number' ? unread[at] : undefined;
+    if (found) reasons.add({ code: 'column-type', line: null, column: null, found: `${found.name}: ${found.problem}`, expected: 'integers or floating-point numbers' });
+  }
+  reasons.throwIfAny();
+  const indices = locateColumns(header, wanted, null, reasons);
+  const found = indices.flatMap((index) => columns[index] ?? []);
+  const rows = found[0]?.rows ?? 0;
+  for (const [slot, column] of found.entries()) {
+    if (column.rows === rows) continue;
+    reasons.add({
+      code: 'column-length', line: null, column: (indices[slot] ?? 0) + 1, found: `${column.rows} values (${shapeOf(arrays[column.array]?.dims ?? [])})`,
+      expected: `${rows} values, as in ${wanted[0] ?? 'the first column'}`,
+    });
+  }
+  reasons.throwIfAny();
+  return indices;
+}
+
+const shapeOf = (dims: readonly number[]): string => (dims.length < 2 ? `${elementsOf(dims)}` : dims.join(' × '));
