@@ -30,6 +30,7 @@ export function createWorkerMetrics(pool: Parameters<typeof createRegistry>[1]):
     },
     counting: (reader) => ({
       preview: (storageKey, given) => reader.preview(storageKey, given),
+      difference: (files, reading) => reader.difference(files, reading),
       async read(file, reading, onProgress) {
         let counted = 0;
         const countTo = (total: number) => {

@@ -108,17 +108,16 @@ describe('PUT /api/v1/studies/{id}/grids/{label}/data', () => {
     expect((await refused(engineer, putDataContract, { params: { id: study.id, label: 'n64' }, body: heatTable(64), headers: binary })).status).toBe(409);
   });
 
-  it('refuses a file that nothing could be compared with', async () => {
-    const problem = await ok(engineer, createProblemContract, { body: { name: 'No exact solution', equation: 'none', dimension: 2 } });
+  it('refuses a file where the case has no field to compare', async () => {
     const made = await ok(engineer, createCaseContract, {
-      body: { code: work.code.slug, problem: problem.slug, name: 'Errors from the solver', kind: 'order', fields: [{ field: 'T', norms: [{ norm: 'L2', formalOrder: 2 }] }] },
+      body: { code: work.code.slug, problem: work.problem.slug, name: 'A value alone', kind: 'solution', quantities: [{ name: 'drag' }] },
     });
     const study = await ok(engineer, createStudyContract, { body: { case: made.slug, release: '1.0.0', grids: [{ label: 'n8', h: 0.125 }] } });
     const problems = [
       await refused(engineer, putDataContract, { params: { id: study.id, label: 'n8' }, body: heatTable(8), headers: binary }),
       await refused(engineer, startUploadContract, { params: { id: study.id, label: 'n8' }, body: { filename: 'n8.csv', bytes: 100 } }),
     ];
-    for (const { status, detail } of problems) expect([status, detail]).toEqual([422, expect.stringContaining('no exact solution')]);
+    for (const { status, detail } of problems) expect([status, detail]).toEqual([422, expect.stringContaining('declares no field')]);
     expect((await ok(engineer, getStudyContract, { params: { id: study.id } })).planFrozenAt).toBeNull();
   });
 

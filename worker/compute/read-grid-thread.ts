@@ -2,6 +2,7 @@ import { parentPort } from 'node:worker_threads';
 import { readEnv } from '@/lib/env';
 import { createStorage } from '@/lib/platform/storage';
 import { storageOptionsOf } from '@/lib/platform/storage-options';
+import { readDifference } from '@/lib/readers/read-difference';
 import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';
 import { RejectedFile } from '@/lib/readers/rejected-file';
@@ -31,12 +32,20 @@ function sparingly<Parts extends unknown[]>(milliseconds: number, tellOf: (...pa
   };
 }
 
-async function run(task: GivenTask): Promise<ThreadResult> {
-  const source = steadySource({
-    open: (signal) => storage.read(task.storageKey, signal), stallSeconds: env.READ_STALL_SECONDS,
+function open(storageKey: string) {
+  return steadySource({
+    open: (signal) => storage.read(storageKey, signal), stallSeconds: env.READ_STALL_SECONDS,
     onPiece: sparingly(aliveEveryMilliseconds, () => tell({ type: 'alive' })),
   });
-  if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(source, task.given) };
+}
+
+async function run(task: GivenTask): Promise<ThreadResult> {
+  if (task.kind === 'preview') return { kind: 'preview', preview: await readPreview(open(task.storageKey), task.given) };
+  if (task.kind === 'difference') {
+    const [fine, coarse] = [wholeFile(open(task.fine.storageKey), task.fine.bytes), wholeFile(open(task.coarse.storageKey), task.coarse.bytes)];
+    const limit = createComputeLimit(env.READ_COMPUTE_SECONDS, task.fine.bytes + task.coarse.bytes);
+    return { kind: 'difference', result: await readDifference({ fine, coarse }, task.reading, limit) };
+  }
   const openHelper = task.mayHaveHelp ? openTableHelper : undefined;
   const limit = createComputeLimit(env.READ_COMPUTE_SECONDS, task.bytes);
   const tellProgress = sparingly(toldEveryMilliseconds, (progress: ReadProgress) => tell({ type: 'progress', progress }));
@@ -44,7 +53,7 @@ async function run(task: GivenTask): Promise<ThreadResult> {
     limit(progress);
     tellProgress(progress);
   };
-  return { kind: 'read', result: await readGrid(wholeFile(source, task.bytes), task.reading, { onProgress, openHelper }) };
+  return { kind: 'read', result: await readGrid(wholeFile(open(task.storageKey), task.bytes), task.reading, { onProgress, openHelper }) };
 }
 
 port.on('message', (task: GivenTask) => {

@@ -15,6 +15,8 @@ const fieldAssessmentSchema = z.strictObject({
   field: z.string(), norm: z.enum([...norms, 'value']), region: z.enum(regions),
   formalOrder: nullableNumber, statedOrder: z.number().optional(), regularity: z.number().optional(), logFactor: z.number().optional(),
   derivedOrder: nullableNumber, tolerance: nullableNumber, counts: z.boolean(),
+  comparedTo: z.strictObject({ label: z.string(), h: z.number() }).optional()
+    .meta({ description: 'Without an exact solution: every error is the norm of the difference to the next coarser grid, the last one to this.' }),
   grids: z.array(fieldGridSchema),
   orders: z.array(z.strictObject({ coarse: z.string(), fine: z.string(), ratio: z.number(), order: nullableNumber, uncertainty: nullableNumber })),
   fit: z.strictObject({ order: z.number(), low: nullableNumber, high: nullableNumber }).nullable(),

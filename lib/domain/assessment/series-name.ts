@@ -2,10 +2,14 @@ import type { SeriesNorm } from '@/lib/numerics/assessment';
 
 const normNames = { L1: 'L1', L2: 'L2', Linf: 'L∞', H1: 'H1', energy: 'energy' } as const;
 
-interface Series { field: string; norm: SeriesNorm }
+interface Series { field: string; norm: SeriesNorm; comparedTo?: unknown }
 
-/** What a series of errors is called inside a sentence: "the L2 error of u", or "the error of drag" for a known value. */
-export function nameErrors({ field, norm }: Series): string {
+/**
+ * What a series of errors is called inside a sentence: "the L2 error of u", or "the error of drag" for a known value, and
+ * where grids are compared with each other "the L2 difference of u between successive grids".
+ */
+export function nameErrors({ field, norm, comparedTo }: Series): string {
+  if (comparedTo !== undefined) return `the ${norm === 'value' ? '' : `${normNames[norm]} `}difference of ${field} between successive grids`;
   return norm === 'value' ? `the error of ${field}` : `the ${normNames[norm]} error of ${field}`;
 }
 

@@ -24,7 +24,16 @@ export function stateRatio(field: FieldAssessment, refinement: Refinement): stri
   const verb = change >= 0.995 ? 'divides' : 'multiplies';
   const seen = `${refining} ${verb} ${nameErrors(field)} by ${formatRatio(change >= 0.995 ? change : 1 / change)}`;
   const declared = field.derivedOrder ?? field.formalOrder;
-  return declared === null ? `${seen}.` : `${seen}; ${orderWord(declared)} would divide it by ${promised(pair.ratio ** declared)}.`;
+  return declared === null ? `${seen}.` : `${seen}; ${orderWord(declared)} would divide it by ${promised(expectedRatio(field, declared))}.`;
+}
+
+/** What the order makes of an error over the finest pair; of differences r21^p·(r32^p − 1)/(r21^p − 1). */
+function expectedRatio({ orders, grids, comparedTo }: FieldAssessment, order: number): number {
+  const fine = orders[0]?.ratio ?? 1;
+  const middle = grids.findIndex(({ label }) => label === orders[0]?.coarse);
+  const [h2, h3] = [grids[middle]?.h, grids[middle + 1]?.h ?? comparedTo?.h];
+  if (comparedTo === undefined || h2 === undefined || h3 === undefined) return fine ** order;
+  return fine ** order * ((h3 / h2) ** order - 1) / (fine ** order - 1);
 }
 
 function promised(ratio: number): string {

@@ -4,6 +4,8 @@ import { knownError } from '@/lib/numerics/norms/known-error';
 import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
 import type { Surroundings } from '@/lib/numerics/patterns/suggest-patterns';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
+import type { GridDifference } from './compared-grids';
+import { differencesOf } from './difference-series';
 import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
 import { builtInRule } from '../rules/built-in-rule';
 import type { GridInput } from '../studies/input';
@@ -21,12 +23,14 @@ export interface StudyToAssess {
   /** Of the domain's box, null where unknown. */
   volume: number | null;
   box?: Surroundings['box'];
+  /** Of solutions without an exact one, finest first. */
+  differences?: readonly GridDifference[];
 }
 
 export type StudySeries = { ok: true; errors: ErrorSeries[]; quantities: QuantitySeries[]; spaceTime?: SpaceTimeSeries[]; around?: Surroundings } | { ok: false; reason: string };
 
 /** Series of every declared field and norm and of every quantity; or in words why the grids cannot be put in a row. */
-export function studySeries({ definition, grids, ...around }: StudyToAssess): StudySeries {
+export function studySeries({ definition, grids, differences = [], ...around }: StudyToAssess): StudySeries {
   const spacing = resolveSpacing({ grids: grids.map(({ grid, norms }) => statedSpacing(grid, norms)), ...around });
   if (!spacing.ok) {
     const told = spacing.problems.map(({ label, found, expected }) => `${label === null ? 'The grids' : `Grid ${label}`}: ${found}; expected ${expected}.`);
@@ -41,7 +45,7 @@ export function studySeries({ definition, grids, ...around }: StudyToAssess): St
   return {
     ok: true,
     errors: [
-      ...definition.fields.flatMap((field) => field.norms.flatMap((norm) => fieldSeries({ definition, ...around }, { field, norm }, placed))),
+      ...definition.fields.flatMap((field) => field.norms.flatMap((norm) => fieldSeries({ definition, differences, ...around }, { field, norm }, placed))),
       ...known.map((quantity) => ({
         ...errorSeriesOfQuantity(quantitySeries(quantity, placed, 0), quantity.knownValue ?? 0),
         minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
@@ -52,19 +56,21 @@ export function studySeries({ definition, grids, ...around }: StudyToAssess): St
   };
 }
 
-function fieldSeries({ definition, dimension, volume }: Pick<StudyToAssess, 'definition' | 'dimension' | 'volume'>, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {
+function fieldSeries({ definition, dimension, volume, differences }: Pick<StudyToAssess, 'definition' | 'dimension' | 'volume'> & { differences: readonly GridDifference[] }, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {
   const { norm: name } = norm;
   const columns = placed.flatMap(({ norms }) => norms?.fields.find((column) => column.field === field.field) ?? []);
-  const significantDigits = largestOf(columns.flatMap((column) => column.significantDigits ?? []));
+  const solutions = placed.flatMap(({ norms }) => norms?.solutions?.find((solution) => solution.field === field.field) ?? []);
+  const significantDigits = largestOf([...columns, ...solutions].flatMap((column) => column.significantDigits ?? []));
+  const compared = differencesOf(differences, placed, { field: field.field, norm: name, significantDigits });
   const formalOrder = norm.formalOrder ?? null;
   return [{
     field: field.field, norm: name,
-    grids: placed.flatMap((one) => gridError(one, field.field, { norm: name, significantDigits }) ?? []),
+    ...(compared ?? { grids: placed.flatMap((one) => gridError(one, field.field, { norm: name, significantDigits }) ?? []) }),
     formalOrder, regularity: norm.regularity ?? null,
     logFactor: norm.logFactor === undefined ? null : { power: norm.logFactor, length: volume === null ? 1 : volume ** (1 / dimension) },
     derivedOrder: norm.derivedOrder ?? null, tolerance: norm.tolerance ?? null, counts: norm.counts,
     expectExact: norm.expectExact, exactLimit: norm.exactLimit ?? null,
-    scale: largestOf([...columns.map((column) => column.exact.Linf), ...(norm.reference === undefined ? [] : [norm.reference])]),
+    scale: largestOf([...columns.map((column) => column.exact.Linf), ...(compared?.scale ? [compared.scale] : []), ...(norm.reference === undefined ? [] : [norm.reference])]),
     precision: placed.some(({ grid }) => grid.run?.precision === 'single') ? 'single' : 'double',
     minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
     samplingStated: definition.sampling !== undefined,

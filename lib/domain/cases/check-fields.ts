@@ -7,7 +7,7 @@ import { variablesOf } from '../problems/variables';
 import type { DeclaredField, DeclaredNorm } from './definition';
 import { repeated } from './repeated';
 
-/** Fields must be in the exact solution, where the problem has one; where it has none, their errors are typed. */
+/** Fields must be in the exact solution, where the problem has one; where it has none, their errors are typed, or the solutions of successive grids compared. */
 export function checkFields(fields: readonly DeclaredField[], problem: ProblemDefinition): FieldProblem[] {
   const known = Object.keys(problem.exact ?? {});
   return [

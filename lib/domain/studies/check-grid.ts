@@ -8,7 +8,7 @@ interface Surroundings {
   definition: CaseDefinition;
   refinement: Refinement;
   dimension: number;
-  /** A file is there or can come; its weights may tell the spacing. */
+  /** A file is there or can come, whose weights may tell the spacing. */
   canHaveFile: boolean;
 }
 

@@ -90,6 +90,9 @@ const fieldResultSchema = z.strictObject({
 const gridResultSchema = z.strictObject({
   label: z.string(), upload: z.string(), sha256: z.string(), rows: z.number().int(), weightSum: z.number(), equalWeights: z.boolean(),
   mapping: columnMappingSchema, fields: z.array(fieldResultSchema),
+  solutions: z.array(z.strictObject({
+    field: z.string(), L1: z.number(), L2: z.number(), Linf: z.number(), minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().nullable(),
+  })).optional().meta({ description: 'Norms of the fields themselves, where the problem has no exact solution.' }),
   gradients: z.array(z.strictObject({ field: z.string(), H1: z.number(), exactH1: z.number() })).meta({ description: 'H1 seminorms, of fields with columns of their gradient.' }),
   numericsVersion: z.string(),
 });

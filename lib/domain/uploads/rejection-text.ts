@@ -77,6 +77,8 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights.');
     case 'time-differs':
       return text(`${place}: the time is ${found}; expected ${expected}.`, 'Correct the time of the grid, or upload the file that was written at it.');
+    case 'points-differ':
+      return text(`${place}: found ${found}; expected ${expected}.`, 'Write the solutions of all grids at the same points, in the same order.');
     case 'exact-not-finite':
       return text(`${place}: the exact solution is ${found}; expected ${expected}.`, 'Check the expression of the problem, its constants and the time of the grid.');
   }

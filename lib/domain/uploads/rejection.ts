@@ -3,7 +3,7 @@ import { z } from 'zod';
 export const rejectionCodes = [
   'empty-file', 'unsupported-format', 'binary-content', 'damaged-gzip', 'damaged-file', 'expands-too-far', 'too-many-columns', 'too-much-computing', 'too-much-memory', 'malformed-json', 'line-too-long',
   'too-many-values', 'column-missing', 'column-type', 'duplicate-column', 'too-few-rows', 'short-row', 'long-row', 'column-length',
-  'missing-value', 'not-a-number', 'not-finite', 'mixed-decimal', 'weight-not-positive', 'exact-not-finite', 'time-differs', 'checksum-differs',
+  'missing-value', 'not-a-number', 'not-finite', 'mixed-decimal', 'weight-not-positive', 'exact-not-finite', 'time-differs', 'points-differ', 'checksum-differs',
 ] as const;
 export type RejectionCode = (typeof rejectionCodes)[number];
 

@@ -24,10 +24,15 @@ export interface FieldNorms {
 /** The H1 seminorm of the error, √(Σw|∇q − ∇q_exact|²/Σw), from columns of the gradient. */
 export interface GradientNorms { field: string; H1: number; exactH1: number; maxAbs: number; significantDigits: number | null }
 
+/** Of a field without an exact solution: norms of the field itself. */
+export type SolutionNorms = Pick<FieldNorms, 'field' | 'L1' | 'L2' | 'Linf' | 'min' | 'max' | 'maxAbs' | 'count' | 'significantDigits'>;
+
 export interface GridNorms {
   rows: number;
   weightSum: number;
   equalWeights: boolean;
   fields: FieldNorms[];
   gradients?: GradientNorms[];
+  /** Where the problem has no exact solution; `fields` is empty then. */
+  solutions?: SolutionNorms[];
 }

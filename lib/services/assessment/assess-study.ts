@@ -5,13 +5,15 @@ import { findBoundRevision, updateRevisionState, type RevisionKey } from '@/db/q
 import { json } from '@/db/json';
 import { newId } from '../keys';
 import type { JobContext } from '../outbox/job-context';
+import type { GridReader } from '../reading/grid-reader';
 import { announce } from '../studies/announce';
 import { withOrganisation } from '../with-organisation';
 import { computeAssessment } from './compute-assessment';
+import { readDifferences } from './read-differences';
 import { queueFailMails } from './queue-fail-mails';
 
 /** Computes the outcome of a revision that waits for it and keeps it for good; a second run finds it done. */
-export async function assessStudy(ctx: JobContext, studyId: string, revision: number): Promise<void> {
+export async function assessStudy(ctx: JobContext, { studyId, revision }: { studyId: string; revision: number }, reader: GridReader): Promise<void> {
   const at: RevisionKey = { organisationId: ctx.organisation.id, studyId, revision };
   const loaded = await withOrganisation(ctx, async (trx) => {
     const head = await findStudy(trx, ctx.organisation.id, studyId);
@@ -19,7 +21,8 @@ export async function assessStudy(ctx: JobContext, studyId: string, revision: nu
     return head && bound?.state === 'assessing' ? { head, bound, rows: await listGrids(trx, at) } : null;
   });
   if (!loaded) return;
-  const computed = computeAssessment(loaded);
+  const read = await readDifferences(ctx, loaded, reader);
+  const computed = read.ok ? computeAssessment(loaded, read.differences) : read;
   const now = ctx.clock();
   const isChanged = await withOrganisation(ctx, async (trx) => {
     if (!computed.ok) return updateRevisionState(trx, at, ['assessing'], { state: 'assessment-failed', failure: computed.reason, since: now });

@@ -1,6 +1,7 @@
 import type { GridRow } from '@/db/queries/grids';
 import type { StudyHead } from '@/db/queries/studies';
 import type { BoundRevision } from '@/db/queries/study-revisions';
+import type { GridDifference } from '@/lib/domain/assessment/compared-grids';
 import type { Assessment } from '@/lib/domain/assessment/schema';
 import { spaceTimeSeries } from '@/lib/domain/assessment/space-time-series';
 import { studySeries } from '@/lib/domain/assessment/study-series';
@@ -15,7 +16,7 @@ import { hashInputs } from './hash-inputs';
 
 /** A revision with its grids, as it is assessed. */
 export interface LoadedInputs { head: StudyHead; bound: BoundRevision; rows: GridRow[] }
-type Computed = { ok: true; assessment: Assessment } | { ok: false; reason: string };
+export type Computed = { ok: true; assessment: Assessment } | { ok: false; reason: string };
 
 /** All that the outcome depends on, so that the same inputs can be told to be the same. */
 function inputsSha256({ head, bound, rows }: LoadedInputs): string {
@@ -33,8 +34,8 @@ function inputsSha256({ head, bound, rows }: LoadedInputs): string {
   });
 }
 
-/** The outcome of a revision from its grids' norms and what was typed, or in words why there is none. */
-export function computeAssessment(loaded: LoadedInputs): Computed {
+/** The outcome of a revision from its grids' norms, what its solutions differ by and what was typed, or in words why there is none. */
+export function computeAssessment(loaded: LoadedInputs, differences: readonly GridDifference[] = []): Computed {
   const { head, bound, rows } = loaded;
   const dimension = head.dimension;
   const used = rows.filter((row) => row.excluded === null);
@@ -43,7 +44,7 @@ export function computeAssessment(loaded: LoadedInputs): Computed {
     const study = {
       definition: caseDefinitionSchema.parse(bound.case_definition),
       grids: used.map((row) => ({ grid: { label: row.label, ...definitionOf(row) }, norms: normsOf(row) })),
-      dimension, volume: domainVolume(problem, dimension),
+      dimension, volume: domainVolume(problem, dimension), differences,
     };
     const refinement = refinementSchema.parse(head.refinement);
     const series = refinement === 'space-time' ? spaceTimeSeries(study) : studySeries({ ...study, refinement, box: problem.domain ?? null });

@@ -10,7 +10,8 @@ import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
 import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import { compareResults, type ResultDifference } from '@/lib/numerics/reproduction/compare-results';
 import { RejectedFile } from '@/lib/readers/rejected-file';
-import { computeAssessment, type LoadedInputs } from '../assessment/compute-assessment';
+import { computeAssessment, type Computed, type LoadedInputs } from '../assessment/compute-assessment';
+import { readDifferences } from '../assessment/read-differences';
 import type { JobContext } from '../outbox/job-context';
 import type { GridReader } from '../reading/grid-reader';
 import { readNorms } from '../reading/read-norms';
@@ -53,14 +54,18 @@ export async function recheckStudy(ctx: JobContext, id: string, reader: GridRead
   const { head, bound, kept, rows } = loaded;
   const read: ReadAgain[] = [];
   for (const row of rows) read.push(await readAgain(ctx, row, { bound, reader }));
-  const compared = compare({ head, bound, rows }, { kept, read });
+  const compared = compare({ head, bound, rows }, { kept, read, after: await assessAgain(ctx, { head, bound, rows: read.map(({ row }) => row) }, reader) });
   await withOrganisation(ctx, (trx) => finishRecheck(trx, organisationId, id, {
     result: compared.result, largest_difference: compared.largestDifference, differences: json(compared.differences), finished_at: ctx.clock(),
   }));
 }
 
-function compare(before: LoadedInputs, { kept, read }: { kept: unknown; read: readonly ReadAgain[] }) {
-  const after = computeAssessment({ ...before, rows: read.map(({ row }) => row) });
+async function assessAgain(ctx: JobContext, loaded: LoadedInputs, reader: GridReader): Promise<Computed> {
+  const found = await readDifferences(ctx, loaded, reader);
+  return found.ok ? computeAssessment(loaded, found.differences) : found;
+}
+
+function compare(before: LoadedInputs, { kept, read, after }: { kept: unknown; read: readonly ReadAgain[]; after: Computed }) {
   const norms = (rows: readonly GridRow[]) => Object.fromEntries(rows.map((row) => [row.label, row.norms]));
   const found = compareResults(
     { grids: norms(before.rows), assessment: results(kept) },

@@ -11,7 +11,7 @@ import { isTyped } from '@/lib/domain/studies/check-grid';
 import { checkSeries } from '@/lib/domain/studies/check-series';
 import type { CreateStudyInput } from '@/lib/domain/studies/input';
 import type { Study } from '@/lib/domain/studies/schema';
-import { takesFiles } from '@/lib/domain/studies/takes-files';
+import { filesTellSpacing } from '@/lib/domain/studies/takes-files';
 import { AppError } from '@/lib/errors';
 import type { MemberContext } from '../context';
 import { keyOf, newId } from '../keys';
@@ -34,7 +34,7 @@ function checkInput(input: CreateStudyInput, bound: Awaited<ReturnType<typeof re
   const dimension = input.dimension ?? bound.problem.dimension;
   const faults = checkSeries(input.grids, {
     definition: bound.definition, refinement, dimension, volume: domainVolume(bound.problem, dimension),
-    canHaveFile: takesFiles(bound.definition, bound.problem),
+    canHaveFile: filesTellSpacing(bound.definition, bound.problem),
   });
   if (faults.length > 0) throw new AppError('invalid', faults[0]?.message ?? 'The grids do not fit the case.', { fields: faults });
   return dimension;

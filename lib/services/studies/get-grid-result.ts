@@ -20,6 +20,7 @@ export async function getGridResult(ctx: MemberContext, key: { id: string; label
     fields: norms.fields.map(({ field, L1, L2, Linf, at, mean, exact, min, max, count, significantDigits, datum }) => ({
       field, L1, L2, Linf, at, signedMean: mean, exact, minimum: min, maximum: max, count, significantDigits, ...(datum && { datum }),
     })),
+    ...(norms.solutions && { solutions: norms.solutions.map(({ field, L1, L2, Linf, min, max, count, significantDigits }) => ({ field, L1, L2, Linf, minimum: min, maximum: max, count, significantDigits })) }),
     gradients: (norms.gradients ?? []).map(({ field, H1, exactH1 }) => ({ field, H1, exactH1 })),
     numericsVersion: row.numerics_version ?? '',
   };

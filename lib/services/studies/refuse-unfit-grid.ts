@@ -2,7 +2,7 @@ import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import { checkGrid } from '@/lib/domain/studies/check-grid';
 import { refinementSchema, type GridInput } from '@/lib/domain/studies/input';
-import { takesFiles } from '@/lib/domain/studies/takes-files';
+import { filesTellSpacing } from '@/lib/domain/studies/takes-files';
 import { AppError } from '@/lib/errors';
 import type { LoadedStudy } from './require-study';
 
@@ -11,7 +11,7 @@ export function refuseUnfitGrid({ head, bound }: LoadedStudy, grid: GridInput): 
   const definition = caseDefinitionSchema.parse(bound.case_definition);
   const faults = checkGrid(grid, {
     definition, refinement: refinementSchema.parse(head.refinement), dimension: head.dimension,
-    canHaveFile: takesFiles(definition, problemDefinitionSchema.parse(bound.problem_definition)),
+    canHaveFile: filesTellSpacing(definition, problemDefinitionSchema.parse(bound.problem_definition)),
   });
   if (faults.length > 0) throw new AppError('invalid', faults[0]?.message ?? 'The grid does not fit the case.', { fields: faults });
 }

@@ -3,7 +3,7 @@ import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import { checkSeries } from '@/lib/domain/studies/check-series';
 import type { GridInput } from '@/lib/domain/studies/input';
 import { statedSpacing } from '@/lib/domain/studies/stated-spacing';
-import { takesFiles } from '@/lib/domain/studies/takes-files';
+import { filesTellSpacing, takesFiles } from '@/lib/domain/studies/takes-files';
 
 const withField = caseDefinitionSchema.parse({ fields: [{ field: 'u', norms: [{ norm: 'L2' }] }], quantities: [{ name: 'drag' }] });
 const withoutField = caseDefinitionSchema.parse({ quantities: [{ name: 'drag' }] });
@@ -33,10 +33,16 @@ describe('checkSeries', () => {
 });
 
 describe('takesFiles', () => {
-  it('wants a field, and an exact solution to compare it with', () => {
-    expect(takesFiles(withField, { exact: { u: 'x' } })).toBe(true);
-    expect(takesFiles(withField, {})).toBe(false);
-    expect(takesFiles(withoutField, { exact: { u: 'x' } })).toBe(false);
+  it('wants a field', () => {
+    expect(takesFiles(withField)).toBe(true);
+    expect(takesFiles(withoutField)).toBe(false);
+  });
+});
+
+describe('filesTellSpacing', () => {
+  it('wants an exact solution: without one, solutions stand on the same points', () => {
+    expect(filesTellSpacing(withField, { exact: { u: 'x' } })).toBe(true);
+    expect(filesTellSpacing(withField, {})).toBe(false);
   });
 });
 

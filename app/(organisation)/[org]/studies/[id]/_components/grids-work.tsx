@@ -39,7 +39,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
   const input = useRef<HTMLInputElement>(null);
   const chosenGrid = useRef<string | null>(null);
   const mayChange = may('work.write');
-  const comparesFiles = takesFiles(study.definition, study.problemDefinition);
+  const comparesFiles = takesFiles(study.definition);
   const grids = [...study.grids].reverse();
   const sending = [...transfers.values()].filter(({ state, isElsewhere }) => !isElsewhere && state !== 'paused' && state !== 'failed').length;
 
@@ -109,7 +109,7 @@ export function GridsWork({ study, readings, onType }: GridsWorkProps) {
 export function GridsNotes({ study }: { study: Study }) {
   return (
     <div className="mt-4 flex flex-col gap-2">
-      {takesFiles(study.definition, study.problemDefinition) && (
+      {takesFiles(study.definition) && (
         <p>Files are tables separated by comma, semicolon, tab or space, or JSON columns; gzip or not. They go straight to storage: <b>progress counts confirmed bytes</b>, reading counts rows.</p>
       )}
       <p>

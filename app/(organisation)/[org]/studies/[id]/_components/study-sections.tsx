@@ -13,6 +13,7 @@ import type { Assessment } from '@/lib/domain/assessment/schema';
 import { explainTimeSteps } from '@/lib/domain/assessment/explain-time-steps';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
 import type { Study } from '@/lib/domain/studies/schema';
+import { solutionFields } from '@/lib/domain/cases/solution-fields';
 import { takesFiles } from '@/lib/domain/studies/takes-files';
 import { AfterData } from './after-data';
 import { Cautions } from './cautions';
@@ -40,9 +41,9 @@ export function StudySections({ study, readings }: StudySectionsProps) {
   const { may } = useOrganisation();
   const { assessment, definition } = study;
   const collects = study.state === 'collecting' && study.revision === study.currentRevision;
-  const comparesFiles = takesFiles(definition, study.problemDefinition);
+  const comparesFiles = takesFiles(definition);
   const [isTypingAsked, setIsTypingAsked] = useState(false);
-  const isTyping = may('work.write') && (isTypingAsked || !comparesFiles);
+  const isTyping = may('work.write') && (isTypingAsked || !comparesFiles || solutionFields(definition, study.problemDefinition).length > 0);
   const notes = (
     <>
       <StudyMargin study={study} />
