@@ -1,4 +1,5 @@
 import { createHash } from 'node:crypto';
+import type { GivenDialect } from '../domain/columns/given-dialect';
 import { createGridChecks, type GridChecks } from './grid-checks';
 import { locateColumns } from './locate-columns';
 import { readSource, type OpenSource } from './read-source';
@@ -9,6 +10,8 @@ import { detectTableDialect } from './table/table-dialect';
 
 export interface ReadColumnsOptions {
   names: readonly string[];
+  /** How a text table is written, as far as it was said. */
+  given?: GivenDialect;
   onBatch: (batch: ColumnBatch) => void;
   onProgress?: (progress: ReadProgress) => void;
 }
@@ -22,7 +25,7 @@ export interface ColumnsOfFile {
 }
 
 /** Reads columns of a file of any format in one pass, as they are. Throws RejectedFile with every reason where it cannot be taken. */
-export async function readColumns(source: ByteSource, { names, onBatch, onProgress }: ReadColumnsOptions): Promise<ColumnsOfFile> {
+export async function readColumns(source: ByteSource, { names, given, onBatch, onProgress }: ReadColumnsOptions): Promise<ColumnsOfFile> {
   const checks = createGridChecks(undefined);
   const hash = createHash('sha256');
   let rows = 0;
@@ -37,7 +40,7 @@ export async function readColumns(source: ByteSource, { names, onBatch, onProgre
       const { columns } = await reader.read(pieces, { wanted: names, reasons: checks.rows, onBatch: take, onPiece });
       return columns.map(({ significantDigits }) => significantDigits);
     },
-    table: (opened) => readTable(opened, { names, checks, onBatch: take, onPiece }),
+    table: (opened) => readTable(opened, { names, given, checks, onBatch: take, onPiece }),
   }, {
     onBytes(chunk) {
       hash.update(chunk);
@@ -51,10 +54,10 @@ export async function readColumns(source: ByteSource, { names, onBatch, onProgre
   return { digits, rows, sha256: hash.digest('hex'), bytes };
 }
 
-interface TableOptions { names: readonly string[]; checks: GridChecks; onBatch: (batch: ColumnBatch) => void; onPiece: () => void }
+interface TableOptions { names: readonly string[]; given: GivenDialect | undefined; checks: GridChecks; onBatch: (batch: ColumnBatch) => void; onPiece: () => void }
 
-async function readTable({ pieces, head }: OpenSource, { names, checks, onBatch, onPiece }: TableOptions): Promise<number[]> {
-  const dialect = detectTableDialect(head);
+async function readTable({ pieces, head }: OpenSource, { names, given, checks, onBatch, onPiece }: TableOptions): Promise<number[]> {
+  const dialect = detectTableDialect(head, given);
   const indices = locateColumns(dialect.header, names, dialect.headerLine, checks.rows);
   // Two names may mean one column; it is read once.
   const wanted = [...new Set(indices)];

@@ -39,7 +39,7 @@ export async function readDifference(
   try {
     const kept = await keepColumns(files.coarse, { reading, store, onProgress });
     const differences = createDifferences(reading, kept);
-    const fine = await readColumns(files.fine, { names: [...namesOf(reading, reading.fine), ...weightOf(reading.fine)], onBatch: (batch) => differences.add(batch), onProgress });
+    const fine = await readColumns(files.fine, { names: [...namesOf(reading, reading.fine), ...weightOf(reading.fine)], given: reading.fine.table, onBatch: (batch) => differences.add(batch), onProgress });
     return { fields: differences.finish(), sha256: { fine: fine.sha256, coarse: kept.file.sha256 } };
   } finally {
     store.close();
@@ -66,7 +66,7 @@ async function keepColumns(source: ByteSource, { reading, store, onProgress }: K
   const lowest = axesOf(reading).map(() => Infinity);
   const highest = lowest.map(() => -Infinity);
   const file = await readColumns(source, {
-    names, onProgress,
+    names, given: reading.coarse.table, onProgress,
     onBatch(batch) {
       for (const [slot, column] of columns.entries()) column.addAll(batch.columns[slot] as Float64Array, batch.rows);
       for (const axis of lowest.keys()) {
