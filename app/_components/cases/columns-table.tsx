@@ -1,3 +1,4 @@
+import { describeGiven } from '@/lib/domain/uploads/dialect-text';
 import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
 import { Cell, HeadCell, RowHead } from '../tables/cells';
 import { Head, Row, Table } from '../tables/table';
@@ -16,6 +17,7 @@ export function ColumnsTable({ columns }: { columns: ColumnMapping }) {
       <Head><tr><HeadCell>Stands for</HeadCell><HeadCell>Column</HeadCell></tr></Head>
       <tbody>
         {rows.map(({ name, column }) => <Row key={name}><RowHead><Sym>{name}</Sym></RowHead><Cell><code className="font-mono text-code">{column}</code></Cell></Row>)}
+        {columns.table && <Row><RowHead>text tables</RowHead><Cell>{describeGiven(columns.table)}</Cell></Row>}
         <Row><RowHead>weight</RowHead><Cell>{columns.weight === null ? 'equal for every row' : <code className="font-mono text-code">{columns.weight}</code>}</Cell></Row>
       </tbody>
     </Table>

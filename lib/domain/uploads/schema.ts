@@ -61,7 +61,7 @@ export const previewSchema = z.strictObject({
   header: z.array(z.string()), firstRows: z.array(z.array(z.string())),
   mapping: columnMappingSchema.nullable().meta({ description: 'The mapping in force for the case, if any.' }),
   proposal: columnMappingSchema.partial().meta({ description: 'What matching names propose.' }),
-  missing: z.array(z.string()).meta({ description: 'Coordinates, weight and fields that no column answers to.' }),
+  missing: z.array(z.string()).meta({ description: 'Coordinates, weight, fields and gradients that no column answers to.' }),
 });
 export type UploadPreview = z.infer<typeof previewSchema>;
 
