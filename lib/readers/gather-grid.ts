@@ -1,8 +1,9 @@
+import type { ColumnEngine } from '../numerics/column-engine';
 import { createAverageEvaluator } from '../numerics/expression/average-evaluator';
 import { createBlockEvaluator } from '../numerics/expression/block-evaluator';
 import type { Node } from '../numerics/expression/node';
 import type { NormPart } from '../numerics/norms/norm-part';
-import { createNormGatherer } from '../numerics/norms/norm-gatherer';
+import { createNormGatherer, createNormRooms } from '../numerics/norms/norm-gatherer';
 import type { GridChecks } from './grid-checks';
 import type { GridReading } from './grid-reading';
 import type { ColumnPlan } from './plan-columns';
@@ -27,12 +28,18 @@ export interface GridGatherer {
   finish(indices: readonly number[]): NormPart;
 }
 
-/** Prepares the exact solution once, for gatherers one after another: what batches come to, with their checks. */
-export function prepareGathering({ plan, fields, exact, average, t: gridTime }: GridTask): (checks: GridChecks) => GridGatherer {
-  const evaluate = average ? null : createBlockEvaluator(exact);
-  const evaluateAverage = average ? createAverageEvaluator(exact, average.points) : null;
+/**
+ * Prepares the exact solution once, for gatherers one after another: what batches come to, with their checks. Each holds
+ * until the next one is asked for. Batches of columns in the memory of an engine are worked on there.
+ */
+export function prepareGathering(
+  { plan, fields, exact, average, t: gridTime }: GridTask, engine: ColumnEngine | null = null,
+): (checks: GridChecks) => GridGatherer {
+  const evaluate = average ? null : createBlockEvaluator(exact, undefined, engine);
+  const evaluateAverage = average ? createAverageEvaluator(exact, average.points, engine) : null;
+  const rooms = createNormRooms(fields.length, engine);
   return (checks) => {
-    const gatherer = createNormGatherer(fields);
+    const gatherer = createNormGatherer(fields, rooms);
     const rowProblems = createRowProblems();
     return {
       add({ rows, columns, lines }) {

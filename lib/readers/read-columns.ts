@@ -6,6 +6,7 @@ import { readSource, type OpenSource } from './read-source';
 import type { ByteSource, ColumnBatch, ReadProgress } from './source';
 import { createChunkReader, type ChunkStart } from './table/read-chunk';
 import { readChunks } from './table/read-chunks';
+import { createTableMemory } from './table/table-memory';
 import { detectTableDialect } from './table/table-dialect';
 
 export interface ReadColumnsOptions {
@@ -62,7 +63,8 @@ async function readTable({ pieces, head }: OpenSource, { names, given, checks, o
   // Two names may mean one column; it is read once.
   const wanted = [...new Set(indices)];
   const slots = indices.map((index) => wanted.indexOf(index));
-  const reader = createChunkReader({ dialect, wanted });
+  const memory = createTableMemory();
+  const reader = createChunkReader({ dialect, wanted, memory });
   const deliver = ({ rows, columns, lines }: ColumnBatch) => onBatch({ rows, lines, columns: slots.map((slot) => columns[slot] as Float64Array) });
   const work = {
     read(bytes: Uint8Array, start: ChunkStart) {
@@ -72,5 +74,5 @@ async function readTable({ pieces, head }: OpenSource, { names, given, checks, o
     },
     readAhead: () => null,
   };
-  return readChunks(pieces, { dialect, work, checks, onPart: onPiece });
+  return readChunks(pieces, { dialect, memory, work, checks, onPart: onPiece });
 }

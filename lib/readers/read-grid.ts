@@ -14,6 +14,7 @@ import type { ColumnFormat } from './column-format';
 import { readSource, type OpenSource } from './read-source';
 import type { ByteSource, ReadProgress } from './source';
 import { detectTableDialect } from './table/table-dialect';
+import { createTableMemory } from './table/table-memory';
 import { createTableWork, type TableTask } from './table/table-work';
 
 export interface GridReadResult {
@@ -86,9 +87,10 @@ async function readTableGrid(
   const dialect = detectTableDialect(head, given);
   const indices = locateColumns(dialect.header, grid.plan.names, dialect.headerLine, checks.rows);
   const task: TableTask = { dialect, indices, grid };
-  const work = createTableWork(task, checks);
+  const memory = createTableMemory();
+  const work = createTableWork(task, checks, memory);
   const digits = await readChunks(pieces, {
-    dialect, work, checks, openHelper: openHelper?.(task),
+    dialect, memory, work, checks, openHelper: openHelper?.(task),
     onPart(part) {
       total.add(part);
       onPiece();

@@ -1,19 +1,7 @@
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import { createChunkReader } from '@/lib/readers/table/read-chunk';
 import type { TableDialect } from '@/lib/readers/table/table-dialect';
-
-type Random = () => number;
-
-/** Numbers from 0 to 1, the same for the same seed (G. Marsaglia, Xorshift RNGs, 2003). */
-function seeded(seed: number): Random {
-  let state = seed | 1;
-  return () => {
-    state ^= state << 13;
-    state ^= state >>> 17;
-    state ^= state << 5;
-    return (state >>> 0) / 2 ** 32;
-  };
-}
+import { seeded, type Random } from './random';
 
 const upTo = (random: Random, most: number) => Math.floor(random() * (most + 1));
 const digits = (random: Random, count: number) => Array.from({ length: count }, () => upTo(random, 9)).join('');

@@ -1,7 +1,9 @@
 import { parentPort } from 'node:worker_threads';
 import type { NormPart } from '@/lib/numerics/norms/norm-part';
 import { createGridChecks } from '@/lib/readers/grid-checks';
+import { createTableMemory } from '@/lib/readers/table/table-memory';
 import { createTableWork, type ChunkWork } from '@/lib/readers/table/table-work';
+import { roomBytes } from '@/lib/readers/table/table-chunks';
 import type { HelperAnswer, HelperMessage } from './table-helper';
 
 if (!parentPort) throw new Error('read-table-thread runs as a worker thread only.');
@@ -12,8 +14,10 @@ let rooms: Uint8Array[] = [];
 function answer(message: HelperMessage): HelperAnswer {
   if ('task' in message) {
     // What is wrong with a chunk is told by the thread that is helped.
-    work = createTableWork(message.task, createGridChecks(undefined));
-    rooms = message.rooms.map((room) => new Uint8Array(room));
+    const { task, shared } = message;
+    const memory = createTableMemory(shared);
+    work = createTableWork(task, createGridChecks(undefined), memory);
+    rooms = shared.rooms.map((room) => memory.bytes(room, roomBytes));
     return 'ready';
   }
   const room = rooms[message.room];

@@ -1,10 +1,10 @@
 import { Worker } from 'node:worker_threads';
 import type { NormPart } from '@/lib/numerics/norms/norm-part';
-import type { ChunkHelper, OpenHelper } from '@/lib/readers/table/chunk-helping';
+import type { ChunkHelper, OpenHelper, SharedRooms } from '@/lib/readers/table/chunk-helping';
 import type { ChunkResult, TableTask } from '@/lib/readers/table/table-work';
 
 /** What the helping thread is told: first the task, then chunk after chunk, each of which it answers in order. */
-export type HelperMessage = { task: TableTask; rooms: readonly SharedArrayBuffer[] } | { room: number; length: number };
+export type HelperMessage = { task: TableTask; shared: SharedRooms } | { room: number; length: number };
 export type HelperAnswer = 'ready' | { result: ChunkResult<NormPart> | null } | { failed: string };
 
 interface Waiting { resolve: (answer: HelperAnswer) => void; reject: (error: Error) => void }
@@ -17,7 +17,7 @@ function threadFile(): URL {
 
 /** Starts a thread that reads chunks of a table for this one. */
 export function openTableHelper(task: TableTask): OpenHelper<NormPart> {
-  return async (rooms) => {
+  return async (shared) => {
     // It allocates little beside its columns.
     const thread = new Worker(threadFile(), { resourceLimits: { maxYoungGenerationSizeMb: 4 } });
     const waiting: Waiting[] = [];
@@ -38,7 +38,7 @@ export function openTableHelper(task: TableTask): OpenHelper<NormPart> {
       thread.postMessage(message);
     });
 
-    await ask({ task, rooms });
+    await ask({ task, shared });
     const helper: ChunkHelper<NormPart> = {
       async readAhead(room, length) {
         const answer = await ask({ room, length });

@@ -1,3 +1,4 @@
+import type { ColumnEngine } from '../column-engine';
 import { createBlockEvaluator, type VariableValues } from './block-evaluator';
 import { gaussLegendre } from './gauss-legendre';
 import type { Node } from './node';
@@ -5,19 +6,21 @@ import type { Node } from './node';
 /** Size of the cell of every row along each coordinate: a column, or one number for all. */
 export type CellExtents = Partial<Record<'x' | 'y' | 'z', Float64Array | number>>;
 
+const capacity = 2048;
 const axes = ['x', 'y', 'z'] as const;
 
 /**
  * Averages nodes over the cell of every row, a box about its coordinates, by Gauss–Legendre rules of `points` points per
- * direction: what a finite-volume code stores. Columns as of createBlockEvaluator; they hold until the next call.
+ * direction: what a finite-volume code stores. Columns as of createBlockEvaluator, of up to 2048 rows; they hold until the next call.
  */
 export function createAverageEvaluator(
-  nodes: readonly Node[], points: number, capacity = 2048,
+  nodes: readonly Node[], points: number, engine: ColumnEngine | null = null,
 ): (rows: number, variables: VariableValues, extents: CellExtents) => readonly Float64Array[] {
-  const evaluate = createBlockEvaluator(nodes, capacity);
+  const evaluate = createBlockEvaluator(nodes, capacity, engine);
+  const allocate = () => engine?.allocate(capacity) ?? new Float64Array(capacity);
   const rule = gaussLegendre(points);
-  const sums = nodes.map(() => new Float64Array(capacity));
-  const moved = { x: new Float64Array(capacity), y: new Float64Array(capacity), z: new Float64Array(capacity) };
+  const sums = nodes.map(allocate);
+  const moved = { x: allocate(), y: allocate(), z: allocate() };
   return (rows, variables, extents) => {
     for (const sum of sums) sum.fill(0, 0, rows);
     const directions = axes.filter((axis) => variables[axis] !== undefined && extents[axis] !== undefined);

@@ -1,3 +1,4 @@
+import type { ColumnEngine } from '../column-engine';
 import type { Node, Variable } from './node';
 import { listNodes } from './list-nodes';
 import { evaluateBinary } from './evaluate-binary';
@@ -11,25 +12,28 @@ type Column = { values: Float64Array };
  * Prepares nodes for evaluation over up to `capacity` rows at a time. What the nodes share is computed once. The columns
  * returned, in the order of `nodes`, belong to the evaluator and hold until the next call, which allocates nothing.
  *
+ * An engine does the steps that it knows, in columns of its own memory.
+ *
  * A point where an expression is not defined gives NaN or an infinity there, for the caller to report with its row.
  */
 export function createBlockEvaluator(
-  nodes: readonly Node[], capacity = 2048,
+  nodes: readonly Node[], capacity = 2048, engine: ColumnEngine | null = null,
 ): (rows: number, variables: VariableValues) => readonly Float64Array[] {
   const used = listNodes(nodes);
   const columns = new Map<Node, Column>();
   const lastUse = findLastUses(used, nodes);
   const free: Float64Array[] = [];
+  const allocate = () => engine?.allocate(capacity) ?? new Float64Array(capacity);
   const steps: ((rows: number) => void)[] = [];
   const bound: { name: Variable; column: Column; own: Float64Array }[] = [];
 
   for (const [index, node] of used.entries()) {
-    const values = node.kind === 'unary' || node.kind === 'binary' ? free.pop() ?? new Float64Array(capacity) : new Float64Array(capacity);
+    const values = node.kind === 'unary' || node.kind === 'binary' ? free.pop() ?? allocate() : allocate();
     const column = { values };
     columns.set(node, column);
     if (node.kind === 'number') values.fill(node.value);
     else if (node.kind === 'variable') bound.push({ name: node.name, column, own: values });
-    else steps.push(makeStep(node, column, columns));
+    else steps.push(makeStep(node, column, columns, engine));
     for (const done of lastUse.get(index) ?? []) free.push(columnOf(columns, done).values);
   }
   const results = nodes.map((node) => columnOf(columns, node));
@@ -71,14 +75,19 @@ function findLastUses(used: readonly Node[], results: readonly Node[]): Map<numb
 }
 
 function makeStep(
-  node: Extract<Node, { kind: 'unary' | 'binary' }>, to: Column, columns: Map<Node, Column>,
+  node: Extract<Node, { kind: 'unary' | 'binary' }>, to: Column, columns: Map<Node, Column>, engine: ColumnEngine | null,
 ): (rows: number) => void {
   const a = columnOf(columns, node.a);
   if (node.kind === 'binary') {
     const b = columnOf(columns, node.b);
     const aNumber = node.a.kind === 'number' ? node.a.value : null;
     const bNumber = node.b.kind === 'number' ? node.b.value : null;
-    return (rows) => evaluateBinary(node.operation, { a: a.values, b: b.values, aNumber, bNumber }, to.values, rows);
+    return (rows) => {
+      const operands = { a: a.values, b: b.values, aNumber, bNumber };
+      if (engine?.binary(node.operation, operands, to.values, rows) !== true) evaluateBinary(node.operation, operands, to.values, rows);
+    };
   }
-  return (rows) => evaluateUnary(node.operation, a.values, to.values, rows);
+  return (rows) => {
+    if (engine?.unary(node.operation, a.values, to.values, rows) !== true) evaluateUnary(node.operation, a.values, to.values, rows);
+  };
 }

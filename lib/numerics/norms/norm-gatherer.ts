@@ -1,6 +1,7 @@
 import type { Position } from '../assessment';
-import { createCompensatedSum, type CompensatedSum } from './compensated-sum';
-import type { FieldPart, NormPart } from './norm-part';
+import type { ColumnEngine } from '../column-engine';
+import type { FieldPart, NormPart, SumPart } from './norm-part';
+import { addErrors, addWeights, beginState, mostRows, place, stateLength, weightLength, weightPlace } from './run-sums';
 
 interface NormBlock {
   rows: number;
@@ -30,126 +31,76 @@ export interface NormGatherer {
   part(): NormPart;
 }
 
-interface FieldSums {
-  field: string;
-  absolute: CompensatedSum; square: CompensatedSum; signed: CompensatedSum;
-  exactAbsolute: CompensatedSum; exactSquare: CompensatedSum;
-  largest: number; at: Position; exactLargest: number; min: number; max: number;
+/** Room for what gatherers add up, one of them at a time. */
+export interface NormRooms {
+  engine: ColumnEngine | null;
+  weights: Float64Array;
+  fields: readonly Float64Array[];
 }
 
-// Sums run plainly over this many rows and are then compensated: as good as compensating every row, at a fraction of the time.
-const run = 128;
-/** Sums of this many squares must fit into a double: more rows than any file has. */
-const mostRows = 2 ** 40;
+/** Makes room for the sums of so many fields, in the memory of an engine where one adds them up. */
+export function createNormRooms(fieldCount: number, engine: ColumnEngine | null = null): NormRooms {
+  const allocate = (length: number) => engine?.allocate(length) ?? new Float64Array(length);
+  return { engine, weights: allocate(weightLength), fields: Array.from({ length: fieldCount }, () => allocate(stateLength)) };
+}
 
 /**
  * Gathers the norms of every field block by block, in one pass: with e = q − q_exact and weights w,
  * L1 = Σw|e|/Σw, L2 = √(Σwe²/Σw), L∞ = max|e| and where, the signed mean Σwe/Σw, and the norms of the exact field.
  * A weight that is not positive, or a value that is not finite, is a problem with its row, and there are no norms then. createNormTotal makes norms of parts.
  */
-export function createNormGatherer(fields: readonly string[]): NormGatherer {
-  const weightSum = createCompensatedSum();
-  const sums = fields.map((field) => startSums(field));
+export function createNormGatherer(fields: readonly string[], rooms = createNormRooms(fields.length)): NormGatherer {
+  const { engine, weights: weightState } = rooms;
+  const positions: Position[] = fields.map(() => ({ x: NaN }));
   const problems = new Map<string, NormProblem>();
   let rows = 0;
   let equalWeights = true;
+  weightState.fill(0);
+  rooms.fields.forEach(beginState);
 
   const report = (code: NormProblem['code'], field: string | null, row: number, value: number) => {
     const known = problems.get(`${code} ${field}`);
     if (known) known.count += 1;
     else problems.set(`${code} ${field}`, { code, field, count: 1, row, value });
   };
+  const gatherWeights = (weights: Float64Array, count: number) => {
+    if (engine?.addWeights(weightState, weights, count) !== true) addWeights(weightState, weights, count);
+    if (weightState[weightPlace.isBad] === 0) return;
+    weightState[weightPlace.isBad] = 0;
+    for (let i = 0; i < count; i += 1) if (!((weights[i] as number) > 0 && (weights[i] as number) < Infinity)) report('weight-not-positive', null, rows + i, weights[i] as number);
+  };
 
   return {
     add(block) {
       const { weights } = block;
       equalWeights = weights === null;
-      if (weights !== null) addWeights(weights, block.rows, weightSum, (i) => report('weight-not-positive', null, rows + i, weights[i] as number));
-      for (const [index, sum] of sums.entries()) {
+      if (weights !== null) gatherWeights(weights, block.rows);
+      for (const [index, field] of fields.entries()) {
         const part = block.fields[index];
-        if (part === undefined) throw new TypeError(`createNormGatherer: the block has no values of ${sum.field}`);
-        for (let from = 0; from < block.rows; from += run) {
-          const bad = addRun(sum, part.values, part.exact, block, from, Math.min(from + run, block.rows));
-          if (bad) findBad(part, weights, from, Math.min(from + run, block.rows), (code, i, value) => report(code, sum.field, rows + i, value));
-        }
+        const state = rooms.fields[index] as Float64Array;
+        if (part === undefined) throw new TypeError(`createNormGatherer: the block has no values of ${field}`);
+        const columns = { values: part.values, exact: part.exact, weights };
+        state[place.largestRow] = -1;
+        if (engine?.addErrors(state, columns, block.rows) !== true) addErrors(state, columns, block.rows);
+        const largestRow = state[place.largestRow] as number;
+        if (largestRow >= 0) positions[index] = positionAt(block, largestRow);
+        if (state[place.isBad] === 0) continue;
+        state[place.isBad] = 0;
+        findBad(part, weights, block.rows, (code, i, value) => report(code, field, rows + i, value));
       }
       rows += block.rows;
     },
     rows: () => rows,
     problems: () => [...problems.values()],
-    part: () => ({ rows, equalWeights, weights: weightSum.part(), fields: sums.map(partOf) }),
+    part: () => ({ rows, equalWeights, weights: sumAt(weightState, weightPlace.sum), fields: rooms.fields.map((state, index) => partOf(state, positions[index] as Position)) }),
   };
-}
-
-function startSums(field: string): FieldSums {
-  return {
-    field, absolute: createCompensatedSum(), square: createCompensatedSum(), signed: createCompensatedSum(),
-    exactAbsolute: createCompensatedSum(), exactSquare: createCompensatedSum(),
-    largest: -1, at: { x: NaN }, exactLargest: 0, min: Infinity, max: -Infinity,
-  };
-}
-
-function addWeights(weights: Float64Array, rows: number, sum: CompensatedSum, onBad: (i: number) => void): void {
-  for (let from = 0; from < rows; from += run) {
-    const to = Math.min(from + run, rows);
-    let part = 0;
-    let isGood = true;
-    for (let i = from; i < to; i += 1) {
-      const weight = weights[i] as number;
-      part += weight;
-      isGood &&= weight > 0 && weight < Infinity;
-    }
-    sum.add(part);
-    if (isGood) continue;
-    for (let i = from; i < to; i += 1) if (!((weights[i] as number) > 0 && (weights[i] as number) < Infinity)) onBad(i);
-  }
-}
-
-/** Whether something in the run is not finite, or so large that sums of its squares may not be. */
-function addRun(sum: FieldSums, values: Float64Array, exact: Float64Array, block: NormBlock, from: number, to: number): boolean {
-  const { weights } = block;
-  let absolute = 0, square = 0, signed = 0, exactAbsolute = 0, exactSquare = 0;
-  let largest = sum.largest, exactLargest = sum.exactLargest, min = sum.min, max = sum.max, largestRow = -1;
-  for (let i = from; i < to; i += 1) {
-    const value = values[i] as number;
-    const known = exact[i] as number;
-    const weight = weights === null ? 1 : (weights[i] as number);
-    const error = value - known;
-    const size = Math.abs(error);
-    const exactSize = Math.abs(known);
-    absolute += weight * size;
-    square += weight * error * error;
-    signed += weight * error;
-    exactAbsolute += weight * exactSize;
-    exactSquare += weight * known * known;
-    if (size > largest) {
-      largest = size;
-      largestRow = i;
-    }
-    if (exactSize > exactLargest) exactLargest = exactSize;
-    if (value < min) min = value;
-    if (value > max) max = value;
-  }
-  sum.absolute.add(absolute);
-  sum.square.add(square);
-  sum.signed.add(signed);
-  sum.exactAbsolute.add(exactAbsolute);
-  sum.exactSquare.add(exactSquare);
-  sum.exactLargest = exactLargest;
-  sum.min = min;
-  sum.max = max;
-  if (largestRow >= 0) {
-    sum.largest = largest;
-    sum.at = positionAt(block, largestRow);
-  }
-  return !Number.isFinite(square * mostRows) || !Number.isFinite(exactSquare * mostRows);
 }
 
 function findBad(
-  part: { values: Float64Array; exact: Float64Array }, weights: Float64Array | null, from: number, to: number,
+  part: { values: Float64Array; exact: Float64Array }, weights: Float64Array | null, rows: number,
   report: (code: NormProblem['code'], i: number, value: number) => void,
 ): void {
-  for (let i = from; i < to; i += 1) {
+  for (let i = 0; i < rows; i += 1) {
     const value = part.values[i] as number;
     const known = part.exact[i] as number;
     // A value whose weighted squared errors might add up beyond the largest double has no norm either.
@@ -167,10 +118,15 @@ function positionAt(block: NormBlock, i: number): Position {
   return at;
 }
 
-function partOf(sum: FieldSums): FieldPart {
-  const { largest, at, exactLargest, min, max } = sum;
+function sumAt(state: Float64Array, at: number): SumPart {
+  return { sum: state[at] as number, lost: state[at + 1] as number };
+}
+
+function partOf(state: Float64Array, at: Position): FieldPart {
   return {
-    absolute: sum.absolute.part(), square: sum.square.part(), signed: sum.signed.part(),
-    exactAbsolute: sum.exactAbsolute.part(), exactSquare: sum.exactSquare.part(), largest, at, exactLargest, min, max,
+    absolute: sumAt(state, place.absolute), square: sumAt(state, place.square), signed: sumAt(state, place.signed),
+    exactAbsolute: sumAt(state, place.exactAbsolute), exactSquare: sumAt(state, place.exactSquare), at,
+    largest: state[place.largest] as number, exactLargest: state[place.exactLargest] as number,
+    min: state[place.min] as number, max: state[place.max] as number,
   };
 }

@@ -1,4 +1,5 @@
 import type { Turn } from './chunk-turns';
+import type { SharedMemory } from './table-memory';
 import type { ChunkResult } from './table-work';
 
 /** Another thread that reads chunks ahead. */
@@ -8,8 +9,10 @@ export interface ChunkHelper<Part> {
   close(): Promise<void>;
 }
 
-/** Starts a helper that sees the rooms. */
-export type OpenHelper<Part> = (rooms: readonly SharedArrayBuffer[]) => Promise<ChunkHelper<Part>>;
+/** The memory that a helper works in too, and where the rooms for chunks are in it. */
+export interface SharedRooms extends SharedMemory { rooms: readonly number[] }
+
+export type OpenHelper<Part> = (shared: SharedRooms) => Promise<ChunkHelper<Part>>;
 
 /** So many chunks wait for the helper at most; the next is read here meanwhile. */
 const mostAhead = 4;
@@ -25,7 +28,7 @@ export interface Helping<Part> {
 }
 
 /** Hands chunks to a helper, which is started for a large file only. */
-export function createHelping<Part>(rooms: readonly SharedArrayBuffer[], open: OpenHelper<Part> | undefined): Helping<Part> {
+export function createHelping<Part>(open: (() => Promise<ChunkHelper<Part>>) | undefined): Helping<Part> {
   let helper: ChunkHelper<Part> | null = null;
   let opening: Promise<void> | null = null;
   let chunks = 0;
@@ -42,7 +45,7 @@ export function createHelping<Part>(rooms: readonly SharedArrayBuffer[], open: O
     take(turn) {
       chunks += 1;
       if (chunks === chunksAlone && open !== undefined) {
-        opening = open(rooms).then((opened) => {
+        opening = open().then((opened) => {
           helper = opened;
         }, fail);
       }

@@ -3,7 +3,8 @@ import type { ReasonCollector } from '../reason-collector';
 import { delimiterCharacter } from './split-fields';
 import type { ColumnBatch } from '../source';
 import type { TableDialect } from './table-dialect';
-import { mostChunkBytes } from './table-chunks';
+import { roomBytes } from './table-chunks';
+import { createTableMemory, type TableMemory } from './table-memory';
 import { createTableRows } from './table-rows';
 
 const batchRows = 2048;
@@ -15,6 +16,8 @@ export interface ChunkReaderOptions {
   dialect: TableDialect;
   /** Indices of the columns to deliver, in that order, each once. */
   wanted: readonly number[];
+  /** Where rows are read; chunks that lie there already are not copied. */
+  memory?: TableMemory;
 }
 
 /** What went before a chunk, as far as its lines and numbers depend on it. */
@@ -40,12 +43,13 @@ export interface ChunkReader {
 }
 
 /** Turns lines of a text table into batches of columns; a row that is not plainly numbers is looked at again by explainRow. */
-export function createChunkReader({ dialect, wanted }: ChunkReaderOptions): ChunkReader {
+export function createChunkReader({ dialect, wanted, memory = createTableMemory() }: ChunkReaderOptions): ChunkReader {
   const allowComma = dialect.delimiter !== 'comma';
   const delimiter = dialect.delimiter === 'white space' ? 32 : delimiterCharacter[dialect.delimiter].charCodeAt(0);
   const width = dialect.header.length;
-  const table = createTableRows({ lineEnd: dialect.lineEnd, delimiter, allowComma, width, wanted, rows: batchRows, bytes: mostChunkBytes });
-  const { rows, columns, lines, input, inputAt } = table;
+  const { columns, lines, significantDigits } = createTableRows(memory, { lineEnd: dialect.lineEnd, delimiter, allowComma, width, wanted, rows: batchRows });
+  const rows = memory.code;
+  let ownRoom: number | null = null;
   const digits = wanted.map(() => 0);
   const given: DecimalMark | null = dialect.decimalMark === undefined ? null : { mark: dialect.decimalMark, line: 0 };
   const numberAt = (global: WebAssembly.Global) => global.value as number;
@@ -58,21 +62,28 @@ export function createChunkReader({ dialect, wanted }: ChunkReaderOptions): Chun
   /** Whether the row that stopped the reading is one after all. */
   const readStopped = (rules: RowRules): boolean => {
     rules.mark = readMark(rules.mark);
-    const start = numberAt(rows.rowStart) - inputAt;
-    const end = trimEnd(input, start, numberAt(rows.at) - inputAt - 1, dialect.delimiter === 'white space');
-    const isRow = explainRow(rules, { bytes: input, start, end, line: numberAt(rows.line) }, columns, numberAt(rows.row));
+    const start = numberAt(rows.rowStart);
+    const bytes = memory.bytes(start, numberAt(rows.at) - 1 - start);
+    const end = trimEnd(bytes, bytes.length, dialect.delimiter === 'white space');
+    const isRow = explainRow(rules, { bytes, start: 0, end, line: numberAt(rows.line) }, columns, numberAt(rows.row));
     if (rules.mark !== null) rows.fileMark.value = marks.indexOf(rules.mark.mark);
     return isRow;
   };
 
+  const copyIn = (bytes: Uint8Array): number => {
+    ownRoom ??= memory.take(roomBytes);
+    memory.bytes(ownRoom, bytes.length).set(bytes);
+    return ownRoom;
+  };
+
   return {
     read(bytes, start, reasons, onBatch) {
-      input.set(bytes);
+      const at = memory.addressOf(bytes) ?? copyIn(bytes);
       const known = start.mark ?? given;
-      rows.begin(inputAt, start.line, known === null ? 0 : marks.indexOf(known.mark));
+      rows.begin(at, start.line, known === null ? 0 : marks.indexOf(known.mark));
       const rules: RowRules = { delimiter: dialect.delimiter, width, wanted, allowComma, digits, mark: known, isMarkGiven: given !== null, reasons };
       for (;;) {
-        const state = rows.readRows(inputAt + bytes.length, start.skipped);
+        const state = rows.readRows(at + bytes.length, start.skipped);
         const row = numberAt(rows.row);
         if (state === stopped) {
           if (!readStopped(rules)) continue;
@@ -85,12 +96,12 @@ export function createChunkReader({ dialect, wanted }: ChunkReaderOptions): Chun
         rows.goOn(0);
       }
     },
-    significantDigits: () => table.significantDigits().map((most, slot) => Math.max(most, digits[slot] ?? 0)),
+    significantDigits: () => significantDigits().map((most, slot) => Math.max(most, digits[slot] ?? 0)),
   };
 }
 
 /** Leaves out white space at the end. A tab there may part an empty column, unless any white space parts columns. */
-function trimEnd(bytes: Buffer, start: number, end: number, isSpaced: boolean): number {
-  while (end > start && (bytes[end - 1] === 32 || bytes[end - 1] === 13 || (isSpaced && bytes[end - 1] === 9))) end -= 1;
+function trimEnd(bytes: Buffer, end: number, isSpaced: boolean): number {
+  while (end > 0 && (bytes[end - 1] === 32 || bytes[end - 1] === 13 || (isSpaced && bytes[end - 1] === 9))) end -= 1;
   return end;
 }

@@ -3,12 +3,15 @@ import { createChunkTurns, type Turn } from './chunk-turns';
 import type { GridChecks } from '../grid-checks';
 import { rejectAtOnce } from '../reason-collector';
 import { longestLine } from '../read-head';
-import { createChunkCutter, mostChunkBytes } from './table-chunks';
+import { createChunkCutter, roomBytes } from './table-chunks';
 import type { TableDialect } from './table-dialect';
+import type { TableMemory } from './table-memory';
 import type { ChunkWork } from './table-work';
 
 export interface ReadChunksOptions<Part> {
   dialect: TableDialect;
+  /** Where chunks are put. */
+  memory: TableMemory;
   work: ChunkWork<Part>;
   openHelper?: OpenHelper<Part>;
   checks: GridChecks;
@@ -24,9 +27,9 @@ const roomCount = 10;
  * significant digits per column.
  */
 export async function readChunks<Part>(pieces: AsyncIterable<Buffer>, options: ReadChunksOptions<Part>): Promise<number[]> {
-  const { dialect, work, openHelper, checks, onPart } = options;
-  const rooms = Array.from({ length: roomCount }, () => new SharedArrayBuffer(mostChunkBytes));
-  const views = rooms.map((room) => new Uint8Array(room));
+  const { dialect, memory, work, openHelper, checks, onPart } = options;
+  const rooms = Array.from({ length: roomCount }, () => memory.take(roomBytes));
+  const views = rooms.map((room) => memory.bytes(room, roomBytes));
   const free = rooms.map((_, room) => room);
   const turns = createChunkTurns<Part>({
     work, skipped: dialect.linesBefore,
@@ -35,7 +38,7 @@ export async function readChunks<Part>(pieces: AsyncIterable<Buffer>, options: R
       onPart(part);
     },
   });
-  const helping = createHelping(rooms, openHelper);
+  const helping = createHelping(openHelper && (() => openHelper({ ...memory.share(), rooms })));
 
   const untilHelped = async () => {
     await helping.answered();

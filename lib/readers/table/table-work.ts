@@ -4,6 +4,7 @@ import { prepareGathering, type GridTask } from '../gather-grid';
 import { createGridChecks, type GridChecks } from '../grid-checks';
 import { createChunkReader, type ChunkStart } from './read-chunk';
 import type { TableDialect } from './table-dialect';
+import type { TableMemory } from './table-memory';
 
 /** What is made of one chunk; lines are counted on from where it was said to begin. */
 export interface ChunkResult<Part> {
@@ -29,13 +30,13 @@ export interface TableTask {
   grid: GridTask;
 }
 
-/** Makes parts of norms of chunks; what is wrong with those read in their turn goes to `checks`. */
-export function createTableWork({ dialect, indices, grid }: TableTask, checks: GridChecks): ChunkWork<NormPart> {
+/** Makes parts of norms of chunks, in a memory; what is wrong with those read in their turn goes to `checks`. */
+export function createTableWork({ dialect, indices, grid }: TableTask, checks: GridChecks, memory: TableMemory): ChunkWork<NormPart> {
   // Two names may mean one column; it is read once.
   const wanted = [...new Set(indices)];
   const slots = indices.map((index) => wanted.indexOf(index));
-  const reader = createChunkReader({ dialect, wanted });
-  const gather = prepareGathering(grid);
+  const reader = createChunkReader({ dialect, wanted, memory });
+  const gather = prepareGathering(grid, memory.engine);
 
   const read = (bytes: Uint8Array, start: ChunkStart, into: GridChecks): ChunkResult<NormPart> => {
     const gatherer = gather(into);

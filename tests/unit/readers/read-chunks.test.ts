@@ -6,6 +6,7 @@ import { createGridChecks } from '@/lib/readers/grid-checks';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import { readGrid } from '@/lib/readers/read-grid';
 import { RejectedFile } from '@/lib/readers/rejected-file';
+import { createTableMemory } from '@/lib/readers/table/table-memory';
 import { createTableWork, type TableTask } from '@/lib/readers/table/table-work';
 import { byteSource } from '@/tests/support/byte-source';
 
@@ -30,12 +31,13 @@ function table(changes: Record<number, string> = {}): Buffer {
 
 /** Reads ahead in this thread, and answers late. */
 function lateHelper(reads: number[]): (task: TableTask) => OpenHelper<NormPart> {
-  return (task) => (rooms) => {
-    const work = createTableWork(task, createGridChecks(undefined));
+  return (task) => (shared) => {
+    const memory = createTableMemory(shared);
+    const work = createTableWork(task, createGridChecks(undefined), memory);
     return Promise.resolve({
       async readAhead(room, length) {
         reads.push(room);
-        const result = work.readAhead(new Uint8Array(rooms[room] as SharedArrayBuffer, 0, length));
+        const result = work.readAhead(memory.bytes(shared.rooms[room] as number, length));
         await new Promise((resolve) => setTimeout(resolve, (reads.length * 7) % 5));
         return structuredClone(result);
       },
