@@ -15,7 +15,8 @@ const copy = (from, to) => fs.cpSync(path.join(root, from), path.join(target, to
 await buildInto(target);
 const worker = path.join(target, 'worker');
 const imported = [...(await bundleWorker(worker)), ...(await bundleMigrations(worker))];
-copyModules(imported, worker);
+// h5wasm is imported by where it lies, which a bundler does not see.
+copyModules([...imported, 'h5wasm'], worker);
 copy('docker/image/make-bucket.mjs', 'worker/image/make-bucket.mjs');
 copy('docker/local/bucket.mjs', 'worker/local/bucket.mjs');
 copy('docker/image/health.mjs', 'worker/health.mjs');

@@ -1,5 +1,6 @@
 import type { ColumnFormat } from './column-format';
+import { hdf5Format } from './hdf5/hdf5-format';
 import { jsonFormat } from './json/json-format';
 import type { SourceFormat } from './source';
 
-export const columnFormats: Readonly<Record<Exclude<SourceFormat, 'table'>, ColumnFormat>> = { json: jsonFormat };
+export const columnFormats: Readonly<Record<Exclude<SourceFormat, 'table'>, ColumnFormat>> = { json: jsonFormat, hdf5: hdf5Format };

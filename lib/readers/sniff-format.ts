@@ -3,10 +3,11 @@ import type { Head } from './read-head';
 import { RejectedFile } from './rejected-file';
 import type { SourceFormat } from './source';
 
-const readable = 'a text table, or JSON with one array of numbers per column, with records, or in the HDF5/JSON layout';
+const readable = 'a text table, or JSON with one array of numbers per column, with records, or in the HDF5/JSON layout, or HDF5';
+
+const hdf5Signature = Buffer.from('\x89HDF\r\n\x1a\n', 'latin1');
 
 const signatures: readonly { bytes: string; name: string }[] = [
-  { bytes: '\x89HDF\r\n\x1a\n', name: 'HDF5' },
   { bytes: 'CDF\x01', name: 'netCDF' },
   { bytes: 'CDF\x02', name: 'netCDF' },
   { bytes: 'CDF\x05', name: 'netCDF' },
@@ -24,6 +25,7 @@ const signatures: readonly { bytes: string; name: string }[] = [
 
 /** Tells by the content what a file is. Throws RejectedFile for what is empty, binary or in a format that is not read. */
 export function sniffFormat(head: Head): SourceFormat {
+  if (isHdf5(head.bytes)) return 'hdf5';
   const text = head.bytes.toString('latin1', 0, 4096);
   const signature = signatures.find(({ bytes }) => text.startsWith(bytes));
   if (signature !== undefined) throw rejected('unsupported-format', signature.name);
@@ -33,6 +35,14 @@ export function sniffFormat(head: Head): SourceFormat {
   if (head.bytes.includes(0)) throw rejected('binary-content', 'null bytes');
   if (/^<(?:\?xml|VTKFile|!)/i.test(content)) throw rejected('unsupported-format', /<VTKFile/i.test(content) ? 'VTK XML' : 'XML or HTML');
   return content.startsWith('{') || content.startsWith('[') ? 'json' : 'table';
+}
+
+/** At the beginning, or behind a block of the user's own of 512 bytes, 1024 and so on (HDF5 file format specification, II.A). */
+function isHdf5(bytes: Buffer): boolean {
+  for (let at = 0; at + hdf5Signature.length <= bytes.length; at = at === 0 ? 512 : at * 2) {
+    if (bytes.subarray(at, at + hdf5Signature.length).equals(hdf5Signature)) return true;
+  }
+  return false;
 }
 
 function rejected(code: RejectionCode, found: string): RejectedFile {

@@ -3,7 +3,7 @@ import type { DecimalMarkName, Delimiter, GivenDialect } from '../domain/columns
 /** The bytes of a file as they are stored, compressed or not. */
 export type ByteSource = AsyncIterable<Uint8Array>;
 
-export type SourceFormat = 'table' | 'json';
+export type SourceFormat = 'table' | 'json' | 'hdf5';
 
 /** What the beginning of a file shows. A file without a header names its columns c1, c2 … */
 export interface SourcePreview {
