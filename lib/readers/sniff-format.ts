@@ -3,7 +3,7 @@ import type { Head } from './read-head';
 import { RejectedFile } from './rejected-file';
 import type { SourceFormat } from './source';
 
-const readable = 'a text table, or JSON with one array of numbers per column, with records, or in the HDF5/JSON layout, or HDF5';
+const readable = 'a text table, JSON with one array of numbers per column, with records, or in the HDF5/JSON layout, HDF5, or VTK XML of a grid';
 
 const hdf5Signature = Buffer.from('\x89HDF\r\n\x1a\n', 'latin1');
 
@@ -32,8 +32,10 @@ export function sniffFormat(head: Head): SourceFormat {
 
   const content = text.replace(/^\xef\xbb\xbf/, '').trimStart();
   if (content === '' && head.complete && head.bytes.toString('latin1').trim() === '') throw rejected('empty-file', `${head.bytes.length} bytes`);
+  // Appended data may be raw bytes.
+  if (/^(?:<\?xml\s[^>]*\?>)?\s*<VTKFile\s/.test(content.replaceAll(/<!--[^]*?-->/g, ''))) return 'vtk';
   if (head.bytes.includes(0)) throw rejected('binary-content', 'null bytes');
-  if (/^<(?:\?xml|VTKFile|!)/i.test(content)) throw rejected('unsupported-format', /<VTKFile/i.test(content) ? 'VTK XML' : 'XML or HTML');
+  if (/^<(?:\?xml|!)/i.test(content)) throw rejected('unsupported-format', 'XML or HTML');
   return content.startsWith('{') || content.startsWith('[') ? 'json' : 'table';
 }
 

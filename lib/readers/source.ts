@@ -3,13 +3,13 @@ import type { DecimalMarkName, Delimiter, GivenDialect } from '../domain/columns
 /** The bytes of a file as they are stored, compressed or not. */
 export type ByteSource = AsyncIterable<Uint8Array>;
 
-export type SourceFormat = 'table' | 'json' | 'hdf5';
+export type SourceFormat = 'table' | 'json' | 'hdf5' | 'vtk';
 
 /** What the beginning of a file shows. A file without a header names its columns c1, c2 … */
 export interface SourcePreview {
   format: SourceFormat;
   compressed: boolean;
-  /** Null for JSON. */
+  /** Null for all but tables. */
   delimiter: Delimiter | null;
   hasHeader: boolean;
   header: string[];

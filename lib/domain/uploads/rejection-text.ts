@@ -46,6 +46,14 @@ function describeCode(reason: RejectionReason): RejectionText {
       return text(`The stored bytes differ from the file that was sent: their SHA-256 is ${found}, that of the file ${expected}.`, 'Send the file again.');
     case 'malformed-json':
       return text(`${place}: found ${found} where the JSON should have ${expected}.`, 'Write the file with a JSON library, or as a text table.');
+    case 'malformed-vtk':
+      return text(`${place}: found ${found}; a VTK file should have ${expected}.`, 'Write the file with a VTK library, or as a text table. If it may have been cut off while it was copied, upload it again.');
+    case 'mixed-rows':
+      return text(`The columns cannot be read together: ${found}; expected ${expected}.`, 'Map columns of one kind. Volumes are those of cells: with columns of points, map a weight of points or state equal weights.');
+    case 'unsupported-cell':
+      return text(`The file has a ${found}; volumes and centres are computed for ${expected}.`, 'Write values at points, with weights of their own, or linear cells.');
+    case 'mixed-cells':
+      return text(`The file has a ${found}; expected ${expected}, since a length and an area do not add up.`, 'Leave out cells of the boundary, or map a weight of your own.');
     case 'line-too-long':
       return text(`${place}: ${found}.`, 'Write one row per line.');
     case 'too-many-values':

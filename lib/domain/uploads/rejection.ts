@@ -1,7 +1,7 @@
 import { z } from 'zod';
 
 export const rejectionCodes = [
-  'empty-file', 'unsupported-format', 'binary-content', 'damaged-gzip', 'damaged-file', 'expands-too-far', 'too-many-columns', 'too-much-computing', 'too-much-memory', 'malformed-json', 'line-too-long',
+  'empty-file', 'unsupported-format', 'binary-content', 'damaged-gzip', 'damaged-file', 'expands-too-far', 'too-many-columns', 'too-much-computing', 'too-much-memory', 'malformed-json', 'malformed-vtk', 'mixed-rows', 'unsupported-cell', 'mixed-cells', 'line-too-long',
   'too-many-values', 'column-missing', 'column-type', 'duplicate-column', 'too-few-rows', 'short-row', 'long-row', 'column-length',
   'missing-value', 'not-a-number', 'not-finite', 'mixed-decimal', 'weight-not-positive', 'exact-not-finite', 'time-differs', 'points-differ', 'checksum-differs',
 ] as const;

@@ -24,9 +24,11 @@ function tableOf({ format, delimiter, hasHeader, headerLine, decimalMark, given 
   };
 }
 
+const formatNames: Readonly<Record<SourcePreview['format'], string>> = { table: 'Text table', json: 'JSON', hdf5: 'HDF5', vtk: 'VTK XML' };
+
 function describeDialect(preview: SourcePreview): string {
   const table = tableOf(preview);
-  return `${table ? describeTable(table) : 'JSON, columns of arrays'}${preview.compressed ? ', gzip-compressed' : ''}`;
+  return `${table ? describeTable(table) : formatNames[preview.format]}${preview.compressed ? ', gzip-compressed' : ''}`;
 }
 
 /** What of the dialect is said by the call, null where it says nothing. */

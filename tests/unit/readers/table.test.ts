@@ -124,7 +124,7 @@ describe('a damaged text table', () => {
     ['a column twice', 'x,u,u\n0,1,2\n', 'duplicate-column'],
     ['text in UTF-16', Buffer.from('\uFEFFx,u\n0,1\n', 'utf16le'), 'unsupported-format'],
     ['the beginning of HDF5 alone', Buffer.from('\x89HDF\r\n\x1a\n....', 'latin1'), 'damaged-file'],
-    ['VTK XML', '<?xml version="1.0"?>\n<VTKFile type="UnstructuredGrid">', 'unsupported-format'],
+    ['other XML', '<?xml version="1.0"?>\n<grid type="UnstructuredGrid">', 'unsupported-format'],
     ['null bytes', Buffer.from([120, 0, 1, 2, 10]), 'binary-content'],
     ['a cut gzip file', gzipSync('x,u\n0,1\n1,2\n').subarray(0, 25), 'damaged-gzip'],
     ['a line without end', `x,u\n0,1\n${'1'.repeat(3_000_000)}`, 'line-too-long'],
