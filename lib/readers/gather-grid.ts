@@ -2,10 +2,12 @@ import type { ColumnEngine } from '../numerics/column-engine';
 import { createAverageEvaluator } from '../numerics/expression/average-evaluator';
 import { createBlockEvaluator } from '../numerics/expression/block-evaluator';
 import type { Node } from '../numerics/expression/node';
-import type { NormPart } from '../numerics/norms/norm-part';
-import { createNormGatherer, createNormRooms } from '../numerics/norms/norm-gatherer';
+import { createMapGatherer } from '../numerics/maps/map-gatherer';
+import type { MapRoom } from '../numerics/maps/map-room';
+import { prepareRegions } from '../numerics/regions/region-gatherer';
 import type { GridChecks } from './grid-checks';
 import type { GridReading } from './grid-reading';
+import type { GridPart } from './grid-total';
 import type { ColumnPlan } from './plan-columns';
 import { createRowProblems } from './row-problems';
 import type { ColumnBatch } from './source';
@@ -19,13 +21,17 @@ export interface GridTask {
   average?: GridReading['average'];
   /** The time of the grid, where the file has no column of times. */
   t?: number;
+  bands?: GridReading['bands'];
+  maps?: GridReading['maps'];
+  /** Where this thread gathers maps. */
+  mapRoom?: MapRoom;
 }
 
 /** Gathers some of the rows of a grid. */
 export interface GridGatherer {
   add(batch: ColumnBatch): void;
   /** What they come to; what is wrong with them goes to the checks. `indices` are the columns of the file, as planned. */
-  finish(indices: readonly number[]): NormPart;
+  finish(indices: readonly number[]): GridPart;
 }
 
 /**
@@ -33,13 +39,15 @@ export interface GridGatherer {
  * until the next one is asked for. Batches of columns in the memory of an engine are worked on there.
  */
 export function prepareGathering(
-  { plan, fields, exact, average, t: gridTime }: GridTask, engine: ColumnEngine | null = null,
+  { plan, fields, exact, average, t: gridTime, bands, maps, mapRoom }: GridTask, engine: ColumnEngine | null = null,
 ): (checks: GridChecks) => GridGatherer {
   const evaluate = average ? null : createBlockEvaluator(exact, undefined, engine);
   const evaluateAverage = average ? createAverageEvaluator(exact, average.points, engine) : null;
-  const rooms = createNormRooms(fields.length, engine);
+  const startRegions = prepareRegions(fields, bands, engine);
+  const gatherMaps = maps && mapRoom && createMapGatherer(maps, mapRoom);
+  const mapped = (maps?.fields ?? []).map((field) => fields.indexOf(field));
   return (checks) => {
-    const gatherer = createNormGatherer(fields, rooms);
+    const gatherer = startRegions();
     const rowProblems = createRowProblems();
     return {
       add({ rows, columns, lines }) {
@@ -53,15 +61,14 @@ export function prepareGathering(
         const known = evaluateAverage?.(rows, at, { x: size(0), y: size(1), z: size(2) }) ?? evaluate?.(rows, at) ?? [];
         const before = gatherer.rows();
         checks.times.note(t, { rows, before, lines });
-        gatherer.add({
-          rows, x, y, z, weights: pick(plan.weight),
-          fields: plan.fields.map((slot, index) => ({ values: columns[slot] as Float64Array, exact: known[index] as Float64Array })),
-        });
+        const compared = plan.fields.map((slot, index) => ({ values: columns[slot] as Float64Array, exact: known[index] as Float64Array }));
+        gatherer.add({ rows, x, y, z, weights: pick(plan.weight), fields: compared }, { distance: pick(plan.distance), flag: pick(plan.flag) });
+        gatherMaps?.({ rows, axes: [x, y, z].filter((axis) => axis !== null), fields: mapped.map((index) => compared[index] as (typeof compared)[number]) });
         rowProblems.note(gatherer.problems(), { before, lines, coordinates: { x, y, z } });
       },
       finish(indices) {
         for (const problem of gatherer.problems()) checks.values.add(rowProblems.explain(problem, plan, fields, indices), problem.count);
-        return gatherer.part();
+        return gatherer.parts();
       },
     };
   };

@@ -1,4 +1,6 @@
 import type { ReaderMapping } from '../domain/columns/column-mapping';
+import type { MapTask } from '../numerics/maps/error-map';
+import type { Bands } from '../numerics/regions/bands';
 
 export interface GridReading {
   mapping: ReaderMapping;
@@ -16,4 +18,8 @@ export interface GridReading {
   average?: { points: number; extents: readonly number[] | null };
   /** The time of the grid, where the file has no column of times. */
   t?: number;
+  /** Bands along the boundary, where norms of them and of what lies inside of each are asked for. */
+  bands?: Bands;
+  /** Which fields have maps of their errors. */
+  maps?: MapTask;
 }

@@ -11,10 +11,13 @@ export interface ColumnPlan {
   fields: number[];
   /** Columns of the size of the cell along x, y and z; none unless the file holds averages. */
   extents: number[];
+  /** Distance from the boundary and flag of rows that lie there; null unless a band needs them. */
+  distance: number | null;
+  flag: number | null;
 }
 
 /** Lays out what a grid needs of its file. Throws TypeError where the mapping leaves something needed without a column. */
-export function planColumns({ mapping, problem, fields, average }: GridReading): ColumnPlan {
+export function planColumns({ mapping, problem, fields, average, bands }: GridReading): ColumnPlan {
   const names: string[] = [];
   const place = (name: string): number => {
     const at = names.indexOf(name);
@@ -33,5 +36,7 @@ export function planColumns({ mapping, problem, fields, average }: GridReading):
     weight: mapping.weight === null ? null : place(mapping.weight),
     fields: fields.map(({ field }) => need(field, mapping.fields[field])),
     extents: average?.extents === null ? (['dx', 'dy', 'dz'] as const).slice(0, problem.dimension).map((name) => need(name, mapping[name])) : [],
+    distance: bands?.distance === 'column' ? need('distance', mapping.distance) : null,
+    flag: bands?.bands.some(({ test }) => test.by === 'flag') ? need('flag', mapping.flag) : null,
   };
 }

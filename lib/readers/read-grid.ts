@@ -1,12 +1,13 @@
 import { createHash } from 'node:crypto';
-import { createNormTotal, type NormTotal } from '../numerics/norms/combine-norms';
+import type { ErrorMap } from '../numerics/maps/error-map';
+import { createMapRoom } from '../numerics/maps/map-room';
 import type { GridNorms } from '../numerics/norms/grid-norms';
-import type { NormPart } from '../numerics/norms/norm-part';
 import type { OpenHelper } from './table/chunk-helping';
 import { compileExact } from './compile-exact';
 import { prepareGathering, type GridTask } from './gather-grid';
 import { createGridChecks, type GridChecks } from './grid-checks';
 import type { GridReading } from './grid-reading';
+import { createGridTotal, type GridPart, type GridTotal } from './grid-total';
 import { locateColumns } from './locate-columns';
 import { planColumns } from './plan-columns';
 import { readChunks } from './table/read-chunks';
@@ -19,6 +20,8 @@ import { createTableWork, type TableTask } from './table/table-work';
 
 export interface GridReadResult {
   norms: GridNorms;
+  /** None where none are asked for. */
+  maps: ErrorMap[];
   /** Of the bytes as stored, in lower-case hexadecimal. */
   sha256: string;
   bytes: number;
@@ -28,24 +31,24 @@ export interface GridReadOptions {
   onProgress?: (progress: ReadProgress) => void;
   signal?: AbortSignal;
   /** Starts a thread that helps with a large table; without it all is read in this one, to the same result. */
-  openHelper?: (task: TableTask) => OpenHelper<NormPart>;
+  openHelper?: (task: TableTask) => OpenHelper<GridPart>;
 }
 
 /** The columns of the file and their most significant digits, in the order of the plan. */
 interface ColumnsRead { indices: number[]; digits: (number | null)[] }
 
-interface Gathering { task: GridTask; checks: GridChecks; total: NormTotal; onPiece: () => void }
+interface Gathering { task: GridTask; checks: GridChecks; total: GridTotal; onPiece: () => void }
 
 /**
- * Reads one grid in one pass: hash, decompression, columns, exact solution, norms. Throws RejectedFile with every reason
+ * Reads one grid in one pass: hash, decompression, columns, exact solution, norms, and where asked for those of parts of the domain and maps. Throws RejectedFile with every reason
  * where the file cannot be taken. Expressions that do not compile and fields without a column are misuse and throw TypeError.
  */
 export async function readGrid(source: ByteSource, reading: GridReading, options: GridReadOptions = {}): Promise<GridReadResult> {
   const plan = planColumns(reading);
   const fields = reading.fields.map(({ field }) => field);
-  const task: GridTask = { plan, fields, exact: compileExact(reading), average: reading.average, t: reading.t };
+  const task: GridTask = { plan, fields, exact: compileExact(reading), average: reading.average, t: reading.t, bands: reading.bands, maps: reading.maps, mapRoom: reading.maps && createMapRoom(reading.maps) };
   const checks = createGridChecks(reading.t);
-  const total = createNormTotal(fields);
+  const total = createGridTotal(task);
   const hash = createHash('sha256');
   let bytes = 0;
   const onBytes = (chunk: Uint8Array) => {
@@ -64,9 +67,9 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
     checks.rows.add({ code: 'too-few-rows', line: null, column: null, found: 'no row of numbers', expected: 'at least 1 row' });
   }
   checks.throwIfAny(plan.t === null ? undefined : indices[plan.t]);
-  const norms = total.finish(plan.fields.map((slot) => digits[slot] ?? null));
-  if (norms === null) throw new Error('readGrid: rows without a problem have no norms');
-  return { norms, sha256: hash.digest('hex'), bytes };
+  const found = total.finish(plan.fields.map((slot) => digits[slot] ?? null));
+  if (found === null) throw new Error('readGrid: rows without a problem have no norms');
+  return { ...found, sha256: hash.digest('hex'), bytes };
 }
 
 async function readColumnsGrid(
@@ -90,7 +93,7 @@ async function readTableGrid(
   const memory = createTableMemory();
   const work = createTableWork(task, checks, memory);
   const digits = await readChunks(pieces, {
-    dialect, memory, work, checks, openHelper: openHelper?.(task),
+    dialect, memory, work, checks, openHelper: openHelper && ((shared) => openHelper({ ...task, grid: total.taskOfHelper() })(shared)),
     onPart(part) {
       total.add(part);
       onPiece();

@@ -1,5 +1,5 @@
 import { parentPort } from 'node:worker_threads';
-import type { NormPart } from '@/lib/numerics/norms/norm-part';
+import type { GridPart } from '@/lib/readers/grid-total';
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import { createTableMemory } from '@/lib/readers/table/table-memory';
 import { createTableWork, type ChunkWork } from '@/lib/readers/table/table-work';
@@ -8,7 +8,7 @@ import type { HelperAnswer, HelperMessage } from './table-helper';
 
 if (!parentPort) throw new Error('read-table-thread runs as a worker thread only.');
 const port = parentPort;
-let work: ChunkWork<NormPart> | null = null;
+let work: ChunkWork<GridPart> | null = null;
 let rooms: Uint8Array[] = [];
 
 function answer(message: HelperMessage): HelperAnswer {

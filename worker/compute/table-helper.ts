@@ -1,11 +1,11 @@
 import { Worker } from 'node:worker_threads';
-import type { NormPart } from '@/lib/numerics/norms/norm-part';
+import type { GridPart } from '@/lib/readers/grid-total';
 import type { ChunkHelper, OpenHelper, SharedRooms } from '@/lib/readers/table/chunk-helping';
 import type { ChunkResult, TableTask } from '@/lib/readers/table/table-work';
 
 /** What the helping thread is told: first the task, then chunk after chunk, each of which it answers in order. */
 export type HelperMessage = { task: TableTask; shared: SharedRooms } | { room: number; length: number };
-export type HelperAnswer = 'ready' | { result: ChunkResult<NormPart> | null } | { failed: string };
+export type HelperAnswer = 'ready' | { result: ChunkResult<GridPart> | null } | { failed: string };
 
 interface Waiting { resolve: (answer: HelperAnswer) => void; reject: (error: Error) => void }
 
@@ -16,7 +16,7 @@ function threadFile(): URL {
 }
 
 /** Starts a thread that reads chunks of a table for this one. */
-export function openTableHelper(task: TableTask): OpenHelper<NormPart> {
+export function openTableHelper(task: TableTask): OpenHelper<GridPart> {
   return async (shared) => {
     // It allocates little beside its columns.
     const thread = new Worker(threadFile(), { resourceLimits: { maxYoungGenerationSizeMb: 4 } });
@@ -39,7 +39,7 @@ export function openTableHelper(task: TableTask): OpenHelper<NormPart> {
     });
 
     await ask({ task, shared });
-    const helper: ChunkHelper<NormPart> = {
+    const helper: ChunkHelper<GridPart> = {
       async readAhead(room, length) {
         const answer = await ask({ room, length });
         if (answer === 'ready') throw new Error('The helping thread answered out of order.');

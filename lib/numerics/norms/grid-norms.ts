@@ -1,4 +1,4 @@
-import type { Position } from '../assessment';
+import type { Position, Region } from '../assessment';
 
 /** Norms of one field on one grid: e is the value of the file minus the exact one, each norm divided by the sum of weights. */
 export interface FieldNorms {
@@ -35,4 +35,8 @@ export interface GridNorms {
   gradients?: GradientNorms[];
   /** Where the problem has no exact solution; `fields` is empty then. */
   solutions?: SolutionNorms[];
+  /** The same of parts of the domain, each divided by its own sum of weights; a part without rows is left out. */
+  regions?: RegionNorms[];
 }
+
+export interface RegionNorms extends Omit<GridNorms, 'regions'> { region: Region }

@@ -3,7 +3,7 @@ import type { ColumnEngine } from '../column-engine';
 import type { FieldPart, NormPart, SumPart } from './norm-part';
 import { addErrors, addWeights, beginState, mostRows, place, stateLength, weightLength, weightPlace } from './run-sums';
 
-interface NormBlock {
+export interface NormBlock {
   rows: number;
   x: Float64Array;
   y: Float64Array | null;
@@ -12,6 +12,8 @@ interface NormBlock {
   weights: Float64Array | null;
   /** Per field, in the order of the names: the values of the file and the exact ones. */
   fields: readonly { values: Float64Array; exact: Float64Array }[];
+  /** Where the coordinates of each row stand, where weights and fields are copies of some of the rows. */
+  places?: Int32Array;
 }
 
 /** A value that no norm can be made of: how often, and the first row, counted from 0. */
@@ -83,7 +85,7 @@ export function createNormGatherer(fields: readonly string[], rooms = createNorm
         state[place.largestRow] = -1;
         if (engine?.addErrors(state, columns, block.rows) !== true) addErrors(state, columns, block.rows);
         const largestRow = state[place.largestRow] as number;
-        if (largestRow >= 0) positions[index] = positionAt(block, largestRow);
+        if (largestRow >= 0) positions[index] = positionAt(block, block.places?.[largestRow] ?? largestRow);
         if (state[place.isBad] === 0) continue;
         state[place.isBad] = 0;
         findBad(part, weights, block.rows, (code, i, value) => report(code, field, rows + i, value));

@@ -1,4 +1,4 @@
-import type { NormPart } from '../../numerics/norms/norm-part';
+import type { GridPart } from '../grid-total';
 import type { DecimalMark } from './explain-row';
 import { prepareGathering, type GridTask } from '../gather-grid';
 import { createGridChecks, type GridChecks } from '../grid-checks';
@@ -31,14 +31,14 @@ export interface TableTask {
 }
 
 /** Makes parts of norms of chunks, in a memory; what is wrong with those read in their turn goes to `checks`. */
-export function createTableWork({ dialect, indices, grid }: TableTask, checks: GridChecks, memory: TableMemory): ChunkWork<NormPart> {
+export function createTableWork({ dialect, indices, grid }: TableTask, checks: GridChecks, memory: TableMemory): ChunkWork<GridPart> {
   // Two names may mean one column; it is read once.
   const wanted = [...new Set(indices)];
   const slots = indices.map((index) => wanted.indexOf(index));
   const reader = createChunkReader({ dialect, wanted, memory });
   const gather = prepareGathering(grid, memory.engine);
 
-  const read = (bytes: Uint8Array, start: ChunkStart, into: GridChecks): ChunkResult<NormPart> => {
+  const read = (bytes: Uint8Array, start: ChunkStart, into: GridChecks): ChunkResult<GridPart> => {
     const gatherer = gather(into);
     const end = reader.read(bytes, start, into.rows, ({ rows, columns, lines }) => {
       gatherer.add({ rows, columns: slots.map((slot) => columns[slot] as Float64Array), lines });

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { gzipSync } from 'node:zlib';
-import type { NormPart } from '@/lib/numerics/norms/norm-part';
+import type { GridPart } from '@/lib/readers/grid-total';
 import type { OpenHelper } from '@/lib/readers/table/chunk-helping';
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import type { GridReading } from '@/lib/readers/grid-reading';
@@ -30,7 +30,7 @@ function table(changes: Record<number, string> = {}): Buffer {
 }
 
 /** Reads ahead in this thread, and answers late. */
-function lateHelper(reads: number[]): (task: TableTask) => OpenHelper<NormPart> {
+function lateHelper(reads: number[]): (task: TableTask) => OpenHelper<GridPart> {
   return (task) => (shared) => {
     const memory = createTableMemory(shared);
     const work = createTableWork(task, createGridChecks(undefined), memory);
@@ -46,7 +46,7 @@ function lateHelper(reads: number[]): (task: TableTask) => OpenHelper<NormPart> 
   };
 }
 
-async function reasonsOf(content: Buffer, openHelper?: (task: TableTask) => OpenHelper<NormPart>) {
+async function reasonsOf(content: Buffer, openHelper?: (task: TableTask) => OpenHelper<GridPart>) {
   try {
     await readGrid(byteSource(content, [1_000_000, 2_000_000]), reading, { openHelper });
     return [];

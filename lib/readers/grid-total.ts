@@ -1,0 +1,41 @@
+import { drawMaps } from '../numerics/maps/draw-maps';
+import type { ErrorMap } from '../numerics/maps/error-map';
+import { createMapRoom, type MapRoom } from '../numerics/maps/map-room';
+import type { GridNorms } from '../numerics/norms/grid-norms';
+import type { NormPart } from '../numerics/norms/norm-part';
+import { createRegionTotal } from '../numerics/regions/region-total';
+import type { GridTask } from './gather-grid';
+
+/** What some of the rows of a grid come to, by class of rows where parts of the domain are asked for (prepareRegions), else one. */
+export type GridPart = NormPart[];
+
+export interface GridTotal {
+  /** Parts in the order of the file. */
+  add: (part: GridPart) => void;
+  rows: () => number;
+  /** The task for another thread, which gathers its maps in a room of its own. */
+  taskOfHelper(): GridTask;
+  /** Null where there were no rows. */
+  finish(significantDigits: readonly (number | null)[]): { norms: GridNorms; maps: ErrorMap[] } | null;
+}
+
+/** Puts together what the rows of a grid come to. */
+export function createGridTotal(task: GridTask): GridTotal {
+  const { maps } = task;
+  const norms = createRegionTotal(task.fields, task.bands);
+  const rooms: MapRoom[] = task.mapRoom ? [task.mapRoom] : [];
+  return {
+    add: norms.add,
+    rows: norms.rows,
+    taskOfHelper() {
+      if (maps === undefined) return task;
+      const mapRoom = createMapRoom(maps);
+      rooms.push(mapRoom);
+      return { ...task, mapRoom };
+    },
+    finish(significantDigits) {
+      const found = norms.finish(significantDigits);
+      return found === null ? null : { norms: found, maps: maps ? drawMaps(maps, rooms, found.rows) : [] };
+    },
+  };
+}
