@@ -7,7 +7,7 @@ import { readGrid } from '@/lib/readers/read-grid';
 const folder = 'fixtures/solver-output';
 const sets = [
   'A1_poisson_p1_node', 'C1_tgv_grid', 'D1_laplace_orthogonal', 'D2_laplace_nonorth_corrected',
-  'D3_laplace_nonorth_uncorrected', 'F1_plateau', 'F2_source_bug',
+  'D3_laplace_nonorth_uncorrected', 'F1_plateau', 'F2_source_bug', 'G1_formats',
 ];
 
 interface Meta {
