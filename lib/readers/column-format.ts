@@ -11,8 +11,8 @@ export interface ColumnsAsked {
 }
 
 export interface ColumnsFound {
-  /** Of the columns asked for, in that order; significant digits are null where numbers are not printed in decimal. */
-  columns: { index: number; significantDigits: number | null }[];
+  /** Of the columns asked for, in that order; significant digits are null where numbers are not printed in decimal; single where they are stored as float32. */
+  columns: { index: number; significantDigits: number | null; isSingle?: boolean }[];
 }
 
 export type ColumnsPreview = Omit<SourcePreview, 'compressed' | 'format'>;

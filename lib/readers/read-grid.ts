@@ -35,7 +35,7 @@ export interface GridReadOptions {
 }
 
 /** The columns of the file and their most significant digits, in the order of the plan. */
-interface ColumnsRead { indices: number[]; digits: (number | null)[] }
+interface ColumnsRead { indices: number[]; digits: (number | null)[]; singles?: boolean[] }
 
 interface Gathering { task: GridTask; checks: GridChecks; total: GridTotal; onPiece: () => void }
 
@@ -58,7 +58,7 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   const onPiece = () => options.onProgress?.({ rows: total.rows(), bytes });
   const gathering: Gathering = { task, checks, total, onPiece };
 
-  const { indices, digits } = await readSource(source, {
+  const { indices, digits, singles } = await readSource(source, {
     table: (opened) => readTableGrid(opened, { ...gathering, given: reading.mapping.table, openHelper: options.openHelper }),
     columns: (reader, { pieces }) => readColumnsGrid(reader, pieces, gathering),
   }, { onBytes, signal: options.signal });
@@ -69,7 +69,12 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   checks.throwIfAny(plan.t === null ? undefined : indices[plan.t]);
   const found = total.finish(plan.fields.map((slot) => digits[slot] ?? null));
   if (found === null) throw new Error('readGrid: rows without a problem have no norms');
-  return { ...found, sha256: hash.digest('hex'), bytes };
+  return { ...found, norms: noteSingles(found.norms, plan.fields.map((slot) => singles?.[slot] === true)), sha256: hash.digest('hex'), bytes };
+}
+
+/** Marks the fields that the file stores as float32. */
+function noteSingles(norms: GridNorms, isSingle: readonly boolean[]): GridNorms {
+  return isSingle.some(Boolean) ? { ...norms, fields: norms.fields.map((field, at) => (isSingle[at] === true ? { ...field, storedAs: 'single' } : field)) } : norms;
 }
 
 async function readColumnsGrid(
@@ -79,7 +84,7 @@ async function readColumnsGrid(
   const { columns } = await reader.read(pieces, { wanted: task.plan.names, reasons: checks.rows, onBatch: (batch) => gatherer.add(batch), onPiece });
   const indices = columns.map(({ index }) => index);
   total.add(gatherer.finish(indices));
-  return { indices, digits: columns.map(({ significantDigits }) => significantDigits) };
+  return { indices, digits: columns.map(({ significantDigits }) => significantDigits), singles: columns.map(({ isSingle }) => isSingle === true) };
 }
 
 interface TableGathering extends Gathering { given: GridReading['mapping']['table']; openHelper: GridReadOptions['openHelper'] }

@@ -71,7 +71,7 @@ function fieldSeries({ definition, dimension, volume, differences }: Pick<StudyT
     derivedOrder: norm.derivedOrder ?? null, tolerance: norm.tolerance ?? null, counts: norm.counts,
     expectExact: norm.expectExact, exactLimit: norm.exactLimit ?? null,
     scale: largestOf([...columns.map((column) => column.exact.Linf), ...(compared?.scale ? [compared.scale] : []), ...(norm.reference === undefined ? [] : [norm.reference])]),
-    precision: placed.some(({ grid }) => grid.run?.precision === 'single') ? 'single' : 'double',
+    precision: placed.some(({ grid }) => grid.run?.precision === 'single') || columns.some(({ storedAs }) => storedAs === 'single') ? 'single' : 'double',
     minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
     samplingStated: definition.sampling !== undefined,
   }];
@@ -83,10 +83,10 @@ export function gridError({ grid, norms, h }: PlacedGrid, field: string, { norm,
   const column = norms?.fields.find((candidate) => candidate.field === field);
   if (norm === 'H1' || norm === 'energy') {
     const gradient = norms?.gradients?.find((candidate) => candidate.field === field);
-    const stored = gradient && { largest: gradient.maxAbs, significantDigits: gradient.significantDigits, precision: grid.run?.precision };
+    const stored = gradient && { largest: gradient.maxAbs, significantDigits: gradient.significantDigits, precision: gradient.storedAs ?? grid.run?.precision };
     if (stored) return { label: grid.label, h, error: gradient.H1, knownError: knownError(stored, iterativeError), exactNorm: gradient.exactH1, at: null };
   } else if (column) {
-    const stored = { largest: column.maxAbs, significantDigits, precision: grid.run?.precision };
+    const stored = { largest: column.maxAbs, significantDigits, precision: column.storedAs ?? grid.run?.precision };
     return {
       label: grid.label, h, error: column[norm], knownError: knownError(stored, iterativeError), exactNorm: column.exact[norm],
       at: norm === 'Linf' ? column.at : null,

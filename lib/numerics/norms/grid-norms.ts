@@ -17,12 +17,14 @@ export interface FieldNorms {
   count: number;
   /** Most significant digits seen in the column, null where the source does not print digits. */
   significantDigits: number | null;
+  /** Where the source stores the column as float32; absent where it does not, or does not say. */
+  storedAs?: 'single';
   /** What was taken out of the field before its norms: the constant of q − q_exact, or the factor q was multiplied by. */
   datum?: { kind: 'mean' | 'scale'; value: number };
 }
 
 /** The H1 seminorm of the error, √(Σw|∇q − ∇q_exact|²/Σw), from columns of the gradient. */
-export interface GradientNorms { field: string; H1: number; exactH1: number; maxAbs: number; significantDigits: number | null }
+export interface GradientNorms { field: string; H1: number; exactH1: number; maxAbs: number; significantDigits: number | null; storedAs?: 'single' }
 
 /** Of a field without an exact solution: norms of the field itself. */
 export type SolutionNorms = Pick<FieldNorms, 'field' | 'L1' | 'L2' | 'Linf' | 'min' | 'max' | 'maxAbs' | 'count' | 'significantDigits'>;

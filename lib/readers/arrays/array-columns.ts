@@ -1,7 +1,7 @@
 import { refuseManyColumns } from '../column-limit';
 
 /** One number of an element: '' of a plain number, `.name` of a compound's member, `[0]` of an array's. Not read where `problem` says what it is. */
-export interface ElementMember { suffix: string; problem: string | null }
+export interface ElementMember { suffix: string; problem: string | null; isSingle?: boolean }
 
 /** An array of a file that holds arrays by path. */
 export interface NamedArray {

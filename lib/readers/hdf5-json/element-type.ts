@@ -18,10 +18,10 @@ export function readElementType(type: SmallValue | undefined, committed: Readonl
   const name = textOf(type);
   if (name !== null) {
     if (name.startsWith('datatypes/')) return readElementType(memberOf(committed.get(name.slice('datatypes/'.length)), 'type'), committed, depth + 1);
-    return numbers.test(name) ? [{ suffix: '', problem: null }] : unread(`the type ${name}`);
+    return numbers.test(name) ? number(name) : unread(`the type ${name}`);
   }
   const kind = textOf(memberOf(type, 'class'));
-  if (kind === 'H5T_INTEGER' || kind === 'H5T_FLOAT') return [{ suffix: '', problem: null }];
+  if (kind === 'H5T_INTEGER' || kind === 'H5T_FLOAT') return number(textOf(memberOf(type, 'base')));
   if (kind === 'H5T_COMPOUND') {
     return listOf(memberOf(type, 'fields')).flatMap((field) => {
       const suffix = `.${textOf(memberOf(field, 'name')) ?? ''}`;
@@ -39,6 +39,8 @@ export function readElementType(type: SmallValue | undefined, committed: Readonl
   return unread(kind === null ? 'values without a type' : (words[kind] ?? `the type ${kind}`));
 }
 
+const number = (base: string | null): ElementMember[] => [{ suffix: '', problem: null, isSingle: base?.startsWith('H5T_IEEE_F32') === true }];
+
 function within(prefix: string, members: readonly ElementMember[]): ElementMember[] {
-  return members.map(({ suffix, problem }) => ({ suffix: `${prefix}${suffix}`, problem }));
+  return members.map((member) => ({ ...member, suffix: `${prefix}${member.suffix}` }));
 }

@@ -47,7 +47,7 @@ export function readArrays(arrays: readonly Hdf5Array[], { wanted, reasons, onBa
     onBatch({ rows: count, columns: batch, lines: null });
     onPiece();
   }
-  return { columns: found.map((column, slot) => ({ index: indices[slot] ?? 0, significantDigits: arrays[column.array]?.values?.digits() ?? null })) };
+  return { columns: found.map((column, slot) => ({ index: indices[slot] ?? 0, significantDigits: arrays[column.array]?.values?.digits() ?? null, isSingle: arrays[column.array]?.members[column.member]?.isSingle })) };
 }
 
 function gather(arrays: readonly Hdf5Array[], found: readonly ArrayColumn[], indices: readonly number[]): WantedArray[] {

@@ -41,7 +41,7 @@ export function layOutElement(type: Metadata): PlacedMember[] {
   return leaves.map(({ suffix, offset, type: leaf }) => {
     const decode = decoderOf(leaf, leaf.littleEndian || isTurned);
     const bits = `${leaf.size * 8}-bit ${leaf.type === floatClass ? 'floating-point numbers' : 'integers'}`;
-    return { suffix, offset, decode: decode ?? (() => NaN), problem: decode ? null : (words[leaf.type] ?? bits) };
+    return { suffix, offset, decode: decode ?? (() => NaN), isSingle: leaf.type === floatClass && leaf.size === 4, problem: decode ? null : (words[leaf.type] ?? bits) };
   });
 }
 

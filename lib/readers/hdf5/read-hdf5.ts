@@ -42,8 +42,10 @@ function readFrom(file: Hdf5File, stored: TemporaryFile, { wanted, reasons, onBa
   const rows = found[0]?.rows ?? 0;
   if (gathered.reduce((sum, { array }) => sum + slabBytes(array), 0) > mostHeld) readInTurn(file, gathered, { rows, slots: found.length, onBatch, onPiece });
   else readTogether(file, gathered, { rows, slots: found.length, onBatch, onPiece });
-  return { columns: indices.map((index) => ({ index, significantDigits: null })) };
+  return { columns: indices.map((index, slot) => ({ index, significantDigits: null, isSingle: memberOf(arrays, found[slot])?.isSingle })) };
 }
+
+const memberOf = (arrays: readonly StoredArray[], column: ArrayColumn | undefined) => (column && arrays[column.array]?.members[column.member]);
 
 interface Delivery { rows: number; slots: number; onBatch: ColumnsAsked['onBatch']; onPiece: () => void }
 

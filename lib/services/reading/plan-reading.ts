@@ -102,6 +102,7 @@ export function joinNorms(definition: CaseDefinition, first: GridNorms, { second
     return parts.length === 0 ? [] : [{
       field, H1: Math.hypot(...parts.map(({ L2 }) => L2)), exactH1: Math.hypot(...parts.map(({ exact }) => exact.L2)),
       maxAbs: Math.max(...parts.map(({ maxAbs }) => maxAbs)), significantDigits: parts.reduce<number | null>((most, { significantDigits }) => (significantDigits === null ? most : Math.max(most ?? 0, significantDigits)), null),
+      ...(parts.some(({ storedAs }) => storedAs === 'single') && { storedAs: 'single' as const }),
     }];
   });
   return { ...first, fields, ...(gradients.length > 0 && { gradients }) };

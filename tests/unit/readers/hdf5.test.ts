@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { gzipSync } from 'node:zlib';
 import { describe, expect, it } from 'vitest';
+import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';
 import { byteSource } from '@/tests/support/byte-source';
 import { writeHdf5 } from '@/tests/support/hdf5';
@@ -10,6 +11,14 @@ const doubles = (count: number, of: (i: number) => number = Math.sin) => Float64
 const xu = [{ path: 'mesh/x', data: Float64Array.of(0, 1, 2) }, { path: 'fields/u', data: Float64Array.of(1.5, -2e-3, 0) }];
 
 describe('native HDF5', () => {
+  it('says of a field that it is stored in single precision', async () => {
+    const bytes = await writeHdf5([{ path: 'x', data: doubles(4) }, { path: 'u', data: Float32Array.of(1, 2, 3, 4) }, { path: 'v', data: doubles(4) }]);
+    const { norms } = await readGrid(byteSource(bytes), {
+      mapping: { x: 'x', weight: null, fields: { u: 'u', v: 'v' } }, problem: { dimension: 1, exact: { u: 'x', v: 'x' }, constants: {} }, fields: [{ field: 'u' }, { field: 'v' }],
+    });
+    expect(norms.fields.map(({ storedAs, significantDigits }) => [storedAs, significantDigits])).toEqual([['single', null], [undefined, null]]);
+  });
+
   it('is read by path, also packed and behind a block of the user', async () => {
     const bytes = await writeHdf5(xu);
     for (const content of [bytes, gzipSync(bytes), Buffer.concat([Buffer.alloc(512), bytes]), Buffer.concat([Buffer.from('# note\n'.padEnd(2048, '.')), bytes])]) {

@@ -46,6 +46,13 @@ describe('studySeries', () => {
     expect(errors[0]?.grids.find(({ label }) => label === 'a')?.knownError).toBe(0.5 * 2 ** (3 - 23));
   });
 
+  it('takes half a unit of float32 where the file stores the column so', () => {
+    const { grid, norms } = read({ label: 'a', cells: 16 }, 3);
+    if (!norms) throw new Error('norms were made');
+    const { errors } = made([{ grid, norms: { ...norms, fields: norms.fields.map((field) => ({ ...field, significantDigits: null, storedAs: 'single' as const })) } }]);
+    expect(errors[0]).toMatchObject({ precision: 'single', grids: [{ knownError: 0.5 * 2 ** (3 - 23) }] });
+  });
+
   it('has the largest exact value or the stated reference for scale, none where errors are typed', () => {
     const { errors } = made([read({ label: 'a', cells: 16 })]);
     expect(errors.map(({ scale }) => scale)).toEqual([4, 9, 2]);
