@@ -27,6 +27,6 @@ export default tseslint.config(
       eqeqeq: 'error',
     },
   },
-  { files: ['docker/**', 'fixtures/**', 'worker/commands/**', 'db/migrate.ts', 'tests/bench/**'], rules: { 'no-console': 'off' } },
+  { files: ['docker/**', 'fixtures/**', 'worker/commands/**', 'db/migrate.ts', 'tests/bench/**', 'tests/fuzz/**'], rules: { 'no-console': 'off' } },
   { files: ['tests/**'], rules: { 'max-lines': ['error', { max: 500, ...counted }] } },
 );

@@ -1,7 +1,7 @@
 import type { RejectionCode, RejectionReason } from '../domain/uploads/rejection';
 import { RejectedFile } from './rejected-file';
 
-const mostKinds = 200;
+const mostKinds = 20;
 const longestFound = 60;
 
 export interface FoundProblem {

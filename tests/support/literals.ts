@@ -1,9 +1,8 @@
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import { createChunkReader } from '@/lib/readers/table/read-chunk';
 import type { TableDialect } from '@/lib/readers/table/table-dialect';
-import { seeded, type Random } from './random';
+import { seeded, upTo, type Random } from './random';
 
-const upTo = (random: Random, most: number) => Math.floor(random() * (most + 1));
 const digits = (random: Random, count: number) => Array.from({ length: count }, () => upTo(random, 9)).join('');
 
 function anyDouble(random: Random): number {

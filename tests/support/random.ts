@@ -10,3 +10,7 @@ export function seeded(seed: number): Random {
     return (state >>> 0) / 2 ** 32;
   };
 }
+
+/** A whole number from 0 to `most`. */
+export const upTo = (random: Random, most: number): number => Math.floor(random() * (most + 1));
+export const oneOf = <T>(random: Random, values: readonly T[]): T => values[upTo(random, values.length - 1)] as T;
