@@ -1,7 +1,6 @@
-import type { RejectionCode, RejectionReason } from '../domain/uploads/rejection';
+import { mostReasons, type RejectionCode, type RejectionReason } from '../domain/uploads/rejection';
 import { RejectedFile } from './rejected-file';
 
-const mostKinds = 20;
 const longestFound = 60;
 
 export interface FoundProblem {
@@ -29,7 +28,7 @@ export function createReasonCollector(): ReasonCollector {
       const kind = code === 'mixed-decimal' ? code : `${code} ${column}`;
       const known = reasons.get(kind);
       if (known !== undefined) known.count += count;
-      else if (reasons.size < mostKinds) reasons.set(kind, { code, count, line, column, found: found === null ? null : shorten(found), expected });
+      else if (reasons.size < mostReasons) reasons.set(kind, { code, count, line, column, found: found === null ? null : shorten(found), expected });
     },
     isEmpty: () => reasons.size === 0,
     list: () => [...reasons.values()],

@@ -1,10 +1,10 @@
+import { mostReasons } from '@/lib/domain/uploads/rejection';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import { byteSource } from '@/tests/support/byte-source';
 
-const mostReasons = 20;
 const lastPart = (name: string) => name.slice(Math.max(name.lastIndexOf('/'), name.lastIndexOf('.')) + 1);
 
 /** Columns of the names that seeds have, or the first ones: a file is read as far as can be. */

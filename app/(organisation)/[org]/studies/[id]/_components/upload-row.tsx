@@ -4,6 +4,7 @@ import { useState } from 'react';
 import { Cell, ReasonRow, RowHead } from '@/app/_components/tables/cells';
 import { Row } from '@/app/_components/tables/table';
 import { TextButton } from '@/app/_components/ui/text-link';
+import { mostReasons } from '@/lib/domain/uploads/rejection';
 import { describeRejection } from '@/lib/domain/uploads/rejection-text';
 import { formatBytes } from '@/lib/domain/numbers/format-bytes';
 import type { Grid, GridState, Study } from '@/lib/domain/studies/schema';
@@ -87,6 +88,7 @@ export function UploadRow({ study, grid, transfer, reading, uploader, sender, ma
               const { sentence, nextStep } = describeRejection(reason);
               return <li key={`${reason.code} ${reason.line} ${reason.column}`}><span className="text-ink">{sentence}</span> {nextStep}</li>;
             })}
+            {reasons.length >= mostReasons && <li>These are the first {mostReasons} kinds of faults; there may be more.</li>}
           </ul>
         </ReasonRow>
       )}
