@@ -2,7 +2,7 @@ import { createHelping, type OpenHelper } from './chunk-helping';
 import { createChunkTurns, type Turn } from './chunk-turns';
 import type { GridChecks } from '../grid-checks';
 import { rejectAtOnce } from '../reason-collector';
-import { longestLine } from '../read-head';
+import { lineTooLong } from './line-too-long';
 import { createChunkCutter, roomBytes } from './table-chunks';
 import type { TableDialect } from './table-dialect';
 import type { TableMemory } from './table-memory';
@@ -64,9 +64,7 @@ export async function readChunks<Part>(pieces: AsyncIterable<Buffer>, options: R
     await helping.close();
   }
   if (cutter.isLineTooLong()) {
-    rejectAtOnce(checks.rows, {
-      code: 'line-too-long', line: turns.line() + 1, column: null, found: `more than ${longestLine} bytes in one line`, expected: 'lines of at most 1 MiB',
-    });
+    rejectAtOnce(checks.rows, lineTooLong(turns.line() + 1));
   }
   return turns.digits();
 }

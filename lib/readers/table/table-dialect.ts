@@ -2,6 +2,7 @@ import { refuseManyColumns } from '../column-limit';
 import { parseNumber, type NumberReading } from '../parse-number';
 import type { Head } from '../read-head';
 import { RejectedFile } from '../rejected-file';
+import { lineTooLong } from './line-too-long';
 import { splitFields, splitNames } from './split-fields';
 import type { DecimalMarkName, Delimiter, GivenDialect } from '../../domain/columns/given-dialect';
 
@@ -75,8 +76,11 @@ export function findDecimalMark(rows: readonly (readonly string[])[]): DecimalMa
 
 function readFirstLines(head: Head, lineEnd: 10 | 13): { content: NumberedLine[]; lastComment: NumberedLine | null } {
   const lines = head.bytes.toString('utf8').replace(/^\uFEFF/, '').split(lineEnd === 10 ? '\n' : '\r');
-  // The last line of an incomplete head may be cut.
-  if (!head.complete && lines.length > 1) lines.pop();
+  if (!head.complete) {
+    // The last line of a head may be cut; one without any other is longer than all that is read.
+    lines.pop();
+    if (lines.length === 0) throw new RejectedFile([lineTooLong(1)]);
+  }
   const content: NumberedLine[] = [];
   let lastComment: NumberedLine | null = null;
   for (const [index, text] of lines.entries()) {
