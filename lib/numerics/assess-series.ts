@@ -1,4 +1,5 @@
 import type { ErrorSeries, QuantitySeries, SeriesAssessment, SpaceTimeSeries } from './assessment';
+import type { Similarity } from './mesh/judge-similarity';
 import { judgeErrorSeries } from './outcome/judge-error-series';
 import { judgeQuantity } from './outcome/judge-quantity';
 import { studyOutcome } from './outcome/study-outcome';
@@ -11,6 +12,8 @@ interface SeriesToAssess {
   quantities: readonly QuantitySeries[];
   /** Instead of the others, for a matrix of grids and time steps. */
   spaceTime?: readonly SpaceTimeSeries[];
+  /** How alike the grids are refined, where that is known: a pass on grids that are not becomes inconclusive. */
+  similarity?: Similarity | null;
   /** What is known beside the norms and may explain their orders. */
   around?: Surroundings;
 }
@@ -27,9 +30,11 @@ export function assessSeries(input: SeriesToAssess): SeriesAssessment {
   if (input.spaceTime) {
     return { outcome: null, reasons: ['no-target'], fields: [], quantities: [], spaceTime: input.spaceTime.map(assessSpaceTime), patterns: [], numericsVersion };
   }
-  const fields = input.errors.map((series) => judgeErrorSeries({ ...series, grids: finestFirst(series.grids) }));
-  const quantities = input.quantities.map((series) => judgeQuantity({ ...series, grids: finestFirst(series.grids) }));
-  return { ...studyOutcome(fields, quantities), fields, quantities, patterns: suggestPatterns(fields.filter((field) => field.comparedTo === undefined), input.around), numericsVersion };
+  const { similarity } = input;
+  const alike = similarity && !similarity.isSimilar ? { dissimilar: similarity.pairs } : {};
+  const fields = input.errors.map((series) => judgeErrorSeries({ ...series, ...alike, grids: finestFirst(series.grids) }));
+  const quantities = input.quantities.map((series) => judgeQuantity({ ...series, ...alike, grids: finestFirst(series.grids) }));
+  return { ...studyOutcome(fields, quantities), fields, quantities, ...(similarity && { similarity }), patterns: suggestPatterns(fields.filter((field) => field.comparedTo === undefined), input.around), numericsVersion };
 }
 
 function finestFirst<Grid extends { h: number }>(grids: readonly Grid[]): Grid[] {

@@ -1,3 +1,5 @@
+import type { PairSimilarity, Similarity } from './mesh/judge-similarity';
+
 /** The shapes that an assessment is computed from and answered in. Grids run from the finest to the coarsest. */
 
 export const norms = ['L1', 'L2', 'Linf', 'H1', 'energy'] as const;
@@ -46,6 +48,8 @@ export interface ErrorSeries {
   minimumGrids: number;
   /** False where a formal order of 3 or more is claimed and nobody said where values live. */
   samplingStated: boolean;
+  /** The pairs of grids that are not refined alike, which no pass stands on. */
+  dissimilar?: readonly PairSimilarity[];
 }
 
 export const procedures = ['three-grid', 'guarded-order', 'least-squares', 'correction-factor'] as const;
@@ -69,6 +73,7 @@ export interface QuantitySeries {
   /** Largest acceptable GCI as a fraction. */
   target: number | null;
   minimumGrids: number;
+  dissimilar?: readonly PairSimilarity[];
 }
 
 export interface FieldGrid {
@@ -93,6 +98,8 @@ export interface FieldAssessment {
   grids: FieldGrid[]; orders: PairOrder[]; fit: OrderFit | null;
   /** Null where there is no formal order to judge by. */
   outcome: Outcome | null; reasons: ReasonCode[];
+  /** Only with the reason `not-similar`. */
+  dissimilar?: PairSimilarity[];
 }
 
 export type Convergence = 'monotone' | 'oscillatory' | 'divergent' | 'oscillatory-divergent' | 'unchanged';
@@ -132,6 +139,8 @@ export interface QuantityAssessment {
   uNum?: number | null;
   triples: Triple[];
   outcome: Outcome | null; reasons: ReasonCode[];
+  /** Only with the reason `not-similar`. */
+  dissimilar?: PairSimilarity[];
 }
 
 /** Errors over a matrix of grids and time steps; of a value with a known one they keep their sign. */
@@ -163,6 +172,8 @@ export interface SeriesAssessment {
   fields: FieldAssessment[]; quantities: QuantityAssessment[];
   /** Of a study refined in space and time together, which has no outcome. */
   spaceTime?: SpaceTimeAssessment[];
+  /** How alike the two finest pairs of grids are refined, where that is known. */
+  similarity?: Similarity;
   /** Hints, never an outcome. */
   patterns: Pattern[];
   numericsVersion: string;

@@ -4,6 +4,7 @@ import { createBlockEvaluator } from '../numerics/expression/block-evaluator';
 import type { Node } from '../numerics/expression/node';
 import { createMapGatherer } from '../numerics/maps/map-gatherer';
 import type { MapRoom } from '../numerics/maps/map-room';
+import { createMeshGatherer } from '../numerics/mesh/mesh-gatherer';
 import { prepareRegions } from '../numerics/regions/region-gatherer';
 import type { GridChecks } from './grid-checks';
 import type { GridReading } from './grid-reading';
@@ -19,6 +20,7 @@ export interface GridTask {
   /** The exact value of every field. */
   exact: Node[];
   average?: GridReading['average'];
+  mesh?: GridReading['mesh'];
   /** The time of the grid, where the file has no column of times. */
   t?: number;
   bands?: GridReading['bands'];
@@ -39,13 +41,14 @@ export interface GridGatherer {
  * until the next one is asked for. Batches of columns in the memory of an engine are worked on there.
  */
 export function prepareGathering(
-  { plan, fields, exact, average, t: gridTime, bands, maps, mapRoom }: GridTask, engine: ColumnEngine | null = null,
+  { plan, fields, exact, average, mesh, t: gridTime, bands, maps, mapRoom }: GridTask, engine: ColumnEngine | null = null,
 ): (checks: GridChecks) => GridGatherer {
   const evaluate = average ? null : createBlockEvaluator(exact, undefined, engine);
   const evaluateAverage = average ? createAverageEvaluator(exact, average.points, engine) : null;
   const startRegions = prepareRegions(fields, bands, engine);
   const gatherMaps = maps && mapRoom && createMapGatherer(maps, mapRoom);
   const mapped = (maps?.fields ?? []).map((field) => fields.indexOf(field));
+  const survey = mesh ? createMeshGatherer([plan.x, plan.y, plan.z].filter((slot) => slot !== null).length) : null;
   return (checks) => {
     const gatherer = startRegions();
     const rowProblems = createRowProblems();
@@ -62,13 +65,15 @@ export function prepareGathering(
         const before = gatherer.rows();
         checks.times.note(t, { rows, before, lines });
         const compared = plan.fields.map((slot, index) => ({ values: columns[slot] as Float64Array, exact: known[index] as Float64Array }));
+        const axes = [x, y, z].filter((axis) => axis !== null);
         gatherer.add({ rows, x, y, z, weights: pick(plan.weight), fields: compared }, { distance: pick(plan.distance), flag: pick(plan.flag) });
-        gatherMaps?.({ rows, axes: [x, y, z].filter((axis) => axis !== null), fields: mapped.map((index) => compared[index] as (typeof compared)[number]) });
+        gatherMaps?.({ rows, axes, fields: mapped.map((index) => compared[index] as (typeof compared)[number]) });
+        survey?.add({ rows, coordinates: axes, times: t, weights: mesh?.sizes ? pick(plan.weight) : null, extents: plan.extents.map((slot) => columns[slot] as Float64Array) });
         rowProblems.note(gatherer.problems(), { before, lines, coordinates: { x, y, z } });
       },
       finish(indices) {
         for (const problem of gatherer.problems()) checks.values.add(rowProblems.explain(problem, plan, fields, indices), problem.count);
-        return gatherer.parts();
+        return { norms: gatherer.parts(), mesh: survey?.takePart() ?? null };
       },
     };
   };

@@ -16,6 +16,8 @@ export interface GridReading {
    * along each direction where no columns dx, dy, dz hold it.
    */
   average?: { points: number; extents: readonly number[] | null };
+  /** Whether to look at the mesh too: at coordinates that repeat, and at the sizes of cells where weights are such. */
+  mesh?: { sizes: boolean };
   /** The time of the grid, where the file has no column of times. */
   t?: number;
   /** Bands along the boundary, where norms of them and of what lies inside of each are asked for. */

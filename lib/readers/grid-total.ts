@@ -1,13 +1,20 @@
 import { drawMaps } from '../numerics/maps/draw-maps';
 import type { ErrorMap } from '../numerics/maps/error-map';
 import { createMapRoom, type MapRoom } from '../numerics/maps/map-room';
+import type { MeshPart } from '../numerics/mesh/mesh-part';
+import { createMeshTotal } from '../numerics/mesh/mesh-total';
 import type { GridNorms } from '../numerics/norms/grid-norms';
 import type { NormPart } from '../numerics/norms/norm-part';
 import { createRegionTotal } from '../numerics/regions/region-total';
 import type { GridTask } from './gather-grid';
 
-/** What some of the rows of a grid come to, by class of rows where parts of the domain are asked for (prepareRegions), else one. */
-export type GridPart = NormPart[];
+/** What some of the rows of a grid come to. */
+export interface GridPart {
+  /** By class of rows where parts of the domain are asked for (prepareRegions), else one. */
+  norms: NormPart[];
+  /** Null where the mesh is not asked for. */
+  mesh: MeshPart | null;
+}
 
 export interface GridTotal {
   /** Parts in the order of the file. */
@@ -23,9 +30,14 @@ export interface GridTotal {
 export function createGridTotal(task: GridTask): GridTotal {
   const { maps } = task;
   const norms = createRegionTotal(task.fields, task.bands);
+  const mesh = createMeshTotal();
   const rooms: MapRoom[] = task.mapRoom ? [task.mapRoom] : [];
   return {
-    add: norms.add,
+    add(part) {
+      const before = norms.rows();
+      norms.add(part.norms);
+      if (part.mesh) mesh.add(part.mesh, norms.rows() - before);
+    },
     rows: norms.rows,
     taskOfHelper() {
       if (maps === undefined) return task;
@@ -35,7 +47,8 @@ export function createGridTotal(task: GridTask): GridTotal {
     },
     finish(significantDigits) {
       const found = norms.finish(significantDigits);
-      return found === null ? null : { norms: found, maps: maps ? drawMaps(maps, rooms, found.rows) : [] };
+      const survey = mesh.finish();
+      return found === null ? null : { norms: { ...found, ...(survey && { mesh: survey }) }, maps: maps ? drawMaps(maps, rooms, found.rows) : [] };
     },
   };
 }

@@ -49,7 +49,7 @@ describe('PUT /api/v1/studies/{id}/grids/{label}/data', () => {
     }
     const { outcome, assessment } = await awaitOutcome(engineer, study.id);
     expect(outcome).toBe('pass');
-    expect(assessment.inputs.find(({ label }) => label === 'n8')).toEqual({ label: 'n8', sha256: sha256(heatTable(8)), bytes: heatTable(8).length, rows: 64, weightSum: expect.closeTo(1, 12) as number });
+    expect(assessment.inputs.find(({ label }) => label === 'n8')).toEqual({ label: 'n8', sha256: sha256(heatTable(8)), bytes: heatTable(8).length, rows: 64, weightSum: expect.closeTo(1, 12) as number, mesh: { low: [1 / 16, 1 / 16], high: [15 / 16, 15 / 16], duplicates: { rows: 0, oneIn: 1 } } });
     const result = await ok(engineer, getGridResultContract, { params: { id: study.id, label: 'n8' } });
     expect(result).toMatchObject({ rows: 64, equalWeights: false, mapping: { x: 'x', y: 'y', weight: 'w', fields: { T: 'T' } } });
     expect(result.weightSum).toBeCloseTo(1, 12);

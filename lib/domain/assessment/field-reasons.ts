@@ -2,6 +2,7 @@ import { aitkenLimit } from '@/lib/numerics/outcome/aitken-limit';
 import type { FieldAssessment, FieldGrid, ReasonCode } from '@/lib/numerics/assessment';
 import { formatOrder } from '../numbers/format-order';
 import { formatValue } from '../numbers/format-value';
+import { describeDissimilar } from './describe-similarity';
 import type { Explanation } from './explanation';
 import { explainTooFewGrids } from './explain-too-few-grids';
 import { shownUncertainty, type FieldFacts } from './field-facts';
@@ -79,8 +80,8 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
     sentence: `${capitalise(claimed)} is declared${last === '–' ? '' : ` and the finest pair shows ${last}`}, but nobody said where the values live: cell averages differ from point values at second order.`,
     nextStep: 'State in the case whether the values are point values, cell averages or at quadrature points.',
   }),
-  'not-similar': ({ last, before, band }) => ({
-    sentence: `The last two pairs show orders ${before} and ${last} against a band of ${band}, but the grids are not refined alike everywhere.`,
+  'not-similar': ({ last, before, band }, { dissimilar }) => ({
+    sentence: `The last two pairs show orders ${before} and ${last} against a band of ${band}, but the grids are not refined alike everywhere${dissimilar ? `: ${describeDissimilar(dissimilar)}` : ''}.`,
     nextStep: 'Refine every direction and region by the same ratio and run the grids again.',
   }),
   'no-target': ({ name, last }) => ({

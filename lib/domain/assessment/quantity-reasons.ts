@@ -4,6 +4,7 @@ import { formatMeasure } from '../numbers/format-measure';
 import { formatOrder } from '../numbers/format-order';
 import { formatPercent } from '../numbers/format-percent';
 import { formatRatio } from '../numbers/format-ratio';
+import { describeDissimilar } from './describe-similarity';
 import type { Explanation } from './explanation';
 import { gciWithFormalOrder } from './gci-with-formal-order';
 import { estimatedBand, printBand } from './estimated-band';
@@ -56,6 +57,10 @@ export const quantityReasons: Partial<Record<ReasonCode, QuantityText>> = {
       nextStep: 'Add a grid, finer than the finest by a ratio of 1.3 or more.',
     };
   },
+  'not-similar': (quantity) => ({
+    sentence: `The ${estimatedBand(quantity).name} of the finest grid is ${percent(estimatedBand(quantity).fraction)}, within the target of ${percent(quantity.target)}, but the grids are not refined alike everywhere: ${describeDissimilar(quantity.dissimilar ?? [])}.`,
+    nextStep: 'Refine every direction and region by the same ratio and run the grids again.',
+  }),
   'no-target': (quantity) => explainNoTarget(quantity),
 };
 

@@ -1,4 +1,5 @@
 import type { ErrorSeries, Norm, QuantitySeries, SpaceTimeSeries } from '@/lib/numerics/assessment';
+import type { Similarity } from '@/lib/numerics/mesh/judge-similarity';
 import type { GridNorms } from '@/lib/numerics/norms/grid-norms';
 import { knownError } from '@/lib/numerics/norms/known-error';
 import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
@@ -8,6 +9,7 @@ import type { GridDifference } from './compared-grids';
 import { differencesOf } from './difference-series';
 import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
 import { builtInRule } from '../rules/built-in-rule';
+import { refinedSpace, studySimilarity } from './mesh-of-study';
 import type { GridInput } from '../studies/input';
 import { statedSpacing } from '../studies/stated-spacing';
 
@@ -27,11 +29,12 @@ export interface StudyToAssess {
   differences?: readonly GridDifference[];
 }
 
-export type StudySeries = { ok: true; errors: ErrorSeries[]; quantities: QuantitySeries[]; spaceTime?: SpaceTimeSeries[]; around?: Surroundings } | { ok: false; reason: string };
+export type StudySeries = { ok: true; errors: ErrorSeries[]; quantities: QuantitySeries[]; spaceTime?: SpaceTimeSeries[]; similarity?: Similarity | null; around?: Surroundings } | { ok: false; reason: string };
 
 /** Series of every declared field and norm and of every quantity; or in words why the grids cannot be put in a row. */
 export function studySeries({ definition, grids, differences = [], ...around }: StudyToAssess): StudySeries {
-  const spacing = resolveSpacing({ grids: grids.map(({ grid, norms }) => statedSpacing(grid, norms)), ...around });
+  const { thin, ...space } = refinedSpace(grids, around);
+  const spacing = resolveSpacing({ grids: grids.map(({ grid, norms }) => statedSpacing(grid, norms, thin)), refinement: around.refinement, ...space });
   if (!spacing.ok) {
     const told = spacing.problems.map(({ label, found, expected }) => `${label === null ? 'The grids' : `Grid ${label}`}: ${found}; expected ${expected}.`);
     return { ok: false, reason: told.join(' ') };
@@ -51,6 +54,7 @@ export function studySeries({ definition, grids, differences = [], ...around }: 
         minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
       })),
     ],
+    similarity: around.refinement === 'space' ? studySimilarity(definition, placed, around) : null,
     around: { box: around.box, means: placed.flatMap(({ grid, norms }) => (norms?.fields ?? []).map(({ field, mean }) => ({ field, label: grid.label, mean }))) },
     quantities: unknown.map((quantity) => quantitySeries(quantity, placed, definition.minimumGrids ?? builtInRule.minimumGridsOfQuantity)),
   };

@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { contract } from '../api/contract';
 import { listOf, listQuerySchema } from '../api/lists';
 import { timestampSchema } from '../api/names';
-import { assessmentSchema, outcomeSchema, reasonCodeSchema } from '../assessment/schema';
+import { assessmentSchema, meshSchema, outcomeSchema, reasonCodeSchema } from '../assessment/schema';
 import { caseDefinitionSchema, caseKindSchema } from '../cases/definition';
 import { columnMappingSchema } from '../columns/column-mapping';
 import { dimensionSchema, problemDefinitionSchema } from '../problems/schema';
@@ -94,6 +94,7 @@ const gridResultSchema = z.strictObject({
     field: z.string(), L1: z.number(), L2: z.number(), Linf: z.number(), minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().nullable(),
   })).optional().meta({ description: 'Norms of the fields themselves, where the problem has no exact solution.' }),
   gradients: z.array(z.strictObject({ field: z.string(), H1: z.number(), exactH1: z.number() })).meta({ description: 'H1 seminorms, of fields with columns of their gradient.' }),
+  mesh: meshSchema.optional(),
   numericsVersion: z.string(),
 });
 export type GridResult = z.infer<typeof gridResultSchema>;

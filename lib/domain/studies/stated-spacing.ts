@@ -6,15 +6,16 @@ interface FileSums { rows: number; weightSum: number; equalWeights: boolean }
 
 /**
  * What tells the spacing of a grid: what its author stated, and the sums of its file where its weights are sizes. Cells
- * along several directions count by their geometric mean.
+ * along several directions count by their geometric mean, without those named as one cell thick on all grids.
  */
-export function statedSpacing(grid: GridStatement, file: FileSums | null = null): StatedSpacing {
+export function statedSpacing(grid: GridStatement, file: FileSums | null = null, thin: readonly number[] = []): StatedSpacing {
   const { label, h, cells, dt } = grid;
   const weighted = file !== null && !file.equalWeights;
-  return { label, h, cells, dt, cellsPerDirection: meanCount(grid.cellsPerDirection), rows: file?.rows, weightSum: weighted ? file.weightSum : undefined };
+  return { label, h, cells, dt, cellsPerDirection: meanCount(grid.cellsPerDirection, thin), rows: file?.rows, weightSum: weighted ? file.weightSum : undefined };
 }
 
-function meanCount(counts: number | number[] | undefined): number | undefined {
-  if (counts === undefined || typeof counts === 'number') return counts;
+function meanCount(stated: number | number[] | undefined, thin: readonly number[]): number | undefined {
+  if (stated === undefined || typeof stated === 'number') return stated;
+  const counts = stated.filter((_, axis) => !thin.includes(axis));
   return counts.reduce((product, count) => product * count, 1) ** (1 / counts.length);
 }

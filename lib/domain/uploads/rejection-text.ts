@@ -82,7 +82,7 @@ function describeCode(reason: RejectionReason): RejectionText {
     case 'mixed-decimal':
       return text(`${place}: found “${found}”; expected ${expected}. With both marks in one file a number can be read in two ways.`, 'Write all numbers with one decimal mark, or say in the columns of the case which it is.');
     case 'weight-not-positive':
-      return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights.');
+      return text(`${place}: the weight is ${found}; expected ${expected}.`, 'Map the column that holds cell volumes or quadrature weights, or state equal weights. Lumped weights of quadratic elements, made of row sums, are zero or negative at some nodes: write rows at quadrature points instead.');
     case 'time-differs':
       return text(`${place}: the time is ${found}; expected ${expected}.`, 'Correct the time of the grid, or upload the file that was written at it.');
     case 'points-differ':

@@ -1,4 +1,5 @@
 import type { Position, Region } from '../assessment';
+import type { MeshSurvey } from '../mesh/mesh-part';
 
 /** Norms of one field on one grid: e is the value of the file minus the exact one, each norm divided by the sum of weights. */
 export interface FieldNorms {
@@ -39,6 +40,8 @@ export interface GridNorms {
   solutions?: SolutionNorms[];
   /** The same of parts of the domain, each divided by its own sum of weights; a part without rows is left out. */
   regions?: RegionNorms[];
+  /** Absent where it was not asked for, or read before it was kept. */
+  mesh?: MeshSurvey;
 }
 
-export interface RegionNorms extends Omit<GridNorms, 'regions'> { region: Region }
+export interface RegionNorms extends Omit<GridNorms, 'regions' | 'mesh'> { region: Region }

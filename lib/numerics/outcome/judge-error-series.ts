@@ -17,7 +17,8 @@ interface Verdict { outcome: Outcome | null; reason: ReasonCode }
 /**
  * Judges one field and norm by its errors over grids, the finest first: exactness, the floor, too few grids, then the
  * observed orders against the formal one (orderRule), of the errors without their logarithm where they have one. A declared
- * derived order replaces the formal one in every step; the regularity may lower it.
+ * derived order replaces the formal one in every step; the regularity may lower it. A pass on grids that are not refined
+ * alike is inconclusive.
  *
  * Norms of differences of consecutive solutions (`comparedTo`) are judged as errors are; their orders take three grids each.
  *
@@ -32,10 +33,10 @@ export function judgeErrorSeries(series: ErrorSeries): FieldAssessment {
   const grids = dropFloor(series).map((grid) => withoutLogarithm(grid, series.logFactor));
   const used = grids.filter((grid) => grid.used).map(asJudged);
   const orders = pairOrders(used, series.comparedTo);
-  const { outcome, reason } = judgeExactness(series, judgedBy) ?? judgeOrders(series, { used, orders, judgedBy, tolerance });
+  const { outcome, reason } = judgeExactness(series, judgedBy) ?? onSimilarGrids(series, judgeOrders(series, { used, orders, judgedBy, tolerance }));
   return {
     field: series.field, norm: series.norm, region: series.region ?? 'all', formalOrder, ...limited,
-    ...(series.logFactor && { logFactor: series.logFactor.power }), derivedOrder: series.derivedOrder, tolerance, counts: series.counts, grids, orders, fit: leastSquaresOrder(used), ...(series.comparedTo && { comparedTo: series.comparedTo, fit: null }), ...(isPart(series) ? { outcome: null, reasons: [] } : { outcome, reasons: [reason] }),
+    ...(series.logFactor && { logFactor: series.logFactor.power }), derivedOrder: series.derivedOrder, tolerance, counts: series.counts, grids, orders, fit: leastSquaresOrder(used), ...(series.comparedTo && { comparedTo: series.comparedTo, fit: null }), ...(isPart(series) ? { outcome: null, reasons: [] } : { outcome, reasons: [reason], ...(reason === 'not-similar' && { dissimilar: [...(series.dissimilar ?? [])] }) }),
   };
 }
 
@@ -80,6 +81,11 @@ function judgeOrders(series: ErrorSeries, { used, orders, judgedBy, tolerance }:
   const pairs = orders.flatMap(({ order, uncertainty }) => (order === null || uncertainty === null ? [] : { order, uncertainty })).reverse();
   if (errors.includes(0)) return { outcome: 'inconclusive', reason: 'scatter' };
   return orderRule({ pairs, errors }, judgedBy, tolerance);
+}
+
+/** Orders that pass on grids not refined alike may do so by chance; those that fail do not fail by that. */
+function onSimilarGrids({ dissimilar }: ErrorSeries, verdict: Verdict): Verdict {
+  return dissimilar && verdict.outcome === 'pass' ? { outcome: 'inconclusive', reason: 'not-similar' } : verdict;
 }
 
 function checkSeries({ field, norm, grids, comparedTo }: ErrorSeries): void {

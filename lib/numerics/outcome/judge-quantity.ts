@@ -18,6 +18,7 @@ export function judgeQuantity(series: QuantitySeries): QuantityAssessment {
   const { grids, triples, areApart } = quantityTriples(series);
   const [last] = triples;
   const { orderObserved = last?.order ?? null, ...figures } = procedureFigures(series.procedure, { all: series.grids, grids, last, formalOrder: series.formalOrder });
+  const verdict = quantityRule(series, { grids, triples, areApart, band: figures.gci ?? figures.uncertaintyFraction });
   return {
     name: series.name, unit: series.unit, formalOrder: series.formalOrder, target: series.target,
     values: series.grids.map(({ label, h, value }) => ({ label, h, value })),
@@ -29,7 +30,7 @@ export function judgeQuantity(series: QuantitySeries): QuantityAssessment {
     triples: triples.map((triple): Triple => ({
       grids: triple.grids.map((grid) => grid.label), order: triple.order, convergence: triple.convergence,
     })),
-    ...quantityRule(series, { grids, triples, areApart, band: figures.gci ?? figures.uncertaintyFraction }),
+    ...verdict, ...(verdict.reasons.includes('not-similar') && { dissimilar: [...(series.dissimilar ?? [])] }),
   };
 }
 

@@ -14,7 +14,7 @@ const changesPerValue = 10;
  * under the target; misses it where the same holds but for the last; otherwise inconclusive. Null with `no-target` without a
  * formal order or a target.
  *
- * A value near zero (|φ1| < 10|ε21|) has no meaningful GCI in percent and is not held against one: inconclusive.
+ * On grids that are not refined alike no target is met: inconclusive. A value near zero (|φ1| < 10|ε21|) has no meaningful GCI in percent and is not held against one: inconclusive.
  */
 export function quantityRule(series: QuantitySeries, { grids, triples, areApart, band }: Observed): Verdict {
   const { formalOrder, target } = series;
@@ -29,6 +29,7 @@ export function quantityRule(series: QuantitySeries, { grids, triples, areApart,
   if (lastTwo.some(({ order }) => order === null || Math.abs(order - formalOrder) > tolerance)) return inconclusive('order-off-formal');
   const [last] = lastTwo;
   if (!last || band === null || Math.abs(last.grids[0].value) < changesPerValue * Math.abs(last.differences.e21)) return inconclusive('no-target');
+  if (band <= target && series.dissimilar) return inconclusive('not-similar');
   return band <= target ? { outcome: 'meets-target', reasons: ['within-target'] } : { outcome: 'misses-target', reasons: ['above-target'] };
 }
 

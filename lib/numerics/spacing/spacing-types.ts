@@ -28,4 +28,4 @@ export interface SpacingProblem {
 }
 
 /** What wants a look but stops nothing. */
-export interface SpacingNote { code: 'rows-differ-from-cells' | 'weights-differ'; label: string; found: number; expected: number }
+export interface SpacingNote { code: 'rows-differ-from-cells' | 'weights-differ' | 'weights-differ-from-volume'; label: string; found: number; expected: number }

@@ -11,6 +11,7 @@ import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import { refinementSchema } from '@/lib/domain/studies/input';
 import { assessSeries } from '@/lib/numerics/assess-series';
 import { numericsVersion } from '@/lib/numerics/version';
+import { meshFacts } from '../studies/mesh-facts';
 import { definitionOf, normsOf } from '../studies/grid-definition';
 import { hashInputs } from './hash-inputs';
 
@@ -51,7 +52,7 @@ export function computeAssessment(loaded: LoadedInputs, differences: readonly Gr
     if (!series.ok) return series;
     const inputs = used.flatMap((row) => {
       const norms = normsOf(row);
-      return norms ? [{ label: row.label, sha256: row.sha256 ?? '', bytes: Number(row.bytes ?? 0), rows: norms.rows, weightSum: norms.equalWeights ? null : norms.weightSum }] : [];
+      return norms ? [{ label: row.label, sha256: row.sha256 ?? '', bytes: Number(row.bytes ?? 0), rows: norms.rows, weightSum: norms.equalWeights ? null : norms.weightSum, ...(norms.mesh && { mesh: meshFacts(norms.mesh) }) }] : [];
     });
     return { ok: true, assessment: { ...assessSeries(series), inputs, inputsSha256: inputsSha256(loaded) } };
   } catch (error) {

@@ -33,6 +33,7 @@ export function planReading({ definition, problem, mapping, t, cellsPerDirection
     gradient.forEach((column, at) => add(derivativeName(field, axes[at] ?? 'x'), column, derivativeName(field, axes[at] ?? 'x')));
   }
   return { mapping: { ...mapping, fields: columns }, problem: { dimension, exact, constants }, fields, t,
+    mesh: { sizes: mapping.weight !== null && definition.sampling !== 'quadrature' },
     ...(definition.sampling === 'average' && { average: { points: averagingPoints(definition), extents: uniformExtents(problem, mapping, cellsPerDirection) } }),
   };
 }
@@ -77,7 +78,7 @@ export function planSecondReading(reading: GridReading, definition: CaseDefiniti
     if (value === undefined) return [];
     return [{ field, compare: datum === 'mean' ? `(${compare}) + (${value})` : `(${compare}) / (${value})` }];
   });
-  return { ...reading, fields };
+  return { ...reading, fields, mesh: undefined };
 }
 
 function datumOf(definition: CaseDefinition, field: string): DeclaredField['datum'] {

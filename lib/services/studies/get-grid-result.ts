@@ -5,6 +5,7 @@ import type { MemberContext } from '../context';
 import { permit } from '../permit';
 import { withOrganisation } from '../with-organisation';
 import { normsOf } from './grid-definition';
+import { meshFacts } from './mesh-facts';
 import { requireGrid } from './require-grid';
 import { requireStudy } from './require-study';
 
@@ -22,6 +23,7 @@ export async function getGridResult(ctx: MemberContext, key: { id: string; label
     })),
     ...(norms.solutions && { solutions: norms.solutions.map(({ field, L1, L2, Linf, min, max, count, significantDigits }) => ({ field, L1, L2, Linf, minimum: min, maximum: max, count, significantDigits })) }),
     gradients: (norms.gradients ?? []).map(({ field, H1, exactH1 }) => ({ field, H1, exactH1 })),
+    ...(norms.mesh && { mesh: meshFacts(norms.mesh) }),
     numericsVersion: row.numerics_version ?? '',
   };
 }

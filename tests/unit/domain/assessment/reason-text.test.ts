@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { explainStudy } from '@/lib/domain/assessment/explain-study';
 import { explainField, explainQuantity } from '@/lib/domain/assessment/reason-text';
+import { formatPercent } from '@/lib/domain/numbers/format-percent';
 import { assessSeries } from '@/lib/numerics/assess-series';
 import { reasonCodes, type ErrorSeries, type FieldAssessment, type QuantityAssessment, type ReasonCode } from '@/lib/numerics/assessment';
 import { judgeErrorSeries } from '@/lib/numerics/outcome/judge-error-series';
@@ -38,6 +39,25 @@ describe('every reason code', () => {
   it('of the other kind throws, naming it', () => {
     expect(() => explainField({ ...field, reasons: ['within-target'] })).toThrow('reason of a field must be one that fields have, got within-target');
     expect(() => explainQuantity({ ...quantity, reasons: ['in-band'] })).toThrow('reason of a quantity must be one that quantities have, got in-band');
+  });
+});
+
+describe('not-similar', () => {
+  const dissimilar = [
+    { coarse: 'g2', fine: 'g1', low: 1, median: 1.4142, high: 2, isAlike: false }, { coarse: 'g3', fine: 'g2', low: null, median: null, high: null, directions: [2, 1], isAlike: false },
+  ];
+  it('gives the pairs with their figures, of a field and of a quantity', () => {
+    const errors = errorSeries([1, 0.5, 0.25, 0.125], [1, 0.25, 0.0625, 0.015625], { dissimilar });
+    const values = quantitySeries([1, 2, 4], [100.25, 101, 104], { formalOrder: 2, target: 0.01, dissimilar });
+    const told = 'but the grids are not refined alike everywhere: from g2 to g1 cells shrink by 1.00 to 2.00 (5 and 95 % of the domain, median 1.41); from g3 to g2 cells shrink by 2.00 along x and 1.00 along y.';
+    expect(judgeErrorSeries(errors)).toMatchObject({ outcome: 'inconclusive', reasons: ['not-similar'], dissimilar });
+    expect(explainField(judgeErrorSeries(errors))[0]?.sentence).toBe(`The last two pairs show orders 2.00 and 2.00 against a band of 1.90 to 2.20, ${told}`);
+    expect(judgeQuantity(values)).toMatchObject({ outcome: 'inconclusive', reasons: ['not-similar'] });
+    expect(explainQuantity(judgeQuantity(values))[0]?.sentence).toContain(`within the target of ${formatPercent(0.01)}, ${told}`);
+  });
+  it('leaves a fail and a missed target as they are', () => {
+    expect(judgeErrorSeries(errorSeries([1, 0.5, 0.25, 0.125], [1, 0.5, 0.25, 0.125], { dissimilar }))).toMatchObject({ outcome: 'fail', reasons: ['below-formal'] });
+    expect(judgeQuantity(quantitySeries([1, 2, 4], [10.25, 11, 14], { formalOrder: 2, target: 0.01, dissimilar })).outcome).toBe('misses-target');
   });
 });
 

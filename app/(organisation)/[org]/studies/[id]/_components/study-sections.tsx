@@ -8,10 +8,12 @@ import { PageTitle } from '@/app/_components/ui/page-title';
 import { Section } from '@/app/_components/ui/section';
 import { procedureNames, procedureSources } from '@/lib/domain/assessment/explain-procedure';
 import { explainPattern } from '@/lib/domain/assessment/explain-pattern';
+import { explainSimilarity } from '@/lib/domain/assessment/describe-similarity';
 import { explainSpacing } from '@/lib/domain/assessment/explain-spacing';
 import type { Assessment } from '@/lib/domain/assessment/schema';
 import { explainTimeSteps } from '@/lib/domain/assessment/explain-time-steps';
 import { formatOrder } from '@/lib/domain/numbers/format-order';
+import { domainVolume } from '@/lib/domain/problems/domain-volume';
 import type { Study } from '@/lib/domain/studies/schema';
 import { solutionFields } from '@/lib/domain/cases/solution-fields';
 import { takesFiles } from '@/lib/domain/studies/takes-files';
@@ -160,8 +162,13 @@ function steppedGrids({ grids }: Study, { fields, quantities }: Assessment): { h
   });
 }
 
+function meshNotes({ grids, dimension, problemDefinition }: Study, { inputs, similarity }: Assessment): string[] {
+  const around = { dimension, volume: domainVolume(problemDefinition, dimension), box: problemDefinition.domain };
+  return [...explainSpacing(grids, inputs, around), ...explainSimilarity(similarity)];
+}
+
 function GridNotes({ study, assessment }: { study: Study; assessment: Assessment }) {
-  const notes = study.refinement === 'time' ? [] : explainSpacing(study.grids, assessment.inputs, study.dimension);
+  const notes = study.refinement === 'time' ? [] : meshNotes(study, assessment);
   const steps = study.refinement === 'space' ? explainTimeSteps(steppedGrids(study, assessment)) : null;
   return (
     <>
