@@ -49,7 +49,7 @@ export function expectedValues({ section, name, components }: ArrayName, { point
     case 'PointData': return points * components;
     case 'CellData': return cells * components;
     case 'Points': return points * 3;
-    case 'Cells': return name === 'connectivity' || name === 'faces' ? null : cells;
+    case 'Cells': return cells > 0 && (name === 'connectivity' || name === 'faces') ? null : cells;
     case 'Coordinates': return extent === null ? null : lengthAlong(extent, ['x', 'y', 'z'].indexOf(name));
     case 'FieldData': return null;
   }
