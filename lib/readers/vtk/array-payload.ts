@@ -19,6 +19,8 @@ export interface ArrayPayload {
   /** Rejects where something is missing. */
   end(): void;
   isDone(): boolean;
+  /** Bytes that came after its end. */
+  surplus(): number;
   drop(): void;
 }
 
@@ -59,6 +61,7 @@ function plainPayload(form: PayloadForm, onBytes: (bytes: Uint8Array) => void, f
   const lengths = createLengthReader(form);
   let length = -1;
   let taken = 0;
+  let surplus = 0;
   return {
     push(bytes) {
       let at = 0;
@@ -66,8 +69,9 @@ function plainPayload(form: PayloadForm, onBytes: (bytes: Uint8Array) => void, f
         at = lengths.take(bytes, 0);
         length = lengths.value() ?? -1;
       }
-      const some = Math.min(bytes.length - at, length - taken);
-      if (some <= 0) return;
+      const some = length < 0 ? 0 : Math.min(bytes.length - at, length - taken);
+      surplus += bytes.length - at - some;
+      if (some === 0) return;
       onBytes(bytes.subarray(at, at + some));
       taken += some;
     },
@@ -76,6 +80,7 @@ function plainPayload(form: PayloadForm, onBytes: (bytes: Uint8Array) => void, f
       if (taken < length) fail(`the end after ${taken} bytes`, `${length} bytes`);
     },
     isDone: () => taken === length,
+    surplus: () => surplus,
     drop: () => undefined,
   };
 }
@@ -86,6 +91,7 @@ function packedPayload(form: PayloadForm, onBytes: (bytes: Uint8Array) => void, 
   let block = 0;
   let left = 0;
   let out = 0;
+  let surplus = 0;
   let inflater: BlockInflater | null = null;
   const [blocks, whole, last] = [() => header[0] ?? 0, () => header[1] ?? 0, () => header[2] ?? 0];
   const isHeaderRead = () => header.length >= 3 && header.length === 3 + blocks();
@@ -148,12 +154,14 @@ function packedPayload(form: PayloadForm, onBytes: (bytes: Uint8Array) => void, 
         left -= some;
         if (left === 0) await finish(inflater);
       }
+      surplus += bytes.length - at;
     },
     end() {
       if (!isHeaderRead()) fail('the end', 'the lengths of its blocks');
       if (!isDone()) fail(`the end in block ${block + 1}`, `${blocks()} blocks`);
     },
     isDone,
+    surplus: () => surplus,
     drop: () => inflater?.drop(),
   };
 }

@@ -1,5 +1,5 @@
 import { parseNumber, type NumberReading } from '../parse-number';
-import { createArrayPayload, type Fail, type PayloadForm } from './array-payload';
+import { createArrayPayload, type ArrayPayload, type Fail, type PayloadForm } from './array-payload';
 import { createBase64Decoder } from './base64-bytes';
 import { createValueReader } from './value-reader';
 import type { ValueType } from './value-type';
@@ -37,13 +37,15 @@ export function createTextReader(target: ArrayTarget): ArrayReader {
   let carry: Buffer = Buffer.alloc(0);
   let line = 1;
 
+  const refuseWord = () => target.fail(`a word of more than ${longestWord} characters`, 'numbers between blanks');
   const take = (bytes: Buffer, from: number, to: number, lineAt: LineAt) => {
+    if (to - from > longestWord) refuseWord();
     if (filled === batch) {
       target.onValues(values, filled);
       filled = 0;
     }
     const value = parseNumber(bytes, from, to, false, reading);
-    if (reading.status === 'not-a-number') target.onWord(bytes.toString('utf8', from, Math.min(to, from + longestWord)), lineAt(from), filled);
+    if (reading.status === 'not-a-number') target.onWord(bytes.toString('utf8', from, to), lineAt(from), filled);
     else if (reading.digits > most) most = reading.digits;
     values[filled] = value;
     filled += 1;
@@ -55,7 +57,7 @@ export function createTextReader(target: ArrayTarget): ArrayReader {
       if (carry.length > 0) {
         while (at < to && (bytes[at] as number) > 32) at += 1;
         carry = Buffer.concat([carry, bytes.subarray(from, at)]);
-        if (carry.length > longestWord) target.fail(`a word of more than ${longestWord} characters`, 'numbers between blanks');
+        if (carry.length > longestWord) refuseWord();
         if (at === to) return;
         take(carry, 0, carry.length, () => lineAt(from));
         carry = Buffer.alloc(0);
@@ -86,7 +88,7 @@ export function createTextReader(target: ArrayTarget): ArrayReader {
 }
 
 /** Numbers as bytes, after their lengths. */
-export function createRawReader(type: ValueType, form: PayloadForm, target: ArrayTarget): ArrayReader {
+export function createRawReader(type: ValueType, form: PayloadForm, target: ArrayTarget): ArrayReader & Pick<ArrayPayload, 'surplus'> {
   const values = createValueReader(type, form.littleEndian, (read, count) => target.onValues(read, count));
   const payload = createArrayPayload(form, (bytes) => values.push(bytes), target.fail);
   return {
@@ -96,6 +98,7 @@ export function createRawReader(type: ValueType, form: PayloadForm, target: Arra
       if (values.rest() > 0) target.fail(`${values.rest()} bytes beyond the last number`, `a whole number of ${type.name}`);
     },
     isDone: () => payload.isDone(),
+    surplus: () => payload.surplus(),
     drop: () => payload.drop(),
   };
 }
@@ -107,12 +110,10 @@ export function createBase64Reader(type: ValueType, form: PayloadForm, target: A
   return {
     async push(text, from, to) {
       for (let at = from; at < to && !(target.isAppended && raw.isDone());) {
-        const wasDone = raw.isDone();
         at = decoder.decode(text, at, to);
         const isWrong = at < 0;
         if (isWrong) at = -1 - at;
         const bytes = decoder.bytes();
-        if (wasDone && bytes.length > 0) target.fail('more data than its length says', 'the end of the array');
         await raw.push(bytes, 0, bytes.length, () => 0);
         if (isWrong && !raw.isDone()) target.fail(`“${String.fromCodePoint(text[at] as number)}” in base64`, 'letters, digits, “+”, “/” and “=” at ends');
         if (isWrong) return;
@@ -120,6 +121,7 @@ export function createBase64Reader(type: ValueType, form: PayloadForm, target: A
     },
     end() {
       if (!raw.isDone() && !decoder.isComplete()) target.fail('the end within base64', 'groups of four characters');
+      if (!target.isAppended && raw.surplus() > 0) target.fail('more data than its length says', 'the end of the array');
       return raw.end();
     },
     isDone: () => raw.isDone(),

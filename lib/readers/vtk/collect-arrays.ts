@@ -43,7 +43,7 @@ function createCollector({ store, reasons, keep, firstPieceOnly }: ArraysAsked) 
   let reader: ArrayReader | null = null;
   /** Tags open inside the array: only its own text is numbers. */
   let inside = 0;
-  let ending: Promise<void> | void;
+  let ended: ArrayReader | null = null;
   let pieceDone = false;
   let appended: AppendedData | null = null;
 
@@ -93,7 +93,7 @@ function createCollector({ store, reasons, keep, firstPieceOnly }: ArraysAsked) 
       inside = 0;
     },
     arrayEnd() {
-      ending = reader?.end();
+      ended = reader;
       reader = null;
     },
     pieceEnd() {
@@ -116,8 +116,9 @@ function createCollector({ store, reasons, keep, firstPieceOnly }: ArraysAsked) 
       tags.close(name);
     },
     async settle() {
-      await ending;
-      ending = undefined;
+      const complete = ended;
+      ended = null;
+      await complete?.end();
     },
     text: (bytes: Buffer, from: number, to: number, lineAt: LineAt) => (reader !== null && inside === 0 ? reader.push(bytes, from, to, lineAt) : undefined),
     raw: (bytes) => appended?.push(bytes),
@@ -136,7 +137,7 @@ function createCollector({ store, reasons, keep, firstPieceOnly }: ArraysAsked) 
       appended?.end();
     },
     drop() {
-      reader?.drop();
+      (reader ?? ended)?.drop();
       appended?.drop();
     },
   };

@@ -21,6 +21,7 @@ export interface Markup {
 }
 
 const longestTag = 64 * 1024;
+const deepest = 64;
 const [lessThan, greaterThan, lineFeed] = [0x3c, 0x3e, 10];
 const openings = [{ begin: '<!--', end: '-->' }, { begin: '<?', end: '?>' }] as const;
 
@@ -32,12 +33,20 @@ export function createMarkup(events: MarkupEvents): Markup {
   const parser = new SaxesParser<{ position: false; xmlns: false }>({ position: false, xmlns: false });
   let carry: Buffer = Buffer.alloc(0);
   let line = 1;
+  let depth = 0;
   let isRaw = false;
   let ended = false;
 
   parser.on('error', (error) => events.fail(line, shorten(error.message), 'well-formed XML'));
-  parser.on('opentag', ({ name, attributes }) => events.open(name, attributes, line));
-  parser.on('closetag', ({ name }) => events.close(name));
+  parser.on('opentag', ({ name, attributes }) => {
+    depth += 1;
+    if (depth > deepest) events.fail(line, `more than ${deepest} tags inside each other`, 'the few that VTK has');
+    events.open(name, attributes, line);
+  });
+  parser.on('closetag', ({ name }) => {
+    depth -= 1;
+    events.close(name);
+  });
 
   const parseTag = (tag: string): void => {
     if (tag.startsWith('<!')) events.fail(line, shorten(tag), 'tags and numbers alone, without DOCTYPE or CDATA');
