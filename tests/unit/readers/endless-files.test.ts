@@ -22,7 +22,7 @@ function endless(start: string, piece: string, bytes: number) {
 
 async function reasonsOf(work: Promise<unknown>) {
   const error: unknown = await work.then(() => null, (fault: unknown) => fault);
-  if (!(error instanceof RejectedFile)) throw error ?? new Error('It was taken.');
+  if (!(error instanceof RejectedFile)) throw error instanceof Error ? error : new Error('It was taken.');
   return error.reasons;
 }
 

@@ -44,6 +44,7 @@ export default async function MethodsPage() {
           <p>From values on three grids without an exact one, the root of</p>
           <Formula tex="\ln\frac{r_{21}^{\,p}-1}{r_{32}^{\,p}-1} - p \ln r_{21} - \ln\frac{\varepsilon_{21}}{\varepsilon_{32}} = 0" />
           <p>between −10 and 20. The values converge monotonically where 0 &lt; <Sym index="21">ε</Sym>/<Sym index="32">ε</Sym> &lt; ln <Sym index="21">r</Sym>/ln <Sym index="32">r</Sym>; the usual bound of 1 holds for equal ratios only.</p>
+          <p>Fields without an exact solution are compared from one grid or time step to the next, on the same points; the same equation then takes the norms of two differences. A much finer solution in the place of the exact one would show too high an order.</p>
         </div>
       </Section>
       <Section heading="Extrapolated value and grid convergence index" note={<p>An estimate that covers the error in about 95 % of cases by experience. It is not a bound.</p>}>

@@ -25,6 +25,13 @@ describe('stateOutcome(assessment)', () => {
     expect(state([powers(2, {}, [1, 1 / 1.5, 1 / 2.25, 1 / 3.375])]).sentence).toBe('Refining the spacing by a ratio of 1.50 divides the L2 error of u by 2.25; second order would divide it by 2.25.');
     expect(stateOutcome(assessSeries({ errors: [powers(2)], quantities: [] }), 'time').sentence).toMatch(/^Halving the time step divides/);
   });
+  it('speaks of differences where grids are compared with each other, whatever their ratios', () => {
+    const h = [1, 0.5, 0.25, 0.1, 0.05];
+    const differences = h.slice(1).map((fine, index) => (h[index] ?? 0) ** 2 - fine ** 2);
+    const compared = errorSeries(h.slice(1), differences, { comparedTo: { label: 'coarsest', h: 1 }, minimumGrids: 4 });
+    expect(state([compared])).toEqual({ outcome: 'pass', sentence: 'Halving the spacing divides the L2 difference of u between successive grids by 7.00; second order would divide it by 7.' });
+    expect(state([{ ...compared, minimumGrids: 6 }]).sentence).toBe('There are 5 grids; more are asked for.');
+  });
   it('says so where the error grows', () => {
     expect(state([errorSeries(halvings, [1, 1.05, 1.1, 1.21])]).sentence).toBe('Halving the spacing multiplies the L2 error of u by 1.10; second order would divide it by 4.');
   });
