@@ -62,8 +62,8 @@ describe('advection of a step by the first-order upwind scheme', () => {
   /** L1 error over the domain, of cell values, for a step carried from x = 1/4 to 1/2. */
   const error = (h: number) => {
     const cells = Math.round(1 / h);
-    const exact = (at: number, t: number) => ((at + 0.5) * h < 0.25 + t ? 1 : 0);
-    let u = Array.from({ length: cells }, (_, i) => exact(i, 0));
+    const exact = (at: number, t: number): number => ((at + 0.5) * h < 0.25 + t ? 1 : 0);
+    let u: number[] = Array.from({ length: cells }, (_, i) => exact(i, 0));
     for (let step = 0; step < Math.round(time / (courant * h)); step += 1) u = u.map((value, i) => value - courant * (value - (u[i - 1] ?? 1)));
     return u.reduce((sum, value, i) => sum + h * Math.abs(value - exact(i, time)), 0);
   };
