@@ -17,6 +17,8 @@ export interface DocumentParts {
 
 export interface JsonDocument extends JsonStructure {
   layout(): JsonLayout;
+  /** Whether the document is itself a list, whose first record tells all. */
+  isList(): boolean;
   /** The names of the columns that are arrays. */
   header(): string[];
 }
@@ -30,6 +32,7 @@ const hdf5Objects: ReadonlySet<string> = new Set(['groups', 'datasets', 'datatyp
 export function createJsonDocument(parts: DocumentParts, reasons: ReasonCollector): JsonDocument {
   const columns = createColumnArrays((name, column) => parts.column(name, column));
   let layout: JsonLayout = 'columns';
+  let isList = false;
   const refuse = (found: string): never => rejectAtOnce(reasons, {
     code: 'unsupported-format', line: null, column: null, found, expected: 'JSON as an object with one array of numbers per column, or as a list of records',
   });
@@ -75,7 +78,10 @@ export function createJsonDocument(parts: DocumentParts, reasons: ReasonCollecto
 
   const walk = createJsonWalk({
     scalar: () => refuse('JSON without an object'),
-    open: (kind) => (kind === 'array' ? list('', true) : object(true)),
+    open(kind) {
+      isList = kind === 'array';
+      return isList ? list('', true) : object(true);
+    },
   });
-  return { ...createJsonStructure(walk, reasons), layout: () => layout, header: () => columns.header() };
+  return { ...createJsonStructure(walk, reasons), layout: () => layout, isList: () => isList, header: () => columns.header() };
 }

@@ -18,6 +18,7 @@ export interface JsonStructure {
 type Expected = 'a value' | 'a value or “]”' | 'a name or “}”' | 'a name' | '“:”' | '“,” or the end of the list' | 'the end of the file';
 const longestScalar = 64 * 1024;
 const deepest = 64;
+const [minus, comma] = [45, 44];
 const inScalar = /[-+.\w]/;
 const isScalarByte = Uint8Array.from({ length: 256 }, (_, byte) => Number(byte < 128 && inScalar.test(String.fromCharCode(byte))));
 
@@ -35,6 +36,10 @@ export function createJsonStructure(events: JsonEvents, reasons: ReasonCollector
   const wantsValue = () => expected === 'a value' || expected === 'a value or “]”';
 
   const punctuation = (byte: number) => {
+    if (byte === comma && expected === '“,” or the end of the list') {
+      expected = stack[stack.length - 1] === 'object' ? 'a name' : 'a value';
+      return;
+    }
     const found = String.fromCharCode(byte);
     if (found === '{' || found === '[') {
       if (!wantsValue()) fail(`“${found}”`);
@@ -50,8 +55,6 @@ export function createJsonStructure(events: JsonEvents, reasons: ReasonCollector
       stack.pop();
       events.close();
       afterValue();
-    } else if (found === ',' && expected === '“,” or the end of the list') {
-      expected = stack.at(-1) === 'object' ? 'a name' : 'a value';
     } else if (found === ':' && expected === '“:”') {
       expected = 'a value';
     } else fail(`“${found}”`);
@@ -68,9 +71,9 @@ export function createJsonStructure(events: JsonEvents, reasons: ReasonCollector
   };
 
   const bare = (bytes: Buffer, from: number, to: number) => {
-    const word = bytes.toString('latin1', from, Math.min(to, from + 40));
-    const isNumber = /^-?[.\d]/.test(word);
-    if (!wantsValue() || !(isNumber || /^(?:true|false|null|[-+]?(?:nan|inf|infinity))$/i.test(word))) fail(`“${word}”`);
+    const start = bytes[from] === minus ? bytes[from + 1] : bytes[from];
+    const isNumber = start !== undefined && ((start >= 48 && start <= 57) || start === 46);
+    if (!wantsValue() || !(isNumber || isWord(bytes, from, to))) fail(`“${bytes.toString('latin1', from, Math.min(to, from + 40))}”`);
     events.scalar(isNumber ? 'number' : 'word', bytes, from, to, line);
     afterValue();
   };
@@ -115,6 +118,8 @@ export function createJsonStructure(events: JsonEvents, reasons: ReasonCollector
     },
   };
 }
+
+const isWord = (bytes: Buffer, from: number, to: number) => /^(?:true|false|null|[-+]?(?:nan|inf|infinity))$/i.test(bytes.toString('latin1', from, Math.min(to, from + 40)));
 
 function endOfString(bytes: Buffer, from: number): number {
   for (let at = from; at < bytes.length; at += 1) {

@@ -13,7 +13,9 @@ const shownRows = 10;
 const shownBytes = 200;
 const show = (bytes: Buffer, from: number, to: number) => bytes.toString('utf8', from, Math.min(to, from + shownBytes));
 
-/** The columns of JSON and their first rows. All of it is read, since columns stand one after another. */
+const longestOf = (lists: readonly RecordPreview[]) => lists.reduce((longest, list) => (list.rows() > longest.rows() ? list : longest));
+
+/** The columns of JSON and their first rows. All of it is read but for a list of records, since columns stand one after another. */
 export async function previewJson(pieces: AsyncIterable<Buffer>): Promise<ColumnsPreview> {
   const reasons = createReasonCollector();
   const store = createColumnStore();
@@ -30,11 +32,14 @@ export async function previewJson(pieces: AsyncIterable<Buffer>): Promise<Column
       },
       hdf5: hdf5.member,
     }, reasons);
-    for await (const piece of pieces) document.push(piece);
+    for await (const piece of pieces) {
+      document.push(piece);
+      if (document.isList() && (lists[0]?.rows() ?? 0) >= shownRows) return longestOf(lists).preview();
+    }
     document.end();
     switch (document.layout()) {
       case 'hdf5': return previewArrays(hdf5.arrays());
-      case 'records': return lists.reduce((longest, list) => (list.rows() > longest.rows() ? list : longest)).preview();
+      case 'records': return longestOf(lists).preview();
       case 'columns': return previewOf([...document.header()], first);
     }
   } finally {

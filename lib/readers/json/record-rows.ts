@@ -1,13 +1,9 @@
 import type { ColumnsAsked, ColumnsFound } from '../column-format';
 import { resolveColumn } from '../../domain/columns/resolve-column';
 import { locateColumns } from '../locate-columns';
-import type { JsonScalar } from './json-structure';
-import type { BadValue, ScalarReader } from './read-scalar';
+import type { ScalarReader } from './read-scalar';
+import { createRecordBatch, type WrittenScalar } from './record-batch';
 import type { RecordSink } from './record-lists';
-
-const batchRows = 2048;
-
-interface FirstValue { kind: JsonScalar; bytes: Buffer; line: number }
 
 export interface RecordRows {
   /** A list of records begins. */
@@ -15,107 +11,88 @@ export interface RecordRows {
   finish(): ColumnsFound;
 }
 
+/** The names of the first record of a list, and where their values go. */
+interface Columns {
+  header: readonly string[];
+  places: ReadonlyMap<string, number>;
+  /** The slots of the columns wanted that each name is. */
+  slots: readonly (readonly number[])[];
+  /** The column of each slot. */
+  indices: readonly number[];
+}
+
 /**
  * Reads records as rows, in batches as they come. The names of the first record of a list are the columns; a list whose
  * first record has not all that is wanted is passed over.
  */
-export function createRecordRows(reader: ScalarReader, { wanted, reasons, onBatch }: ColumnsAsked): RecordRows {
-  let passed: string[] | null = null;
-  let indices: number[] | null = null;
-  const digits = wanted.map(() => 0);
-  const columns = wanted.map(() => new Float64Array(batchRows));
-  const lines = new Float64Array(batchRows);
-  let rows = 0;
-  let inBatch = 0;
+export function createRecordRows(reader: ScalarReader, asked: ColumnsAsked): RecordRows {
+  const { wanted, reasons } = asked;
+  let passed: readonly string[] | null = null;
+  let columns: Columns | null = null;
+  const batch = createRecordBatch(reader, asked, (slot) => {
+    const index = columns?.indices[slot] ?? 0;
+    return { name: columns?.header[index] ?? '', index };
+  });
 
-  const flush = () => {
-    if (inBatch === 0 || !reasons.isEmpty()) return;
-    // A document without line breaks has no lines worth naming; rows are named then.
-    const isSpread = (lines[inBatch - 1] as number) > (lines[0] as number);
-    onBatch({ rows: inBatch, columns, lines: isSpread ? lines : null });
+  /** The columns of a list by its first record; null where it is not the one that is wanted. */
+  const settle = (header: readonly string[], line: number): Columns | null => {
+    if (wanted.some((name) => resolveColumn(header, name) === 'absent')) {
+      passed ??= header;
+      return null;
+    }
+    const indices = locateColumns(header, wanted, line, reasons);
+    return { header, places: new Map(header.map((name, at) => [name, at])), slots: header.map((_, at) => indices.flatMap((index, slot) => (index === at ? [slot] : []))), indices };
+  };
+  const put = (own: Columns, at: number, scalar: WrittenScalar) => {
+    for (const slot of own.slots[at] ?? []) batch.put(slot, scalar);
   };
 
   const begin = (): RecordSink => {
-    if (indices !== null) return ignored;
+    if (columns !== null) return ignored;
     const header: string[] = [];
-    const first: FirstValue[] = [];
-    // Where each name of the first record goes, once that is known.
-    let slots: number[][] | null = null;
-    let places: Map<string, number> | null = null;
-    const seen: number[] = [];
-    let own: number[] = [];
-    let next = 0;
+    const first: WrittenScalar[] = [];
+    let own: Columns | null = null;
     let isPassed = false;
-
-    const refuse = (slot: number, { found, ...bad }: BadValue, line: number) => {
-      reasons.add({ ...bad, found: `${found} in row ${rows + 1}`, line, column: (own[slot] ?? 0) + 1 });
-      (columns[slot] as Float64Array)[inBatch] = NaN;
-    };
-    const put = (at: number, { kind, bytes, from, to, line }: { kind: JsonScalar; bytes: Buffer; from: number; to: number; line: number }) => {
-      for (const slot of slots?.[at] ?? []) {
-        if (seen[slot] === rows) reasons.add({ code: 'duplicate-column', line, column: null, found: `row ${rows + 1}`, expected: `one ${header[at]}` });
-        seen[slot] = rows;
-        const value = reader.read(kind, bytes, from, to);
-        if (Number.isNaN(value)) refuse(slot, reader.explain(kind, bytes, from, to), line);
-        else {
-          (columns[slot] as Float64Array)[inBatch] = value;
-          if (reader.digits() > (digits[slot] as number)) digits[slot] = reader.digits();
-        }
-      }
-    };
-    const settle = () => {
-      if (wanted.some((name) => resolveColumn(header, name) === 'absent')) {
-        passed ??= header;
-        isPassed = true;
-        return;
-      }
-      own = locateColumns(header, wanted, first[0]?.line ?? 1, reasons);
-      indices = own;
-      slots = header.map((_, at) => own.flatMap((index, slot) => (index === at ? [slot] : [])));
-      places = new Map(header.map((name, at) => [name, at]));
-      for (const [at, { kind, bytes, line }] of first.entries()) put(at, { kind, bytes, from: 0, to: bytes.length, line });
+    // Records mostly have their names in one order.
+    let next = 0;
+    const endFirst = () => {
+      own = columns = settle(header, first[0]?.line ?? 1);
+      isPassed = own === null;
+      if (own !== null) for (const [at, scalar] of first.entries()) put(own, at, scalar);
     };
     return {
       begin(line) {
-        lines[inBatch] = line;
         next = 0;
+        if (!isPassed) batch.begin(line);
       },
       value(path, kind, bytes, from, to, line) {
         if (isPassed) return;
-        if (places === null) {
+        if (own === null) {
           header.push(path);
-          first.push({ kind, bytes: Buffer.from(bytes.subarray(from, to)), line });
+          first.push({ kind, bytes: Buffer.from(bytes.subarray(from, to)), from: 0, to: to - from, line });
           return;
         }
-        const at = header[next] === path ? next : places.get(path);
+        const at = own.header[next] === path ? next : own.places.get(path);
         if (at === undefined) return;
         next = at + 1;
-        put(at, { kind, bytes, from, to, line });
+        put(own, at, { kind, bytes, from, to, line });
       },
       end() {
-        if (isPassed) return;
-        if (slots === null) settle();
-        if (isPassed) return;
-        for (const [slot, index] of own.entries()) {
-          if (seen[slot] !== rows) refuse(slot, { code: 'missing-value', found: `no ${header[index]}`, expected: 'a number' }, lines[inBatch] as number);
-        }
-        rows += 1;
-        inBatch += 1;
-        if (inBatch < batchRows) return;
-        flush();
-        inBatch = 0;
+        if (!isPassed && own === null) endFirst();
+        if (!isPassed) batch.end();
       },
       other(line) {
-        if (!isPassed) reasons.add({ code: 'not-a-number', line, column: null, found: `something else than a record in row ${rows + 1}`, expected: 'a record with the names of the first' });
+        if (isPassed) return;
+        reasons.add({ code: 'not-a-number', line, column: null, found: `something else than a record in row ${batch.row()}`, expected: 'a record with the names of the first' });
       },
     };
   };
   return {
     begin,
     finish() {
-      if (indices === null) locateColumns(passed ?? [], wanted, null, reasons);
-      flush();
-      return { columns: (indices ?? []).map((index, slot) => ({ index, significantDigits: digits[slot] ?? 0 })) };
+      if (columns === null) locateColumns(passed ?? [], wanted, null, reasons);
+      batch.flush();
+      return { columns: (columns?.indices ?? []).map((index, slot) => ({ index, significantDigits: batch.digits(slot) })) };
     },
   };
 }
