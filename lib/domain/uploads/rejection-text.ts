@@ -70,7 +70,7 @@ function describeCode(reason: RejectionReason): RejectionText {
     case 'short-row':
       return text(`${place}: the row has ${found}; the file has ${expected}.`, 'The file may have been cut off while it was copied. Upload it again, or write the missing values.');
     case 'long-row':
-      return text(`${place}: the row has ${found}; the file has ${expected}.`, 'Name every column in the header, or remove what is extra.');
+      return text(`${place}: the row has ${found}; the file has ${expected}.`, 'Name every column in the header, remove what is extra, or say in the columns of the case what parts them.');
     case 'column-length':
       return text(`${place}: the column has ${found}; expected ${expected}.`, 'Give every column one value per row.');
     case 'missing-value':

@@ -2,6 +2,7 @@ import { describe, expect, it } from 'vitest';
 import {
   choiceFaults, columnNeeds, equalWeights, firstChoices, mappingOf, mapsItself, noColumn,
 } from '@/app/(organisation)/[org]/studies/[id]/_components/column-choices';
+import { mostOffered, offeredColumns } from '@/app/(organisation)/[org]/studies/[id]/_components/offered-columns';
 import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 
 const define = (norms: string[], more: object = {}) => caseDefinitionSchema.parse({ fields: [{ field: 'u', norms: norms.map((norm) => ({ norm })) }], ...more });
@@ -76,5 +77,15 @@ describe('the mapping', () => {
   it('says how tables are written only where that was said', () => {
     expect(from(plain, chosen, null, { hasHeader: true })).toMatchObject({ table: { hasHeader: true } });
     expect(from(plain, chosen, { x: 'x', weight: null, fields: {}, table: { hasHeader: true } })?.table).toBeUndefined();
+  });
+});
+
+describe('the columns offered', () => {
+  it('are all of a file, and of very many the chosen one and those alike first', () => {
+    expect(offeredColumns(['x', 'u', 'x'], 'u', '')).toEqual(['x', 'u']);
+    const many = [...Array.from({ length: 5000 }, (_, index) => `probe ${index}`), 'fields/Pressure', 'weight'];
+    const offered = offeredColumns(many, 'pressure', 'weight');
+    expect(offered.slice(0, 3)).toEqual(['weight', 'fields/Pressure', 'probe 0']);
+    expect(offered).toHaveLength(mostOffered);
   });
 });

@@ -2,6 +2,7 @@ import { useState, type ReactNode } from 'react';
 import { SelectField } from '@/app/_components/forms/select-field';
 import { Sym } from '@/app/_components/ui/symbols';
 import { equalWeights, mapsItself, noColumn, type Choices, type ColumnNeed } from './column-choices';
+import { offeredColumns } from './offered-columns';
 
 interface ColumnSelectsProps {
   needs: readonly ColumnNeed[];
@@ -64,16 +65,19 @@ function RegionSelects(props: ColumnSelectsProps) {
 
 function ColumnSelect({ need, header, choices, faults, onChoose }: ColumnSelectsProps & { need: ColumnNeed }) {
   const lack = need.mayLack && !mapsItself(need, header) ? lackWords[need.kind] : undefined;
+  const chosen = choices[need.key] ?? '';
+  const offered = offeredColumns(header, need.field ?? need.axis ?? need.key, chosen);
   return (
     <SelectField
       // The serif of a symbol would make its label a pixel taller than the one beside it.
-      label={<span className="block h-5">{nameOf(need)}</span>} value={choices[need.key] ?? ''} error={faults.get(need.key)}
+      label={<span className="block h-5">{nameOf(need)}</span>} value={chosen} error={faults.get(need.key)}
+      hint={offered.length < new Set(header).size ? `Offers ${offered.length} of ${header.length} columns. Another is mapped through the API.` : undefined}
       onChange={(event) => onChoose(need.key, event.target.value)}
     >
-      {choices[need.key] === '' && <option value="">choose a column</option>}
+      {chosen === '' && <option value="">choose a column</option>}
       {need.kind === 'weight' && <option value={equalWeights}>equal weights</option>}
       {lack && <option value={noColumn}>{lack}</option>}
-      {header.map((column, index) => <option key={`${column} ${index}`} value={column}>{column}</option>)}
+      {offered.map((column) => <option key={column} value={column}>{column}</option>)}
     </SelectField>
   );
 }

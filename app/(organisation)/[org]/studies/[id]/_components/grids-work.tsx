@@ -110,7 +110,7 @@ export function GridsNotes({ study }: { study: Study }) {
   return (
     <div className="mt-4 flex flex-col gap-2">
       {takesFiles(study.definition) && (
-        <p>Files are text tables (comma, semicolon, tab or space), JSON (columns or records), HDF5 or HDF5/JSON; gzip or not. They go straight to storage: <b>progress counts confirmed bytes</b>, reading counts rows.</p>
+        <p>Files are text tables (comma, semicolon, tab or space), JSON (columns or records), HDF5, HDF5/JSON or VTK XML; gzip or not. They go straight to storage: <b>progress counts confirmed bytes</b>, reading counts rows.</p>
       )}
       <p>
         {study.planFrozenAt === null

@@ -13,8 +13,10 @@ function ColumnName({ name }: { name: string }) {
 
 /** Where the first row is not as wide as the header, one of the two is not what it seems. */
 function WidthNote({ preview: { header, firstRows, table } }: { preview: UploadPreview }) {
-  const width = firstRows[0]?.length;
-  if (table === null || width === undefined || width === header.length) return null;
+  const [first] = firstRows;
+  // A separator at the end of the rows parts nothing.
+  const width = first?.at(-1) === '' ? first.length - 1 : first?.length;
+  if (table === null || width === undefined || width === header.length || first?.length === header.length) return null;
   return (
     <p role="status" className="mt-2 text-note">
       <b>{width} {width === 1 ? 'value' : 'values'} in the first row, {header.length} {header.length === 1 ? 'name' : 'names'}.</b>{' '}
