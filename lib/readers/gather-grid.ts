@@ -6,6 +6,7 @@ import { createMapGatherer } from '../numerics/maps/map-gatherer';
 import type { MapRoom } from '../numerics/maps/map-room';
 import { createMeshGatherer } from '../numerics/mesh/mesh-gatherer';
 import { prepareRegions } from '../numerics/regions/region-gatherer';
+import { createRigidGatherer } from '../numerics/rigid/rigid-gatherer';
 import type { GridChecks } from './grid-checks';
 import type { GridReading } from './grid-reading';
 import type { GridPart } from './grid-total';
@@ -21,6 +22,7 @@ export interface GridTask {
   exact: Node[];
   average?: GridReading['average'];
   mesh?: GridReading['mesh'];
+  rigid?: GridReading['rigid'];
   /** The time of the grid, where the file has no column of times. */
   t?: number;
   bands?: GridReading['bands'];
@@ -41,7 +43,7 @@ export interface GridGatherer {
  * until the next one is asked for. Batches of columns in the memory of an engine are worked on there.
  */
 export function prepareGathering(
-  { plan, fields, exact, average, mesh, t: gridTime, bands, maps, mapRoom }: GridTask, engine: ColumnEngine | null = null,
+  { plan, fields, exact, average, mesh, rigid, t: gridTime, bands, maps, mapRoom }: GridTask, engine: ColumnEngine | null = null,
 ): (checks: GridChecks) => GridGatherer {
   const evaluate = average ? null : createBlockEvaluator(exact, undefined, engine);
   const evaluateAverage = average ? createAverageEvaluator(exact, average.points, engine) : null;
@@ -49,6 +51,8 @@ export function prepareGathering(
   const gatherMaps = maps && mapRoom && createMapGatherer(maps, mapRoom);
   const mapped = (maps?.fields ?? []).map((field) => fields.indexOf(field));
   const survey = mesh ? createMeshGatherer([plan.x, plan.y, plan.z].filter((slot) => slot !== null).length) : null;
+  const moments = rigid ? createRigidGatherer(rigid.origin) : null;
+  const components = (rigid?.fields ?? []).map((field) => fields.indexOf(field));
   return (checks) => {
     const gatherer = startRegions();
     const rowProblems = createRowProblems();
@@ -69,11 +73,12 @@ export function prepareGathering(
         gatherer.add({ rows, x, y, z, weights: pick(plan.weight), fields: compared }, { distance: pick(plan.distance), flag: pick(plan.flag) });
         gatherMaps?.({ rows, axes, fields: mapped.map((index) => compared[index] as (typeof compared)[number]) });
         survey?.add({ rows, coordinates: axes, times: t, weights: mesh?.sizes ? pick(plan.weight) : null, extents: plan.extents.map((slot) => columns[slot] as Float64Array) });
+        moments?.add({ rows, coordinates: axes, weights: pick(plan.weight), components: components.map((index) => compared[index] as (typeof compared)[number]) });
         rowProblems.note(gatherer.problems(), { before, lines, coordinates: { x, y, z } });
       },
       finish(indices) {
         for (const problem of gatherer.problems()) checks.values.add(rowProblems.explain(problem, plan, fields, indices), problem.count);
-        return { norms: gatherer.parts(), mesh: survey?.takePart() ?? null };
+        return { norms: gatherer.parts(), mesh: survey?.takePart() ?? null, rigid: moments?.takePart() ?? null };
       },
     };
   };

@@ -18,6 +18,8 @@ export interface GridReading {
   average?: { points: number; extents: readonly number[] | null };
   /** Whether to look at the mesh too: at coordinates that repeat, and at the sizes of cells where weights are such. */
   mesh?: { sizes: boolean };
+  /** The components of a displacement whose best rigid motion is wanted, and where to take coordinates from. */
+  rigid?: { fields: readonly string[]; origin: readonly number[] };
   /** The time of the grid, where the file has no column of times. */
   t?: number;
   /** Bands along the boundary, where norms of them and of what lies inside of each are asked for. */

@@ -6,6 +6,8 @@ import { createMeshTotal } from '../numerics/mesh/mesh-total';
 import type { GridNorms } from '../numerics/norms/grid-norms';
 import type { NormPart } from '../numerics/norms/norm-part';
 import { createRegionTotal } from '../numerics/regions/region-total';
+import { createRigidGatherer, type RigidPart } from '../numerics/rigid/rigid-gatherer';
+import { bestRigidMotion } from '../numerics/rigid/rigid-motion';
 import type { GridTask } from './gather-grid';
 
 /** What some of the rows of a grid come to. */
@@ -14,6 +16,8 @@ export interface GridPart {
   norms: NormPart[];
   /** Null where the mesh is not asked for. */
   mesh: MeshPart | null;
+  /** Null where no rigid motion is asked for. */
+  rigid: RigidPart | null;
 }
 
 export interface GridTotal {
@@ -31,11 +35,13 @@ export function createGridTotal(task: GridTask): GridTotal {
   const { maps } = task;
   const norms = createRegionTotal(task.fields, task.bands);
   const mesh = createMeshTotal();
+  const moments = task.rigid ? createRigidGatherer(task.rigid.origin) : null;
   const rooms: MapRoom[] = task.mapRoom ? [task.mapRoom] : [];
   return {
     add(part) {
       const before = norms.rows();
       norms.add(part.norms);
+      if (part.rigid) moments?.addPart(part.rigid);
       if (part.mesh) mesh.add(part.mesh, norms.rows() - before);
     },
     rows: norms.rows,
@@ -48,7 +54,7 @@ export function createGridTotal(task: GridTask): GridTotal {
     finish(significantDigits) {
       const found = norms.finish(significantDigits);
       const survey = mesh.finish();
-      return found === null ? null : { norms: { ...found, ...(survey && { mesh: survey }) }, maps: maps ? drawMaps(maps, rooms, found.rows) : [] };
+      return found === null ? null : { norms: { ...found, ...(survey && { mesh: survey }), ...(moments && { motion: bestRigidMotion(moments.sums()) }) }, maps: maps ? drawMaps(maps, rooms, found.rows) : [] };
     },
   };
 }

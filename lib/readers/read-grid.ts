@@ -46,7 +46,7 @@ interface Gathering { task: GridTask; checks: GridChecks; total: GridTotal; onPi
 export async function readGrid(source: ByteSource, reading: GridReading, options: GridReadOptions = {}): Promise<GridReadResult> {
   const plan = planColumns(reading);
   const fields = reading.fields.map(({ field }) => field);
-  const task: GridTask = { plan, fields, exact: compileExact(reading), average: reading.average, mesh: reading.mesh, t: reading.t, bands: reading.bands, maps: reading.maps, mapRoom: reading.maps && createMapRoom(reading.maps) };
+  const task: GridTask = { plan, fields, exact: compileExact(reading), average: reading.average, mesh: reading.mesh, rigid: reading.rigid, t: reading.t, bands: reading.bands, maps: reading.maps, mapRoom: reading.maps && createMapRoom(reading.maps) };
   const checks = createGridChecks(reading.t);
   const total = createGridTotal(task);
   const hash = createHash('sha256');

@@ -31,7 +31,7 @@ export function NormRows({ form, place, isExactness, onRemove }: NormRowsProps) 
         {!isExactness && <TextField label="Where its formal order comes from" autoComplete="off" className="min-w-0 flex-1 basis-60" hint="A citation or the name of the scheme." error={faults?.citation?.message} {...register(`fields.${place}.citation`)} />}
         <TextField label="Compared with" autoComplete="off" spellCheck={false} className="w-48 [&_input]:font-mono" hint="Such as k*d(T, x); empty: the field." error={faults?.compare?.message} {...register(`fields.${place}.compare`)} />
         <SelectField label="Known up to" className="w-40" error={faults?.datum?.message} {...register(`fields.${place}.datum`)}>
-          <option value="none">nothing</option><option value="mean">a constant</option><option value="scale">a factor</option>
+          <option value="none">nothing</option><option value="mean">a constant</option><option value="scale">a factor</option><option value="rigid">a rigid motion</option>
         </SelectField>
         <TextButton className="min-h-11 tablet:mt-7 tablet:min-h-9" onClick={onRemove}>Remove field</TextButton>
       </div>

@@ -5,6 +5,7 @@ import { compileExpressions } from '@/lib/numerics/expression/compile-expression
 import type { ProblemDefinition } from '../problems/schema';
 import { variablesOf } from '../problems/variables';
 import type { DeclaredField, DeclaredNorm } from './definition';
+import { checkRigid } from './check-rigid';
 import { repeated } from './repeated';
 
 /** Fields must be in the exact solution, where the problem has one; where it has none, their errors are typed, or the solutions of successive grids compared. */
@@ -12,6 +13,7 @@ export function checkFields(fields: readonly DeclaredField[], problem: ProblemDe
   const known = Object.keys(problem.exact ?? {});
   return [
     ...repeated(fields.map((field) => field.field), (index) => `fields.${index}.field`, 'Field'),
+    ...checkRigid(fields, problem.dimension),
     ...fields.flatMap((field, index): FieldProblem[] => {
       const path = `fields.${index}`;
       const isUnknown = known.length > 0 && !known.includes(field.field) && field.compare === undefined;

@@ -13,11 +13,8 @@ export function notYetOfCase(definition: CaseDefinition): NotAvailableYet | null
   return asked.find((each) => each !== false) ?? null;
 }
 
-function askedByField({ datum, norms }: DeclaredField, path: string): Asked[] {
-  return [
-    datum === 'rigid' && { path: `${path}.datum`, what: `Removing the datum (${datum})` },
-    ...norms.flatMap((norm, index) => askedByNorm(norm, `${path}.norms.${index}`)),
-  ];
+function askedByField({ norms }: DeclaredField, path: string): Asked[] {
+  return norms.flatMap((norm, index) => askedByNorm(norm, `${path}.norms.${index}`));
 }
 
 function askedByNorm({ backing }: DeclaredNorm, path: string): Asked[] {

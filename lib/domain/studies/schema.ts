@@ -84,8 +84,8 @@ const fieldResultSchema = z.strictObject({
   at: z.strictObject({ x: z.number(), y: z.number().optional(), z: z.number().optional() }),
   signedMean: z.number(), exact: z.strictObject({ L1: z.number(), L2: z.number(), Linf: z.number() }),
   minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().int().nullable(),
-  datum: z.strictObject({ kind: z.enum(['mean', 'scale']), value: z.number() }).optional()
-    .meta({ description: 'What was taken out of the field before its norms: the constant, or the factor it was multiplied by.' }),
+  datum: z.strictObject({ kind: z.enum(['mean', 'scale', 'rigid']), value: z.number() }).optional()
+    .meta({ description: 'What was taken out of the field before its norms: the constant, the factor it was multiplied by, or its component of the rigid motion at the centre.' }),
 });
 const gridResultSchema = z.strictObject({
   label: z.string(), upload: z.string(), sha256: z.string(), rows: z.number().int(), weightSum: z.number(), equalWeights: z.boolean(),
@@ -95,6 +95,8 @@ const gridResultSchema = z.strictObject({
   })).optional().meta({ description: 'Norms of the fields themselves, where the problem has no exact solution.' }),
   gradients: z.array(z.strictObject({ field: z.string(), H1: z.number(), exactH1: z.number() })).meta({ description: 'H1 seminorms, of fields with columns of their gradient.' }),
   mesh: meshSchema.optional(),
+  motion: z.strictObject({ centre: z.array(z.number()), translation: z.array(z.number()), rotation: z.array(z.number()) }).optional()
+    .meta({ description: 'The small rigid motion taken out of a displacement: translation + rotation × (x − centre), with one angle in two dimensions and a vector in three, in radians.' }),
   numericsVersion: z.string(),
 });
 export type GridResult = z.infer<typeof gridResultSchema>;

@@ -1,4 +1,5 @@
 import type { Position, Region } from '../assessment';
+import type { RigidMotion } from '../rigid/rigid-motion';
 import type { MeshSurvey } from '../mesh/mesh-part';
 
 /** Norms of one field on one grid: e is the value of the file minus the exact one, each norm divided by the sum of weights. */
@@ -20,8 +21,8 @@ export interface FieldNorms {
   significantDigits: number | null;
   /** Where the source stores the column as float32; absent where it does not, or does not say. */
   storedAs?: 'single';
-  /** What was taken out of the field before its norms: the constant of q − q_exact, or the factor q was multiplied by. */
-  datum?: { kind: 'mean' | 'scale'; value: number };
+  /** What was taken out of the field before its norms: the constant of q − q_exact, the factor q was multiplied by, or its component of the rigid motion at the centre. */
+  datum?: { kind: 'mean' | 'scale' | 'rigid'; value: number };
 }
 
 /** The H1 seminorm of the error, √(Σw|∇q − ∇q_exact|²/Σw), from columns of the gradient. */
@@ -42,6 +43,8 @@ export interface GridNorms {
   regions?: RegionNorms[];
   /** Absent where it was not asked for, or read before it was kept. */
   mesh?: MeshSurvey;
+  /** The rigid motion taken out of the fields that are free by one. */
+  motion?: RigidMotion;
 }
 
-export interface RegionNorms extends Omit<GridNorms, 'regions' | 'mesh'> { region: Region }
+export interface RegionNorms extends Omit<GridNorms, 'regions' | 'mesh' | 'motion'> { region: Region }

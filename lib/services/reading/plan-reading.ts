@@ -1,18 +1,17 @@
-import type { CaseDefinition, DeclaredField } from '@/lib/domain/cases/definition';
+import type { CaseDefinition } from '@/lib/domain/cases/definition';
 import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
 import { splitColumns } from '@/lib/domain/columns/split-columns';
 import type { ProblemDefinition } from '@/lib/domain/problems/schema';
 import type { FieldNorms, GradientNorms, GridNorms } from '@/lib/numerics/norms/grid-norms';
-import { bestScale } from '@/lib/numerics/norms/best-scale';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { GridReading } from '@/lib/readers/grid-reading';
+import { planRigid, withoutDatum, type FoundDatum } from './datums';
+import { derivativeName, squareName } from './names-in-reading';
 
 interface Asked { definition: CaseDefinition; problem: ProblemDefinition; mapping: ColumnMapping; t?: number; cellsPerDirection?: number | number[] }
 type ReadField = GridReading['fields'][number];
 
 const axes = ['x', 'y', 'z'] as const;
-const derivativeName = (field: string, axis: string) => `d(${field}, ${axis})`;
-const squareName = (field: string) => `${field} squared`;
 
 /**
  * What is read of a file: every field against what it is compared with, its gradient columns against the derivatives of
@@ -33,6 +32,7 @@ export function planReading({ definition, problem, mapping, t, cellsPerDirection
     gradient.forEach((column, at) => add(derivativeName(field, axes[at] ?? 'x'), column, derivativeName(field, axes[at] ?? 'x')));
   }
   return { mapping: { ...mapping, fields: columns }, problem: { dimension, exact, constants }, fields, t,
+    rigid: planRigid(definition, problem, columns),
     mesh: { sizes: mapping.weight !== null && definition.sampling !== 'quadrature' },
     ...(definition.sampling === 'average' && { average: { points: averagingPoints(definition), extents: uniformExtents(problem, mapping, cellsPerDirection) } }),
   };
@@ -59,47 +59,20 @@ function uniformExtents({ domain = {}, dimension }: ProblemDefinition, mapping: 
   }]);
 }
 
-/** What the first reading found to be free in each field: the constant or the factor that fits best. */
-export function findDatums(definition: CaseDefinition, norms: GridNorms): Map<string, number> {
-  const found = new Map<string, number>();
-  for (const { field, datum } of definition.fields) {
-    const [own, square] = [field, squareName(field)].map((name) => norms.fields.find((each) => each.field === name));
-    if (own && datum === 'mean') found.set(field, own.mean);
-    if (own && square && datum === 'scale') found.set(field, bestScale({ error: own.L2, exact: own.exact.L2, value: square.L2 }));
-  }
-  return found;
-}
-
-/** The second reading, with every constant and factor removed; null where nothing is free. */
-export function planSecondReading(reading: GridReading, definition: CaseDefinition, datums: ReadonlyMap<string, number>): GridReading | null {
-  if (datums.size === 0) return null;
-  const fields = reading.fields.flatMap(({ field, compare = field }): ReadField[] => {
-    const [value, datum] = [datums.get(field), datumOf(definition, field)];
-    if (value === undefined) return [];
-    return [{ field, compare: datum === 'mean' ? `(${compare}) + (${value})` : `(${compare}) / (${value})` }];
-  });
-  return { ...reading, fields, mesh: undefined };
-}
-
-function datumOf(definition: CaseDefinition, field: string): DeclaredField['datum'] {
-  return definition.fields.find((each) => each.field === field)?.datum ?? 'none';
-}
-
 /** The norms of the declared fields: those of the second reading where a datum was removed, and of gradients. */
-export function joinNorms(definition: CaseDefinition, first: GridNorms, { second, datums }: { second: GridNorms | null; datums: ReadonlyMap<string, number> }): GridNorms {
+export function joinNorms(definition: CaseDefinition, first: GridNorms, { second, datums }: { second: GridNorms | null; datums: ReadonlyMap<string, FoundDatum> }): GridNorms {
   const declared = definition.fields.map(({ field }) => field);
+  const removed = (field: string) => second?.fields.find((each) => each.field === field);
   const fields = first.fields.filter(({ field }) => declared.includes(field)).map((own): FieldNorms => {
-    const again = second?.fields.find(({ field }) => field === own.field);
-    const [value, kind] = [datums.get(own.field), datumOf(definition, own.field)];
-    if (!again || value === undefined || (kind !== 'mean' && kind !== 'scale')) return own;
-    const factor = kind === 'scale' ? Math.abs(value) : 1;
-    return {
-      ...again, L1: again.L1 * factor, L2: again.L2 * factor, Linf: again.Linf * factor, mean: again.mean * (kind === 'scale' ? value : 1),
-      exact: own.exact, min: own.min, max: own.max, maxAbs: own.maxAbs, datum: { kind, value },
-    };
+    const [again, datum] = [removed(own.field), datums.get(own.field)];
+    return again && datum ? withoutDatum(own, again, datum) : own;
   });
   const gradients = declared.flatMap((field): GradientNorms[] => {
-    const parts = axes.flatMap((axis) => first.fields.find((each) => each.field === derivativeName(field, axis)) ?? []);
+    const parts = axes.flatMap((axis) => {
+      const name = derivativeName(field, axis);
+      const own = first.fields.find((each) => each.field === name);
+      return own ? [{ ...own, L2: removed(name)?.L2 ?? own.L2 }] : [];
+    });
     return parts.length === 0 ? [] : [{
       field, H1: Math.hypot(...parts.map(({ L2 }) => L2)), exactH1: Math.hypot(...parts.map(({ exact }) => exact.L2)),
       maxAbs: Math.max(...parts.map(({ maxAbs }) => maxAbs)), significantDigits: parts.reduce<number | null>((most, { significantDigits }) => (significantDigits === null ? most : Math.max(most ?? 0, significantDigits)), null),

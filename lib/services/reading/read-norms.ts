@@ -5,7 +5,8 @@ import type { GridReading } from '@/lib/readers/grid-reading';
 import type { GridReadResult } from '@/lib/readers/read-grid';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import { solutionFields } from '@/lib/domain/cases/solution-fields';
-import { findDatums, joinNorms, planReading, planSecondReading } from './plan-reading';
+import { findDatums, planSecondReading } from './datums';
+import { joinNorms, planReading } from './plan-reading';
 import { keepSolutions, planSolutions } from './read-solutions';
 
 interface ToRead {
@@ -17,7 +18,7 @@ interface ToRead {
   statedSha256: string | null;
 }
 
-/** Reads a file into norms; a second time where a constant or a factor of a field is free and was found by the first. */
+/** Reads a file into norms; a second time where a constant, a factor or a rigid motion of fields is free and was found by the first. */
 export async function readNorms({ statedSha256, ...asked }: ToRead, read: (reading: GridReading) => Promise<GridReadResult>): Promise<GridReadResult> {
   const { definition, problem } = asked;
   const solutions = solutionFields(definition, problem);
@@ -28,7 +29,7 @@ export async function readNorms({ statedSha256, ...asked }: ToRead, read: (readi
   }
   const norms = keepSolutions(first.norms, solutions);
   const datums = findDatums(definition, norms);
-  const again = planSecondReading(reading, definition, datums);
+  const again = planSecondReading(reading, datums);
   const second = again ? (await read(again)).norms : null;
   return { ...first, norms: joinNorms(definition, norms, { second, datums }) };
 }

@@ -24,6 +24,7 @@ export async function getGridResult(ctx: MemberContext, key: { id: string; label
     ...(norms.solutions && { solutions: norms.solutions.map(({ field, L1, L2, Linf, min, max, count, significantDigits }) => ({ field, L1, L2, Linf, minimum: min, maximum: max, count, significantDigits })) }),
     gradients: (norms.gradients ?? []).map(({ field, H1, exactH1 }) => ({ field, H1, exactH1 })),
     ...(norms.mesh && { mesh: meshFacts(norms.mesh) }),
+    ...(norms.motion && { motion: norms.motion }),
     numericsVersion: row.numerics_version ?? '',
   };
 }

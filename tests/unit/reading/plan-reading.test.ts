@@ -5,7 +5,8 @@ import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import { bestScale } from '@/lib/numerics/norms/best-scale';
 import type { GridNorms } from '@/lib/numerics/norms/grid-norms';
 import { readGrid } from '@/lib/readers/read-grid';
-import { findDatums, joinNorms, planReading, planSecondReading } from '@/lib/services/reading/plan-reading';
+import { findDatums, planSecondReading } from '@/lib/services/reading/datums';
+import { joinNorms, planReading } from '@/lib/services/reading/plan-reading';
 import { byteSource } from '../../support/byte-source';
 
 const problem = problemDefinitionSchema.parse({ equation: 'heat', dimension: 2, constants: { k: 0.5 }, exact: { T: 'sin(x)*y' } });
@@ -26,7 +27,7 @@ async function read(fields: object[], columns: Record<string, (x: number, y: num
   const ask = async (asked: typeof reading) => (await readGrid(byteSource([header.join(','), ...rows].join('\n')), asked)).norms;
   const first = await ask(reading);
   const datums = findDatums(definition, first);
-  const again = planSecondReading(reading, definition, datums);
+  const again = planSecondReading(reading, datums);
   return joinNorms(definition, first, { second: again ? await ask(again) : null, datums });
 }
 
