@@ -7,6 +7,8 @@ const longestBlock = 8192;
 const bytesEach = 8;
 /** 32 MiB; what is more waits on disk. */
 const usuallyHeld = 4 * 1024 * 1024;
+/** 16 MiB beside it for the ends of columns, so that those which begin once memory is full go to disk in large blocks too. */
+const mostInTails = 2 * 1024 * 1024;
 
 /** A column of doubles that grows. */
 export interface StoredColumn {
@@ -29,6 +31,8 @@ export interface ColumnStore {
 interface Room {
   /** Takes memory for so many numbers, or says that there is none. */
   take(values: number): boolean;
+  /** The same for the growing end of a column, also where no memory is left for blocks. */
+  takeForTail(values: number): boolean;
   file(): TemporaryFile;
 }
 
@@ -38,11 +42,19 @@ interface Room {
  */
 export function createColumnStore(mostHeld = usuallyHeld): ColumnStore {
   let held = 0;
+  let inTails = 0;
   let file: TemporaryFile | null = null;
+  const take = (values: number): boolean => {
+    if (held + values > mostHeld) return false;
+    held += values;
+    return true;
+  };
   const room: Room = {
-    take(values) {
-      if (held + values > mostHeld) return false;
-      held += values;
+    take,
+    takeForTail(values) {
+      if (take(values)) return true;
+      if (inTails + values > mostInTails) return false;
+      inTails += values;
       return true;
     },
     file: () => (file ??= openTemporaryFile()),
@@ -62,13 +74,13 @@ function createStoredColumn(room: Room): StoredColumn {
   /** The tail is full: it grows, stays as a block in memory, or goes to disk. */
   const extend = () => {
     const isWhole = tail.length === longestBlock;
-    const isHeld = room.take(tail.length);
-    if (isHeld && !isWhole) {
+    if (!isWhole && room.takeForTail(tail.length)) {
       const longer = new Float64Array(tail.length * 2);
       longer.set(tail);
       tail = longer;
       return;
     }
+    const isHeld = isWhole && room.take(tail.length);
     starts.push(before);
     places.push(isHeld ? tail : room.file().append(bytesOf(tail)));
     if (isHeld) tail = new Float64Array(longestBlock);

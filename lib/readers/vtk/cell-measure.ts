@@ -29,10 +29,11 @@ export function createCellMeasurer(): CellMeasurer {
     y /= count;
     z /= count;
     if (local.length < 3 * count) local = new Float64Array(6 * count);
-    for (let at = 0; at < 3 * count; at += 3) {
-      local[at] = (corners[at] as number) - x;
-      local[at + 1] = (corners[at + 1] as number) - y;
-      local[at + 2] = (corners[at + 2] as number) - z;
+    for (let place = 0; place < count; place += 1) {
+      const at = 3 * (shape.order === null ? place : shape.order[place] as number);
+      local[3 * place] = (corners[at] as number) - x;
+      local[3 * place + 1] = (corners[at + 1] as number) - y;
+      local[3 * place + 2] = (corners[at + 2] as number) - z;
     }
     clearMeasure(sum);
     addParts(sum, shape, { corners: local, count, faces });
@@ -50,7 +51,7 @@ function addParts(sum: MeasureSum, shape: CellShape, { corners, count, faces }: 
     case 'point': return;
     case 'line': return addLine(sum, corners, count);
     case 'strip': return addStrip(sum, corners, count);
-    case 'polygon': return addPolygon(sum, corners, count, shape.order);
+    case 'polygon': return addPolygon(sum, corners, count);
     case 'solid': return addSolid(sum, corners, shape.faces);
     case 'polyhedron': return addTurnedSolid(sum, corners, faces);
   }

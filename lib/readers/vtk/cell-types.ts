@@ -8,8 +8,8 @@ export interface CellShape {
   /** The number of corners, the least where `isOpen`. */
   corners: number;
   isOpen: boolean;
-  /** The corners of a polygon one after another around it, where they stand in another order. */
-  order?: readonly number[];
+  /** The corners one after another around a polygon, where they stand in another order. */
+  order: readonly number[] | null;
   /** The faces of a solid, each turning left seen from outside. */
   faces: Faces;
   /** Whether its corners are found in either order, so that the sign of its volume tells nothing. */
@@ -17,7 +17,7 @@ export interface CellShape {
 }
 
 const shape = (kind: CellShape['kind'], name: string, rest: Pick<CellShape, 'dimension' | 'corners'> & Partial<CellShape>): CellShape => (
-  { kind, name, isOpen: false, faces: [], mayTurn: false, ...rest }
+  { kind, name, isOpen: false, order: null, faces: [], mayTurn: false, ...rest }
 );
 const solid = (name: string, faces: Faces, mayTurn = false): CellShape => shape('solid', name, { dimension: 3, corners: Math.max(...faces.flat()) + 1, faces, mayTurn });
 

@@ -1,29 +1,38 @@
 import type { MeasureSum } from './measure-sum';
 
-const inOrder = (count: number, order: readonly number[] | undefined, place: number): number => 3 * (order?.[place % count] ?? place % count);
-
 /**
- * Adds a polygon, whose corners are x y z from their mean: the length of the sum of its triangles' area vectors from the mean,
- * which is its area where it is plane, convex or not, whichever way it turns.
+ * Adds a polygon, whose corners are x y z from their mean, one after another around it: the length of the sum of its triangles'
+ * area vectors from the mean, which is its area where it is plane, convex or not, whichever way it turns.
  */
-export function addPolygon(sum: MeasureSum, corners: Float64Array, count: number, order?: readonly number[]): void {
-  const at = (index: number) => corners[index] as number;
-  let [nx, ny, nz] = [0, 0, 0];
-  for (let side = 0; side < count; side += 1) {
-    const [a, b] = [inOrder(count, order, side), inOrder(count, order, side + 1)];
-    nx += at(a + 1) * at(b + 2) - at(a + 2) * at(b + 1);
-    ny += at(a + 2) * at(b) - at(a) * at(b + 2);
-    nz += at(a) * at(b + 1) - at(a + 1) * at(b);
+export function addPolygon(sum: MeasureSum, corners: Float64Array, count: number): void {
+  const last = 3 * count - 3;
+  let nx = 0;
+  let ny = 0;
+  let nz = 0;
+  for (let b = 0, a = last; b <= last; a = b, b += 3) {
+    const ax = corners[a] as number;
+    const ay = corners[a + 1] as number;
+    const az = corners[a + 2] as number;
+    const bx = corners[b] as number;
+    const by = corners[b + 1] as number;
+    const bz = corners[b + 2] as number;
+    nx += ay * bz - az * by;
+    ny += az * bx - ax * bz;
+    nz += ax * by - ay * bx;
   }
-  const length = Math.hypot(nx, ny, nz);
+  const length = Math.sqrt(nx * nx + ny * ny + nz * nz);
   if (length === 0) return;
-  for (let side = 0; side < count; side += 1) {
-    const [a, b] = [inOrder(count, order, side), inOrder(count, order, side + 1)];
-    const part = ((at(a + 1) * at(b + 2) - at(a + 2) * at(b + 1)) * nx + (at(a + 2) * at(b) - at(a) * at(b + 2)) * ny
-      + (at(a) * at(b + 1) - at(a + 1) * at(b)) * nz) / (2 * length);
-    sum.x += part * (at(a) + at(b)) / 3;
-    sum.y += part * (at(a + 1) + at(b + 1)) / 3;
-    sum.z += part * (at(a + 2) + at(b + 2)) / 3;
+  for (let b = 0, a = last; b <= last; a = b, b += 3) {
+    const ax = corners[a] as number;
+    const ay = corners[a + 1] as number;
+    const az = corners[a + 2] as number;
+    const bx = corners[b] as number;
+    const by = corners[b + 1] as number;
+    const bz = corners[b + 2] as number;
+    const part = ((ay * bz - az * by) * nx + (az * bx - ax * bz) * ny + (ax * by - ay * bx) * nz) / (6 * length);
+    sum.x += part * (ax + bx);
+    sum.y += part * (ay + by);
+    sum.z += part * (az + bz);
   }
   sum.total += length / 2;
 }

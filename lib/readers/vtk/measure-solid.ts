@@ -23,24 +23,36 @@ export function addTurnedSolid(sum: MeasureSum, corners: Float64Array, faces: Fa
 
 function addFace(sum: MeasureSum, corners: Float64Array, face: readonly number[]): void {
   const count = face.length;
-  const at = (corner: number, axis: number) => corners[3 * (face[corner] as number) + axis] as number;
   if (count === 3) {
-    addTetrahedron(sum, at(0, 0), at(0, 1), at(0, 2), at(1, 0), at(1, 1), at(1, 2), at(2, 0), at(2, 1), at(2, 2));
+    const [a, b, c] = [3 * (face[0] as number), 3 * (face[1] as number), 3 * (face[2] as number)];
+    addTetrahedron(sum, corners, corners[a] as number, corners[a + 1] as number, corners[a + 2] as number, b, c);
     return;
   }
-  let [x, y, z] = [0, 0, 0];
+  let x = 0;
+  let y = 0;
+  let z = 0;
   for (let corner = 0; corner < count; corner += 1) {
-    x += at(corner, 0) / count;
-    y += at(corner, 1) / count;
-    z += at(corner, 2) / count;
+    const at = 3 * (face[corner] as number);
+    x += corners[at] as number;
+    y += corners[at + 1] as number;
+    z += corners[at + 2] as number;
   }
-  for (let side = 0; side < count; side += 1) {
-    const next = side + 1 === count ? 0 : side + 1;
-    addTetrahedron(sum, x, y, z, at(side, 0), at(side, 1), at(side, 2), at(next, 0), at(next, 1), at(next, 2));
+  let last = 3 * (face[count - 1] as number);
+  for (let corner = 0; corner < count; corner += 1) {
+    const at = 3 * (face[corner] as number);
+    addTetrahedron(sum, corners, x / count, y / count, z / count, last, at);
+    last = at;
   }
 }
 
-function addTetrahedron(sum: MeasureSum, ax: number, ay: number, az: number, bx: number, by: number, bz: number, cx: number, cy: number, cz: number): void {
+/** The tetrahedron from the mean to a triangle, of one corner by its coordinates and two by where they stand. */
+function addTetrahedron(sum: MeasureSum, corners: Float64Array, ax: number, ay: number, az: number, b: number, c: number): void {
+  const bx = corners[b] as number;
+  const by = corners[b + 1] as number;
+  const bz = corners[b + 2] as number;
+  const cx = corners[c] as number;
+  const cy = corners[c + 1] as number;
+  const cz = corners[c + 2] as number;
   const volume = (ax * (by * cz - bz * cy) + ay * (bz * cx - bx * cz) + az * (bx * cy - by * cx)) / 6;
   sum.total += volume;
   sum.x += volume * (ax + bx + cx) / 4;

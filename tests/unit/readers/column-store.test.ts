@@ -8,14 +8,15 @@ import { byteSource } from '@/tests/support/byte-source';
 const isSame = (a: Float64Array, b: Float64Array) => Buffer.from(a.buffer).equals(Buffer.from(b.buffer));
 
 /** Files without a name that this process holds open. */
-const openFiles = () => fs.readdirSync('/proc/self/fd').filter((name) => {
+const listOpenFiles = () => fs.readdirSync('/proc/self/fd').filter((name) => {
   try {
     return fs.readlinkSync(`/proc/self/fd/${name}`).includes('fourfold-');
   } catch {
     // The folder itself was open while it was listed.
     return false;
   }
-}).length;
+});
+const openFiles = () => listOpenFiles().length;
 
 describe('createColumnStore(mostHeld)', () => {
   it('gives back every value, whatever memory it may take and in whatever order columns grow', () => {
@@ -57,6 +58,14 @@ describe('createColumnStore(mostHeld)', () => {
     expect(openFiles()).toBe(1);
     store.close();
     expect(openFiles()).toBe(0);
+  });
+
+  it('writes large blocks to disk also of a column that begins once memory is full', () => {
+    const store = createColumnStore(0);
+    const column = store.addColumn();
+    for (let i = 0; i < 100_000; i += 1) column.add(i);
+    expect(listOpenFiles().map((name) => fs.fstatSync(Number(name)).size)).toEqual([12 * 8192 * 8]);
+    store.close();
   });
 
   it('delivers rows of all columns together', () => {
