@@ -1,35 +1,14 @@
 import type { ColumnEngine } from '../numerics/column-engine';
 import { createAverageEvaluator } from '../numerics/expression/average-evaluator';
 import { createBlockEvaluator } from '../numerics/expression/block-evaluator';
-import type { Node } from '../numerics/expression/node';
 import { createMapGatherer } from '../numerics/maps/map-gatherer';
-import type { MapRoom } from '../numerics/maps/map-room';
 import { createMeshGatherer } from '../numerics/mesh/mesh-gatherer';
 import { prepareRegions } from '../numerics/regions/region-gatherer';
 import { createRigidGatherer } from '../numerics/rigid/rigid-gatherer';
 import type { GridChecks } from './grid-checks';
-import type { GridReading } from './grid-reading';
-import type { GridPart } from './grid-total';
-import type { ColumnPlan } from './plan-columns';
+import type { GridPart, GridTask } from './grid-task';
 import { createRowProblems } from './row-problems';
 import type { ColumnBatch } from './source';
-
-/** What norms are made from, beside columns: plain data, which a thread can hand to another. */
-export interface GridTask {
-  plan: ColumnPlan;
-  fields: string[];
-  /** The exact value of every field. */
-  exact: Node[];
-  average?: GridReading['average'];
-  mesh?: GridReading['mesh'];
-  rigid?: GridReading['rigid'];
-  /** The time of the grid, where the file has no column of times. */
-  t?: number;
-  bands?: GridReading['bands'];
-  maps?: GridReading['maps'];
-  /** Where this thread gathers maps. */
-  mapRoom?: MapRoom;
-}
 
 /** Gathers some of the rows of a grid. */
 export interface GridGatherer {

@@ -1,24 +1,12 @@
 import { drawMaps } from '../numerics/maps/draw-maps';
 import type { ErrorMap } from '../numerics/maps/error-map';
 import { createMapRoom, type MapRoom } from '../numerics/maps/map-room';
-import type { MeshPart } from '../numerics/mesh/mesh-part';
 import { createMeshTotal } from '../numerics/mesh/mesh-total';
 import type { GridNorms } from '../numerics/norms/grid-norms';
-import type { NormPart } from '../numerics/norms/norm-part';
 import { createRegionTotal } from '../numerics/regions/region-total';
-import { createRigidGatherer, type RigidPart } from '../numerics/rigid/rigid-gatherer';
+import { createRigidGatherer } from '../numerics/rigid/rigid-gatherer';
 import { bestRigidMotion } from '../numerics/rigid/rigid-motion';
-import type { GridTask } from './gather-grid';
-
-/** What some of the rows of a grid come to. */
-export interface GridPart {
-  /** By class of rows where parts of the domain are asked for (prepareRegions), else one. */
-  norms: NormPart[];
-  /** Null where the mesh is not asked for. */
-  mesh: MeshPart | null;
-  /** Null where no rigid motion is asked for. */
-  rigid: RigidPart | null;
-}
+import type { GridPart, GridTask } from './grid-task';
 
 export interface GridTotal {
   /** Parts in the order of the file. */

@@ -1,5 +1,5 @@
 import { parentPort } from 'node:worker_threads';
-import type { GridPart } from '@/lib/readers/grid-total';
+import type { GridPart } from '@/lib/readers/grid-task';
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import { createTableMemory } from '@/lib/readers/table/table-memory';
 import { createTableWork, type ChunkWork } from '@/lib/readers/table/table-work';

@@ -1,5 +1,5 @@
 import { Worker } from 'node:worker_threads';
-import type { GridPart } from '@/lib/readers/grid-total';
+import type { GridPart } from '@/lib/readers/grid-task';
 import type { ChunkHelper, OpenHelper, SharedRooms } from '@/lib/readers/table/chunk-helping';
 import type { ChunkResult, TableTask } from '@/lib/readers/table/table-work';
 

@@ -1,7 +1,6 @@
 import type { ErrorSeries, Norm } from '@/lib/numerics/assessment';
 import { knownError } from '@/lib/numerics/norms/known-error';
-import type { GridDifference } from './compared-grids';
-import type { PlacedGrid } from './study-series';
+import type { GridDifference, PlacedGrid } from './study-to-assess';
 
 type DifferencesOfField = Pick<ErrorSeries, 'grids' | 'comparedTo' | 'scale'>;
 interface Asked { field: string; norm: Norm; significantDigits: number | null }

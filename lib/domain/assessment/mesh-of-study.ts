@@ -5,7 +5,7 @@ import type { CaseDefinition } from '../cases/definition';
 import { cellCount } from '../studies/cell-count';
 import type { GridInput } from '../studies/input';
 import { hasNodes, type Box } from './has-nodes';
-import type { PlacedGrid, StudyGrid } from './study-series';
+import type { PlacedGrid, StudyGrid } from './study-to-assess';
 
 interface Space { dimension: number; volume: number | null; box?: Box | null }
 

@@ -1,7 +1,8 @@
 import type { Norm, SpaceTimeSeries } from '@/lib/numerics/assessment';
 import { gridSpacing } from '@/lib/numerics/spacing/grid-spacing';
 import { statedSpacing } from '../studies/stated-spacing';
-import { gridError, quantitySeries, type PlacedGrid, type StudySeries, type StudyToAssess } from './study-series';
+import { gridError, quantitySeries } from './study-series';
+import type { PlacedGrid, StudySeries, StudyToAssess } from './study-to-assess';
 
 type PlacedInTime = PlacedGrid & { dt: number };
 

@@ -1,35 +1,13 @@
-import type { ErrorSeries, Norm, QuantitySeries, SpaceTimeSeries } from '@/lib/numerics/assessment';
-import type { Similarity } from '@/lib/numerics/mesh/judge-similarity';
-import type { GridNorms } from '@/lib/numerics/norms/grid-norms';
+import type { ErrorSeries, Norm, QuantitySeries } from '@/lib/numerics/assessment';
 import { knownError } from '@/lib/numerics/norms/known-error';
 import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
-import type { Surroundings } from '@/lib/numerics/patterns/suggest-patterns';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
-import type { GridDifference } from './compared-grids';
 import { differencesOf } from './difference-series';
-import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
+import type { DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
 import { builtInRule } from '../rules/built-in-rule';
 import { refinedSpace, studySimilarity } from './mesh-of-study';
-import type { GridInput } from '../studies/input';
 import { statedSpacing } from '../studies/stated-spacing';
-
-/** A grid as it takes part in the assessment: what its author stated and, where it has a file, the norms read from it. */
-export interface StudyGrid { grid: GridInput; norms: GridNorms | null }
-export type PlacedGrid = StudyGrid & { h: number };
-
-export interface StudyToAssess {
-  definition: CaseDefinition;
-  grids: readonly StudyGrid[];
-  refinement: 'space' | 'time';
-  dimension: number;
-  /** Of the domain's box, null where unknown. */
-  volume: number | null;
-  box?: Surroundings['box'];
-  /** Of solutions without an exact one, finest first. */
-  differences?: readonly GridDifference[];
-}
-
-export type StudySeries = { ok: true; errors: ErrorSeries[]; quantities: QuantitySeries[]; spaceTime?: SpaceTimeSeries[]; similarity?: Similarity | null; around?: Surroundings } | { ok: false; reason: string };
+import type { GridDifference, PlacedGrid, StudySeries, StudyToAssess } from './study-to-assess';
 
 /** Series of every declared field and norm and of every quantity; or in words why the grids cannot be put in a row. */
 export function studySeries({ definition, grids, differences = [], ...around }: StudyToAssess): StudySeries {

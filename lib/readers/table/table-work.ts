@@ -1,6 +1,6 @@
-import type { GridPart } from '../grid-total';
 import type { DecimalMark } from './explain-row';
-import { prepareGathering, type GridTask } from '../gather-grid';
+import { prepareGathering } from '../gather-grid';
+import type { GridPart, GridTask } from '../grid-task';
 import { createGridChecks, type GridChecks } from '../grid-checks';
 import { createChunkReader, type ChunkStart } from './read-chunk';
 import type { TableDialect } from './table-dialect';

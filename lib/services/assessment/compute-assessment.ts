@@ -1,7 +1,7 @@
 import type { GridRow } from '@/db/queries/grids';
 import type { StudyHead } from '@/db/queries/studies';
 import type { BoundRevision } from '@/db/queries/study-revisions';
-import type { GridDifference } from '@/lib/domain/assessment/compared-grids';
+import type { GridDifference } from '@/lib/domain/assessment/study-to-assess';
 import type { Assessment } from '@/lib/domain/assessment/schema';
 import { spaceTimeSeries } from '@/lib/domain/assessment/space-time-series';
 import { studySeries } from '@/lib/domain/assessment/study-series';

@@ -1,5 +1,6 @@
 import { findUpload } from '@/db/queries/uploads';
-import { comparedGrids, type GridDifference } from '@/lib/domain/assessment/compared-grids';
+import { comparedGrids } from '@/lib/domain/assessment/compared-grids';
+import type { GridDifference } from '@/lib/domain/assessment/study-to-assess';
 import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import { solutionFields } from '@/lib/domain/cases/solution-fields';
 import type { ColumnMapping, ReaderMapping } from '@/lib/domain/columns/column-mapping';

@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import type { GridReading } from '@/lib/readers/grid-reading';
-import type { GridPart } from '@/lib/readers/grid-total';
+import type { GridPart } from '@/lib/readers/grid-task';
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import { readGrid } from '@/lib/readers/read-grid';
 import { RejectedFile } from '@/lib/readers/rejected-file';

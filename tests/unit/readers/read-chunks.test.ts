@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { gzipSync } from 'node:zlib';
-import type { GridPart } from '@/lib/readers/grid-total';
+import type { GridPart } from '@/lib/readers/grid-task';
 import type { OpenHelper } from '@/lib/readers/table/chunk-helping';
 import { createGridChecks } from '@/lib/readers/grid-checks';
 import type { GridReading } from '@/lib/readers/grid-reading';

@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { studySeries, type StudyGrid } from '@/lib/domain/assessment/study-series';
+import { studySeries } from '@/lib/domain/assessment/study-series';
+import type { StudyGrid } from '@/lib/domain/assessment/study-to-assess';
 import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
 import type { GridInput } from '@/lib/domain/studies/input';
 
