@@ -88,6 +88,18 @@ export interface Codes {
   slug: string;
 }
 
+export interface GridMaps {
+  bounds: Json;
+  field: string;
+  grid_id: string;
+  height: number;
+  largest: number;
+  organisation_id: string;
+  plane: string;
+  shares: Buffer;
+  width: number;
+}
+
 export interface GridResults {
   created_at: Generated<Timestamp>;
   grid_id: string;
@@ -320,6 +332,7 @@ export interface DB {
   case_revisions: CaseRevisions;
   cases: Cases;
   codes: Codes;
+  grid_maps: GridMaps;
   grid_results: GridResults;
   grids: Grids;
   idempotency_keys: IdempotencyKeys;

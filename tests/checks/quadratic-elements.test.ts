@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { readNorms } from '@/lib/services/reading/read-norms';
 import { caseDefinitionSchema } from '@/lib/domain/cases/definition';
+import { wholeFields } from '@/lib/domain/assessment/whole-fields';
 import { studySeries } from '@/lib/domain/assessment/study-series';
 import { problemDefinitionSchema } from '@/lib/domain/problems/schema';
 import { assessSeries } from '@/lib/numerics/assess-series';
@@ -15,12 +16,12 @@ async function assess(declared: unknown, tableOf: (elements: number) => string, 
   const definition = caseDefinitionSchema.parse(declared);
   const grids = await Promise.all(sizes.map(async (cellsPerDirection) => {
     const mapping = { x: 'x', weight: 'w', fields: columns };
-    const { norms } = await readNorms({ definition, problem, mapping, cellsPerDirection, statedSha256: null }, (reading) => readGrid(byteSource(tableOf(cellsPerDirection)), reading));
+    const { norms } = await readNorms({ definition, problem, mapping, grid: { cellsPerDirection }, seenAs: 1, statedSha256: null }, (reading) => readGrid(byteSource(tableOf(cellsPerDirection)), reading));
     return { grid: { label: String(cellsPerDirection), cellsPerDirection }, norms };
   }));
   const series = studySeries({ definition, grids, refinement: 'space', dimension: 1, volume: 1, box: { x: [0, 1] } });
   if (!series.ok) throw new Error(series.reason);
-  return assessSeries(series).fields.map(({ norm, outcome, reasons, orders }) => ({ norm, outcome, reasons, order: orders[0]?.order ?? NaN }));
+  return wholeFields(assessSeries(series).fields).map(({ norm, outcome, reasons, orders }) => ({ norm, outcome, reasons, order: orders[0]?.order ?? NaN }));
 }
 
 const atPoints = (rule: typeof twoPoints | typeof threePoints) => (elements: number) => `x,w,u,u_x\n${solveQuadraticElements(elements, rule).points.map(({ x, w, u, slope }) => [x, w, u, slope].join(',')).join('\n')}\n`;

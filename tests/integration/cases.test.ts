@@ -59,7 +59,6 @@ describe('POST /api/v1/cases', () => {
 
   it.each([
     ['fields.0.norms.0.backing.scheme', norm({ backing: { scheme: 'central-2' } })],
-    ['boundaryBand', { boundaryBand: { thickness: 0.1 } }],
   ])('answers 422 not available for %s', async (path, changes) => {
     expect(await refused(person, createCaseContract, { body: caseOf(changes) })).toMatchObject({ status: 422, title: 'Not available yet', errors: [{ path }] });
   });

@@ -13,6 +13,7 @@ import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
   getStudyContract, listStudiesContract, reviseStudyContract, updateGridContract,
 } from '@/lib/domain/studies/schema';
+import { getGridMapContract } from '@/lib/domain/studies/map-schema';
 import { listRechecksContract, requestRecheckContract } from '@/lib/domain/studies/recheck-schema';
 import { getStorageContract } from '@/lib/domain/storage/schema';
 import { createTokenContract, deleteTokenContract, listTokensContract } from '@/lib/domain/tokens/schema';
@@ -116,6 +117,7 @@ export const roleRows: RoleRow[] = [
   write(deleteUploadContract, upload),
   write(putDataContract, (ground) => ({ ...grid(ground), body: 'x,y,T\n', headers: { 'content-type': 'text/csv' } })),
   read(getGridResultContract, grid),
+  read(getGridMapContract, (ground) => ({ params: { ...grid(ground).params, field: 'T' } })),
   read(getStorageContract, nothing, 'answer'),
   write(reviseStudyContract, study),
   write(assessStudyContract, study),

@@ -25,6 +25,7 @@ async function insertStudy(person: Person, work: Work): Promise<void> {
   await run("insert into uploads (organisation_id, id, grid_id, filename, bytes, storage_key, created_by) values ($1, $2, $3, 'a.csv', 1, $4, $5)",
     [at, upload, grid, `trial/${upload}`, by]);
   await run("insert into grid_results (organisation_id, grid_id, upload_id, mapping, norms, numerics_version) values ($1, $2, $3, '{}', '{}', '1')", [at, grid, upload]);
+  await run("insert into grid_maps (organisation_id, grid_id, field, plane, width, height, bounds, largest, shares) values ($1, $2, 'T', 'x', 1, 1, '{}', 1, '\\x0000803f')", [at, grid]);
   await run("insert into assessments (organisation_id, id, study_id, study_revision, body, inputs_sha256, numerics_version) values ($1, $2, $3, 1, '{}', '', '1')",
     [at, randomUUID(), study]);
   await run("insert into rechecks (organisation_id, id, study_id, study_revision, numerics_version, requested_by) values ($1, $2, $3, 1, '1', $4)",

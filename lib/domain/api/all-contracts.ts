@@ -16,6 +16,7 @@ import {
 import { createOrganisationContract, meContract, signInContract, signOutContract, signOutEverywhereContract, signUpContract } from '../people/schema';
 import { createProblemContract, getProblemContract, listProblemsContract, updateProblemContract } from '../problems/schema';
 import { getStorageContract } from '../storage/schema';
+import { getGridMapContract } from '../studies/map-schema';
 import { listRechecksContract, requestRecheckContract } from '../studies/recheck-schema';
 import {
   addGridContract, assessStudyContract, createStudyContract, getEventsContract, getGridResultContract, getOutcomeContract, getOutcomeXmlContract,
@@ -41,7 +42,7 @@ export const allContracts: readonly ContractShape[] = [
   createProblemContract, listProblemsContract, getProblemContract, updateProblemContract,
   createCaseContract, listCasesContract, getCaseContract, updateCaseContract, putColumnsContract,
   createStudyContract, listStudiesContract, getStudyContract, addGridContract, updateGridContract, reviseStudyContract, assessStudyContract, requestRecheckContract, listRechecksContract,
-  getOutcomeContract, getOutcomeXmlContract, getEventsContract, getGridResultContract,
+  getOutcomeContract, getOutcomeXmlContract, getEventsContract, getGridResultContract, getGridMapContract,
   putDataContract, startUploadContract, signPartsContract, completeUploadContract, getUploadContract, deleteUploadContract, previewContract, getStorageContract,
   assessContract, healthContract, readyContract, metricsContract, openApiContract,
 ];

@@ -1,6 +1,8 @@
 import type { Pattern, PatternCode } from '@/lib/numerics/assessment';
 import { formatOrder } from '../numbers/format-order';
 
+const unknown = '–';
+
 type PatternText = (of: string, evidence: (name: string) => string) => string;
 
 /** What each pattern may mean; a hint that wants checking. */
@@ -8,7 +10,9 @@ const texts: Record<PatternCode, PatternText> = {
   'one-field-flat': (of, show) => `The error of ${of} hardly falls (order ${show('order')}) while the other fields show ${show('lowestOther')} or more: look at its source term, boundary value or constant.`,
   'all-flat': (_, show) => `No error falls (order ${show('highestOrder')} at most): look at the exact solution, time or units, or a scheme that is not consistent.`,
   datum: (of, show) => `Without its mean the error of ${of} falls with order ${show('orderWithoutMean')}: the field may be right up to a constant. Declare its datum as mean.`,
-  'boundary-closure': (of, show) => `L1, L2 and L∞ of ${of} fall with orders ${show('L1')}, ${show('L2')} and ${show('Linf')}, and the largest error lies at the boundary: look at the boundary closure or condition.`,
+  'boundary-closure': (of, show) => (show('boundaryOrder') !== unknown
+    ? `The error of ${of} falls with order ${show('boundaryOrder')} along the boundary and ${show('interiorOrder')} inside, and is the larger along the boundary: look at the boundary closure or condition.`
+    : `L1, L2 and L∞ of ${of} fall with orders ${show('L1')}, ${show('L2')} and ${show('Linf')}, and the largest error lies at the boundary: look at the boundary closure or condition.`),
   shock: (of, show) => `L1, L2 and L∞ of ${of} fall with orders ${show('L1')}, ${show('L2')} and ${show('Linf')}, as across a shock.`,
   contact: (of, show) => `L1, L2 and L∞ of ${of} fall with orders ${show('L1')}, ${show('L2')} and ${show('Linf')}, as across a contact.`,
   limiter: (of, show) => `L2 and L∞ of ${of} fall with orders ${show('L2')} and ${show('Linf')}, as where a limiter clips smooth extrema.`,
@@ -21,5 +25,5 @@ const texts: Record<PatternCode, PatternText> = {
 
 /** A hint in a sentence. */
 export function explainPattern({ code, field, evidence }: Pattern): string {
-  return texts[code](field ?? 'the fields', (name) => (evidence[name] === undefined ? '–' : formatOrder(evidence[name])));
+  return texts[code](field ?? 'the fields', (name) => (evidence[name] === undefined ? unknown : formatOrder(evidence[name])));
 }

@@ -3,6 +3,7 @@ import type { Explanation } from './explanation';
 import { explainField, explainQuantity } from './reason-text';
 import { spaceTimeNextStep, stateSpaceTime } from './state-space-time';
 import { joinWords, nameSeries } from './series-name';
+import { wholeFields } from './whole-fields';
 
 /**
  * Why the study as a whole has its outcome: how many of what counts pass, fail or stay open, by name, and the next step
@@ -42,7 +43,8 @@ function countSentence(names: readonly string[], { all, noun, outcome }: { all: 
   return `${names.length} of ${all} ${which} ${names.length === 1 ? one : several}: ${joinWords(names)}.`;
 }
 
-function explainNothingCounts({ fields }: StatedAssessment): Explanation {
+function explainNothingCounts(assessment: StatedAssessment): Explanation {
+  const fields = wholeFields(assessment.fields);
   const alone = fields.filter((field) => field.counts && field.norm === 'L1'
     && !fields.some((other) => other.field === field.field && other.counts && other.norm !== 'L1'));
   if (alone.length > 0) {

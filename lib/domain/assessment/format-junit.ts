@@ -2,6 +2,7 @@ import type { FieldAssessment, QuantityAssessment } from '@/lib/numerics/assessm
 import type { OutcomeAnswer } from '../studies/schema';
 import { explainStudy } from './explain-study';
 import { explainField, explainQuantity } from './reason-text';
+import { wholeFields } from './whole-fields';
 
 type Verdict = { kind: 'pass' } | { kind: 'failure' | 'skipped' | 'error'; type: string };
 interface TestCase { name: string; verdict: Verdict; text: string }
@@ -22,10 +23,10 @@ function verdictOf({ outcome, counts }: { outcome: FieldAssessment['outcome']; c
 }
 
 function testCases({ outcome, assessment }: OutcomeAnswer, inconclusive: 'fail' | 'skip'): TestCase[] {
-  const { fields, quantities } = assessment;
+  const { quantities } = assessment;
   const texts = (explanations: { sentence: string; nextStep: string }[]) => explanations.map(({ sentence, nextStep }) => `${sentence} ${nextStep}`).join(' ');
   const cases = [
-    ...fields.map((field: FieldAssessment) => ({
+    ...wholeFields(assessment.fields).map((field: FieldAssessment) => ({
       name: `${field.field} ${field.norm}`, verdict: verdictOf(field, inconclusive), text: texts(explainField(field)),
     })),
     ...quantities.map((quantity: QuantityAssessment) => ({

@@ -1,4 +1,4 @@
-import type { ErrorSeries, Norm, QuantitySeries } from '@/lib/numerics/assessment';
+import { regions, type ErrorSeries, type Norm, type QuantitySeries, type Region } from '@/lib/numerics/assessment';
 import { knownError } from '@/lib/numerics/norms/known-error';
 import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
@@ -31,11 +31,26 @@ export function studySeries({ definition, grids, differences = [], ...around }: 
         ...errorSeriesOfQuantity(quantitySeries(quantity, placed, 0), quantity.knownValue ?? 0),
         minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
       })),
+      ...placedByRegion(placed).flatMap(({ region, placed: parts }) => definition.fields.flatMap((field) => field.norms.flatMap((norm) => (
+        fieldSeries({ definition, differences: [], ...around }, { field, norm }, parts).flatMap((series) => (series.grids.length === 0 ? [] : { ...series, region, counts: false }))
+      )))),
     ],
     similarity: around.refinement === 'space' ? studySimilarity(definition, placed, around) : null,
     around: { box: around.box, means: placed.flatMap(({ grid, norms }) => (norms?.fields ?? []).map(({ field, mean }) => ({ field, label: grid.label, mean }))) },
     quantities: unknown.map((quantity) => quantitySeries(quantity, placed, definition.minimumGrids ?? builtInRule.minimumGridsOfQuantity)),
   };
+}
+
+/** Grids with the norms of each part of the domain that some grid has rows in, in the place of those of the whole. */
+function placedByRegion(placed: readonly PlacedGrid[]): { region: Region; placed: PlacedGrid[] }[] {
+  return regions.flatMap((region) => {
+    const parts = placed.flatMap(({ grid, norms, h }): PlacedGrid[] => {
+      const own = norms?.regions?.find((part) => part.region === region);
+      // What was typed is an error of the whole.
+      return own ? [{ grid: { ...grid, errors: undefined }, norms: own, h }] : [];
+    });
+    return parts.length === 0 ? [] : [{ region, placed: parts }];
+  });
 }
 
 function fieldSeries({ definition, dimension, volume, differences }: Pick<StudyToAssess, 'definition' | 'dimension' | 'volume'> & { differences: readonly GridDifference[] }, { field, norm }: { field: DeclaredField; norm: DeclaredNorm }, placed: readonly PlacedGrid[]): ErrorSeries[] {

@@ -5,10 +5,8 @@ type Asked = NotAvailableYet | false;
 
 /** The first member that asks for what is not available yet. */
 export function notYetOfCase(definition: CaseDefinition): NotAvailableYet | null {
-  const { fields, boundaryBand } = definition;
   const asked: Asked[] = [
-    boundaryBand !== undefined && { path: 'boundaryBand', what: 'A boundary band' },
-    ...fields.flatMap((field, index) => askedByField(field, `fields.${index}`)),
+    ...definition.fields.flatMap((field, index) => askedByField(field, `fields.${index}`)),
   ];
   return asked.find((each) => each !== false) ?? null;
 }

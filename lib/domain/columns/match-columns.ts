@@ -2,7 +2,7 @@ import type { ColumnMapping } from './column-mapping';
 import { resolveColumn } from './resolve-column';
 
 const coordinates = ['x', 'y', 'z'] as const;
-const optional = ['t', 'dx', 'dy', 'dz'] as const;
+const optional = ['t', 'dx', 'dy', 'dz', 'distance', 'flag'] as const;
 const weightNames = ['w', 'weight', 'vol', 'volume', 'area'];
 
 export interface ColumnNeeds {

@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { regions } from '@/lib/numerics/assessment';
 import { contract } from '../api/contract';
 import { listOf, listQuerySchema } from '../api/lists';
 import { timestampSchema } from '../api/names';
@@ -8,6 +9,7 @@ import { columnMappingSchema } from '../columns/column-mapping';
 import { dimensionSchema, problemDefinitionSchema } from '../problems/schema';
 import { rejectionReasonSchema } from '../uploads/rejection';
 import { uploadStateSchema } from '../uploads/schema';
+import { gridMapSchema } from './map-schema';
 import { createStudySchema, gridInputSchema, refinementSchema, updateGridSchema } from './input';
 
 export const studyStateSchema = z.enum([
@@ -87,13 +89,19 @@ const fieldResultSchema = z.strictObject({
   datum: z.strictObject({ kind: z.enum(['mean', 'scale', 'rigid']), value: z.number() }).optional()
     .meta({ description: 'What was taken out of the field before its norms: the constant, the factor it was multiplied by, or its component of the rigid motion at the centre.' }),
 });
+const gradientResultSchema = z.strictObject({ field: z.string(), H1: z.number(), exactH1: z.number() });
+const regionResultSchema = z.strictObject({
+  region: z.enum(regions), rows: z.number().int(), weightSum: z.number(), fields: z.array(fieldResultSchema), gradients: z.array(gradientResultSchema),
+});
 const gridResultSchema = z.strictObject({
   label: z.string(), upload: z.string(), sha256: z.string(), rows: z.number().int(), weightSum: z.number(), equalWeights: z.boolean(),
   mapping: columnMappingSchema, fields: z.array(fieldResultSchema),
   solutions: z.array(z.strictObject({
     field: z.string(), L1: z.number(), L2: z.number(), Linf: z.number(), minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().nullable(),
   })).optional().meta({ description: 'Norms of the fields themselves, where the problem has no exact solution.' }),
-  gradients: z.array(z.strictObject({ field: z.string(), H1: z.number(), exactH1: z.number() })).meta({ description: 'H1 seminorms, of fields with columns of their gradient.' }),
+  gradients: z.array(gradientResultSchema).meta({ description: 'H1 seminorms, of fields with columns of their gradient.' }),
+  regions: z.array(regionResultSchema).meta({ description: 'The same of parts of the domain, each divided by its own sum of weights; none where nothing tells the boundary.' }),
+  maps: z.array(gridMapSchema).meta({ description: 'Maps of the largest errors, by field and plane; their bins are called for one by one.' }),
   mesh: meshSchema.optional(),
   motion: z.strictObject({ centre: z.array(z.number()), translation: z.array(z.number()), rotation: z.array(z.number()) }).optional()
     .meta({ description: 'The small rigid motion taken out of a displacement: translation + rotation × (x − centre), with one angle in two dimensions and a vector in three, in radians.' }),

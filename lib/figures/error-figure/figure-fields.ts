@@ -12,10 +12,11 @@ export const isDrawn = (grid: FieldGrid): boolean => grid.error > 0 && Number.is
 
 const normOrder: SeriesNorm[] = [...norms, 'value'];
 
-/** The assessments of a figure gathered by field, in the order in which the fields come. */
+/** The assessments of a figure gathered by field, in the order in which the fields come; those of parts of the domain are left out. */
 export function figureFields(assessments: readonly FieldAssessment[]): FigureField[] {
   const fields = new Map<string, FigureField>();
   for (const assessment of assessments) {
+    if (assessment.region !== 'all') continue;
     const entry = fields.get(assessment.field) ?? { field: assessment.field, norms: [], grids: [] };
     entry.norms.push(assessment);
     for (const { label, h } of assessment.grids) {

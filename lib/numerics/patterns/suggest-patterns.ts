@@ -1,5 +1,6 @@
 import type { FieldAssessment, Pattern, Position } from '../assessment';
 import { pairwiseOrder } from '../order/pairwise-order';
+import { boundaryEvidence } from './boundary-evidence';
 import { fieldOrders, type FieldOrders } from './field-orders';
 import { normPatterns } from './norm-patterns';
 import { trendPatterns } from './trend-patterns';
@@ -21,7 +22,7 @@ const flat = 0.25;
  */
 export function suggestPatterns(fields: readonly FieldAssessment[], around: Surroundings = {}): Pattern[] {
   const all = fieldOrders(fields);
-  return [...flatPatterns(all, around), ...all.flatMap((field) => (isFlat(field) ? [] : [...normPatterns(field, spacingsFromBoundary(field, around)), ...trendPatterns(field)]))];
+  return [...flatPatterns(all, around), ...all.flatMap((field) => (isFlat(field) ? [] : [...normPatterns(field, { spacings: spacingsFromBoundary(field, around), parts: boundaryEvidence(field.field, fields) }), ...trendPatterns(field)]))];
 }
 
 function mainOrder({ last }: FieldOrders): number | null {

@@ -4,6 +4,7 @@ import { findBoundRevision, lockStudyRevision, type BoundRevision, type Revision
 import { findUpload, type UploadRow } from '@/db/queries/uploads';
 import type { JobContext } from '../outbox/job-context';
 import { definitionOf } from '../studies/grid-definition';
+import { readsAlike } from '../studies/reads-alike';
 import { withOrganisation, type Trx } from '../with-organisation';
 
 /** A grid whose file is being read, as it was when the reading began. */
@@ -42,13 +43,13 @@ export async function beginReading(ctx: JobContext, gridId: string): Promise<Rea
 }
 
 /**
- * Runs `work` with the revision held, where the reading is still the one the grid waits for: same file, same time, not
+ * Runs `work` with the revision held, where the reading is still the one the grid waits for: same file, same statement, not
  * finished by another. Whether it was.
  */
 export async function whileReading(ctx: JobContext, { grid, upload }: Reading, work: (trx: Trx) => Promise<void>): Promise<boolean> {
   return withOrganisation(ctx, async (trx) => {
     const now = await load(ctx, trx, grid.id);
-    if (now?.grid.state !== 'reading' || now.upload.id !== upload.id || definitionOf(now.grid).t !== definitionOf(grid).t) return false;
+    if (now?.grid.state !== 'reading' || now.upload.id !== upload.id || !readsAlike(definitionOf(now.grid), definitionOf(grid))) return false;
     await work(trx);
     return true;
   });

@@ -3,12 +3,14 @@ import type { ColumnMapping } from '@/lib/domain/columns/column-mapping';
 import { splitColumns } from '@/lib/domain/columns/split-columns';
 import type { ProblemDefinition } from '@/lib/domain/problems/schema';
 import type { FieldNorms, GradientNorms, GridNorms } from '@/lib/numerics/norms/grid-norms';
+import type { ErrorMap } from '@/lib/numerics/maps/error-map';
 import { RejectedFile } from '@/lib/readers/rejected-file';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import { planRigid, withoutDatum, type FoundDatum } from './datums';
 import { derivativeName, squareName } from './names-in-reading';
+import type { PartsAsked } from './plan-parts';
 
-interface Asked { definition: CaseDefinition; problem: ProblemDefinition; mapping: ColumnMapping; t?: number; cellsPerDirection?: number | number[] }
+type Asked = Pick<PartsAsked, 'definition' | 'problem' | 'mapping' | 'grid'>;
 type ReadField = GridReading['fields'][number];
 
 const axes = ['x', 'y', 'z'] as const;
@@ -17,7 +19,7 @@ const axes = ['x', 'y', 'z'] as const;
  * What is read of a file: every field against what it is compared with, its gradient columns against the derivatives of
  * the exact field, and what the best factor of a field up to a scale is made of.
  */
-export function planReading({ definition, problem, mapping, t, cellsPerDirection }: Asked): GridReading {
+export function planReading({ definition, problem, mapping, grid: { t, cellsPerDirection } }: Asked): GridReading {
   const { dimension, exact = {}, constants } = problem;
   const columns: Record<string, string> = {};
   const fields: ReadField[] = [];
@@ -79,5 +81,17 @@ export function joinNorms(definition: CaseDefinition, first: GridNorms, { second
       ...(parts.some(({ storedAs }) => storedAs === 'single') && { storedAs: 'single' as const }),
     }];
   });
-  return { ...first, fields, ...(gradients.length > 0 && { gradients }) };
+  const regions = first.regions?.map((part) => {
+    const again = second?.regions?.find(({ region }) => region === part.region) ?? null;
+    return { ...joinNorms(definition, part, { second: again, datums }), region: part.region };
+  });
+  return { ...first, fields, ...(gradients.length > 0 && { gradients }), ...(regions && { regions }) };
+}
+
+/** The maps of the declared fields: after a datum was removed those of the second reading, of a scaled field in the exact one's size. */
+export function joinMaps(first: readonly ErrorMap[], second: readonly ErrorMap[], datums: ReadonlyMap<string, FoundDatum>): ErrorMap[] {
+  return [...first, ...second.map((map) => {
+    const datum = datums.get(map.field);
+    return datum?.kind === 'scale' ? { ...map, largest: map.largest * Math.abs(datum.value) } : map;
+  })];
 }

@@ -1,6 +1,7 @@
 import { isDeepStrictEqual } from 'node:util';
 import { lockCaseColumns } from '@/db/queries/cases';
 import { upsertGridResult } from '@/db/queries/grid-results';
+import { replaceGridMaps } from '@/db/queries/grid-maps';
 import { updateGrid } from '@/db/queries/grids';
 import { updateRevisionFailure } from '@/db/queries/study-revisions';
 import { updateUpload } from '@/db/queries/uploads';
@@ -22,6 +23,7 @@ import { withOrganisation } from '../with-organisation';
 import { beginReading, whileReading, type Reading } from './begin-reading';
 import type { GridReader } from './grid-reader';
 import { mapColumns } from './map-columns';
+import { mapRow } from './map-row';
 import { readNorms } from './read-norms';
 import { reportProgress } from './report-progress';
 
@@ -37,7 +39,7 @@ async function reject(ctx: JobContext, reading: Reading, reasons: RejectionReaso
   if (isHeard) await tellState(ctx, reading, 'rejected');
 }
 
-async function keepResult(ctx: JobContext, reading: Reading, mapping: ColumnMapping, { norms, sha256 }: GridReadResult): Promise<void> {
+async function keepResult(ctx: JobContext, reading: Reading, mapping: ColumnMapping, { norms, maps, sha256 }: GridReadResult): Promise<void> {
   const { grid, upload, at } = reading;
   let isSettled = false;
   const isHeard = await whileReading(ctx, reading, async (trx) => {
@@ -47,6 +49,7 @@ async function keepResult(ctx: JobContext, reading: Reading, mapping: ColumnMapp
       organisation_id: ctx.organisation.id, grid_id: grid.id, upload_id: upload.id, mapping: json(mapping), norms: json(norms),
       numerics_version: numericsVersion, created_at: ctx.clock(),
     });
+    await replaceGridMaps(trx, ctx.organisation.id, grid.id, maps.map(mapRow));
     await updateRevisionFailure(trx, at, null);
     isSettled = await settleStudy(trx, at, ctx.clock());
   });
@@ -87,10 +90,10 @@ export async function readGridFile(ctx: JobContext, gridId: string, reader: Grid
     const mapping = await findMapping(ctx, reading, reader);
     if (!mapping) return;
     const onProgress = reportProgress(ctx, reading);
-    const { bound, grid, upload } = reading;
+    const { bound, grid, upload, head } = reading;
     const result = await readNorms({
       definition: caseDefinitionSchema.parse(bound.case_definition), problem: problemDefinitionSchema.parse(bound.problem_definition), mapping,
-      t: definitionOf(grid).t, cellsPerDirection: definitionOf(grid).cellsPerDirection, statedSha256: upload.stated_sha256,
+      grid: definitionOf(grid), seenAs: head.dimension, statedSha256: upload.stated_sha256,
     }, (asked) => reader.read({ storageKey: upload.storage_key, bytes: Number(upload.bytes) }, asked, onProgress));
     // As it was when it was received or last read: other bytes are a fault of storage, and not to be believed.
     if (upload.sha256 !== null && upload.sha256 !== result.sha256) throw new Error(`Storage gave a file with SHA-256 ${result.sha256}; ${upload.sha256} was stored.`);

@@ -1,7 +1,7 @@
 import { findAssessment } from '@/db/queries/assessments';
 import { listGrids, type GridRow } from '@/db/queries/grids';
 import { findRecheck, finishRecheck } from '@/db/queries/rechecks';
-import { findStudy } from '@/db/queries/studies';
+import { findStudy, type StudyHead } from '@/db/queries/studies';
 import { findBoundRevision, type BoundRevision } from '@/db/queries/study-revisions';
 import { findUpload } from '@/db/queries/uploads';
 import { json } from '@/db/json';
@@ -21,7 +21,7 @@ import { withOrganisation } from '../with-organisation';
 interface ReadAgain { row: GridRow; differences: ResultDifference[] }
 
 /** What the file of a grid comes to now, in the place of what it came to before; a grid without a file stays as typed. */
-async function readAgain(ctx: JobContext, row: GridRow, { bound, reader }: { bound: BoundRevision; reader: GridReader }): Promise<ReadAgain> {
+async function readAgain(ctx: JobContext, row: GridRow, { head, bound, reader }: { head: StudyHead; bound: BoundRevision; reader: GridReader }): Promise<ReadAgain> {
   const { upload_id: uploadId, norms, mapping } = row;
   if (uploadId === null || norms === null || mapping === null || row.excluded !== null) return { row, differences: [] };
   const upload = await withOrganisation(ctx, (trx) => findUpload(trx, ctx.organisation.id, uploadId));
@@ -30,7 +30,7 @@ async function readAgain(ctx: JobContext, row: GridRow, { bound, reader }: { bou
   try {
     const result = await readNorms({
       definition: caseDefinitionSchema.parse(bound.case_definition), problem: problemDefinitionSchema.parse(bound.problem_definition),
-      mapping: mapping as unknown as ColumnMapping, t: definitionOf(row).t, cellsPerDirection: definitionOf(row).cellsPerDirection, statedSha256: null,
+      mapping: mapping as unknown as ColumnMapping, grid: definitionOf(row), seenAs: head.dimension, statedSha256: null,
     }, (reading) => reader.read({ storageKey: upload.storage_key, bytes: Number(upload.bytes) }, reading, () => undefined));
     const differences = result.sha256 === row.sha256 ? [] : [{ path: `${path}.sha256`, before: row.sha256, after: result.sha256 }];
     return { row: { ...row, norms: JSON.parse(JSON.stringify(result.norms)) as GridRow['norms'] }, differences };
@@ -53,7 +53,7 @@ export async function recheckStudy(ctx: JobContext, id: string, reader: GridRead
   if (!loaded) return;
   const { head, bound, kept, rows } = loaded;
   const read: ReadAgain[] = [];
-  for (const row of rows) read.push(await readAgain(ctx, row, { bound, reader }));
+  for (const row of rows) read.push(await readAgain(ctx, row, { head, bound, reader }));
   const compared = compare({ head, bound, rows }, { kept, read, after: await assessAgain(ctx, { head, bound, rows: read.map(({ row }) => row) }, reader) });
   await withOrganisation(ctx, (trx) => finishRecheck(trx, organisationId, id, {
     result: compared.result, largest_difference: compared.largestDifference, differences: json(compared.differences), finished_at: ctx.clock(),

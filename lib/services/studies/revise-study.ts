@@ -1,4 +1,5 @@
 import { findCaseBinding } from '@/db/queries/case-bindings';
+import { copyGridMaps } from '@/db/queries/grid-maps';
 import { copyGridResult } from '@/db/queries/grid-results';
 import { insertGrids, listGrids, type GridRow } from '@/db/queries/grids';
 import { advanceStudyRevision } from '@/db/queries/studies';
@@ -33,7 +34,10 @@ async function copyGrid(trx: Trx, row: GridRow, { at, isSameDefinition }: { at: 
     rows_read: isKept ? row.rows_read : null, reasons: json(isKept ? row.reasons : []),
   }]);
   if (!isKept) await enqueueJob(trx, { organisationId: at.organisationId, job: 'grid.read', subjectId: id, subjectRevision: null });
-  else if (row.state === 'read') await copyGridResult(trx, at.organisationId, row.id, id);
+  else if (row.state === 'read') {
+    await copyGridResult(trx, at.organisationId, row.id, id);
+    await copyGridMaps(trx, at.organisationId, row.id, id);
+  }
 }
 
 /**

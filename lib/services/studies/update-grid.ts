@@ -13,6 +13,7 @@ import { freezePlan } from './freeze-plan';
 import { definitionOf, type GridDefinition } from './grid-definition';
 import { mapGrid } from './map-grid';
 import { refuseUnfitGrid } from './refuse-unfit-grid';
+import { readsAlike } from './reads-alike';
 import { requireGrid } from './require-grid';
 import { lockCollectingStudy } from './require-study';
 import { settleStudy } from './settle-study';
@@ -22,8 +23,8 @@ const planned = ['h', 'cells', 'cellsPerDirection', 'dt', 't'] as const;
 
 function nextState(row: GridRow, before: GridDefinition, after: GridDefinition): string {
   if (row.upload_id === null) return isTyped(after) ? 'typed' : 'expected';
-  // Another time means another exact solution: a file that was read is read again.
-  const isReadAgain = before.t !== after.t && ['needs-columns', 'reading', 'read', 'rejected'].includes(row.state);
+  // Another time means another exact solution, another spacing other bands: a file that was read is read again.
+  const isReadAgain = !readsAlike(before, after) && ['needs-columns', 'reading', 'read', 'rejected'].includes(row.state);
   return isReadAgain ? 'stored' : row.state;
 }
 

@@ -23,7 +23,7 @@ async function read(fields: object[], columns: Record<string, (x: number, y: num
   const rows = points.map(({ x, y }) => [x, y, ...Object.values(columns).map((of) => of(x, y))].join(','));
   const gradients = definition.fields.filter(({ norms }) => norms.some(({ norm }) => norm === 'H1')).map(({ field }) => field);
   const { found } = matchColumns(header, { dimension: 2, fields: definition.fields.map(({ field }) => field), gradients });
-  const reading = planReading({ definition, problem, mapping: { ...found, x: 'x', y: 'y', weight: null } });
+  const reading = planReading({ definition, problem, mapping: { ...found, x: 'x', y: 'y', weight: null }, grid: {} });
   const ask = async (asked: typeof reading) => (await readGrid(byteSource([header.join(','), ...rows].join('\n')), asked)).norms;
   const first = await ask(reading);
   const datums = findDatums(definition, first);
@@ -75,7 +75,7 @@ describe('cell averages', () => {
   const u = problemDefinitionSchema.parse({ equation: 'none', dimension: 1, exact: { u: 'exp(x)' }, domain: { x: [0, 1] } });
   const definition = caseDefinitionSchema.parse({ sampling: 'average', fields: [{ field: 'u', norms: [{ norm: 'L2', formalOrder: 4 }] }] });
   const cells = Array.from({ length: 8 }, (_, i) => ({ x: (i + 0.5) / 8, mean: 8 * (Math.exp((i + 1) / 8) - Math.exp(i / 8)) }));
-  const plan = (extents: object, cellsPerDirection?: number) => planReading({ definition, problem: u, mapping: { x: 'x', weight: null, fields: { u: 'u' }, ...extents }, cellsPerDirection });
+  const plan = (extents: object, cellsPerDirection?: number) => planReading({ definition, problem: u, mapping: { x: 'x', weight: null, fields: { u: 'u' }, ...extents }, grid: { cellsPerDirection } });
   const L2 = async (reading: ReturnType<typeof plan>) => (await readGrid(byteSource(['x,u,dx', ...cells.map(({ x, mean }) => `${x},${mean},0.125`)].join('\n')), reading)).norms.fields[0]?.L2;
 
   it('are compared with the average of the exact field over each cell, of stated size or uniform', async () => {

@@ -30,7 +30,7 @@ function table(n: number, { a, b, turn }: Motion): string {
 
 async function read(text: string): Promise<GridNorms> {
   const mapping = { x: 'x', y: 'y', weight: 'w', fields: { u: ['u', 'u_x', 'u_y'], v: ['v', 'v_x', 'v_y'] } };
-  return (await readNorms({ definition, problem, mapping, statedSha256: null }, (reading) => readGrid(byteSource(text), reading))).norms;
+  return (await readNorms({ definition, problem, mapping, grid: {}, seenAs: 2, statedSha256: null }, (reading) => readGrid(byteSource(text), reading))).norms;
 }
 
 describe('a displacement known up to a rigid motion', () => {
@@ -58,7 +58,7 @@ describe('a displacement known up to a rigid motion', () => {
 
   it('needs the columns of its components, and not only their gradients', async () => {
     const mapping = { x: 'x', y: 'y', weight: 'w', fields: { u: ['u_x', 'u_y'], v: ['v', 'v_x', 'v_y'] } };
-    const reading = readNorms({ definition, problem, mapping, statedSha256: null }, (asked) => readGrid(byteSource(table(4, motion)), asked));
+    const reading = readNorms({ definition, problem, mapping, grid: {}, seenAs: 2, statedSha256: null }, (asked) => readGrid(byteSource(table(4, motion)), asked));
     await expect(reading).rejects.toMatchObject({ reasons: [{ code: 'column-missing', expected: 'u' }] });
   });
 });

@@ -18,6 +18,11 @@ describe('matchColumns(header, needs)', () => {
     expect(matchColumns(['x', 't', 'w'], { dimension: 1, fields: ['T'] })).toMatchObject({ mapping: null, missing: ['T'], found: { t: 't' } });
   });
 
+  it('takes the distance from the boundary and the flag of rows there where they stand in the file', () => {
+    expect(matchColumns(['x', 'w', 'u', 'distance', 'flag'], { dimension: 1, fields: ['u'] }).mapping).toMatchObject({ distance: 'distance', flag: 'flag' });
+    expect(matchColumns(['x', 'w', 'distance'], { dimension: 1, fields: ['distance'] }).mapping).toEqual({ x: 'x', weight: 'w', fields: { distance: 'distance' } });
+  });
+
   it('says what is missing, equal weights never being assumed', () => {
     expect(matchColumns(['X', 'u'], { dimension: 2, fields: ['u', 'v'] })).toEqual({ found: { fields: { u: 'u' } }, missing: ['v', 'x', 'y', 'weight'], mapping: null });
   });

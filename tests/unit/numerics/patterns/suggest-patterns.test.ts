@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { explainPattern } from '@/lib/domain/assessment/explain-pattern';
-import { patternCodes, type Norm } from '@/lib/numerics/assessment';
+import { patternCodes, type Norm, type Region } from '@/lib/numerics/assessment';
 import { judgeErrorSeries } from '@/lib/numerics/outcome/judge-error-series';
 import { suggestPatterns, type Surroundings } from '@/lib/numerics/patterns/suggest-patterns';
 import { errorSeries } from '../../../support/series';
@@ -30,6 +30,18 @@ describe('suggestPatterns(fields, surroundings)', () => {
     expect(codes(judged('u', orders, 2, { x: 0.004 }), { box })).toEqual(['boundary-closure u']);
     expect(codes(judged('u', orders, 2, { x: 0.5 }), { box })).toEqual([]);
     expect(codes(judged('u', orders, 2, { x: 0.004 }))).toEqual([]);
+  });
+
+  it('boundary closure by a lower order along the boundary than inside, whatever the norms of the whole', () => {
+    const of = (region: Region, norm: Norm, order: number, size = 1) => judgeErrorSeries(errorSeries(h, h.map((spacing) => size * spacing ** order), { field: 'u', norm, region, counts: false }));
+    const whole = judged('u', { L2: 1.5 });
+    const seen = [...whole, of('boundary-2h', 'L2', 1), of('interior-2h', 'L2', 2)];
+    expect(suggestPatterns(seen)).toEqual([{ code: 'boundary-closure', field: 'u', evidence: { L2: expect.closeTo(1.5, 10) as number, boundaryOrder: expect.closeTo(1, 10) as number, interiorOrder: expect.closeTo(2, 10) as number } }]);
+    expect(suggestPatterns(seen).map(explainPattern)[0]).toContain('order 1.00 along the boundary and 2.00 inside');
+    expect(codes([...whole, of('boundary-2h', 'L2', 1), of('interior-2h', 'L2', 1.1)])).toEqual([]);
+    expect(codes([...whole, of('boundary-2h', 'L2', 1, 1e-6), of('interior-2h', 'L2', 2)])).toEqual([]);
+    // Orders of the whole that look like one, but the parts say otherwise.
+    expect(codes([...judged('u', { L1: 2, L2: 1.5, Linf: 1 }, 2, { x: 0.004 }), of('boundary-fixed', 'L2', 1.5), of('interior-fixed', 'L2', 1.5)], { box })).toEqual([]);
   });
 
   it('one field that stands still among others, or all of them', () => {
