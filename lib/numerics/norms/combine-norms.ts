@@ -61,16 +61,22 @@ function addField(total: FieldTotal, part: FieldPart | undefined): void {
   total.max = Math.max(total.max, part.max);
 }
 
+/** √(square/weightSum); by the two roots where the quotient is beyond a double, as with weights of 1e−310 and errors of 1e200. */
+function rootOfMean(square: number, weightSum: number): number {
+  const mean = square / weightSum;
+  return mean === Infinity ? Math.sqrt(square) / Math.sqrt(weightSum) : Math.sqrt(mean);
+}
+
 function divide(total: FieldTotal, weightSum: number): Omit<FieldNorms, 'field' | 'count' | 'significantDigits'> {
   const { at, min, max } = total;
   return {
     L1: total.absolute.value() / weightSum,
-    L2: Math.sqrt(total.square.value() / weightSum),
+    L2: rootOfMean(total.square.value(), weightSum),
     Linf: total.largest,
     at,
     mean: total.signed.value() / weightSum,
     exact: {
-      L1: total.exactAbsolute.value() / weightSum, L2: Math.sqrt(total.exactSquare.value() / weightSum), Linf: total.exactLargest,
+      L1: total.exactAbsolute.value() / weightSum, L2: rootOfMean(total.exactSquare.value(), weightSum), Linf: total.exactLargest,
     },
     min, max, maxAbs: Math.max(Math.abs(min), Math.abs(max)),
   };

@@ -1,6 +1,7 @@
 import { writeHdf5Json } from '@/tests/support/hdf5-json';
 import { upTo, type Random } from '@/tests/support/random';
 import { anyColumns, anyRecords } from './documents';
+import { anyHdf5 } from './hdf5';
 import { anyTable } from './tables';
 
 function anyHdf5Json(random: Random): Buffer {
@@ -13,5 +14,5 @@ function anyHdf5Json(random: Random): Buffer {
 
 /** What the fuzzed files of each reader begin as. */
 export const seeds: Readonly<Record<string, (random: Random) => Buffer>> = {
-  table: anyTable, columns: anyColumns, records: anyRecords, 'hdf5-json': anyHdf5Json,
+  table: anyTable, columns: anyColumns, records: anyRecords, 'hdf5-json': anyHdf5Json, hdf5: anyHdf5,
 };

@@ -69,5 +69,10 @@ describe('createNormGatherer(fields)', () => {
     expect(gather({ x: large, q: large.map(() => 1e140), exact: large.map(() => 0) }).norms?.fields[0]?.L2).toBeCloseTo(1e140, -127);
   });
 
+  it('has a finite norm of large errors with weights of almost nothing', () => {
+    const { norms } = gather({ x: [0, 1], q: [1e200, 1e200], exact: [0, 0], w: [1e-310, 1e-310] });
+    expect((norms?.fields[0]?.L2 ?? 0) / 1e200).toBeCloseTo(1, 12);
+  });
+
   it('has no norms without rows', () => expect(createNormTotal(['u']).finish([null])).toBeNull());
 });
