@@ -1,4 +1,5 @@
-import { mostReasons, type RejectionCode, type RejectionReason } from '../domain/uploads/rejection';
+import { mostReasons } from '../domain/uploads/most-reasons';
+import type { RejectionCode, RejectionReason } from '../domain/uploads/rejection';
 import { RejectedFile } from './rejected-file';
 
 const longestFound = 60;

@@ -1,4 +1,4 @@
-import { mostReasons } from '@/lib/domain/uploads/rejection';
+import { mostReasons } from '@/lib/domain/uploads/most-reasons';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';

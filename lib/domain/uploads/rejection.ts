@@ -7,9 +7,6 @@ export const rejectionCodes = [
 ] as const;
 export type RejectionCode = (typeof rejectionCodes)[number];
 
-/** What else is wrong with a file shows once these are mended. */
-export const mostReasons = 20;
-
 /** Why a file was rejected: how often, and where it first occurs (lines and columns from 1, null where there is no such place). */
 export const rejectionReasonSchema = z.strictObject({
   code: z.enum(rejectionCodes),

@@ -4,7 +4,7 @@ import { useState } from 'react';
 import { Cell, ReasonRow, RowHead } from '@/app/_components/tables/cells';
 import { Row } from '@/app/_components/tables/table';
 import { TextButton } from '@/app/_components/ui/text-link';
-import { mostReasons } from '@/lib/domain/uploads/rejection';
+import { mostReasons } from '@/lib/domain/uploads/most-reasons';
 import { describeRejection } from '@/lib/domain/uploads/rejection-text';
 import { formatBytes } from '@/lib/domain/numbers/format-bytes';
 import type { Grid, GridState, Study } from '@/lib/domain/studies/schema';
