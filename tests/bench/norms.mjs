@@ -1,4 +1,4 @@
-// Norms of a table by the worker's own reading: npm run bench:norms -- FILE [--threads 1]
+// Norms of a table by the worker's own reading: npm run bench:norms -- FILE [--threads 1] [--fields 5]
 import { spawnSync } from 'node:child_process';
 import { bundleReading } from './bundle.mjs';
 

@@ -1,39 +1,20 @@
 // Times the worker's reading against other programs in pairs: npm run bench -- [FILE …] [--cells 160] [--pairs 5] [--with "PROGRAM …"]
-// A program is given the file and prints norms as print-norms.ts does. Without a FILE two are generated, once.
-import { execFileSync } from 'node:child_process';
+// A program is given the file and prints norms as print-norms.ts does. Without a FILE two are generated, once. Ours are
+// compared with sums rounded once, of the C library's sines; how far the other program is from these is printed too.
 import fs from 'node:fs';
 import path from 'node:path';
 import { parseArgs } from 'node:util';
-import { root } from '../../docker/local/places.mjs';
 import { benchFolder, bundleReading } from './bundle.mjs';
+import { generatedTable, kept, python, script } from './tables.mjs';
 import { median, timedRun } from './timed-run.mjs';
 
-/** Plain sums over millions of rows, as peers may take them, lose some 1e-12 of small norms. */
-const agreement = 1e-10;
-/** Where Debian installs python3-pandas. */
-const python = process.env.BENCH_PYTHON ?? '/usr/bin/python3';
+/** Relative to each norm. */
+const agreement = 1e-12;
 const { values: options, positionals } = parseArgs({
   allowPositionals: true,
   options: { cells: { type: 'string', default: '160' }, pairs: { type: 'string', default: '5' }, with: { type: 'string', multiple: true, default: [] } },
 });
 const pairs = Number(options.pairs);
-const script = (/** @type {string} */ name) => path.join(root, 'tests/bench', name);
-
-/** @param {string} name @param {string} command for a shell, whose output the file is */
-function kept(name, command) {
-  const file = path.join(benchFolder, name);
-  if (!fs.existsSync(file)) {
-    console.log(`Writing ${file} …`);
-    execFileSync('sh', ['-c', `${command} > '${file}.part' && mv '${file}.part' '${file}'`], { stdio: 'inherit' });
-  }
-  return file;
-}
-
-function generated() {
-  const generate = (/** @type {string} */ more) => `'${process.execPath}' '${script('generate.mjs')}' ${Number(options.cells)} ${more}`;
-  return [kept(`structured-${options.cells}.csv`, generate('')), kept(`scattered-${options.cells}.csv`, generate('--scattered'))];
-}
-
 /** @param {string} output @returns {number[]} the norms in it */
 const normsOf = (output) => output.split('\n').slice(1).flatMap((line) => line.split(/\s+/).slice(1, 4).filter(Boolean).map(Number));
 
@@ -44,33 +25,38 @@ function difference(one, other) {
   return Math.max(...a.map((norm, at) => Math.abs(norm - b[at]) / Math.abs(norm)));
 }
 
+/** @param {number} apart */
+const within = (apart) => apart.toExponential(1);
+
 /**
- * @param {{ name: string, ours: string[], peer: string[], rows: number, bytes: number }} pair
+ * @param {{ name: string, ours: string[], peer: string[], rows: number, bytes: number, exact: string }} pair
  */
-async function race({ name, ours, peer, rows, bytes }) {
+async function race({ name, ours, peer, rows, bytes, exact }) {
   const runs = [];
   for (let pair = 0; pair < pairs; pair += 1) runs.push({ our: await timedRun(ours), their: await timedRun(peer) });
   const [our, their] = [median(runs.map((run) => run.our.seconds)), median(runs.map((run) => run.their.seconds))];
-  const apart = Math.max(...runs.map((run) => difference(run.our.output, run.their.output)));
+  const apart = (/** @type {'our' | 'their'} */ who) => Math.max(...runs.map((run) => difference(exact, run[who].output)));
   const memory = (/** @type {'our' | 'their'} */ who) => Math.max(...runs.map((run) => run[who].megabytes)).toFixed(0);
   console.log(
     `${name.padEnd(34)} ours ${our.toFixed(2)} s ${memory('our')} MB  ${name.split(' ')[0]} ${their.toFixed(2)} s ${memory('their')} MB  ratio ${(their / our).toFixed(2)}` +
-      `  (${(rows / our / 1e6).toFixed(2)} million rows, ${(bytes / our / 1e6).toFixed(0)} MB a second; answers within ${apart.toExponential(1)})`,
+      `  (${(rows / our / 1e6).toFixed(2)} million rows, ${(bytes / our / 1e6).toFixed(0)} MB a second; of the exact norms ours are within ${within(apart('our'))}, theirs ${within(apart('their'))})`,
   );
-  if (!(apart <= agreement)) process.exitCode = 1;
+  if (!(apart('our') <= agreement)) process.exitCode = 1;
 }
 
 fs.mkdirSync(benchFolder, { recursive: true });
 const program = [process.execPath, await bundleReading()];
-for (const file of positionals.length > 0 ? positionals : generated()) {
+const cells = Number(options.cells);
+for (const file of positionals.length > 0 ? positionals : [generatedTable(cells), generatedTable(cells, { isScattered: true })]) {
   const bytes = fs.statSync(file).size;
   const { output } = await timedRun([...program, file]);
+  const exact = fs.readFileSync(kept(`${path.basename(file)}-${bytes}.exact`, `'${python}' '${script('norms_pandas.py')}' '${file}' round_trip exact`), 'utf8');
   const rows = Number(/: (\d+) rows/.exec(output)?.[1]);
   console.log(`${file}: ${rows} rows, ${(bytes / 1e6).toFixed(0)} MB, ${pairs} pairs`);
-  const against = (/** @type {string} */ name, /** @type {string[]} */ peer) => race({ name, ours: [...program, file], peer, rows, bytes });
+  const against = (/** @type {string} */ name, /** @type {string[]} */ peer) => race({ name, ours: [...program, file], peer, rows, bytes, exact });
   await against('pandas', [python, script('norms_pandas.py'), file]);
   await against('pandas round_trip', [python, script('norms_pandas.py'), file, 'round_trip']);
   for (const given of options.with) await against(given, [...given.split(' '), file]);
-  const packed = kept(`${path.basename(file)}.gz`, `gzip -1 -c '${file}'`);
-  await race({ name: 'gzip, one thread each', ours: [...program, file, '--threads', '1'], peer: [...program, packed, '--threads', '1'], rows, bytes });
+  const packed = kept(`${path.basename(file)}-${bytes}.gz`, `gzip -1 -c '${file}'`);
+  await race({ name: 'gzip, one thread each', ours: [...program, file, '--threads', '1'], peer: [...program, packed, '--threads', '1'], rows, bytes, exact });
 }

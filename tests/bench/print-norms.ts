@@ -1,12 +1,12 @@
 import { open } from 'node:fs/promises';
 import os from 'node:os';
+import { parseArgs } from 'node:util';
 import type { GridReading } from '@/lib/readers/grid-reading';
 import { readGrid } from '@/lib/readers/read-grid';
 import { readPreview } from '@/lib/readers/read-preview';
 import { openTableHelper } from '@/worker/compute/table-helper';
 
 const readBytes = 256 * 1024;
-const fields = ['rho', 'u', 'v', 'w', 'p'];
 
 const exact = {
   rho: '1.0 + 0.15*sin(0.75*pi*x/L) - 0.10*cos(1.00*pi*y/L) + 0.08*sin(1.25*pi*z/L)',
@@ -36,7 +36,7 @@ function digits(value: number): string {
   return `${mantissa}e${power.startsWith('-') ? '-' : '+'}${power.slice(1).padStart(2, '0')}`;
 }
 
-async function printNorms(path: string, threads: number): Promise<void> {
+async function printNorms(path: string, threads: number, fields: string[]): Promise<void> {
   const { header } = await readPreview(piecesOf(path));
   const reading: GridReading = {
     mapping: { x: 'x', y: 'y', z: 'z', weight: header.includes('volume') ? 'volume' : null, fields: Object.fromEntries(fields.map((field) => [field, field])) },
@@ -51,9 +51,11 @@ async function printNorms(path: string, threads: number): Promise<void> {
   }
 }
 
-const [path, ...rest] = process.argv.slice(2);
+const { values, positionals: [path] } = parseArgs({
+  allowPositionals: true, options: { threads: { type: 'string', default: String(os.availableParallelism()) }, fields: { type: 'string', default: '5' } },
+});
 if (path === undefined) {
-  console.error('usage: npm run bench:norms -- FILE [--threads 1]');
+  console.error('usage: npm run bench:norms -- FILE [--threads 1] [--fields 5]');
   process.exit(2);
 }
-await printNorms(path, rest[0] === '--threads' ? Number(rest[1]) : os.availableParallelism());
+await printNorms(path, Number(values.threads), Object.keys(exact).slice(0, Number(values.fields)));

@@ -17,7 +17,7 @@ export type OpenHelper<Part> = (shared: SharedRooms) => Promise<ChunkHelper<Part
 /** So many chunks wait for the helper at most; the next is read here meanwhile. */
 const mostAhead = 4;
 /** A file of fewer chunks is read before a helper has started. */
-const chunksAlone = 12;
+const chunksAlone = 3;
 
 export interface Helping<Part> {
   /** Whether the helper takes the chunk; its turn then waits until the helper has answered. */

@@ -1,7 +1,7 @@
 import { longestLine } from '../read-head';
 
 /** A chunk is the lines that begin within this many bytes: the same whatever pieces the bytes came in. */
-const chunkBytes = 256 * 1024;
+const chunkBytes = 1024 * 1024;
 /** One byte is left for a line end where the file ends without. */
 const mostChunkBytes = chunkBytes + longestLine + 1;
 /** Numbers are looked at many bytes at a time, past the end of the last. */
