@@ -48,6 +48,8 @@ export interface ErrorSeries {
   minimumGrids: number;
   /** False where a formal order of 3 or more is claimed and nobody said where values live. */
   samplingStated: boolean;
+  /** Finite elements: their degree and the order it promises in this norm; `atQuadrature` is false where values should be at quadrature points and are not said to be. */
+  elements?: { degree: number; order: number; atQuadrature: boolean };
   /** The pairs of grids that are not refined alike, which no pass stands on. */
   dissimilar?: readonly PairSimilarity[];
 }
@@ -92,6 +94,8 @@ export interface FieldAssessment {
   /** Only where the regularity limits it. */
   statedOrder?: number; regularity?: number;
   logFactor?: number;
+  /** Where finite elements are stated: their degree and the order it promises in this norm. */
+  elements?: { degree: number; order: number };
   derivedOrder: number | null; tolerance: number | null; counts: boolean;
   /** Where errors are norms of the difference to the next coarser grid: the coarsest of all, which has no row of its own. */
   comparedTo?: { label: string; h: number };

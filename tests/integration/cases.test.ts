@@ -109,4 +109,16 @@ describe('PATCH /api/v1/cases/{case}', () => {
     expect((await refused(person, updateCaseContract, { params, body: { kind: 'benchmark' }, ...ifMatch(2) })).status).toBe(422);
     expect((await refused(person, updateCaseContract, { params, body: { fields: [] }, ...ifMatch(2) })).status).toBe(422);
   });
+
+  it('takes elements with their degree, whose orders need not be stated, and takes them away again', async () => {
+    const stated = { sampling: 'quadrature', elements: { degree: 2 }, fields: [{ field: 'T', norms: [{ norm: 'L2', tolerance: 0.1 }] }] } as const;
+    const made = await ok(person, createCaseContract, { body: caseOf({ name: 'Elements', ...stated }) });
+    expect(made.elements).toEqual({ degree: 2 });
+    expect((await refused(person, createCaseContract, { body: caseOf({ name: 'Points', ...stated, elements: { degree: 0 } }) })).status).toBe(422);
+    const params = { case: made.slug };
+    // The tolerance has no order to stand about then.
+    expect((await refused(person, updateCaseContract, { params, body: { elements: null }, ...ifMatch(1) })).errors).toMatchObject([{ path: 'fields.0.norms.0.tolerance' }]);
+    const changed = await ok(person, updateCaseContract, { params, body: { elements: null, ...norm({ formalOrder: 2 }) }, ...ifMatch(1) });
+    expect(changed.elements).toBeUndefined();
+  });
 });

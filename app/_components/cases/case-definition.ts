@@ -48,7 +48,8 @@ function typedCase(values: CaseValues): unknown {
       ...kept, name, unit: someText(unit), formalOrder: typedNumber(formalOrder), knownValue: typedNumber(knownValue), target: typedNumber(target),
       procedure, uNumFactor: typedNumber(uNumFactor),
     })),
-    sampling: values.sampling === '' ? undefined : values.sampling, minimumGrids: typedNumber(values.minimumGrids),
+    sampling: values.sampling === '' ? undefined : values.sampling, sourceSampling: values.sourceSampling === '' ? undefined : values.sourceSampling,
+    elements: values.elementDegree === '' ? undefined : { degree: Number(values.elementDegree) }, minimumGrids: typedNumber(values.minimumGrids),
     gridPlan: values.gridPlan.filter((grid) => !isBlankGrid(grid)).map((grid) => plannedGrid(grid, values.spacingAs)),
     requirements: values.requirements.split('\n').map((line) => line.trim()).filter(Boolean),
   };

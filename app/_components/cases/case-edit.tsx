@@ -52,10 +52,10 @@ function CaseEditForm({ found, onMoved, problems, onClose }: CaseEditFormProps) 
   const refresh = () => Promise.all([getCaseContract, listCasesContract, getMatrixContract].map((contract) => queries.invalidateQueries({ queryKey: apiKey(contract) })));
   const submit = useSubmit({
     form, fieldOf: (path) => caseField(path, form.getValues()),
-    send: ({ name, problem, options, fields, quantities, sampling, sourceSampling, minimumGrids, boundaryBand, gridPlan, requirements }) =>
+    send: ({ name, problem, options, fields, quantities, sampling, sourceSampling, elements, minimumGrids, boundaryBand, gridPlan, requirements }) =>
       callApi(updateCaseContract, {
         organisation: slug, params: { case: found.slug }, revision: found.revision,
-        body: { name, problem, options, fields, quantities, sampling, sourceSampling, minimumGrids, boundaryBand, gridPlan, requirements },
+        body: { name, problem, options, fields, quantities, sampling, sourceSampling, elements: elements ?? null, minimumGrids, boundaryBand, gridPlan, requirements },
       }),
     onDone: () => { void refresh().then(onClose); },
   });

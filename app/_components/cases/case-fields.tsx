@@ -17,6 +17,8 @@ import { kindWords } from './kind-words';
 import { OptionRows } from './option-rows';
 import { QuantityRows } from './quantity-rows';
 
+const degrees = Array.from({ length: 12 }, (_, i) => i + 1);
+
 interface CaseFieldsProps { form: CaseForm; codes: readonly Code[]; problems: readonly Problem[]; isNew: boolean }
 
 /** Everything of a case that is typed. */
@@ -65,6 +67,12 @@ export function CaseFields({ form, codes, problems, isNew }: CaseFieldsProps) {
           <NumberField label="Grids needed for an outcome" hint={`Left empty: ${builtInRule.minimumGrids}, as the rule says.`} error={errors.minimumGrids?.message} {...register('minimumGrids')} />
           <SelectField label="Values in the output are" hint="Must be stated for a formal order of 3 or more." {...register('sampling')}>
             <option value="">not stated</option><option value="point">values at points</option><option value="average">cell averages</option><option value="quadrature">values at quadrature points</option>
+          </SelectField>
+          <SelectField label="Source terms in the code are" {...register('sourceSampling')}>
+            <option value="">not stated</option><option value="point">values at points</option><option value="average">cell averages</option><option value="quadrature">values at quadrature points</option>
+          </SelectField>
+          <SelectField label="Finite elements of degree" hint="Gives the orders that are not stated." {...register('elementDegree')}>
+            <option value="">no finite elements</option>{degrees.map((degree) => <option key={degree}>{degree}</option>)}
           </SelectField>
           <TextArea label="Requirement ids, one a line" rows={3} className="tablet:col-span-2" error={errors.requirements?.message} {...register('requirements')} />
         </div>

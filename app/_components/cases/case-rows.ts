@@ -3,6 +3,8 @@ import { isBlankGrid, isDeclared } from './case-definition';
 import type { CaseValues, FieldValues, GridValues, NormValues, QuantityValues } from './case-values';
 import { spacingNames } from './spacing-names';
 
+const samplingNames = { point: 'values at points', average: 'cell averages', quadrature: 'values at quadrature points' } as const;
+
 const stated = (parts: readonly (readonly [string, string])[]) => parts.filter(([, text]) => text.trim() !== '').map(([name, text]) => `${name} ${text.trim()}`).join(', ');
 
 function normText(norm: NormValues): string {
@@ -31,7 +33,9 @@ export function caseRows(values: CaseValues): ConflictRow[] {
     { name: 'Options', text: values.options.filter(({ name, text }) => `${name}${text}`.trim() !== '').map(({ name, text }) => `${name.trim()}: ${text.trim()}`).join('\n') },
     ...values.fields.map(fieldRow),
     ...values.quantities.map(quantityRow),
-    { name: 'Output', text: values.sampling === 'point' ? 'values at points' : '' },
+    { name: 'Output', text: values.sampling === '' ? '' : samplingNames[values.sampling] },
+    { name: 'Source terms', text: values.sourceSampling === '' ? '' : samplingNames[values.sourceSampling] },
+    { name: 'Degree of elements', text: values.elementDegree },
     { name: 'Grids an outcome needs', text: values.minimumGrids.trim() },
     { name: 'Grid plan', text: [values.gridPlan.length > 0 ? spacingNames[values.spacingAs] : '', ...values.gridPlan.filter((grid) => !isBlankGrid(grid)).map(gridText)].filter(Boolean).join('\n') },
     { name: 'Requirements', text: values.requirements.trim() },

@@ -16,7 +16,7 @@ export interface CaseValues {
   code: string; problem: string; name: string; slug: string; kind: CaseKind;
   options: { name: string; text: string }[];
   fields: FieldValues[]; quantities: QuantityValues[];
-  sampling: '' | NonNullable<CaseDefinition['sampling']>; minimumGrids: string;
+  sampling: '' | NonNullable<CaseDefinition['sampling']>; sourceSampling: '' | NonNullable<CaseDefinition['sampling']>; elementDegree: string; minimumGrids: string;
   spacingAs: SpacingAs; gridPlan: GridValues[];
   requirements: string;
 }
@@ -35,7 +35,7 @@ export const newGrid: GridValues = { label: '', spacing: '', dt: '', kept: null 
 
 export function emptyCase(given: { code: string; problem: string }): CaseValues {
   return {
-    ...given, name: '', slug: '', kind: 'order', options: [], fields: [], quantities: [], sampling: '', minimumGrids: '',
+    ...given, name: '', slug: '', kind: 'order', options: [], fields: [], quantities: [], sampling: '', sourceSampling: '', elementDegree: '', minimumGrids: '',
     spacingAs: 'cellsPerDirection', gridPlan: [], requirements: '',
   };
 }
@@ -70,7 +70,7 @@ export function valuesOfCase(found: Case): CaseValues {
       name: kept.name, unit: kept.unit ?? '', formalOrder: text(kept.formalOrder), knownValue: text(kept.knownValue), target: text(kept.target),
       procedure: kept.procedure, uNumFactor: text(kept.uNumFactor), kept,
     })),
-    sampling: found.sampling ?? '', minimumGrids: text(found.minimumGrids),
+    sampling: found.sampling ?? '', sourceSampling: found.sourceSampling ?? '', elementDegree: text(found.elements?.degree), minimumGrids: text(found.minimumGrids),
     spacingAs, gridPlan: found.gridPlan.map((kept) => ({ label: kept.label, spacing: spacingText(kept, spacingAs), dt: text(kept.dt), kept })),
     requirements: found.requirements.join('\n'),
   };

@@ -23,6 +23,8 @@ import { GridPlanTable } from './grid-plan-table';
 import { QuantitiesTable } from './quantities-table';
 import { ReleaseStudies } from './release-studies';
 
+const outputWords = { point: 'The output holds values at points.', average: 'The output holds cell averages.', quadrature: 'The output holds values at quadrature points.' } as const;
+
 export function CaseView({ caseKey }: { caseKey: string }) {
   const { slug } = useOrganisation();
   const query = useApi(getCaseContract, { organisation: slug, params: { case: caseKey } });
@@ -71,9 +73,9 @@ function CaseDefinitionView({ found, onEdit }: { found: Case; onEdit: () => void
       {found.fields.length > 0 && (
         <Section
           heading="Declared"
-          note={<p>An outcome needs <b>{grids} grids</b>{found.minimumGrids === undefined ? ', as the rule says' : ''}.{found.sampling === 'point' && ' The output holds values at points.'}</p>}
+          note={<p>An outcome needs <b>{grids} grids</b>{found.minimumGrids === undefined ? ', as the rule says' : ''}.{found.sampling && ` ${outputWords[found.sampling]}`}{found.elements && ` Finite elements of degree ${found.elements.degree}: orders that are not stated are theirs.`}</p>}
         >
-          <DeclaredTable fields={found.fields} />
+          <DeclaredTable definition={found} />
         </Section>
       )}
       {found.quantities.length > 0 && <Section heading="Quantities" note={found.kind === 'solution' && <p>A solution case shows how uncertain a quantity is. It is no evidence that an option is verified.</p>}><QuantitiesTable quantities={found.quantities} /></Section>}

@@ -1,6 +1,7 @@
 import { defaultTolerance } from '@/lib/numerics/outcome/default-tolerance';
 import { regularOrder } from '@/lib/numerics/outcome/regular-order';
 import type { CaseDefinition, DeclaredNorm } from '@/lib/domain/cases/definition';
+import { withElementOrders } from '@/lib/domain/cases/element-orders';
 import { Cell, HeadCell, Missing, RowHead } from '../tables/cells';
 import { Head, Row, Table } from '../tables/table';
 import { NormSymbol, Sym } from '../ui/symbols';
@@ -25,7 +26,8 @@ function ToleranceCell({ norm }: { norm: DeclaredNorm }) {
 }
 
 /** What a case declares for each field and norm, and where it comes from. */
-export function DeclaredTable({ fields }: { fields: CaseDefinition['fields'] }) {
+export function DeclaredTable({ definition }: { definition: Pick<CaseDefinition, 'fields' | 'quantities' | 'elements'> }) {
+  const { fields } = withElementOrders(definition);
   return (
     <Table caption="Formal orders and tolerances, by field and norm." hideCaption>
       <Head><tr><HeadCell>Field</HeadCell><HeadCell>Norm</HeadCell><HeadCell num>Order</HeadCell><HeadCell num>Tolerance</HeadCell><HeadCell afterNumber>Counts</HeadCell><HeadCell>Comes from</HeadCell></tr></Head>

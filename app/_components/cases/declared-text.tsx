@@ -1,7 +1,8 @@
 import type { CaseDefinition } from '@/lib/domain/cases/definition';
+import { withElementOrders } from '@/lib/domain/cases/element-orders';
 import { Sym } from '../ui/symbols';
 
-type Declared = Pick<CaseDefinition, 'fields' | 'quantities'>;
+type Declared = Pick<CaseDefinition, 'fields' | 'quantities' | 'elements'>;
 
 function orderOfField({ norms }: Declared['fields'][number]): string {
   if (norms.some((norm) => norm.expectExact)) return 'exact';
@@ -10,7 +11,8 @@ function orderOfField({ norms }: Declared['fields'][number]): string {
 }
 
 /** What a case declares, in a line: "u 2, p 1, lift". */
-export function DeclaredText({ definition: { fields, quantities } }: { definition: Declared }) {
+export function DeclaredText({ definition }: { definition: Declared }) {
+  const { fields, quantities } = withElementOrders(definition);
   if (fields.length + quantities.length === 0) return <span className="text-graphite">nothing</span>;
   return (
     <>

@@ -3,6 +3,7 @@ import type { FieldAssessment, FieldGrid, ReasonCode } from '@/lib/numerics/asse
 import { formatOrder } from '../numbers/format-order';
 import { formatValue } from '../numbers/format-value';
 import { describeDissimilar } from './describe-similarity';
+import { explainQuadrature } from './explain-quadrature';
 import type { Explanation } from './explanation';
 import { explainTooFewGrids } from './explain-too-few-grids';
 import { shownUncertainty, type FieldFacts } from './field-facts';
@@ -76,7 +77,7 @@ export const fieldReasons: Partial<Record<ReasonCode, FieldText>> = {
     sentence: `The finest pair shows order ${last}${unseen(orders[0]?.uncertainty)}, too uncertain for the band of ${band}.`,
     nextStep: 'Lower the iterative error, or store more digits, so that the known error of the finest grids is smaller.',
   }),
-  'sampling-not-stated': ({ claimed, last }) => ({
+  'sampling-not-stated': ({ claimed, last }, { elements }) => (elements ? explainQuadrature(elements, last) : {
     sentence: `${capitalise(claimed)} is declared${last === '–' ? '' : ` and the finest pair shows ${last}`}, but nobody said where the values live: cell averages differ from point values at second order.`,
     nextStep: 'State in the case whether the values are point values, cell averages or at quadrature points.',
   }),

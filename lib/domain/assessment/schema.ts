@@ -18,6 +18,7 @@ const fieldGridSchema = z.strictObject({
 const fieldAssessmentSchema = z.strictObject({
   field: z.string(), norm: z.enum([...norms, 'value']), region: z.enum(regions),
   formalOrder: nullableNumber, statedOrder: z.number().optional(), regularity: z.number().optional(), logFactor: z.number().optional(),
+  elements: z.strictObject({ degree: z.number(), order: z.number() }).optional(),
   derivedOrder: nullableNumber, tolerance: nullableNumber, counts: z.boolean(),
   comparedTo: z.strictObject({ label: z.string(), h: z.number() }).optional()
     .meta({ description: 'Without an exact solution: every error is the norm of the difference to the next coarser grid, the last one to this.' }),

@@ -1,5 +1,6 @@
 import type { Norm, SpaceTimeSeries } from '@/lib/numerics/assessment';
 import { gridSpacing } from '@/lib/numerics/spacing/grid-spacing';
+import { withElementOrders } from '../cases/element-orders';
 import { statedSpacing } from '../studies/stated-spacing';
 import { gridError, quantitySeries } from './study-series';
 import type { PlacedGrid, StudySeries, StudyToAssess } from './study-to-assess';
@@ -17,10 +18,11 @@ export function spaceTimeSeries({ definition, grids, dimension, volume }: Omit<S
     else placed.push({ grid, norms, h: spacing.h, dt: grid.dt });
   }
   if (faults.length > 0) return { ok: false, reason: faults.join(' ') };
-  const fields = definition.fields.flatMap(({ field, norms }) => norms.map(({ norm, formalOrder }) => (
+  const declared = withElementOrders(definition);
+  const fields = declared.fields.flatMap(({ field, norms }) => norms.map(({ norm, formalOrder }) => (
     { field, norm, isSigned: false, formalOrder: formalOrder ?? null, points: errorPoints(placed, field, norm) }
   )));
-  const values = definition.quantities.flatMap((quantity): SpaceTimeSeries[] => {
+  const values = declared.quantities.flatMap((quantity): SpaceTimeSeries[] => {
     const { name, knownValue, formalOrder } = quantity;
     return knownValue === undefined ? [] : [{
       field: name, norm: 'value', isSigned: true, formalOrder: formalOrder ?? null,

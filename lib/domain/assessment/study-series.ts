@@ -3,14 +3,16 @@ import { knownError } from '@/lib/numerics/norms/known-error';
 import { errorSeriesOfQuantity } from '@/lib/numerics/outcome/error-series-of-quantity';
 import { resolveSpacing } from '@/lib/numerics/spacing/resolve-spacing';
 import { differencesOf } from './difference-series';
-import type { DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
+import type { CaseDefinition, DeclaredField, DeclaredNorm, DeclaredQuantity } from '../cases/definition';
+import { lacksQuadrature, orderOfElements, withElementOrders } from '../cases/element-orders';
 import { builtInRule } from '../rules/built-in-rule';
 import { refinedSpace, studySimilarity } from './mesh-of-study';
 import { statedSpacing } from '../studies/stated-spacing';
 import type { GridDifference, PlacedGrid, StudySeries, StudyToAssess } from './study-to-assess';
 
 /** Series of every declared field and norm and of every quantity; or in words why the grids cannot be put in a row. */
-export function studySeries({ definition, grids, differences = [], ...around }: StudyToAssess): StudySeries {
+export function studySeries({ definition: stated, grids, differences = [], ...around }: StudyToAssess): StudySeries {
+  const definition = withElementOrders(stated);
   const { thin, ...space } = refinedSpace(grids, around);
   const spacing = resolveSpacing({ grids: grids.map(({ grid, norms }) => statedSpacing(grid, norms, thin)), refinement: around.refinement, ...space });
   if (!spacing.ok) {
@@ -70,8 +72,13 @@ function fieldSeries({ definition, dimension, volume, differences }: Pick<StudyT
     scale: largestOf([...columns.map((column) => column.exact.Linf), ...(compared?.scale ? [compared.scale] : []), ...(norm.reference === undefined ? [] : [norm.reference])]),
     precision: placed.some(({ grid }) => grid.run?.precision === 'single') || columns.some(({ storedAs }) => storedAs === 'single') ? 'single' : 'double',
     minimumGrids: definition.minimumGrids ?? builtInRule.minimumGrids,
-    samplingStated: definition.sampling !== undefined,
+    samplingStated: definition.sampling !== undefined, ...ofElements(definition, field, norm),
   }];
+}
+
+function ofElements(definition: CaseDefinition, field: DeclaredField, norm: DeclaredNorm): Pick<ErrorSeries, 'elements'> {
+  const order = orderOfElements(definition, field, norm);
+  return definition.elements && order !== null ? { elements: { degree: definition.elements.degree, order, atQuadrature: !lacksQuadrature(definition, field, norm) } } : {};
 }
 
 /** What was read from a file goes before what was typed. */

@@ -43,6 +43,7 @@ const declaredQuantitySchema = z.strictObject({
   knownValue: z.number().optional(),
   target: positive.optional().meta({ description: 'Largest acceptable GCI, as a fraction.' }),
   procedure: z.enum(procedures).default('three-grid'),
+  energyLike: z.boolean().optional().meta({ description: 'An energy or eigenvalue: where elements of degree k are stated and no formal order, it is 2k.' }),
   uNumFactor: positive.max(10).optional().meta({ description: 'k: what the band of about 95 % is divided by to give u_num.' }),
 });
 export type DeclaredQuantity = z.infer<typeof declaredQuantitySchema>;
@@ -58,6 +59,8 @@ export const caseDefinitionSchema = z.strictObject({
   quantities: z.array(declaredQuantitySchema).max(50).default([]),
   sampling: z.enum(['point', 'average', 'quadrature']).optional(),
   sourceSampling: z.enum(['point', 'average', 'quadrature']).optional(),
+  elements: z.strictObject({ degree: z.number().int().min(1).max(12) }).optional()
+    .meta({ description: 'Finite elements of this degree k: formal orders that are not stated are then k + 1 in L1, L2 and L∞, and k in H1, the energy norm and for derivatives.' }),
   minimumGrids: z.number().int().min(3).max(20).optional(),
   boundaryBand: z.strictObject({ thickness: positive }).optional(),
   gridPlan: z.array(plannedGridSchema).max(30).default([]),

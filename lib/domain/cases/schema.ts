@@ -16,7 +16,7 @@ export type CreateCaseInput = z.infer<typeof createCaseSchema>;
 export const updateCaseSchema = z.strictObject({
   name: nameSchema.optional(), problem: z.string().min(1).optional(),
   options: shape.options.unwrap().optional(), fields: shape.fields.unwrap().optional(), quantities: shape.quantities.unwrap().optional(),
-  sampling: shape.sampling, sourceSampling: shape.sourceSampling, minimumGrids: shape.minimumGrids, boundaryBand: shape.boundaryBand,
+  sampling: shape.sampling, sourceSampling: shape.sourceSampling, elements: shape.elements.unwrap().nullable().optional(), minimumGrids: shape.minimumGrids, boundaryBand: shape.boundaryBand,
   gridPlan: shape.gridPlan.unwrap().optional(), requirements: shape.requirements.unwrap().optional(),
 });
 export type UpdateCaseInput = z.infer<typeof updateCaseSchema>;

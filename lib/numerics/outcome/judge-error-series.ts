@@ -36,6 +36,7 @@ export function judgeErrorSeries(series: ErrorSeries): FieldAssessment {
   const { outcome, reason } = judgeExactness(series, judgedBy) ?? onSimilarGrids(series, judgeOrders(series, { used, orders, judgedBy, tolerance }));
   return {
     field: series.field, norm: series.norm, region: series.region ?? 'all', formalOrder, ...limited,
+    ...(series.elements && { elements: { degree: series.elements.degree, order: series.elements.order } }),
     ...(series.logFactor && { logFactor: series.logFactor.power }), derivedOrder: series.derivedOrder, tolerance, counts: series.counts, grids, orders, fit: leastSquaresOrder(used), ...(series.comparedTo && { comparedTo: series.comparedTo, fit: null }), ...(isPart(series) ? { outcome: null, reasons: [] } : { outcome, reasons: [reason], ...(reason === 'not-similar' && { dissimilar: [...(series.dissimilar ?? [])] }) }),
   };
 }
@@ -73,7 +74,7 @@ interface Orders { used: FieldGrid[]; orders: PairOrder[]; judgedBy: number | nu
 
 function judgeOrders(series: ErrorSeries, { used, orders, judgedBy, tolerance }: Orders): Verdict {
   if (judgedBy === null || tolerance === null) return { outcome: null, reason: 'no-target' };
-  if (!series.samplingStated && judgedBy >= samplingMatters) return { outcome: 'inconclusive', reason: 'sampling-not-stated' };
+  if (series.elements?.atQuadrature === false || (!series.samplingStated && judgedBy >= samplingMatters)) return { outcome: 'inconclusive', reason: 'sampling-not-stated' };
   const spacings = [...used.map((grid) => grid.h), ...(series.comparedTo ? [series.comparedTo.h] : [])];
   const enough = spacings.length >= series.minimumGrids && spansRatio(spacings) && orders.length >= 2;
   if (!enough) return { outcome: 'inconclusive', reason: 'too-few-grids' };

@@ -16,9 +16,9 @@ export async function updateCase(ctx: MemberContext, key: string, revision: numb
   permit(ctx, 'work.write');
   return withOrganisation(ctx, async (trx) => {
     const row = await requireCase(ctx, trx, key);
-    const { name = row.name, problem: problemKey = row.problem_id, ...changes } = input;
+    const { name = row.name, problem: problemKey = row.problem_id, elements, ...changes } = input;
     const problem = await requireProblem(ctx, trx, problemKey);
-    const definition = { ...caseDefinitionSchema.parse(row.definition), ...changes };
+    const definition = { ...caseDefinitionSchema.parse(row.definition), ...changes, ...(elements !== undefined && { elements: elements ?? undefined }) };
     checkCaseDefinition(definition, caseKindSchema.parse(row.kind), problem.definition);
     if (!(await raiseCaseRevision(trx, ctx.organisation.id, { id: row.id, revision }))) throw staleRevision('case', row.revision, revision);
     await insertCaseRevision(trx, {

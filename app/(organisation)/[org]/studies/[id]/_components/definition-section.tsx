@@ -1,9 +1,11 @@
 import { ExactFormula } from '@/app/_components/problems/exact-formula';
 import { equationNames } from '@/app/_components/problems/equation-names';
 import { useOrganisation } from '@/app/_components/organisation/organisation-context';
+import { FormulaText } from '@/app/_components/ui/formula-text';
 import { Section } from '@/app/_components/ui/section';
 import { Sym } from '@/app/_components/ui/symbols';
 import { TextLink } from '@/app/_components/ui/text-link';
+import { explainSampling } from '@/lib/domain/cases/explain-sampling';
 import { variablesOf } from '@/lib/domain/problems/variables';
 import type { Study } from '@/lib/domain/studies/schema';
 
@@ -35,7 +37,9 @@ export function DefinitionSection({ study }: { study: Study }) {
         {describeProblem(study)}
         {domain.length > 0 && <> Domain: {domain.map(([axis, interval], index) => interval && <span key={axis}>{index > 0 && ', '}<Sym>{axis}</Sym> from {interval[0]} to {interval[1]}</span>)}.</>}
         {definition.sampling && ` ${samplingWords[definition.sampling]}`}
+        {definition.elements && ` Finite elements of degree ${definition.elements.degree}.`}
       </p>
+      {explainSampling(definition).map((note) => <p key={note}><FormulaText text={note} symbols={['h']} /></p>)}
       {Object.entries(problemDefinition.exact ?? {}).map(([name, text]) => <ExactFormula key={name} name={name} text={text} of={variables} />)}
       {Object.entries(problemDefinition.constants).map(([name, text]) => <ExactFormula key={name} name={name} text={String(text)} />)}
       {options.length > 0 && <p>Options: {options.map(([name, value]) => `${name} ${value}`).join(', ')}.</p>}
