@@ -35,7 +35,7 @@ export function createRowProblems(): RowProblems {
       const inRow = line === null ? ` in row ${row + 1}` : '';
       switch (code) {
         case 'weight-not-positive':
-          return { code, line, column: column(plan.weight), found: `${value}${inRow}`, expected: 'a weight above 0' };
+          return { code, line, column: column(plan.weight), found: `${value}${inRow}`, expected: value > 0 && value < Infinity ? 'a weight of which a double can add up many' : 'a weight above 0' };
         case 'value-not-finite':
           return { code: 'not-finite', line, column: column(plan.fields[fields.indexOf(field ?? '')]), found: `${value}${inRow}`, expected: 'a value whose squares a double can add up' };
         case 'exact-not-finite':

@@ -18,11 +18,12 @@ const random = seeded(seed);
 const length = new Uint32Array(current, 0, 1);
 const room = new Uint8Array(current, 4);
 const toldEvery = 50;
-const corpus = Array.from({ length: 20 }, () => make(random));
+const corpus: Buffer[] = [];
+while (corpus.length < 20) corpus.push(await make(random));
 
 let tried = 0;
 for (const end = Date.now() + milliseconds; Date.now() < end;) {
-  if (random() < 0.2) corpus[upTo(random, corpus.length - 1)] = make(random);
+  if (random() < 0.2) corpus[upTo(random, corpus.length - 1)] = await make(random);
   let bytes = mutate(oneOf(random, corpus), oneOf(random, corpus), random);
   // What was changed is changed further now and then.
   if (random() < 0.1 && bytes.length > 0) corpus[upTo(random, corpus.length - 1)] = bytes;

@@ -10,7 +10,7 @@ const lastPart = (name: string) => name.slice(Math.max(name.lastIndexOf('/'), na
 /** Columns of the names that seeds have, or the first ones: a file is read as far as can be. */
 function readingOf(header: readonly string[]): GridReading {
   const find = (name: string, other: number) => header.find((each) => lastPart(each) === name) ?? header[other] ?? name;
-  const weight = header.find((each) => lastPart(each) === 'w') ?? null;
+  const weight = header.find((each) => ['w', 'volume'].includes(lastPart(each))) ?? null;
   return { mapping: { x: find('x', 0), weight, fields: { u: find('u', 1) } }, problem: { dimension: 1, exact: { u: 'x' }, constants: {} }, fields: [{ field: 'u' }] };
 }
 

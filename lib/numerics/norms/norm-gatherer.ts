@@ -77,6 +77,7 @@ export function createNormGatherer(fields: readonly string[], rooms = createNorm
       const { weights } = block;
       equalWeights = weights === null;
       if (weights !== null) gatherWeights(weights, block.rows);
+      let isBad = false;
       for (const [index, field] of fields.entries()) {
         const part = block.fields[index];
         const state = rooms.fields[index] as Float64Array;
@@ -88,14 +89,21 @@ export function createNormGatherer(fields: readonly string[], rooms = createNorm
         if (largestRow >= 0) positions[index] = positionAt(block, block.places?.[largestRow] ?? largestRow);
         if (state[place.isBad] === 0) continue;
         state[place.isBad] = 0;
+        isBad = true;
         findBad(part, weights, block.rows, (code, i, value) => report(code, field, rows + i, value));
       }
+      if (isBad && weights !== null) findTooHeavy(weights, block.rows, (i) => report('weight-not-positive', null, rows + i, weights[i] as number));
       rows += block.rows;
     },
     rows: () => rows,
     problems: () => [...problems.values()],
     part: () => ({ rows, equalWeights, weights: sumAt(weightState, weightPlace.sum), fields: rooms.fields.map((state, index) => partOf(state, positions[index] as Position)) }),
   };
+}
+
+/** A finite weight that leaves a double no room for the sums of what it weighs. */
+function findTooHeavy(weights: Float64Array, rows: number, report: (i: number) => void): void {
+  for (let i = 0; i < rows; i += 1) if ((weights[i] as number) < Infinity && !Number.isFinite(4 * mostRows * (weights[i] as number))) report(i);
 }
 
 function findBad(

@@ -3,6 +3,7 @@ import { upTo, type Random } from '@/tests/support/random';
 import { anyColumns, anyRecords } from './documents';
 import { anyHdf5 } from './hdf5';
 import { anyTable } from './tables';
+import { anyVtk } from './vtk';
 
 function anyHdf5Json(random: Random): Buffer {
   const rows = upTo(random, 30);
@@ -13,6 +14,6 @@ function anyHdf5Json(random: Random): Buffer {
 }
 
 /** What the fuzzed files of each reader begin as. */
-export const seeds: Readonly<Record<string, (random: Random) => Buffer>> = {
-  table: anyTable, columns: anyColumns, records: anyRecords, 'hdf5-json': anyHdf5Json, hdf5: anyHdf5,
+export const seeds: Readonly<Record<string, (random: Random) => Buffer | Promise<Buffer>>> = {
+  table: anyTable, columns: anyColumns, records: anyRecords, 'hdf5-json': anyHdf5Json, vtk: anyVtk, hdf5: anyHdf5,
 };

@@ -69,6 +69,12 @@ describe('createNormGatherer(fields)', () => {
     expect(gather({ x: large, q: large.map(() => 1e140), exact: large.map(() => 0) }).norms?.fields[0]?.L2).toBeCloseTo(1e140, -127);
   });
 
+  it('reports finite weights so large that their products have no sum', () => {
+    const { gatherer, norms } = gather({ x: [0, 1, 2], q: [0, 1, 1e-9], exact: [0, 0, 0], w: [1, 1e300, 1e308] });
+    expect(norms).toBeNull();
+    expect(gatherer.problems()).toEqual([{ code: 'weight-not-positive', field: null, count: 2, row: 1, value: 1e300 }]);
+  });
+
   it('has a finite norm of large errors with weights of almost nothing', () => {
     const { norms } = gather({ x: [0, 1], q: [1e200, 1e200], exact: [0, 0], w: [1e-310, 1e-310] });
     expect((norms?.fields[0]?.L2 ?? 0) / 1e200).toBeCloseTo(1, 12);
