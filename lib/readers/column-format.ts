@@ -13,6 +13,8 @@ export interface ColumnsAsked {
 export interface ColumnsFound {
   /** Of the columns asked for, in that order; significant digits are null where numbers are not printed in decimal; single where they are stored as float32. */
   columns: { index: number; significantDigits: number | null; isSingle?: boolean }[];
+  /** Rows left out because the file marks them as counted elsewhere. */
+  leftOut?: number;
 }
 
 export type ColumnsPreview = Omit<SourcePreview, 'compressed' | 'format'>;

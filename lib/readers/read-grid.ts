@@ -36,7 +36,7 @@ export interface GridReadOptions {
 }
 
 /** The columns of the file and their most significant digits, in the order of the plan. */
-interface ColumnsRead { indices: number[]; digits: (number | null)[]; singles?: boolean[] }
+interface ColumnsRead { indices: number[]; digits: (number | null)[]; singles?: boolean[]; leftOut?: number }
 
 interface Gathering { task: GridTask; checks: GridChecks; total: GridTotal; onPiece: () => void }
 
@@ -59,7 +59,7 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   const onPiece = () => options.onProgress?.({ rows: total.rows(), bytes });
   const gathering: Gathering = { task, checks, total, onPiece };
 
-  const { indices, digits, singles } = await readSource(source, {
+  const { indices, digits, singles, leftOut = 0 } = await readSource(source, {
     table: (opened) => readTableGrid(opened, { ...gathering, given: reading.mapping.table, openHelper: options.openHelper }),
     columns: (reader, { pieces }) => readColumnsGrid(reader, pieces, gathering),
   }, { onBytes, signal: options.signal });
@@ -70,7 +70,8 @@ export async function readGrid(source: ByteSource, reading: GridReading, options
   checks.throwIfAny(plan.t === null ? undefined : indices[plan.t]);
   const found = total.finish(plan.fields.map((slot) => digits[slot] ?? null));
   if (found === null) throw new Error('readGrid: rows without a problem have no norms');
-  return { ...found, norms: noteSingles(found.norms, plan.fields.map((slot) => singles?.[slot] === true)), sha256: hash.digest('hex'), bytes };
+  const norms = noteSingles(found.norms, plan.fields.map((slot) => singles?.[slot] === true));
+  return { ...found, norms: leftOut > 0 ? { ...norms, rowsLeftOut: leftOut } : norms, sha256: hash.digest('hex'), bytes };
 }
 
 /** Marks the fields that the file stores as float32. */
@@ -82,10 +83,10 @@ async function readColumnsGrid(
   reader: ColumnFormat, pieces: AsyncIterable<Buffer>, { task, checks, total, onPiece }: Gathering,
 ): Promise<ColumnsRead> {
   const gatherer = prepareGathering(task)(checks);
-  const { columns } = await reader.read(pieces, { wanted: task.plan.names, reasons: checks.rows, onBatch: (batch) => gatherer.add(batch), onPiece });
+  const { columns, leftOut } = await reader.read(pieces, { wanted: task.plan.names, reasons: checks.rows, onBatch: (batch) => gatherer.add(batch), onPiece });
   const indices = columns.map(({ index }) => index);
   total.add(gatherer.finish(indices));
-  return { indices, digits: columns.map(({ significantDigits }) => significantDigits), singles: columns.map(({ isSingle }) => isSingle === true) };
+  return { indices, digits: columns.map(({ significantDigits }) => significantDigits), singles: columns.map(({ isSingle }) => isSingle === true), leftOut };
 }
 
 interface TableGathering extends Gathering { given: GridReading['mapping']['table']; openHelper: GridReadOptions['openHelper'] }

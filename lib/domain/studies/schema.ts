@@ -20,11 +20,13 @@ export type StudyState = z.infer<typeof studyStateSchema>;
 export const gridStateSchema = z.enum(['expected', 'typed', ...uploadStateSchema.options]);
 export type GridState = z.infer<typeof gridStateSchema>;
 
+const rowsLeftOutSchema = z.number().int().optional().meta({ description: 'Rows that a VTK file marks as duplicates of another piece, as hidden or as refined; absent for none.' });
+
 export const gridSchema = gridInputSchema.extend({
   state: gridStateSchema, revision: z.number().int(), excluded: z.string().nullable(), afterData: z.boolean(),
   upload: z.strictObject({
     id: z.string(), filename: z.string(), bytes: z.number().int(), sha256: z.string().nullable(),
-    rowsRead: z.number().int().nullable(), rows: z.number().int().nullable(), reasons: z.array(rejectionReasonSchema),
+    rowsRead: z.number().int().nullable(), rows: z.number().int().nullable(), rowsLeftOut: rowsLeftOutSchema, reasons: z.array(rejectionReasonSchema),
     createdBy: z.string().meta({ description: 'E-mail address of who sends or sent it.' }), createdAt: timestampSchema,
   }).nullable(),
 });
@@ -94,7 +96,7 @@ const regionResultSchema = z.strictObject({
   region: z.enum(regions), rows: z.number().int(), weightSum: z.number(), fields: z.array(fieldResultSchema), gradients: z.array(gradientResultSchema),
 });
 const gridResultSchema = z.strictObject({
-  label: z.string(), upload: z.string(), sha256: z.string(), rows: z.number().int(), weightSum: z.number(), equalWeights: z.boolean(),
+  label: z.string(), upload: z.string(), sha256: z.string(), rows: z.number().int(), rowsLeftOut: rowsLeftOutSchema, weightSum: z.number(), equalWeights: z.boolean(),
   mapping: columnMappingSchema, fields: z.array(fieldResultSchema),
   solutions: z.array(z.strictObject({
     field: z.string(), L1: z.number(), L2: z.number(), Linf: z.number(), minimum: z.number(), maximum: z.number(), count: z.number().int(), significantDigits: z.number().nullable(),

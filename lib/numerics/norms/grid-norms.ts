@@ -33,6 +33,8 @@ export type SolutionNorms = Pick<FieldNorms, 'field' | 'L1' | 'L2' | 'Linf' | 'm
 
 export interface GridNorms {
   rows: number;
+  /** Rows beside these that the file marks as counted elsewhere, as pieces of a grid have cells of their neighbours; absent for none. */
+  rowsLeftOut?: number;
   weightSum: number;
   equalWeights: boolean;
   fields: FieldNorms[];

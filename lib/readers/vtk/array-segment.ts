@@ -42,7 +42,10 @@ export function openSegment(array: StoredArray, { piece, type, encoding, form, e
     },
     fail,
   };
-  if (encoding !== 'ascii') array.digits = null;
+  if (encoding !== 'ascii') {
+    array.digits = null;
+    array.isSingle ||= type.name === 'Float32';
+  }
   const reader = openReader(target, { type, encoding, form });
   return {
     push: (bytes, from, to, lineAt) => (isFull() ? undefined : reader.push(bytes, from, to, lineAt)),

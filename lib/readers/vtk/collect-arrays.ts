@@ -53,7 +53,7 @@ function createCollector({ store, reasons, keep, firstPieceOnly }: ArraysAsked) 
   const arrayOf = (name: ArrayName): StoredArray => {
     const known = file.arrays.get(arrayKey(name));
     if (known !== undefined) return known;
-    const array: StoredArray = { ...name, values: store.addColumn(), segments: [], digits: 0, word: null };
+    const array: StoredArray = { ...name, values: store.addColumn(), segments: [], digits: 0, isSingle: false, word: null };
     file.arrays.set(arrayKey(name), array);
     return array;
   };

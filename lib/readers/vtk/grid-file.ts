@@ -20,6 +20,8 @@ export interface StoredArray extends ArrayName {
   segments: ({ from: number; length: number } | undefined)[];
   /** Most significant digits of its numbers, null where one is not written in decimal. */
   digits: number | null;
+  /** Whether it is stored as float32. */
+  isSingle: boolean;
   /** The first text in the place of a number, and how many there are. */
   word: { text: string; line: number; row: number; count: number } | null;
 }

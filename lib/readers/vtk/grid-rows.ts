@@ -21,12 +21,13 @@ export interface RowsAsked {
 /** Fills one column with the rows of a piece from one on. */
 type Fill = (from: number, count: number, into: Float64Array) => void;
 
-/** The rows of all pieces, without those that another piece has as its own. */
-export function deliverRows({ file, columns, of, most, refuse, onBatch }: RowsAsked): void {
+/** Hands on the rows of all pieces, and returns how many it left out, which another piece has as its own. */
+export function deliverRows({ file, columns, of, most, refuse, onBatch }: RowsAsked): number {
   const part = columns.map(() => new Float64Array(batchRows));
   const batch = columns.map(() => new Float64Array(batchRows));
   const geometry = createCellBatch(batchRows);
   let filled = 0;
+  let leftOut = 0;
   const flush = () => {
     if (filled > 0) onBatch({ rows: filled, columns: batch, lines: null });
     filled = 0;
@@ -46,10 +47,14 @@ export function deliverRows({ file, columns, of, most, refuse, onBatch }: RowsAs
       const count = Math.min(batchRows, rows - from);
       fills.begin(from, count);
       for (const [slot, fill] of fills.columns.entries()) fill(from, count, part[slot] as Float64Array);
-      for (let row = 0; row < count; row += 1) if (!isGhost(from + row)) keepRow(row);
+      for (let row = 0; row < count; row += 1) {
+        if (isGhost(from + row)) leftOut += 1;
+        else keepRow(row);
+      }
     }
   }
   flush();
+  return leftOut;
 }
 
 interface FillsAsked { columns: readonly GridColumn[]; of: 'points' | 'cells'; geometry: CellBatch }

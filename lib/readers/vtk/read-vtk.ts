@@ -24,7 +24,7 @@ async function readInto(store: ColumnStore, pieces: AsyncIterable<Buffer>, { wan
   const { columns, indices, of } = resolveRows(listColumns(file), wanted, reasons);
   refuseWords(file, columns, { indices, reasons });
   const deliver = refuseInfinite(columns, { indices, reasons, onBatch });
-  deliverRows({
+  const leftOut = deliverRows({
     file, columns, of, most: Infinity,
     refuse: (code, found, expected) => rejectAtOnce(reasons, { code, line: null, column: null, found, expected }),
     onBatch(batch) {
@@ -33,7 +33,13 @@ async function readInto(store: ColumnStore, pieces: AsyncIterable<Buffer>, { wan
     },
   });
   reasons.throwIfAny();
-  return { columns: columns.map(({ source }, slot) => ({ index: indices[slot] ?? 0, significantDigits: digitsOf(file, source) })) };
+  return {
+    leftOut,
+    columns: columns.map(({ source }, slot) => {
+      const array = source.kind === 'array' ? file.arrays.get(arrayKey(source.array)) : undefined;
+      return { index: indices[slot] ?? 0, significantDigits: array?.digits ?? null, isSingle: array?.isSingle };
+    }),
+  };
 }
 
 const isAsked = (name: string, wanted: readonly string[]): boolean => wanted.some((each) => resolveColumn([name], each) === 0);
@@ -101,8 +107,4 @@ function isFiniteThroughout(values: Float64Array): boolean {
   let sum = 0;
   for (const value of values) sum += value * 0;
   return sum === 0;
-}
-
-function digitsOf(file: GridFile, source: GridColumn['source']): number | null {
-  return source.kind === 'array' ? (file.arrays.get(arrayKey(source.array))?.digits ?? null) : null;
 }

@@ -22,7 +22,7 @@ export async function getGridResult(ctx: MemberContext, key: { id: string; label
   const norms = normsOf(row);
   if (row.state !== 'read' || !norms) throw new AppError('not-found', `No file of grid ${row.label} has been read; it is ${row.state}.`);
   return {
-    label: row.label, upload: row.upload_id ?? '', sha256: row.sha256 ?? '', rows: norms.rows, weightSum: norms.weightSum,
+    label: row.label, upload: row.upload_id ?? '', sha256: row.sha256 ?? '', rows: norms.rows, ...(norms.rowsLeftOut !== undefined && { rowsLeftOut: norms.rowsLeftOut }), weightSum: norms.weightSum,
     equalWeights: norms.equalWeights, mapping: row.mapping as unknown as ColumnMapping,
     ...statedNorms(norms),
     ...(norms.solutions && { solutions: norms.solutions.map(({ field, L1, L2, Linf, min, max, count, significantDigits }) => ({ field, L1, L2, Linf, minimum: min, maximum: max, count, significantDigits })) }),

@@ -15,7 +15,10 @@ export function UploadProgress({ grid, transfer, reading }: UploadProgressProps)
   if (transfer) return <SendingProgress transfer={transfer} />;
   const { state, upload } = grid;
   if (grid.excluded !== null || !upload) return null;
-  if (state === 'read') return <>{formatCount(upload.rows ?? upload.rowsRead ?? 0)} rows</>;
+  if (state === 'read') {
+    const leftOut = upload.rowsLeftOut ?? 0;
+    return <>{formatCount(upload.rows ?? upload.rowsRead ?? 0)} rows{leftOut > 0 && `; ${formatCount(leftOut)} marked as duplicates left out`}</>;
+  }
   if (state === 'reading') {
     const rows = reading?.rowsRead ?? upload.rowsRead ?? 0;
     return (
