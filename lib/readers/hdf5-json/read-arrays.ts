@@ -1,4 +1,5 @@
 import { elementsOf, layOutColumns, type ArrayColumn } from '../arrays/array-columns';
+import { spreadAxis } from '../arrays/grid-axes';
 import { locateArrayColumns } from '../arrays/locate-array-columns';
 import type { ColumnsAsked, ColumnsFound, ColumnsPreview } from '../column-format';
 import type { ReasonCollector } from '../reason-collector';
@@ -28,12 +29,12 @@ export function previewArrays(arrays: readonly Hdf5Array[]): ColumnsPreview {
 /** Delivers the columns asked for, whose values are all kept by now. */
 export function readArrays(arrays: readonly Hdf5Array[], { wanted, reasons, onBatch, onPiece }: ColumnsAsked): ColumnsFound {
   const columns = layOutColumns(arrays);
-  const indices = locateArrayColumns(arrays, columns, { wanted, reasons });
-  const found = indices.flatMap((index) => columns[index] ?? []);
-  const gathered = gather(arrays, found, indices);
-  for (const each of gathered) checkValues(each, reasons);
+  const { indices, found, rows, aligned } = locateArrayColumns(arrays, columns, { wanted, reasons });
+  for (const each of gather(arrays, found, indices)) checkValues(each, reasons);
   reasons.throwIfAny();
-  const rows = found[0]?.rows ?? 0;
+  const isAxis = (slot: number) => typeof aligned[slot]?.inner === 'number';
+  const axes = found.flatMap((column, slot) => (isAxis(slot) ? [{ slot, inner: aligned[slot]?.inner ?? 1, values: readAxis(arrays, column) }] : []));
+  const gathered = gather(arrays, found, indices).map((each) => ({ ...each, columns: each.columns.filter(({ slot }) => !isAxis(slot)) })).filter((each) => each.columns.length > 0);
   const perRow = Math.max(1, ...gathered.map((each) => each.perRow));
   const step = Math.max(1, Math.min(batchRows, Math.floor(mostAtOnce / perRow)));
   const batch = found.map(() => new Float64Array(step));
@@ -44,10 +45,19 @@ export function readArrays(arrays: readonly Hdf5Array[], { wanted, reasons, onBa
       each.values.values.copy(from * each.perRow, count * each.perRow, flat);
       for (const { slot, offset } of each.columns) pick(flat, { offset, every: each.perRow, count }, batch[slot] as Float64Array);
     }
+    for (const { slot, inner, values } of axes) spreadAxis(values, inner, { from, count }, batch[slot] as Float64Array);
     onBatch({ rows: count, columns: batch, lines: null });
     onPiece();
   }
   return { columns: found.map((column, slot) => ({ index: indices[slot] ?? 0, significantDigits: arrays[column.array]?.values?.digits() ?? null, isSingle: arrays[column.array]?.members[column.member]?.isSingle })) };
+}
+
+function readAxis(arrays: readonly Hdf5Array[], column: ArrayColumn): Float64Array {
+  const array = arrays[column.array];
+  const { perRow, offset } = placeOf(column, array);
+  const flat = new Float64Array(column.rows * perRow);
+  array?.values?.values.copy(0, flat.length, flat);
+  return flat.filter((_, at) => at % perRow === offset);
 }
 
 function gather(arrays: readonly Hdf5Array[], found: readonly ArrayColumn[], indices: readonly number[]): WantedArray[] {

@@ -1,29 +1,31 @@
 import { elementsOf, layOutColumns, type ArrayColumn } from '../arrays/array-columns';
+import { spreadAxis } from '../arrays/grid-axes';
 import { locateArrayColumns } from '../arrays/locate-array-columns';
 import type { ColumnsAsked, ColumnsFound } from '../column-format';
-import { createColumnStore, deliverColumns } from '../column-store';
+import type { ColumnBatch } from '../source';
+import { createColumnStore } from '../column-store';
 import { createExpansionLimit } from '../expansion-limit';
-import { writeTemporaryFile, type TemporaryFile } from '../temporary-file';
+import { writeTemporaryFile } from '../temporary-file';
 import { readSlabs, slabBytes, type Slab } from './array-slabs';
 import type { PlacedMember } from './element-layout';
 import { openHdf5, type Hdf5File } from './hdf5-file';
 import { listArrays, type StoredArray } from './stored-arrays';
 
 const batchRows = 2048;
-/** Slabs of all arrays that are read side by side. */
-const mostHeld = 128 * 1024 * 1024;
+/** Bytes of slabs of all arrays that are read side by side. */
+const usuallyHeld = 128 * 1024 * 1024;
 
 interface PickedColumn { slot: number; element: number; member: PlacedMember }
 /** Columns of one array that are read together. */
 interface WantedArray { array: StoredArray; elements: number; rows: number; columns: PickedColumn[] }
 
 /** Reads columns of an HDF5 file, which is put on disk first: what is read of it lies anywhere in it. */
-export async function readHdf5(pieces: AsyncIterable<Buffer>, asked: ColumnsAsked): Promise<ColumnsFound> {
+export async function readHdf5(pieces: AsyncIterable<Buffer>, asked: ColumnsAsked, mostHeld = usuallyHeld): Promise<ColumnsFound> {
   const stored = await writeTemporaryFile(pieces, asked.onPiece);
   try {
     const file = await openHdf5(stored);
     try {
-      return readFrom(file, stored, asked);
+      return readFrom(file, { stored: stored.size(), mostHeld }, asked);
     } finally {
       file.close();
     }
@@ -32,16 +34,22 @@ export async function readHdf5(pieces: AsyncIterable<Buffer>, asked: ColumnsAske
   }
 }
 
-function readFrom(file: Hdf5File, stored: TemporaryFile, { wanted, reasons, onBatch, onPiece }: ColumnsAsked): ColumnsFound {
+function readFrom(file: Hdf5File, { stored, mostHeld }: { stored: number; mostHeld: number }, { wanted, reasons, onBatch, onPiece }: ColumnsAsked): ColumnsFound {
   const arrays = listArrays(file);
   const columns = layOutColumns(arrays);
-  const indices = locateArrayColumns(arrays, columns, { wanted, reasons });
-  const found = indices.flatMap((index) => columns[index] ?? []);
-  const gathered = gather(arrays, found);
-  refuseInflated(gathered, stored.size());
-  const rows = found[0]?.rows ?? 0;
-  if (gathered.reduce((sum, { array }) => sum + slabBytes(array), 0) > mostHeld) readInTurn(file, gathered, { rows, slots: found.length, onBatch, onPiece });
-  else readTogether(file, gathered, { rows, slots: found.length, onBatch, onPiece });
+  const { indices, found, rows, aligned } = locateArrayColumns(arrays, columns, { wanted, reasons });
+  refuseInflated(gather(arrays, found), stored);
+  const isAxis = (slot: number) => typeof aligned[slot]?.inner === 'number';
+  const axes = found.flatMap((column, slot) => (isAxis(slot) ? [{ slot, inner: aligned[slot]?.inner ?? 1, values: readAxis(file, arrays, column) }] : []));
+  const gathered = gather(arrays, found).map((each) => ({ ...each, columns: each.columns.filter(({ slot }) => !isAxis(slot)) })).filter((each) => each.columns.length > 0);
+  let from = 0;
+  const deliver = (batch: ColumnBatch) => {
+    for (const { slot, inner, values } of axes) spreadAxis(values, inner, { from, count: batch.rows }, batch.columns[slot] as Float64Array);
+    from += batch.rows;
+    onBatch(batch);
+  };
+  const isLarge = gathered.reduce((sum, { array }) => sum + slabBytes(array), 0) > mostHeld;
+  (isLarge ? readInTurn : readTogether)(file, gathered, { rows, slots: found.length, onBatch: deliver, onPiece });
   return { columns: indices.map((index, slot) => ({ index, significantDigits: null, isSingle: memberOf(arrays, found[slot])?.isSingle })) };
 }
 
@@ -82,13 +90,21 @@ function readInTurn(file: Hdf5File, wanted: readonly WantedArray[], { rows, slot
         onPiece();
       }
     }
-    deliverColumns(columns, rows, (delivered) => {
-      onBatch(delivered);
+    for (let from = 0; from < rows; from += batchRows) {
+      const count = Math.min(batchRows, rows - from);
+      for (const { slot } of wanted.flatMap((each) => each.columns)) columns[slot]?.copy(from, count, batch[slot] as Float64Array);
+      onBatch({ rows: count, columns: batch, lines: null });
       onPiece();
-    });
+    }
   } finally {
     store.close();
   }
+}
+
+function readAxis(file: Hdf5File, arrays: readonly StoredArray[], column: ArrayColumn): Float64Array {
+  const values = new Float64Array(column.rows);
+  for (const wanted of gather(arrays, [column])) createCursor(file, wanted)(0, column.rows, [values]);
+  return values;
 }
 
 function gather(arrays: readonly StoredArray[], found: readonly ArrayColumn[]): WantedArray[] {

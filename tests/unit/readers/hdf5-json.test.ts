@@ -34,6 +34,14 @@ describe('HDF5/JSON', () => {
     expect((await readTable(content, ['g'])).columns).toEqual([Array.from({ length: 20 }, (_, i) => i)]);
   });
 
+  it('takes one-dimensional arrays for the axes of a grid where only one direction has their length', async () => {
+    const T = Array.from({ length: 2 }, (_, i) => Array.from({ length: 10 }, (_each, j) => i * 10 + j));
+    const content = writeHdf5Json([{ path: 'x', value: [5, 6] }, { path: 'y', value: T[0] }, { path: 'T', dims: [2, 10], value: T }]);
+    expect((await readTable(content, ['x', 'y', 'T'])).columns).toEqual([
+      T.flat().map((_, row) => (row < 10 ? 5 : 6)), T.flat().map((_, row) => row % 10), T.flat(),
+    ]);
+  });
+
   it('takes compounds, arrays in them, integers, single precision and types kept apart', async () => {
     const type = { class: 'H5T_COMPOUND', fields: [
       { name: 'x', type: 'H5T_IEEE_F64LE' }, { name: 'name', type: text }, { name: 'U', type: { class: 'H5T_ARRAY', dims: [2], base: single } }, { name: 'n', type: integer },
