@@ -1,7 +1,6 @@
 // AssemblyScript. Exponentials, two at a time, with the bits of the language's own: K. C. Ng, fdlibm 5.3 (Sun Microsystems,
 // 1995), e_exp.c, without a branch. Values next to 0, 1 exactly and results beyond ordinary doubles are left to the language.
 
-// @ts-ignore: decorator
 @external("env", "exponential")
 declare function plainExponential(value: f64): f64;
 

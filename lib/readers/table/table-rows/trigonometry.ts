@@ -2,10 +2,8 @@
 // K. C. Ng, fdlibm 5.3 (Sun Microsystems, 1995), k_sin.c, k_cos.c and the first step of e_rem_pio2.c, without a branch.
 // What takes its further steps is left to the language.
 
-// @ts-ignore: decorator
 @external("env", "sine")
 declare function plainSine(value: f64): f64;
-// @ts-ignore: decorator
 @external("env", "cosine")
 declare function plainCosine(value: f64): f64;
 
