@@ -4,6 +4,7 @@ import { useEffect, useRef } from 'react';
 import uPlot from 'uplot';
 import 'uplot/dist/uPlot.min.css';
 import type { PanelDrawing } from '@/lib/figures/scene';
+import { whenFacesAreThere } from './figure-faces';
 import { paintScene, readPalette } from './paint-scene';
 import { watchTheme } from './watch-theme';
 
@@ -54,9 +55,7 @@ export function PlotCanvas({ drawing, onPoint }: PlotCanvasProps) {
     const plot = new uPlot(plotOptions(drawing, (x) => pointRef.current?.(x)), data, host);
     let isGone = false;
     const redraw = () => { if (!isGone) plot.redraw(false); };
-    // A canvas does not wait for faces: ask for those it writes in, then draw again.
-    void Promise.all(['12px "Source Sans 3"', '600 12px "Source Sans 3"', 'italic 12px "STIX Two Text"', '12px "STIX Two Text"', '12px "Fourfold Signs Serif"']
-      .map((face) => document.fonts.load(face, 'L2∞'))).then(redraw, redraw);
+    whenFacesAreThere(redraw);
     const unwatch = watchTheme(redraw);
     return () => {
       isGone = true;

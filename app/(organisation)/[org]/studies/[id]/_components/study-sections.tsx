@@ -17,16 +17,19 @@ import { domainVolume } from '@/lib/domain/problems/domain-volume';
 import type { Study } from '@/lib/domain/studies/schema';
 import { solutionFields } from '@/lib/domain/cases/solution-fields';
 import { takesFiles } from '@/lib/domain/studies/takes-files';
+import { regionRows } from '@/lib/domain/assessment/region-parts';
 import { AfterData } from './after-data';
 import { Cautions } from './cautions';
 import { CollectingSections } from './collecting-sections';
 import { DefinitionSection } from './definition-section';
+import { ErrorMaps } from './error-maps';
 import { FigureNotes, StudyFigures } from './figures';
 import { GridTable } from './grid-table';
 import { GridsNotes, GridsWork } from './grids-work';
 import { OutcomeTable } from './outcome-table';
 import { QuantityTable, TripleTable } from './quantity-table';
 import { RecheckSection } from './recheck-section';
+import { RegionTable } from './region-table';
 import { RunRecordSection } from './run-record';
 import { SpaceTimeParts, SpaceTimeTable } from './space-time-table';
 import { StudyMargin } from './study-margin';
@@ -73,17 +76,17 @@ export function StudySections({ study, readings }: StudySectionsProps) {
   );
 }
 
-interface Numbers { outcome: number; quantities: number; triples: number; grids: number }
+interface Numbers { outcome: number; quantities: number; triples: number; grids: number; regions: number }
 
 function tableNumbers({ fields, quantities, spaceTime }: Assessment): Numbers {
-  if (spaceTime) return { outcome: 0, quantities: 0, triples: 0, grids: 3 };
+  if (spaceTime) return { outcome: 0, quantities: 0, triples: 0, grids: 3, regions: 3 };
   const outcome = Number(fields.length > 0);
   const shown = outcome + Number(quantities.length > 0);
   const triples = shown + Number(quantities.some((quantity) => quantity.triples.length > 0));
-  return { outcome, quantities: shown, triples, grids: triples + 1 };
+  return { outcome, quantities: shown, triples, grids: triples + 1, regions: triples + 1 + Number(regionRows(fields).length > 0) };
 }
 
-const lastTable = (assessment: Assessment) => tableNumbers(assessment).grids;
+const lastTable = (assessment: Assessment) => tableNumbers(assessment).regions;
 
 function Results({ study, assessment }: { study: Study; assessment: Assessment }) {
   const { fields, quantities } = assessment;
@@ -129,6 +132,21 @@ function Results({ study, assessment }: { study: Study; assessment: Assessment }
       <Section note={<GridNotes study={study} assessment={assessment} />}>
         <GridTable study={study} assessment={assessment} number={numbers.grids} />
       </Section>
+      {study.definition.fields.length > 0 && (
+        <Section heading="Where the error is" note={<MapNotes />}>
+          {numbers.regions > numbers.grids && <div className="mb-8"><RegionTable fields={fields} thickness={study.definition.boundaryBand?.thickness} number={numbers.regions} /></div>}
+          <ErrorMaps study={study} number={Number(fields.length > 0) + quantities.length + 1} />
+        </Section>
+      )}
+    </>
+  );
+}
+
+function MapNotes() {
+  return (
+    <>
+      <p>A bin shows the largest error of the rows in it. The scale ends four decades below the largest.</p>
+      <p className="screen-only">Arrow keys move the bin that is read out, Home goes back to the largest error.</p>
     </>
   );
 }
