@@ -14,7 +14,7 @@ import type { Study } from '@/lib/domain/studies/schema';
 import { ColumnForm } from './column-form';
 
 /** A file rejected for one of these is no table whose columns could be told otherwise. */
-const beforeColumns = new Set<RejectionCode>(['empty-file', 'unsupported-format', 'binary-content', 'damaged-gzip', 'expands-too-far', 'too-many-columns', 'malformed-json', 'checksum-differs']);
+const beforeColumns = new Set<RejectionCode>(['empty-file', 'unsupported-format', 'binary-content', 'damaged-gzip', 'damaged-file', 'expands-too-far', 'too-many-columns', 'malformed-json', 'checksum-differs']);
 
 /** Which column of the solver's files is what: asked once for the case, shown and changed here later. */
 export function ColumnsSection({ study }: { study: Study }) {
