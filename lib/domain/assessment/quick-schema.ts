@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { procedures } from '@/lib/numerics/assessment';
 import { contract } from '../api/contract';
 import { labelSchema } from '../api/names';
-import { cellsPerDirectionSchema, normNameSchema } from '../cases/definition';
+import { cellsPerDirectionSchema, normNameSchema, spacingSchema } from '../cases/definition';
 import { dimensionSchema } from '../problems/schema';
 import { measuredSchema } from '../studies/input';
 import { assessmentSchema } from './schema';
@@ -15,7 +15,7 @@ const tolerances = positive.max(5);
 export const quickCheckSchema = z.strictObject({
   dimension: dimensionSchema.default(1),
   grids: z.array(z.strictObject({
-    label: labelSchema.optional(), h: positive.optional(), cells: positive.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
+    label: labelSchema.optional(), h: spacingSchema.optional(), cells: spacingSchema.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
     value: measuredSchema.optional(), resolution: positive.optional(), errors: perNorm.optional(), iterativeError: perNorm.optional(),
   })).min(2).max(50),
   formalOrder: z.union([orders, z.partialRecord(normNameSchema, orders)]).optional(),

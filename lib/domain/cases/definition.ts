@@ -3,6 +3,8 @@ import { norms, procedures } from '@/lib/numerics/assessment';
 import { labelSchema } from '../api/names';
 
 const positive = z.number().positive();
+/** A spacing, a time step, or what makes one: ratios of such stay within a double. */
+export const spacingSchema = z.number().positive().min(1e-100).max(1e100);
 const count = z.number().int().positive().max(1e15);
 export const cellsPerDirectionSchema = z.union([count, z.array(count).min(1).max(3)])
   .meta({ description: 'Cells along each direction: one number for all, or one for each.' });
@@ -49,7 +51,7 @@ const declaredQuantitySchema = z.strictObject({
 export type DeclaredQuantity = z.infer<typeof declaredQuantitySchema>;
 
 const plannedGridSchema = z.strictObject({
-  label: labelSchema, cells: count.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(), h: positive.optional(), dt: positive.optional(),
+  label: labelSchema, cells: count.optional(), cellsPerDirection: cellsPerDirectionSchema.optional(), h: spacingSchema.optional(), dt: spacingSchema.optional(),
 });
 
 /** What of a case is kept in revisions and frozen when the first data of a study arrives. */

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { labelSchema } from '../api/names';
-import { cellsPerDirectionSchema, normNameSchema } from '../cases/definition';
+import { cellsPerDirectionSchema, normNameSchema, spacingSchema } from '../cases/definition';
 import { dimensionSchema } from '../problems/schema';
 
 const positive = z.number().positive();
@@ -23,7 +23,7 @@ export const runRecordSchema = z.strictObject({
 export const gridInputSchema = z.strictObject({
   label: labelSchema,
   cells: z.number().int().positive().max(1e15).optional(), cellsPerDirection: cellsPerDirectionSchema.optional(),
-  h: positive.optional(), dt: positive.optional(), t: z.number().optional(),
+  h: spacingSchema.optional(), dt: spacingSchema.optional(), t: z.number().optional(),
   values: z.record(z.string().min(1), z.union([measuredSchema, measuredWithErrorsSchema])).optional(),
   errors: z.record(z.string().min(1), perNorm).optional(),
   iterativeError: z.record(z.string().min(1), perNorm).optional(),

@@ -83,6 +83,21 @@ describe('judgeSimilarity(grids)', () => {
     expect(found?.isSimilar).toBe(true);
   });
 
+  it('does not change when rows are permuted, or coordinates and volumes are scaled', () => {
+    fc.assert(fc.property(fc.double({ min: 0.7, max: 2.5, noNaN: true }), fc.integer({ min: -20, max: 20 }), fc.nat(), (power, exponent, seed) => {
+      const grids = [40, 20, 10].map((n) => tensorCells(edges(n, (s) => s ** power), edges(n)));
+      const found = judgeSimilarity(series(grids));
+      const changed = judgeSimilarity(series(grids.map(({ centres, volumes }) => {
+        const places = volumes.map((_, at) => at).sort((left, right) => Math.sin(left * (seed % 89) + left) - Math.sin(right * (seed % 89) + right));
+        return { centres: places.map((at) => (centres[at] ?? []).map((x) => x * 2 ** exponent)), volumes: places.map((at) => (volumes[at] ?? 1) * 4 ** exponent) };
+      })));
+      expect(changed?.isSimilar).toBe(found?.isSimilar);
+      found?.pairs.forEach(({ median, low, high }, at) => {
+        for (const [one, other] of [[median, changed?.pairs[at]?.median], [low, changed?.pairs[at]?.low], [high, changed?.pairs[at]?.high]]) expect(other).toBeCloseTo(one ?? NaN, 3);
+      });
+    }), { numRuns: 25 });
+  });
+
   it('is null where weights are not volumes and no directions are known', () => {
     expect(judgeSimilarity(series(sizes.map((n) => tensorCells(edges(n))), { isSized: false }))).toBeNull();
     expect(judgeSimilarity([])).toBeNull();

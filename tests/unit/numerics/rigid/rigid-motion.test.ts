@@ -68,6 +68,18 @@ describe('bestRigidMotion(sums)', () => {
     expect(() => bestRigidMotion({ origin: [0], products: [[0, 0], [0, 0]], errors: [[0, 0]] })).toThrow('the sum of weights must be above 0, got 0');
   });
 
+  it('is the same of rows permuted, and of rows split into two of half their weight', () => {
+    const row = fc.record({ x: fc.integer({ min: -9, max: 9 }), y: fc.integer({ min: -9, max: 9 }), u: number(-1, 1), v: number(-1, 1), w: number(0.1, 3) });
+    fc.assert(fc.property(fc.array(row, { minLength: 3, maxLength: 10 }), fc.nat(), (rows, seed) => {
+      const of = (some: typeof rows) => motionOf(some.map(({ x, y }) => [x, y]), some.map(({ u, v }) => [u, v]), { weights: some.map(({ w }) => w) });
+      const at = seed % rows.length;
+      const [found, turned, split] = [of(rows), of(rows.toReversed()), of(rows.flatMap((each, i) => (i === at ? [{ ...each, w: each.w / 2 }, { ...each, w: each.w / 2 }] : [each])))];
+      for (const other of [turned, split]) {
+        for (const member of ['centre', 'translation', 'rotation'] as const) found[member].forEach((value, i) => expect(other[member][i]).toBeCloseTo(value, 10));
+      }
+    }), { numRuns: 60 });
+  });
+
   it('keeps its digits far from the origin where coordinates are taken from near', () => {
     const points = lattice(2).map(([x = 0, y = 0]) => [x + 1e6, y - 1e6]);
     const found = motionOf(points, points.map(([x = 0, y = 0]) => [-0.01 * (y + 1e6), 0.01 * (x - 1e6)]), { origin: [1e6, -1e6] });
