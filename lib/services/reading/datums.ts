@@ -17,7 +17,7 @@ export interface FoundDatum {
 }
 
 /** Fields that are the components of a displacement known up to a rigid motion, in the order of the directions. */
-export function rigidFields({ fields }: Pick<CaseDefinition, 'fields'>): string[] {
+function rigidFields({ fields }: Pick<CaseDefinition, 'fields'>): string[] {
   return fields.filter(({ datum }) => datum === 'rigid').map(({ field }) => field);
 }
 
