@@ -32,7 +32,7 @@ export default async function ProductionPage() {
         <Prose>
           <p>A web process takes about 250 MB, a worker that reads two files at once 200 to 270 MB. In compose.yaml they may take 1 GB and 2 GB, PostgreSQL 1 GB, Redis 512 MB.</p>
           <p>The images hold 72 MB of our own for web and 44 MB for a worker. The database keeps norms and outcomes, a few kilobytes a grid; files lie in the store in the size they were sent. The number of workers, and of the threads of each, decides how many files are read at once.</p>
-          <p>HDF5, and columns of JSON beyond 32 MB, wait on the disk of the worker while they are read, in files without a name under <Code>TMPDIR</Code>: room for the largest of them, unpacked, for each thread. A folder that is held in memory would take it from there.</p>
+          <p>HDF5, and columns of JSON and VTK beyond 32 MB, wait on the disk of the worker while they are read, in files without a name under <Code>TMPDIR</Code>: room for the largest of them, unpacked, for each thread. A folder that is held in memory would take it from there.</p>
         </Prose>
       </Section>
       <Section heading="Variables" note={<p>A variable that is missing or wrong stops the start and is named. Web and worker take the same ones.</p>}>
