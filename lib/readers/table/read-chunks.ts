@@ -19,7 +19,7 @@ export interface ReadChunksOptions<Part> {
   onPart: (part: Part) => void;
 }
 
-const roomCount = 10;
+const roomCount = 7;
 
 /**
  * Reads a table chunk by chunk, with a helper where the file is large. A chunk comes to the same whoever reads it, and parts
