@@ -33,6 +33,8 @@ export interface GridTags {
 }
 
 const sections: readonly Section[] = ['PointData', 'CellData', 'Points', 'Cells', 'Coordinates', 'FieldData'];
+/** What no array holds; keys with information may stand in one. */
+const ofGrid: ReadonlySet<string> = new Set(['VTKFile', 'Piece', 'DataArray', 'AppendedData', 'UnstructuredGrid', 'RectilinearGrid', 'StructuredGrid', 'ImageData', ...sections]);
 const axisNames = ['x', 'y', 'z'];
 const mostPieces = 100_000;
 const mostArrays = 500_000;
@@ -74,6 +76,7 @@ export function createGridTags(file: GridFile, events: TagEvents): GridTags {
   return {
     open(name, attributes, line) {
       const parent = stack.at(-1);
+      if (ofGrid.has(name) && stack.includes('DataArray')) events.failAt(line)(`<${name}> inside an array`, 'the end of the array');
       if (stack.length === 0) {
         if (name !== 'VTKFile') events.refuse(`XML of <${name}>`, '<VTKFile>');
         const form = readFileForm(attributes, events.refuse);
@@ -84,7 +87,7 @@ export function createGridTags(file: GridFile, events: TagEvents): GridTags {
         const { encoding } = attributes;
         if (encoding !== 'base64' && encoding !== 'raw') events.refuse(`VTK XML with appended data as ${encoding ?? 'nothing'}`, 'it as base64 or raw');
         else events.appendedData(encoding);
-      } else if (name === 'Piece' && parent === file.kind) {
+      } else if (name === 'Piece' && parent === file.kind && stack.length === 2) {
         if (file.pieces.push(readPiece(file.kind, attributes, events.failAt(line))) > mostPieces) events.failAt(line)(`more than ${mostPieces} pieces`, 'fewer pieces');
       } else if (parent === 'Piece' || (parent === file.kind && name === 'FieldData')) {
         section = sections.find((each) => each === name) ?? null;
