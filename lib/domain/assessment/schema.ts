@@ -57,7 +57,7 @@ const spaceTimeSchema = z.strictObject({
 export const meshSchema = z.strictObject({
   low: z.array(z.number()), high: z.array(z.number()),
   duplicates: z.strictObject({ rows: z.number(), oneIn: z.number().int() })
-    .meta({ description: 'Rows with the coordinates of an earlier one; of more than 65 536 rows an estimate from one row in `oneIn`.' }),
+    .meta({ description: 'Rows with the coordinates of an earlier one; of more than 16 384 rows an estimate from one row in `oneIn`.' }),
 }).meta({ description: 'Bounds of the coordinates along x, y, z, and rows that repeat them.' });
 
 /** What was computed for one revision of a study; it never changes. */

@@ -1,7 +1,7 @@
 import type { CoordinatePart } from './mesh-part';
 
 /** So many rows are looked at one and all, and as many are kept of more. */
-const capacity = 2 ** 16;
+const capacity = 2 ** 14;
 /** A level stands in the low word of a hash; more rows than this leaves too many of no file has. */
 const highestLevel = 31;
 const low32 = 2 ** 32;
@@ -17,14 +17,14 @@ export interface CoordinateSample {
   addPart(part: CoordinatePart): void;
   /** What was added since the last part. Those to come begin with the level that all so far come to, which spares them what would be dropped in the end. */
   takePart(): CoordinatePart;
-  /** Rows that have the coordinates of another before them; of more than 65 536 rows an estimate from one in `oneIn`. */
+  /** Rows that have the coordinates of another before them; of more than 16 384 rows an estimate from one in `oneIn`. */
   duplicates(): { rows: number; oneIn: number };
 }
 
 /**
- * Finds rows of the same coordinates in bounded memory: keeps a hash of 53 bits of each, and of more than 65 536 rows only
+ * Finds rows of the same coordinates in bounded memory: keeps a hash of 53 bits of each, and of more than 16 384 rows only
  * those whose hash is a multiple of a power of two, which twins share. What is kept depends on the rows alone, not on their
- * order or on who looked at them. Two of 65 536 different rows share a hash with a chance of 2·10⁻⁷.
+ * order or on who looked at them. Two of 16 384 different rows share a hash with a chance of 2·10⁻⁸.
  * Coordinates are the same where their doubles are, −0 and 0 being one.
  */
 export function createCoordinateSample(): CoordinateSample {

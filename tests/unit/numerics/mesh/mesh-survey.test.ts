@@ -18,13 +18,13 @@ describe('createCoordinateSample()', () => {
     expect(duplicatesOf([1, 2], [2, 1])).toEqual({ rows: 0, oneIn: 1 });
   });
 
-  it('tells the points of grids apart, up to 65 536 of them', () => {
+  it('tells the points of grids apart, up to 16 384 of them', () => {
     for (const scale of [1, 2 ** -10, 0.1, 1e-3, Math.PI, 1e8]) {
-      const line = Array.from({ length: 2 ** 16 }, (_, i) => i * scale);
+      const line = Array.from({ length: 2 ** 14 }, (_, i) => i * scale);
       expect([scale, duplicatesOf(line)]).toEqual([scale, { rows: 0, oneIn: 1 }]);
-      const plane = Array.from({ length: 2 ** 16 }, (_, i) => [(i % 256) * scale, Math.floor(i / 256) * scale]);
+      const plane = Array.from({ length: 2 ** 14 }, (_, i) => [(i % 128) * scale, Math.floor(i / 128) * scale]);
       expect([scale, duplicatesOf(plane.map(([x = 0]) => x), plane.map(([, y = 0]) => y))]).toEqual([scale, { rows: 0, oneIn: 1 }]);
-      const space = Array.from({ length: 40 ** 3 }, (_, i) => [(i % 40) * scale, (Math.floor(i / 40) % 40) * scale, Math.floor(i / 1600) * scale - 3]);
+      const space = Array.from({ length: 25 ** 3 }, (_, i) => [(i % 25) * scale, (Math.floor(i / 25) % 25) * scale, Math.floor(i / 625) * scale - 3]);
       expect([scale, duplicatesOf(...[0, 1, 2].map((axis) => space.map((point) => point[axis] ?? 0)))]).toEqual([scale, { rows: 0, oneIn: 1 }]);
     }
   });
@@ -35,9 +35,9 @@ describe('createCoordinateSample()', () => {
     const forward = createCoordinateSample();
     forward.add(rows, [x]);
     const { rows: found, oneIn } = forward.duplicates();
-    expect(oneIn).toBe(16);
-    // 60 000 twins, of which one in 16 is looked at: a standard error of 1.6 %.
-    expect(Math.abs(found - 60_000)).toBeLessThan(4 * 1000);
+    expect(oneIn).toBe(64);
+    // 60 000 twins, of which one in 64 is looked at: a standard error of 3.3 %.
+    expect(Math.abs(found - 60_000)).toBeLessThan(4 * 2000);
     const parts = [x.slice(0, 1000), x.slice(1000, 250_000), x.slice(250_000)].map((some) => {
       const sample = createCoordinateSample();
       sample.add(some.length, [some]);
@@ -48,14 +48,14 @@ describe('createCoordinateSample()', () => {
     expect(combined.duplicates()).toEqual({ rows: found, oneIn });
     const kept = combined.takePart().hashes.toSorted();
     expect(kept).toEqual(forward.takePart().hashes.toSorted());
-    expect(kept.length).toBeLessThanOrEqual(2 ** 16);
+    expect(kept.length).toBeLessThanOrEqual(2 ** 14);
     // One that gathers part after part drops early what would be dropped in the end.
     const [onward, total] = [createCoordinateSample(), createCoordinateSample()];
     for (let from = 0; from < rows; from += 1500) {
       onward.add(1500, [x.subarray(from, from + 1500)]);
       total.addPart(onward.takePart());
     }
-    expect(onward.takePart().level).toBe(4);
+    expect(onward.takePart().level).toBe(6);
     expect(total.takePart().hashes.toSorted()).toEqual(kept);
   });
 });
