@@ -17,6 +17,8 @@ export interface ColumnEngine {
   allocate(length: number): Float64Array;
   unary(operation: UnaryOperation, from: Float64Array, into: Float64Array, rows: number): boolean;
   binary(operation: BinaryOperation, operands: Operands, into: Float64Array, rows: number): boolean;
+  /** Copies the rows whose places are given; those, too, lie in its memory. */
+  pick(from: Float64Array, places: Int32Array, into: Float64Array, rows: number): boolean;
   /** As addErrors in norms/run-sums.ts. */
   addErrors(state: Float64Array, columns: ErrorColumns, rows: number): boolean;
   /** As addWeights in norms/run-sums.ts. */

@@ -39,8 +39,8 @@ export function binsAlong(values: Float64Array, rows: number, { lattice, axis, b
   const [low, high] = side;
   const scale = (last + 1) / (high - low);
   for (let i = 0; i < rows; i += 1) {
-    const bin = Math.floor(((values[i] as number) - low) * scale + edge);
-    into[i] = bin < 0 ? 0 : bin > last ? last : bin;
+    const place = ((values[i] as number) - low) * scale + edge;
+    into[i] = place < 0 ? 0 : place > last ? last : place | 0;
   }
 }
 

@@ -10,7 +10,12 @@ export function createRowPicker(fieldCount: number, engine: ColumnEngine | null)
   const room = () => engine?.allocate(mostPicked) ?? new Float64Array(mostPicked);
   const weightsRoom = room();
   const rooms = Array.from({ length: fieldCount }, () => ({ values: room(), exact: room() }));
-  const places = new Int32Array(mostPicked);
+  const placesRoom = room();
+  const places = new Int32Array(placesRoom.buffer, placesRoom.byteOffset, mostPicked);
+  const copyRows = (column: Float64Array, into: Float64Array, rows: number) => {
+    if (engine?.pick(column, places, into, rows) === true) return;
+    for (let at = 0; at < rows; at += 1) into[at] = column[places[at] as number] as number;
+  };
   return (block, { classes, counts }, kind) => {
     const rows = counts[kind] ?? 0;
     let found = 0;
@@ -18,14 +23,10 @@ export function createRowPicker(fieldCount: number, engine: ColumnEngine | null)
     const { x, y, z, weights } = block;
     for (const [index, { values, exact }] of block.fields.entries()) {
       const own = rooms[index] as (typeof rooms)[number];
-      copyRows(values, places, { rows, into: own.values });
-      copyRows(exact, places, { rows, into: own.exact });
+      copyRows(values, own.values, rows);
+      copyRows(exact, own.exact, rows);
     }
-    if (weights !== null) copyRows(weights, places, { rows, into: weightsRoom });
+    if (weights !== null) copyRows(weights, weightsRoom, rows);
     return { rows, x, y, z, weights: weights && weightsRoom, fields: rooms, places };
   };
-}
-
-function copyRows(column: Float64Array, places: Int32Array, { rows, into }: { rows: number; into: Float64Array }): void {
-  for (let at = 0; at < rows; at += 1) into[at] = column[places[at] as number] as number;
 }

@@ -17,13 +17,14 @@ export interface StepExports {
   divide: Pair;
   addNumber: Pair;
   multiplyByNumber: Pair;
+  pick(from: number, places: number, into: number, rows: number): void;
   addErrors(state: number, values: number, exact: number, weights: number, rows: number): void;
   addWeights(state: number, weights: number, rows: number): void;
 }
 
 interface Memory {
   column: (length: number) => Float64Array;
-  addressOf: (array: Float64Array) => number | null;
+  addressOf: (array: Float64Array | Int32Array) => number | null;
 }
 
 /** Works on columns of a memory by compiled code, two rows at a time. */
@@ -52,6 +53,12 @@ export function createEngine(code: StepExports, { column, addressOf }: Memory): 
       } else if (aNumber !== null && operation === 'add') code.addNumber(aNumber, b, to, rows);
       else if (aNumber !== null && operation === 'multiply') code.multiplyByNumber(aNumber, b, to, rows);
       else pairs[operation](a, b, to, rows);
+      return true;
+    },
+    pick(from, places, into, rows) {
+      const [a, at, to] = [addressOf(from), addressOf(places), addressOf(into)];
+      if (a === null || at === null || to === null) return false;
+      code.pick(a, at, to, rows);
       return true;
     },
     addErrors(state, { values, exact, weights }, rows) {

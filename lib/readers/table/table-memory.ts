@@ -36,7 +36,7 @@ export interface TableMemory {
   bytes: (at: number, length: number) => Buffer;
   view: (at: number, length: number) => DataView;
   /** Where an array begins, null where it lies elsewhere. */
-  addressOf: (array: Float64Array | Uint8Array) => number | null;
+  addressOf: (array: Float64Array | Int32Array | Uint8Array) => number | null;
   powersAt: number;
   /** For one other thread; from then on no more room can be taken here. */
   share: () => SharedMemory;
@@ -77,7 +77,7 @@ export function createTableMemory(shared?: SharedMemory): TableMemory {
     const at = take(length * 8);
     return new Float64Array(memory.buffer, at, length);
   };
-  const addressOf = (array: Float64Array | Uint8Array) => (buffers.has(array.buffer) ? array.byteOffset : null);
+  const addressOf = (array: Float64Array | Int32Array | Uint8Array) => (buffers.has(array.buffer) ? array.byteOffset : null);
 
   const powers = powersOfFive();
   const powersAt = take(powers.length);

@@ -49,3 +49,9 @@ export function negate(from: usize, into: usize, rows: u32): void {
   for (; into + 8 < end; into += 16, from += 16) v128.store(into, f64x2.neg(v128.load(from)));
   if (into < end) store<f64>(into, -load<f64>(from));
 }
+
+/** Copies the rows whose places are given, as numbers of 32 bits. */
+export function pick(from: usize, places: usize, into: usize, rows: u32): void {
+  const end = into + (<usize>rows << 3);
+  for (; into < end; into += 8, places += 4) store<f64>(into, load<f64>(from + (<usize>load<u32>(places) << 3)));
+}
