@@ -1,5 +1,6 @@
 import { gzipSync } from 'node:zlib';
 import { describe, expect, it } from 'vitest';
+import { wholeFields } from '@/lib/domain/assessment/whole-fields';
 import { getGridResultContract } from '@/lib/domain/studies/schema';
 import { previewContract } from '@/lib/domain/uploads/schema';
 import { ok } from '@/tests/support/api';
@@ -49,7 +50,7 @@ describe('a study of files in several formats', () => {
       for (const norm of ['L1', 'L2', 'Linf'] as const) expect((u?.[norm] ?? 0) / (known?.fields.u?.[norm] ?? 0)).toBeCloseTo(1, 9);
     }
     const wanted = meta.fields.u?.expected_outcome;
-    expect(assessment.fields.map(({ norm, outcome, reasons }) => [norm, outcome, ...reasons]).sort())
+    expect(wholeFields(assessment.fields).map(({ norm, outcome, reasons }) => [norm, outcome, ...reasons]).sort())
       .toEqual((['L1', 'L2', 'Linf'] as const).map((norm) => [norm, wanted?.[norm].outcome, wanted?.[norm].reason]));
   });
 });

@@ -1,4 +1,5 @@
 import { beforeAll, describe, expect, it } from 'vitest';
+import { wholeFields } from '@/lib/domain/assessment/whole-fields';
 import { createCaseContract } from '@/lib/domain/cases/schema';
 import { createCodeContract, createReleaseContract } from '@/lib/domain/codes/schema';
 import { createProblemContract } from '@/lib/domain/problems/schema';
@@ -69,7 +70,7 @@ describe.each([
         expect(Math.abs(exact.L2 / (known?.exact_L2 ?? 0) - 1)).toBeLessThan(1e-9);
       }
     }
-    const judged = assessment.fields.map(({ field, norm, outcome: of, reasons }) => `${field} ${norm}: ${of} ${reasons.join()}`);
+    const judged = wholeFields(assessment.fields).map(({ field, norm, outcome: of, reasons }) => `${field} ${norm}: ${of} ${reasons.join()}`);
     const wanted = Object.entries(meta.fields).flatMap(([field, { expected_outcome }]) => norms.map((norm) => (
       `${field} ${norm}: ${expected_outcome[norm].outcome} ${expected_outcome[norm].reason}`)));
     expect(judged.sort()).toEqual(wanted.sort());

@@ -99,7 +99,7 @@ describe('a token limited to another code', () => {
 });
 
 /** Allowed calls may still be refused for what they ask, never for who asks. */
-const mayLackTheThing = ['GET /api/v1/studies/{id}/grids/{label}/result', 'GET /api/v1/uploads/{id}/preview'];
+const mayLackTheThing = ['GET /api/v1/studies/{id}/grids/{label}/maps/{field}', 'GET /api/v1/studies/{id}/grids/{label}/result', 'GET /api/v1/uploads/{id}/preview'];
 
 describe('who may', () => {
   it.each(rowsThat('read'))('%s answers every role that reads', async (name, row) => {
