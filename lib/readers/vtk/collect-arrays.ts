@@ -88,6 +88,7 @@ function createCollector({ store, reasons, keep, firstPieceOnly }: ArraysAsked) 
       form = { ...found, expansion };
     },
     array(tag, line) {
+      if (reader !== null) failAt(line)('an array before the end of another', '</DataArray>');
       if (tag.encoding === 'appended') waiting.push({ tag, line });
       else reader = open(tag, tag.encoding, line);
       inside = 0;

@@ -41,8 +41,8 @@ export function deliverRows({ file, columns, of, most, refuse, onBatch }: RowsAs
     const asked: PieceAsked = { file, index, refuse };
     const rows = Math.min(most, of === 'points' ? piece.points : piece.cells);
     if (rows === 0) continue;
-    const isGhost = readGhosts(asked, of);
-    const fills = prepareFills(asked, { columns, of, geometry });
+    const isGhost = readGhosts(asked, of, rows);
+    const fills = prepareFills(asked, { columns, of, rows, geometry });
     for (let from = 0; from < rows; from += batchRows) {
       const count = Math.min(batchRows, rows - from);
       fills.begin(from, count);
@@ -57,18 +57,18 @@ export function deliverRows({ file, columns, of, most, refuse, onBatch }: RowsAs
   return leftOut;
 }
 
-interface FillsAsked { columns: readonly GridColumn[]; of: 'points' | 'cells'; geometry: CellBatch }
+interface FillsAsked { columns: readonly GridColumn[]; of: 'points' | 'cells'; rows: number; geometry: CellBatch }
 
-function prepareFills(asked: PieceAsked, { columns, of, geometry }: FillsAsked): { begin: (from: number, count: number) => void; columns: Fill[] } {
+function prepareFills(asked: PieceAsked, { columns, of, rows: count, geometry }: FillsAsked): { begin: (from: number, count: number) => void; columns: Fill[] } {
   const used = new Set(columns.flatMap(({ source }) => (source.kind === 'geometry' ? [source.what] : [])));
-  const rows = used.size === 0 ? null : of === 'cells' ? createCellRows(asked, used.has('volume')) : createPointRows(asked);
+  const rows = used.size === 0 ? null : of === 'cells' ? createCellRows(asked, count, used.has('volume')) : createPointRows(asked);
   return {
-    begin: (from, count) => rows?.fill(from, count, geometry),
+    begin: (from, some) => rows?.fill(from, some, geometry),
     columns: columns.map(({ source }): Fill => {
       switch (source.kind) {
-        case 'geometry': return (_from, count, into) => into.set(geometry[source.what].subarray(0, count));
+        case 'geometry': return (_from, some, into) => into.set(geometry[source.what].subarray(0, some));
         case 'time': return fillTime(asked);
-        case 'array': return fillComponent(asked, source.array, source.component);
+        case 'array': return fillComponent(asked, source, count);
       }
     }),
   };
@@ -81,8 +81,9 @@ function fillTime({ file }: PieceAsked): Fill {
   return (_from, count, into) => into.fill(value[0] as number, 0, count);
 }
 
-function fillComponent(asked: PieceAsked, { section, name, components }: ArrayName, component: number): Fill {
-  const { values, from: start } = needSegment(asked, section, name);
+function fillComponent(asked: PieceAsked, { array, component }: { array: ArrayName; component: number }, rows: number): Fill {
+  const { components } = array;
+  const { values, from: start } = needSegment(asked, array, rows * components);
   if (components === 1) return (from, count, into) => values.copy(start + from, count, into);
   const several = new Float64Array(batchRows * components);
   return (from, count, into) => {

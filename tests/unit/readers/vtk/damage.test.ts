@@ -1,4 +1,5 @@
 import fc from 'fast-check';
+import { readFileSync } from 'node:fs';
 import { deflateSync } from 'node:zlib';
 import { describe, expect, it } from 'vitest';
 import { readPreview } from '@/lib/readers/read-preview';
@@ -140,6 +141,12 @@ describe('VTK XML', () => {
   it('of an inverted cell is refused with its row', async () => {
     const { columns } = await readTable(write(unstructuredPiece([[0, 0, 0], [1, 0, 0], [0, 1, 0], [0, 0, 1]], [[10, [0, 2, 1, 3]]], { cells: [{ name: 'u', values: [1] }] })), ['volume']);
     expect(columns[0]?.[0]).toBeCloseTo(-1 / 6, 14);
+  });
+
+  it.each(['found-nested.vtu', 'found-spliced.vtu'])('as fuzzing made it (%s) is rejected, also where it is only shown', async (file) => {
+    const content = readFileSync(`fixtures/vtk/${file}`);
+    expect(await readReasons(content, ['x', 'volume', 'u'])).toMatchObject([{ code: 'malformed-vtk' }]);
+    await expect(readPreview(byteSource(content))).rejects.toBeInstanceOf(RejectedFile);
   });
 
   it('whatever is overwritten or cut off is read or rejected', async () => {
