@@ -3,7 +3,7 @@ import type { Filter, Metadata } from 'h5wasm';
 import { refuseManyColumns } from '../column-limit';
 import { RejectedFile } from '../rejected-file';
 import type { TemporaryFile } from '../temporary-file';
-import { dropLibrary, loadLibrary, type LoadedLibrary } from './hdf5-library';
+import { startLibrary, type LoadedLibrary } from './hdf5-library';
 
 /** An HDF5 file. Whatever cannot be read of it throws RejectedFile with what the library says. */
 export interface Hdf5File {
@@ -15,14 +15,12 @@ export interface Hdf5File {
   close(): void;
 }
 
-let opened = 0;
+const place = '/file.h5';
 
 /** Opens a file that lies on disk; it stays open until its own close. */
 export async function openHdf5(file: TemporaryFile): Promise<Hdf5File> {
-  const loaded = await loadLibrary();
+  const loaded = await startLibrary();
   const { library } = loaded;
-  opened += 1;
-  const place = `/file-${opened}.h5`;
   library.FS.writeFile(place, new Uint8Array(0));
   const { node } = library.FS.lookupPath(place);
   const size = file.size();
@@ -53,6 +51,8 @@ export async function openHdf5(file: TemporaryFile): Promise<Hdf5File> {
       return guard(loaded, () => {
         const pointer = library._malloc(bytes);
         if (pointer === 0) throw damaged(`no memory for ${bytes} bytes`);
+        // What the library leaves as it was is not a number then.
+        library.HEAPU8.fill(0xff, pointer, pointer + bytes);
         try {
           // A scalar has no block to choose.
           const [counts, offsets, strides] = count.length === 0 ? [null, null, null] : [count.map(BigInt), offset.map(BigInt), count.map(() => 1n)];
@@ -78,13 +78,12 @@ function damaged(complaint: string | null): RejectedFile {
   }]);
 }
 
-/** Runs the library; its giving up is damage of the file, and leaves an instance that is not used again. */
+/** Runs the library; its giving up is damage of the file. */
 function guard<Result>(loaded: LoadedLibrary, work: () => Result): Result {
   try {
     return work();
   } catch (error) {
     const isTrap = error instanceof WebAssembly.RuntimeError || error instanceof RangeError;
-    if (isTrap) dropLibrary();
     // What the library throws is a plain Error; errors of the disk have a code.
     const isOwn = error instanceof Error && Object.getPrototypeOf(error) === Error.prototype && !('code' in error);
     if (!isTrap && !isOwn) throw error;

@@ -26,30 +26,12 @@ export interface LoadedLibrary {
   complaint(): string | null;
 }
 
-/** An instance that took more memory than that is not used again, since it never gives any back. */
-const mostKept = 512 * 1024 * 1024;
-let kept: Promise<LoadedLibrary> | null = null;
-
 /**
- * The library of this thread. It is the build for browsers, which sees no file but those given to it: a file that refers
- * to other files on the machine finds none.
+ * The library anew, for one file: what a damaged chunk leaves unread is memory as it was, and must not be that of another
+ * file. It is the build for browsers, which sees no file but those given to it: a file that refers to other files on the
+ * machine finds none.
  */
-export async function loadLibrary(): Promise<LoadedLibrary> {
-  kept ??= startLibrary();
-  const loaded = await kept;
-  if (loaded.library.HEAPU8.length > mostKept) {
-    dropLibrary();
-    return loadLibrary();
-  }
-  return loaded;
-}
-
-/** For after a failure that may have left it in disorder; the next file gets a new one. */
-export function dropLibrary(): void {
-  kept = null;
-}
-
-async function startLibrary(): Promise<LoadedLibrary> {
+export async function startLibrary(): Promise<LoadedLibrary> {
   // The package itself starts one instance for good; the module below it makes as many as are needed.
   const place = new URL('./hdf5_util.js', import.meta.resolve('h5wasm')).href;
   const { default: start } = await import(place) as { default: (options: object) => Promise<Hdf5Library> };
