@@ -38,7 +38,7 @@ function shapeSlabs({ dims, size, chunks }: StoredArray): SlabShape {
   return { axis, step: along > packed ? along - (along % packed) : along };
 }
 
-/** Reads an array from its beginning, slab by slab. */
+/** Reads an array from its beginning, slab by slab; the bytes of one are those of the next, too. */
 export function* readSlabs(file: Hdf5File, array: StoredArray): Generator<Slab, void> {
   const { path, dims, size } = array;
   if (dims.length === 0) {
@@ -49,12 +49,14 @@ export function* readSlabs(file: Hdf5File, array: StoredArray): Generator<Slab, 
   const leading = elementsOf(dims.slice(0, axis));
   const behind = dims.slice(axis + 1);
   const along = dims[axis] ?? 0;
+  let room: Uint8Array | undefined;
   for (let index = 0; index < leading; index += 1) {
     for (let start = 0; start < along; start += step) {
       const count = Math.min(step, along - start);
       const bytes = file.read(path, {
         offset: [...unravel(index, dims.slice(0, axis)), start, ...behind.map(() => 0)], count: [...dims.slice(0, axis).map(() => 1), count, ...behind], size,
-      });
+      }, room);
+      room ??= bytes;
       yield { from: (index * along + start) * elementsOf(behind), elements: count * elementsOf(behind), bytes: viewOf(bytes) };
     }
   }

@@ -10,8 +10,8 @@ export interface Hdf5File {
   /** Paths of all datasets that links inside the file lead to. */
   datasets(): string[];
   describe(path: string): { metadata: Metadata; filters: Filter[] };
-  /** A block of a dataset as bytes, `size` for each of its elements. */
-  read(path: string, block: { offset: readonly number[]; count: readonly number[]; size: number }): Uint8Array;
+  /** A block of a dataset as bytes, `size` for each of its elements; in the beginning of `room` where that is large enough. */
+  read(path: string, block: { offset: readonly number[]; count: readonly number[]; size: number }, room?: Uint8Array): Uint8Array;
   close(): void;
 }
 
@@ -46,7 +46,7 @@ export async function openHdf5(file: TemporaryFile): Promise<Hdf5File> {
       return paths;
     },
     describe: (path) => guard(loaded, () => ({ metadata: library.get_dataset_metadata(id, `/${path}`), filters: library.get_dataset_filters(id, `/${path}`) })),
-    read(path, { offset, count, size: each }) {
+    read(path, { offset, count, size: each }, room) {
       const bytes = count.reduce((product, dim) => product * dim, each);
       return guard(loaded, () => {
         const pointer = library._malloc(bytes);
@@ -58,7 +58,10 @@ export async function openHdf5(file: TemporaryFile): Promise<Hdf5File> {
           const [counts, offsets, strides] = count.length === 0 ? [null, null, null] : [count.map(BigInt), offset.map(BigInt), count.map(() => 1n)];
           const status = library.get_dataset_data(id, `/${path}`, counts, offsets, strides, BigInt(pointer));
           if (status < 0) throw damaged(loaded.complaint());
-          return library.HEAPU8.slice(pointer, pointer + bytes);
+          const found = library.HEAPU8.subarray(pointer, pointer + bytes);
+          if (room === undefined || room.length < bytes) return found.slice();
+          room.set(found);
+          return room.subarray(0, bytes);
         } finally {
           library._free(pointer);
         }
