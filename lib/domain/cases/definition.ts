@@ -4,7 +4,7 @@ import { labelSchema } from '../api/names';
 
 const positive = z.number().positive();
 /** A spacing, a time step, or what makes one: ratios of such stay within a double. */
-export const spacingSchema = z.number().positive().min(1e-100).max(1e100);
+export const spacingSchema = z.number().min(1e-100).max(1e100);
 const count = z.number().int().positive().max(1e15);
 export const cellsPerDirectionSchema = z.union([count, z.array(count).min(1).max(3)])
   .meta({ description: 'Cells along each direction: one number for all, or one for each.' });

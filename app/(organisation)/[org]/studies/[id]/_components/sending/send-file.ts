@@ -1,6 +1,7 @@
 import { callApi } from '@/app/_components/api/call-api';
 import { partSizeOf } from '@/lib/domain/uploads/part-size';
 import { completeUploadContract, getUploadContract, startUploadContract } from '@/lib/domain/uploads/schema';
+import { abandonUpload } from './abandon-upload';
 import type { Hashing } from './hash-file';
 import { callAgain, type Line } from './line';
 import { sendParts } from './send-parts';
@@ -23,6 +24,11 @@ async function openUpload({ organisation, study, line }: SendPlace, sending: Sen
     organisation, params: { id: study, label: sending.grid }, idempotencyKey: startKey,
     body: { filename: file.name, bytes: file.size, fingerprint, replaces },
   }));
+  // Given up while it was being opened: nobody knew yet what to give up.
+  if (sending.isDropped) {
+    abandonUpload(organisation, upload);
+    signal.throwIfAborted();
+  }
   sending.upload = upload;
   sending.startedAt = createdAt;
   rememberUpload(upload);

@@ -29,6 +29,8 @@ export interface Sending {
   state: TransferState;
   fault: string | null;
   mayRetry: boolean;
+  /** Given up, replaced by another file, or done. */
+  isDropped: boolean;
   abort: AbortController;
 }
 

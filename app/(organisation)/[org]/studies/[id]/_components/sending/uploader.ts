@@ -1,7 +1,6 @@
 import { v4 } from 'uuid';
-import { callApi } from '@/app/_components/api/call-api';
 import type { Grid } from '@/lib/domain/studies/schema';
-import { deleteUploadContract } from '@/lib/domain/uploads/schema';
+import { abandonUpload } from './abandon-upload';
 import { createBrowserLine } from './browser-line';
 import { openElsewhere } from './elsewhere';
 import { hashFile, type Hashing } from './hash-file';
@@ -60,7 +59,7 @@ class StudyUploader implements Uploader {
     this.#drop(grid);
     this.#sendings.set(grid, {
       grid, file, fingerprint, keeps, replaces, upload: resumes?.id ?? null, startedAt: resumes?.createdAt ?? null, startKey: v4(),
-      stored: new Map(), inFlight: new Map(), samples: [], state: 'queued', fault: null, mayRetry: true, abort: new AbortController(),
+      stored: new Map(), inFlight: new Map(), samples: [], state: 'queued', fault: null, mayRetry: true, isDropped: false, abort: new AbortController(),
     });
     this.#sendNext();
   };
@@ -86,7 +85,7 @@ class StudyUploader implements Uploader {
   giveUp = (grid: string) => {
     const upload = this.#sendings.get(grid)?.upload;
     this.#drop(grid);
-    if (upload) this.#abandon(upload);
+    if (upload) abandonUpload(this.organisation, upload);
     this.#sendNext();
   };
 
@@ -127,7 +126,7 @@ class StudyUploader implements Uploader {
     this.#stop(sending, 'failed', error instanceof Error ? error.message : 'Sending broke off.');
     const kind = error instanceof SendFault ? error.kind : null;
     sending.mayRetry = kind !== 'changed';
-    if (kind === 'changed' && sending.upload) this.#abandon(sending.upload);
+    if (kind === 'changed' && sending.upload) abandonUpload(this.organisation, sending.upload);
     if (kind === 'changed' || kind === 'gone') {
       if (sending.upload) forgetUpload(sending.upload);
       Object.assign(sending, { upload: null, stored: new Map(), startKey: v4(), replaces: null });
@@ -148,6 +147,7 @@ class StudyUploader implements Uploader {
     const sending = this.#sendings.get(grid);
     if (!sending) return;
     this.#sendings.delete(grid);
+    sending.isDropped = true;
     sending.abort.abort();
     this.#dropHashing(sending);
     this.#tell();
@@ -156,12 +156,6 @@ class StudyUploader implements Uploader {
   #dropHashing(sending: Sending): void {
     this.#hashings.get(sending)?.stop();
     this.#hashings.delete(sending);
-  }
-
-  #abandon(upload: string): void {
-    forgetUpload(upload);
-    // One that cannot be reached now is given up a day after it was last heard of.
-    callApi(deleteUploadContract, { organisation: this.organisation, params: { id: upload } }).catch(() => undefined);
   }
 
   #resumeBroken(): void {
