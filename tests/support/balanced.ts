@@ -1,9 +1,12 @@
 import { setTimeout as pause } from 'node:timers/promises';
 
-/** Whether nothing was sent yet: only then may whoever spreads the load ask the next. */
-function isRefused(error: unknown): boolean {
+/**
+ * Whether whoever spreads the load may ask the next: nothing was sent yet, or a connection kept from before was closed just
+ * as a GET was sent on it, which RFC 9110 (9.2.2) lets a client send again.
+ */
+function maySendAgain(error: unknown, { method = 'GET' }: RequestInit): boolean {
   const cause = error instanceof Error ? (error.cause as { code?: string } | undefined) : undefined;
-  return cause?.code === 'ECONNREFUSED';
+  return cause?.code === 'ECONNREFUSED' || (method === 'GET' && ['ECONNRESET', 'UND_ERR_SOCKET'].includes(cause?.code ?? ''));
 }
 
 export interface Balanced {
@@ -19,10 +22,11 @@ export function createBalanced(addresses: string[]): Balanced {
   const ask = async (path: string, init: () => RequestInit): Promise<Response> => {
     for (let tries = 1; ; tries += 1) {
       turn += 1;
+      const request = init();
       try {
-        return await fetch(`${addresses[turn % addresses.length] ?? ''}${path}`, init());
+        return await fetch(`${addresses[turn % addresses.length] ?? ''}${path}`, request);
       } catch (error) {
-        if (!isRefused(error) || tries > 2 * addresses.length) throw error;
+        if (!maySendAgain(error, request) || tries > 2 * addresses.length) throw error;
       }
     }
   };
