@@ -6,7 +6,7 @@ import { seeds } from './seeds/seeds';
 import { tryFile } from './try-file';
 
 export interface FuzzTask { reader: string; seed: number; milliseconds: number; current: SharedArrayBuffer }
-/** After so many files, or where one went wrong; the file is then the current one. */
+/** Now and then, or where a file went wrong. */
 export type FuzzMessage = { tried: number } | { tried: number; fault: string; bytes: Uint8Array } | { tried: number; ended: true };
 
 if (!parentPort) throw new Error('fuzz-thread runs as a worker thread only.');
@@ -17,11 +17,12 @@ if (!make) throw new Error(`No reader ${reader}; there are ${Object.keys(seeds).
 const random = seeded(seed);
 const length = new Uint32Array(current, 0, 1);
 const room = new Uint8Array(current, 4);
-const toldEvery = 50;
+const toldEveryMilliseconds = 1000;
 const corpus: Buffer[] = [];
 while (corpus.length < 20) corpus.push(await make(random));
 
 let tried = 0;
+let toldAt = Date.now();
 for (const end = Date.now() + milliseconds; Date.now() < end;) {
   if (random() < 0.2) corpus[upTo(random, corpus.length - 1)] = await make(random);
   let bytes = mutate(oneOf(random, corpus), oneOf(random, corpus), random);
@@ -36,6 +37,9 @@ for (const end = Date.now() + milliseconds; Date.now() < end;) {
   const fault = await tryFile(bytes, cuts);
   tried += 1;
   if (fault !== null) port.postMessage({ tried, fault, bytes: Uint8Array.from(bytes) } satisfies FuzzMessage);
-  else if (tried % toldEvery === 0) port.postMessage({ tried } satisfies FuzzMessage);
+  else if (Date.now() - toldAt > toldEveryMilliseconds) {
+    toldAt = Date.now();
+    port.postMessage({ tried } satisfies FuzzMessage);
+  }
 }
 port.postMessage({ tried, ended: true } satisfies FuzzMessage);
