@@ -22,9 +22,13 @@ export function regionRows(fields: readonly FieldAssessment[]): RegionRow[] {
 /** The order of the last pair of grids, null where it has none. */
 export const lastOrder = ({ orders }: FieldAssessment): number | null => orders[0]?.order ?? null;
 
-/** The orders inside and near the boundary, where the one near the boundary is lower by more than the tolerance; else null. */
-export function lowerAtBoundary({ tolerance }: FieldAssessment, { interior, boundary }: RegionPair): { interior: number; boundary: number } | null {
+/**
+ * The orders inside and near the boundary, where the one near the boundary is lower by more than the tolerance, and lower
+ * than declared where an order is; else null.
+ */
+export function lowerAtBoundary({ tolerance, formalOrder, derivedOrder }: FieldAssessment, { interior, boundary }: RegionPair): { interior: number; boundary: number } | null {
   const orders = { interior: lastOrder(interior), boundary: lastOrder(boundary) };
-  if (orders.interior === null || orders.boundary === null || orders.boundary >= orders.interior - (tolerance ?? usualTolerance)) return null;
+  const most = Math.min(orders.interior ?? -Infinity, derivedOrder ?? formalOrder ?? Infinity) - (tolerance ?? usualTolerance);
+  if (orders.interior === null || orders.boundary === null || orders.boundary >= most) return null;
   return { interior: orders.interior, boundary: orders.boundary };
 }

@@ -24,5 +24,8 @@ describe('lowerAtBoundary(whole, pair)', () => {
     expect(lowerAtBoundary(part('all', 2), pair(1.85))).not.toBeNull();
     expect(lowerAtBoundary({ ...part('all', 2), tolerance: null }, pair(1.85))).toBeNull();
     expect(lowerAtBoundary(part('all', 2), pair(2.5))).toBeNull();
+    const higher = { band: '2h' as const, interior: part('interior-2h', 3), boundary: part('boundary-2h', 2.2) };
+    expect(lowerAtBoundary({ ...part('all', 2), formalOrder: 2 }, higher)).toBeNull();
+    expect(lowerAtBoundary({ ...part('all', 2), formalOrder: null }, higher)).not.toBeNull();
   });
 });
